@@ -1,0 +1,42 @@
+// Package plot describes pictures as plain data in display units. A script in
+// web is the only place that knows the drawing library.
+package plot
+
+// Picture is a chart ready to draw: numbers in display units, no SI left.
+type Picture struct {
+	ID      string `json:"id"`
+	Title   string `json:"title"`
+	X       Axis   `json:"x"`
+	Y       Axis   `json:"y"`
+	Lines   []Line `json:"lines"`
+	Marks   []Mark `json:"marks"`
+	Summary string `json:"summary"` // text alternative
+}
+
+// Axis is one axis of a picture.
+type Axis struct {
+	Title  string   `json:"title"` // with symbol and unit, e.g. "Oil rate at surface, qo (bbl/d)"
+	Short  string   `json:"short"` // symbol for the hover read-out, e.g. "qo"
+	Unit   string   `json:"unit"`
+	Log    bool     `json:"log"`
+	CanLog bool     `json:"canLog"`
+	Min    *float64 `json:"min,omitempty"`
+	Max    *float64 `json:"max,omitempty"`
+}
+
+// Line is one series.
+type Line struct {
+	ID    string       `json:"id"`
+	Label string       `json:"label"`
+	Role  string       `json:"role"` // see study.Line
+	Kind  string       `json:"kind"` // "line", "dashed", "points", "band"
+	Data  [][2]float64 `json:"data"`
+	Low   [][2]float64 `json:"low,omitempty"` // band only
+}
+
+// Mark is a labelled point.
+type Mark struct {
+	Label string  `json:"label"`
+	X     float64 `json:"x"`
+	Y     float64 `json:"y"`
+}

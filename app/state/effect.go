@@ -1,0 +1,44 @@
+package state
+
+import "brinefront/physics/study"
+
+// Effect is something Update wants done outside. The runner carries it out and
+// reports back with a message.
+type Effect interface{ effect() }
+
+type (
+	// Run evaluates a study; replies Answered or EngineFailed.
+	Run struct {
+		Revision int
+		Study    study.Study
+	}
+	// Keep writes the autosave; replies Kept or NotKept.
+	Keep struct{ Text string }
+	// SetAside stores a damaged autosave under another key, never overwriting.
+	SetAside struct{ Text string }
+	// Download hands a file to the person.
+	Download struct{ Name, Mime, Data string }
+	// PickFile opens the file picker; replies FileChosen or FileRefused.
+	PickFile struct{}
+	// Go changes the address without loading anything.
+	Go struct{ Fragment string }
+	// Copy puts a text on the clipboard; replies Told.
+	Copy struct{ Text, Done string }
+	// Print opens the print dialogue once nothing is pending.
+	Print struct{}
+	// ListEvidence asks for the checks; replies EvidenceListed.
+	ListEvidence struct{}
+	// CheckEvidence computes one check; replies EvidenceDone.
+	CheckEvidence struct{ ID string }
+)
+
+func (Run) effect()           {}
+func (Keep) effect()          {}
+func (SetAside) effect()      {}
+func (Download) effect()      {}
+func (PickFile) effect()      {}
+func (Go) effect()            {}
+func (Copy) effect()          {}
+func (Print) effect()         {}
+func (ListEvidence) effect()  {}
+func (CheckEvidence) effect() {}

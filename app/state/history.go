@@ -1,0 +1,4 @@
+package state
+
+// history is filled by undo and redo.
+type history struct{}

@@ -1,0 +1,108 @@
+package state
+
+import (
+	"brinefront/app/wire"
+	"brinefront/physics/study"
+)
+
+// Msg is something that happened. Update is the only thing that acts on it.
+type Msg interface{ message() }
+
+type (
+	// Edited: a numeric input's text or unit changed. Cells of the table have
+	// paths too: "rock.table.<row>.<sw|krw|kro>".
+	Edited struct{ Path, Text, Unit string }
+	// Sourced: the source note of an input changed ("rock.table" included).
+	Sourced struct{ Path, Text string }
+	// Ranged: the optional range of an input changed.
+	Ranged struct{ Path, Low, High string }
+	// Chosen: an enumerated field changed: "system", "rock.reference",
+	// "rock.curve", "rock.weights", "field.drive", "field.limit".
+	Chosen struct{ Path, Value string }
+	// Written: a text field changed: "title", "author", "note", "field.start".
+	Written struct{ Path, Text string }
+
+	// RowAdded adds an empty row to the table after row After (-1: first).
+	RowAdded struct{ After int }
+	// RowRemoved removes a row of the table.
+	RowRemoved struct{ Row int }
+
+	// Pasted: a text was pasted where a table is expected.
+	Pasted struct{ Text string }
+	// PasteMapped: the person says what a column of the pasted table is:
+	// "sw", "krw", "kro" or "" for none.
+	PasteMapped struct {
+		Column int
+		As     string
+	}
+	PasteAccepted struct{} // use the table as previewed
+	PasteDropped  struct{} // forget it
+
+	Undone struct{}
+	Redone struct{}
+
+	StartedEmpty struct{}                      // a new, empty study
+	DemoOpened   struct{}                      // the invented demonstration study
+	FileChosen   struct{ Name, Data string }   // a study file was picked or dropped
+	FileRefused  struct{ Name, Reason string } // the file could not even be read
+	OpenAsked    struct{}
+	SaveAsked    struct{}
+	ShareAsked   struct{}
+	PrintAsked   struct{}
+	ExportAsked  struct{ What string } // "report-text", "charts-csv", "tables-csv", "damaged"
+
+	Routed   struct{ Fragment string } // the address changed
+	Restored struct{ Text string }     // what the browser had kept; empty: nothing
+	Kept     struct{}                  // the autosave is written
+	NotKept  struct{ Reason string }
+
+	Answered struct {
+		Revision int
+		Result   study.Result
+	}
+	EngineFailed struct {
+		Revision int
+		Reason   string
+	}
+
+	EvidenceAsked  struct{}
+	EvidenceListed struct{ Checks []wire.Evidence }
+	EvidenceDone   struct{ Check wire.Evidence }
+
+	Told      struct{ Level, Text string } // an effect reports back
+	Dismissed struct{ Notice int }
+)
+
+func (Edited) message()         {}
+func (Sourced) message()        {}
+func (Ranged) message()         {}
+func (Chosen) message()         {}
+func (Written) message()        {}
+func (RowAdded) message()       {}
+func (RowRemoved) message()     {}
+func (Pasted) message()         {}
+func (PasteMapped) message()    {}
+func (PasteAccepted) message()  {}
+func (PasteDropped) message()   {}
+func (Undone) message()         {}
+func (Redone) message()         {}
+func (StartedEmpty) message()   {}
+func (DemoOpened) message()     {}
+func (FileChosen) message()     {}
+func (FileRefused) message()    {}
+func (OpenAsked) message()      {}
+func (SaveAsked) message()      {}
+func (ShareAsked) message()     {}
+func (PrintAsked) message()     {}
+func (ExportAsked) message()    {}
+func (Routed) message()         {}
+func (Restored) message()       {}
+func (Kept) message()           {}
+func (NotKept) message()        {}
+func (Answered) message()       {}
+func (EngineFailed) message()   {}
+func (EvidenceAsked) message()  {}
+func (EvidenceListed) message() {}
+func (EvidenceDone) message()   {}
+func (Told) message()           {}
+func (Dismissed) message()      {}

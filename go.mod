@@ -1,0 +1,3 @@
+module brinefront
+
+go 1.26

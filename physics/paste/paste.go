@@ -1,0 +1,40 @@
+// Package paste reads a table out of text copied from a spreadsheet or a report:
+// tabs, commas, semicolons or runs of spaces; decimal points or commas; header
+// rows; units in headers; fractions or percent. It says how it read everything,
+// so that the person can see and correct it before the table is used.
+package paste
+
+// Column names a table may ask for.
+const (
+	Sw  = "sw"
+	Krw = "krw"
+	Kro = "kro"
+)
+
+// Reading is a pasted text and how it was read.
+type Reading struct {
+	Separator string     // "tab", "comma", "semicolon", "spaces"
+	Decimal   string     // "point", "comma"
+	Header    []string   // the header cells; nil when there is none
+	Columns   []Column   // one per column of the text
+	Cells     [][]string // the data rows as text, for the preview (all rows)
+	Problems  []Problem  // what keeps the table from being used; empty: it can be used
+	Remarks   []string   // what was assumed: "column 2 read as percent"
+}
+
+// Column is what was made of one column of the text.
+type Column struct {
+	Title   string    // its header cell, or ""
+	As      string    // Sw, Krw, Kro, or "" for none
+	Percent bool      // values were divided by 100
+	Oil     bool      // the saturation column held oil: sw = 1 - so was taken
+	Values  []float64 // as fractions; nil when As is ""
+}
+
+// Problem is a cell or a column that could not be read. Row and Column are
+// zero-based; -1 when it is about the whole.
+type Problem struct {
+	Row, Column int
+	Read        string
+	Allowed     string
+}

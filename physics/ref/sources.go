@@ -1,0 +1,24 @@
+package ref
+
+// The sources, by ID. Add here, cite everywhere else.
+const (
+	BuckleyLeverett1942 ID = "buckley-leverett-1942"
+	Corey1954           ID = "corey-1954"
+	Craig1971           ID = "craig-1971"
+	Dake1978            ID = "dake-1978"
+	FritschCarlson1980  ID = "fritsch-carlson-1980"
+	Lomeland2005        ID = "lomeland-2005"
+	Oleinik1957         ID = "oleinik-1957"
+	Welge1952           ID = "welge-1952"
+)
+
+var sources = map[ID]Source{
+	BuckleyLeverett1942: {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
+	Corey1954:           {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
+	Craig1971:           {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
+	Dake1978:            {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier, ch. 10"},
+	FritschCarlson1980:  {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
+	Lomeland2005:        {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
+	Oleinik1957:         {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
+	Welge1952:           {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
+}

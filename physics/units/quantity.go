@@ -10,7 +10,8 @@ type Quantity string
 
 const (
 	Number          Quantity = "number"          // a bare number: exponents, counts
-	Fraction        Quantity = "fraction"        // saturation, porosity, relative permeability, recovery, water cut
+	Fraction        Quantity = "fraction"        // saturation, porosity, relative permeability
+	Share           Quantity = "share"           // a fraction told in percent: recovery, water cut, uptime
 	PoreVolumes     Quantity = "poreVolumes"     // volume over pore volume
 	MobilityRatio   Quantity = "mobilityRatio"   // mobility over mobility
 	FormationFactor Quantity = "formationFactor" // reservoir volume over surface volume
@@ -64,6 +65,7 @@ const StandardGravity = gravSI
 var catalogue = []Unit{
 	{"", Number, 1},
 	{"fraction", Fraction, 1}, {"%", Fraction, 0.01},
+	{"%", Share, 0.01}, {"fraction", Share, 1},
 	{"PV", PoreVolumes, 1}, {"%PV", PoreVolumes, 0.01},
 	{"", MobilityRatio, 1},
 	{"rb/stb", FormationFactor, 1}, {"m3/m3", FormationFactor, 1},

@@ -1,0 +1,47 @@
+package report
+
+import (
+	"strings"
+
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// digits is how many significant digits a figure is printed with. Four is more
+// than laboratory data carry, and enough to check a working by hand.
+const digits = 4
+
+// Value prints a figure as the screen, the page and the text do: durations in
+// the span that suits them, everything else in the unit of the system.
+func Value(f study.Figure, s units.System) string { return printed(f.Value, f.Quantity, s) }
+
+func printed(si float64, q units.Quantity, s units.System) string {
+	if q == units.Duration {
+		return units.Span(si)
+	}
+	return units.Print(si, s.Unit(q), digits)
+}
+
+// Sentence is a part's answer in words with its figures printed in place.
+func Sentence(p study.Part, s units.System) string {
+	var b strings.Builder
+	for _, phrase := range p.Answer {
+		b.WriteString(phrase.Text)
+		if f, ok := p.Figure(phrase.Figure); ok {
+			b.WriteString(Value(f, s))
+		}
+	}
+	return b.String()
+}
+
+// Heading names a quantity as an axis or a table column does: label, symbol, unit.
+func Heading(label, symbol string, q units.Quantity, s units.System) string {
+	text := label
+	if symbol != "" && symbol != label {
+		text += ", " + symbol
+	}
+	if unit := s.Unit(q).Label(); unit != "" && unit != "fraction" {
+		text += " (" + unit + ")"
+	}
+	return text
+}

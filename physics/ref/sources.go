@@ -2,17 +2,25 @@ package ref
 
 // The sources, by ID. Add here, cite everywhere else.
 const (
+	Ahmed2001           ID = "ahmed-2001"
 	BuckleyLeverett1942 ID = "buckley-leverett-1942"
+	Chaudhry2004        ID = "chaudhry-2004"
 	Corey1954           ID = "corey-1954"
 	Craig1971           ID = "craig-1971"
 	Dake1978            ID = "dake-1978"
 	FritschCarlson1980  ID = "fritsch-carlson-1980"
+	LeVeque2002         ID = "leveque-2002"
 	Lomeland2005        ID = "lomeland-2005"
+	NISTSP811           ID = "nist-sp-811"
 	Oleinik1957         ID = "oleinik-1957"
 	Welge1952           ID = "welge-1952"
 )
 
 var sources = map[ID]Source{
+	Ahmed2001:           {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing, ch. 14"},
+	Chaudhry2004:        {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
+	LeVeque2002:         {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press, sec. 16.1"},
+	NISTSP811:           {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811, app. B"},
 	BuckleyLeverett1942: {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
 	Corey1954:           {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
 	Craig1971:           {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},

@@ -7,6 +7,7 @@ require (
 	github.com/chromedp/chromedp v0.23.1 // indirect
 	github.com/evanw/esbuild v0.28.2 // indirect
 	github.com/go-json-experiment/json v0.0.0-20260213210345-44df1a37e875 // indirect
+	github.com/google/uuid v1.3.0 // indirect
 	github.com/maxence-charriere/go-app/v9 v9.8.0 // indirect
 	golang.org/x/crypto v0.59.0 // indirect
 	golang.org/x/net v0.62.0 // indirect

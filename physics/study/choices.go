@@ -1,5 +1,7 @@
 package study
 
+import "slices"
+
 // Choice is one value an enumerated field may take, and how it is called on screen.
 type Choice struct{ Value, Label string }
 
@@ -35,4 +37,54 @@ var Drives = []Choice{
 var Limits = []Choice{
 	{"waterCut", "water cut at surface"},
 	{"oilRate", "oil rate at surface"},
+}
+
+// Systems are the unit systems a study may be shown in.
+var Systems = []Choice{
+	{"field", "field units"},
+	{"metric", "metric units"},
+	{"lab", "laboratory units"},
+}
+
+// choiceField is an enumerated field of the document.
+type choiceField struct {
+	path string
+	list []Choice
+	at   func(*Study) *string
+}
+
+var choiceFields = []choiceField{
+	{"system", Systems, func(s *Study) *string { return &s.System }},
+	{"rock.reference", References, func(s *Study) *string { return &s.Rock.Reference }},
+	{"rock.curve", CurveKinds, func(s *Study) *string { return &s.Rock.Curve }},
+	{"rock.weights", Weightings, func(s *Study) *string { return &s.Rock.Weights }},
+	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
+	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
+}
+
+// Choices lists what the enumerated field at a path may hold; nil when the path
+// holds no enumeration.
+func Choices(path string) []Choice {
+	for _, f := range choiceFields {
+		if f.path == path {
+			return f.list
+		}
+	}
+	return nil
+}
+
+// Choose sets the enumerated field at a path; false when there is no such field
+// or it may not hold the value, and then nothing is changed.
+func Choose(st *Study, path, value string) bool {
+	for _, f := range choiceFields {
+		if f.path == path && holds(f.list, value) {
+			*f.at(st) = value
+			return true
+		}
+	}
+	return false
+}
+
+func holds(list []Choice, value string) bool {
+	return slices.ContainsFunc(list, func(c Choice) bool { return c.Value == value })
 }

@@ -21,7 +21,7 @@ type Study struct {
 	Title  string `json:"title"`
 	Author string `json:"author"`
 	Note   string `json:"note"`
-	System string `json:"system"` // units shown: field, metric, lab
+	System string `json:"system"` // units shown: see Systems
 
 	Rock   Rock   `json:"rock"`
 	Fluids Fluids `json:"fluids"`
@@ -45,11 +45,10 @@ type Rock struct {
 
 	Permeability    *Input `json:"permeability,omitempty"`    // absolute
 	OilPermeability *Input `json:"oilPermeability,omitempty"` // ko at Swi; needed when kr refers to it
-	Porosity        *Input `json:"porosity,omitempty"`        // of the plug; the field has its own
 
 	Table   *Table `json:"table,omitempty"` // laboratory points
-	Corey   *Corey `json:"corey,omitempty"` // typed parameters, used when Curve is "corey"
-	LET     *LET   `json:"let,omitempty"`   // typed parameters, used when Curve is "let"
+	Corey   Corey  `json:"corey,omitzero"`  // typed parameters, used when Curve is "corey"
+	LET     LET    `json:"let,omitzero"`    // typed parameters, used when Curve is "let"
 	Weights string `json:"weights"`         // how a fit weighs the points: see Weightings
 }
 

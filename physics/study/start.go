@@ -1,0 +1,80 @@
+package study
+
+// Empty is a new study: choices at their usual values, nothing given.
+func Empty() Study {
+	return Study{
+		Type: Type, Version: Version, Program: Program,
+		System: "field",
+		Rock:   Rock{Reference: "absolute", Curve: "corey-fit", Weights: "relative"},
+		Field:  Field{Drive: "rate", Limit: "waterCut"},
+	}
+}
+
+const invented = "invented for demonstration"
+
+// Demo is the study that is open on a first visit. Everything in it is invented
+// and says so: a water-wet sandstone plug with scattered points, a light oil and
+// a flood of the usual size. It is an example of a filled form, never the
+// authority for a number.
+func Demo() Study {
+	st := Empty()
+	st.Title = "Demonstration: an invented sandstone flood"
+	st.Note = "Every number of this study is invented. Replace them with your own, or start empty."
+	st.Rock.Reference = "oil"
+	st.Rock.Table = &Table{
+		Sw:     []float64{0.227, 0.256, 0.295, 0.339, 0.383, 0.427, 0.471, 0.516, 0.56, 0.604, 0.657, 0.716},
+		Krw:    []float64{0, 2.9e-05, 0.000444, 0.00243, 0.00733, 0.0156, 0.0312, 0.0517, 0.0868, 0.126, 0.201, 0.304},
+		Kro:    []float64{1, 0.853, 0.71, 0.523, 0.408, 0.286, 0.184, 0.12, 0.0675, 0.0285, 0.00648, 0},
+		Source: invented,
+	}
+	st.Field.Start = "2027-03-01"
+	for _, given := range []struct {
+		path  string
+		value float64
+		unit  string
+	}{
+		{"rock.permeability", 214, "md"},
+		{"rock.oilPermeability", 187, "md"},
+
+		{"rock.corey.swc", 0.227, "fraction"},
+		{"rock.corey.sor", 0.284, "fraction"},
+		{"rock.corey.krw0", 0.304, "fraction"},
+		{"rock.corey.kro0", 1, "fraction"},
+		{"rock.corey.nw", 3.3, ""},
+		{"rock.corey.no", 2.4, ""},
+
+		{"rock.let.swc", 0.227, "fraction"},
+		{"rock.let.sor", 0.284, "fraction"},
+		{"rock.let.krw0", 0.304, "fraction"},
+		{"rock.let.kro0", 1, "fraction"},
+		{"rock.let.lw", 3.1, ""},
+		{"rock.let.ew", 2.7, ""},
+		{"rock.let.tw", 0.9, ""},
+		{"rock.let.lo", 2.3, ""},
+		{"rock.let.eo", 1.9, ""},
+		{"rock.let.to", 1.1, ""},
+
+		{"fluids.waterViscosity", 0.47, "cp"},
+		{"fluids.oilViscosity", 2.3, "cp"},
+		{"fluids.waterFormationFactor", 1.02, "rb/stb"},
+		{"fluids.oilFormationFactor", 1.27, "rb/stb"},
+
+		{"field.length", 1910, "ft"},
+		{"field.width", 830, "ft"},
+		{"field.thickness", 41, "ft"},
+		{"field.porosity", 0.213, "fraction"},
+		{"field.permeability", 176, "md"},
+		{"field.rate", 1470, "bbl/d"},
+		{"field.pressure", 1340, "psi"},
+		{"field.uptime", 93, "%"},
+		{"field.waterCut", 95, "%"},
+		{"field.oilRate", 90, "bbl/d"},
+	} {
+		spec, ok := Find(given.path)
+		if !ok {
+			panic("study: the demonstration names no input " + given.path)
+		}
+		spec.Set(&st, &Input{Value: given.value, Unit: given.unit, Source: invented})
+	}
+	return st
+}

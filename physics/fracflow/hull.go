@@ -1,0 +1,182 @@
+package fracflow
+
+import (
+	"math"
+
+	"brinefront/physics/numeric"
+)
+
+const (
+	ulp   = 0x1p-52
+	alike = 1e-12 // relative difference below which two slopes are one: rounding of f'
+	kink  = 1e-9  // relative drop of slope that cuts a fan: above what rounding makes of a smooth knot
+)
+
+// node is a sample of the turned function, y = sign s and g = sign f.
+type node struct {
+	y, g        float64
+	left, right float64 // slopes on either side
+}
+
+// hull is the upper concave envelope of g on the nodes, in rising y.
+type hull struct {
+	fn    Function
+	sign  float64
+	nodes []node
+}
+
+func newHull(fn Function, injected, initial float64) hull {
+	h := hull{fn: fn, sign: 1}
+	if injected < initial {
+		h.sign = -1
+	}
+	samples := Samples(fn, initial, injected, 64)
+	h.nodes = make([]node, len(samples))
+	for i, p := range samples {
+		n := node{h.sign * p.S, h.sign * p.F, p.Below, p.Above}
+		if h.sign < 0 {
+			n.left, n.right = n.right, n.left
+		}
+		h.nodes[i] = n
+	}
+	return h
+}
+
+func (h *hull) at(y float64) node {
+	f, d := h.fn.At(h.sign * y)
+	return node{y, h.sign * f, d, d}
+}
+
+// concave tells whether the slope falls, or stays, across the cell from node i to the next.
+func (h *hull) concave(i int) bool {
+	return !rises(h.nodes[i].right, h.nodes[i+1].left, 1e-13)
+}
+
+func rises(from, to, tolerance float64) bool {
+	return to-from > tolerance*math.Max(math.Abs(from), math.Abs(to))
+}
+
+// vertices is the discrete envelope (Andrew's monotone chain). A vertex inside a
+// concave arc is kept on the word of the slopes, which are good to their last
+// digits where f itself has rounded to 1.
+func (h *hull) vertices() []int {
+	n := h.nodes
+	kept := make([]int, 0, len(n))
+	for c := range n {
+		for len(kept) >= 2 {
+			a, b := kept[len(kept)-2], kept[len(kept)-1]
+			arc := b-a == 1 && c-b == 1 && h.concave(a) && h.concave(b) && !rises(n[b].left, n[b].right, alike)
+			if arc || (n[b].g-n[a].g)*(n[c].y-n[b].y) > (n[c].g-n[b].g)*(n[b].y-n[a].y) {
+				break
+			}
+			kept = kept[:len(kept)-1]
+		}
+		kept = append(kept, c)
+	}
+	return kept
+}
+
+// touch is one end of a chord: the place, and the node it is at or beside.
+type touch struct {
+	node
+	k      int
+	inside bool // between nodes, at a true tangent
+}
+
+type chord struct {
+	left, right touch
+}
+
+func (c chord) slope() float64 { return slope(c.left.node, c.right.node) }
+
+func slope(a, b node) float64 { return (b.g - a.g) / (b.y - a.y) }
+
+// chords are the straight pieces of the envelope, refined on the true function.
+func (h *hull) chords(vertices []int) []chord {
+	var out []chord
+	for v := 1; v < len(vertices); v++ {
+		i, j := vertices[v-1], vertices[v]
+		if j == i+1 && h.concave(i) {
+			continue
+		}
+		c := h.refine(chord{touch{node: h.nodes[i], k: i}, touch{node: h.nodes[j], k: j}})
+		// Two tangents that the samples could not tell apart may cross: then one
+		// chord bridges both.
+		for len(out) > 0 {
+			last := out[len(out)-1]
+			apart := last.right.y < c.left.y
+			if apart || last.right.y == c.left.y && last.slope() > c.slope() {
+				break
+			}
+			out = out[:len(out)-1]
+			c = h.refine(chord{last.left, c.right})
+		}
+		out = append(out, c)
+	}
+	return out
+}
+
+// refine moves both ends of a chord to where it is tangent. With the other end held
+// the slope of the chord is stationary in each end, so that the two equations are
+// uncoupled at the solution and taking turns converges quadratically.
+func (h *hull) refine(c chord) chord {
+	for range 20 {
+		right := h.tangent(c.right, c.left.node, c.left.k+1, len(h.nodes)-1)
+		left := h.tangent(c.left, right.node, 0, right.k-1)
+		moved := math.Abs(left.y - c.left.y)
+		c = chord{left, right}
+		if moved <= 4*ulp*math.Abs(left.y) {
+			break
+		}
+	}
+	return c
+}
+
+// tangent finds, near t, the place where the line from the pivot touches g: where
+// the slope of g less that of the line goes from positive to negative in rising y.
+// It walks from node to node within [first, last] until a node or a cell holds the change.
+func (h *hull) tangent(t touch, pivot node, first, last int) touch {
+	k, heading := t.k, 0
+	for {
+		n := h.nodes[k]
+		m := slope(n, pivot)
+		switch {
+		case n.left < m && k > first && heading <= 0:
+			heading = -1
+			a := h.nodes[k-1]
+			if a.right > slope(a, pivot) {
+				return h.cross(k-1, pivot)
+			}
+			k--
+		case n.right > m && k < last && heading >= 0:
+			heading = 1
+			b := h.nodes[k+1]
+			if b.left < slope(b, pivot) {
+				return h.cross(k, pivot)
+			}
+			k++
+		default:
+			return touch{node: n, k: k}
+		}
+	}
+}
+
+// cross finds the tangent inside the cell from node i to the next.
+func (h *hull) cross(i int, pivot node) touch {
+	a, b := h.nodes[i], h.nodes[i+1]
+	y := numeric.Zero(func(y float64) float64 {
+		n := h.at(y)
+		return n.right - slope(n, pivot)
+	}, a.y, b.y, a.right-slope(a, pivot), b.left-slope(b, pivot))
+	switch y {
+	case a.y:
+		return touch{node: a, k: i}
+	case b.y:
+		return touch{node: b, k: i + 1}
+	}
+	k := i // the node away from the pivot, so that the two ends keep apart
+	if pivot.y < y {
+		k = i + 1
+	}
+	return touch{node: h.at(y), k: k, inside: true}
+}

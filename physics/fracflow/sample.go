@@ -1,0 +1,122 @@
+package fracflow
+
+import (
+	"math"
+	"sort"
+)
+
+// Sample is a function at one saturation, with its slopes just below and just
+// above it; they differ only at a knot.
+type Sample struct {
+	S, F, Below, Above float64
+}
+
+func at(fn Function, s float64) Sample {
+	f, d := fn.At(s)
+	return Sample{s, f, d, d}
+}
+
+// atKnot asks for the slope below a knot one step of the last place below it.
+func atKnot(fn Function, s float64) Sample {
+	p := at(fn, s)
+	_, p.Below = fn.At(math.Nextafter(s, math.Inf(-1)))
+	return p
+}
+
+// spacing is the step of the grading in ln(u/(1-u)), u the place inside a piece.
+// Power laws of mobility make f a smooth function of that variable, however
+// extreme the mobility ratio: its features are never much narrower than 1/exponent.
+const spacing = 0.86
+
+// Samples returns the function at points between a and b (a first, b last, either
+// may be the larger): at every knot, graded towards the ends of every smooth
+// piece between knots, and added to until no step in f exceeds a small part of
+// its range and every inflection is boxed in. budget is the number of points
+// wanted at the start; every piece gets at least one inside.
+func Samples(fn Function, a, b float64, budget int) []Sample {
+	lo, hi := math.Min(a, b), math.Max(a, b)
+	knots := fn.Knots()
+	knots = knots[sort.SearchFloat64s(knots, lo):sort.Search(len(knots), func(i int) bool { return knots[i] > hi })]
+	inner := knots
+	if len(inner) > 0 && inner[0] == lo {
+		inner = inner[1:]
+	}
+	ends := inner
+	if len(ends) > 0 && ends[len(ends)-1] == hi {
+		ends = ends[:len(ends)-1]
+	}
+	inside := max(1, budget/(len(ends)+1))
+	coarse := make([]Sample, 1, (inside+1)*(len(ends)+1)+1)
+	coarse[0] = at(fn, lo)
+	from := lo
+	for i := 0; i <= len(ends); i++ {
+		to := hi
+		if i < len(ends) {
+			to = ends[i]
+		}
+		for j := 1; j <= inside; j++ {
+			t := (float64(j) - float64(inside+1)/2) * spacing
+			share := 1 / (1 + math.Exp(math.Abs(t)))
+			s := from + share*(to-from)
+			if t > 0 {
+				s = to - share*(to-from)
+			}
+			if s > coarse[len(coarse)-1].S && s < to {
+				coarse = append(coarse, at(fn, s))
+			}
+		}
+		if i < len(inner) {
+			coarse = append(coarse, atKnot(fn, to))
+		} else {
+			coarse = append(coarse, at(fn, to))
+		}
+		from = to
+	}
+	low, high := math.Inf(1), math.Inf(-1)
+	for _, p := range coarse {
+		low, high = math.Min(low, p.F), math.Max(high, p.F)
+	}
+	g := grid{fn: fn, reach: high - low, thin: 1e-13 * (hi - lo), out: make([]Sample, 0, 2*len(coarse))}
+	g.out = append(g.out, coarse[0])
+	for i := 1; i < len(coarse); i++ {
+		g.split(coarse[i-1], coarse[i], 5)
+		g.out = append(g.out, coarse[i])
+	}
+	if a > b {
+		for i, j := 0, len(g.out)-1; i < j; i, j = i+1, j-1 {
+			g.out[i], g.out[j] = g.out[j], g.out[i]
+		}
+	}
+	return g.out
+}
+
+type grid struct {
+	fn          Function
+	reach, thin float64 // range of f; the narrowest cell worth cutting
+	out         []Sample
+}
+
+// split appends what is missing strictly between a and b, in order. box is how
+// often a cell that holds an inflection may still be halved.
+func (g *grid) split(a, b Sample, box int) {
+	rise, width := b.F-a.F, b.S-a.S
+	if width <= g.thin {
+		return
+	}
+	steep := math.Abs(rise) > g.reach/32
+	if !steep {
+		// The mean slope of a cell without inflection lies between its end slopes.
+		// Below the rounding of f the mean slope says nothing.
+		mean := rise / width
+		bent := math.Abs(rise) > 1e-11*g.reach && (mean-a.Above)*(b.Below-mean) < 0
+		if !bent || box == 0 {
+			return
+		}
+		box--
+	}
+	s := a.S + width/2
+	m := at(g.fn, s)
+	g.split(a, m, box)
+	g.out = append(g.out, m)
+	g.split(m, b, box)
+}

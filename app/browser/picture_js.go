@@ -1,0 +1,27 @@
+package browser
+
+import "syscall/js"
+
+// plot calls the one script that knows the drawing library.
+func plot(method string, args ...any) error {
+	script := js.Global().Get("brinefrontPlot")
+	if !script.Truthy() {
+		return errNoPlot
+	}
+	return attempt(func() { script.Call(method, args...) })
+}
+
+// Draw draws a picture, described as JSON, into the element with the id holder;
+// drawing the same again costs nothing.
+func Draw(holder, picture string) error { return plot("draw", holder, picture) }
+
+// Forget frees what Draw keeps for a holder.
+func Forget(holder string) {
+	// An absent script has nothing to free.
+	_ = plot("forget", holder)
+}
+
+// SavePicture hands the picture in a holder to the person as a file.
+func SavePicture(holder, format, filename string) error {
+	return plot("save", holder, format, filename)
+}

@@ -20,27 +20,10 @@ var _ Curves = Corey{}
 
 // At implements Curves.
 func (c Corey) At(sw float64) Point {
-	width := 1 - c.Swc - c.Sor
-	s := (sw - c.Swc) / width
-	switch {
-	case s <= 0:
-		p := Point{Kro: c.Kro0}
-		if s == 0 {
-			p.DKrw = c.Krw0 * powerSlope(0, c.Nw) / width
-			p.DKro = -c.Kro0 * powerSlope(1, c.No) / width
-		}
-		return p
-	case s >= 1:
-		p := Point{Krw: c.Krw0}
-		if s == 1 {
-			p.DKrw = c.Krw0 * powerSlope(1, c.Nw) / width
-			p.DKro = -c.Kro0 * powerSlope(0, c.No) / width
-		}
-		return p
-	}
+	n := normalise(sw, c.Swc, c.Sor)
 	return Point{
-		Krw: c.Krw0 * math.Pow(s, c.Nw), Kro: c.Kro0 * math.Pow(1-s, c.No),
-		DKrw: c.Krw0 * powerSlope(s, c.Nw) / width, DKro: -c.Kro0 * powerSlope(1-s, c.No) / width,
+		Krw: c.Krw0 * math.Pow(n.s, c.Nw), DKrw: c.Krw0 * powerSlope(n.s, c.Nw) * n.ds,
+		Kro: c.Kro0 * math.Pow(n.t, c.No), DKro: -c.Kro0 * powerSlope(n.t, c.No) * n.ds,
 	}
 }
 
@@ -49,11 +32,3 @@ func (c Corey) Ends() (swc, swmax float64) { return c.Swc, 1 - c.Sor }
 
 // Knots implements Curves: the model is smooth.
 func (c Corey) Knots() []float64 { return nil }
-
-// powerSlope is d(s^n)/ds, exact at s = 0 for n = 1.
-func powerSlope(s, n float64) float64 {
-	if n == 1 {
-		return 1
-	}
-	return n * math.Pow(s, n-1)
-}

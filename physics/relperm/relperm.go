@@ -4,7 +4,8 @@
 // Every model answers the same questions (Curves) and passes the same contract
 // suite: krw rises and kro falls from the connate water saturation swc to the
 // largest water saturation swmax = 1 - sor, outside that range both are constant
-// with zero slope, and slopes agree with finite differences.
+// with zero slope, slopes are finite and agree with finite differences, and a
+// saturation that is not a number gives values that are not numbers.
 package relperm
 
 // Point is the value of both curves and of their slopes at one water saturation.

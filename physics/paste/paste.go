@@ -9,6 +9,16 @@ const (
 	Sw  = "sw"
 	Krw = "krw"
 	Kro = "kro"
+	So  = "so" // for With only: the column holds oil saturation and serves as Sw, with sw = 1 - so
+)
+
+// What is refused before it is looked at, and how much is said about a bad text.
+const (
+	MaxBytes    = 1 << 20 // one mebibyte
+	MaxRows     = 10_000
+	MaxColumns  = 100
+	MinRows     = 3
+	maxProblems = 200 // told one by one; the rest as a count
 )
 
 // Reading is a pasted text and how it was read.
@@ -20,7 +30,21 @@ type Reading struct {
 	Cells     [][]string // the data rows as text, for the preview (all rows)
 	Problems  []Problem  // what keeps the table from being used; empty: it can be used
 	Remarks   []string   // what was assumed: "column 2 read as percent"
+
+	layout []string // what was assumed while the text was cut into cells; With keeps it
 }
+
+// notes gathers what there is to say about a text.
+type notes struct {
+	problems []Problem
+	remarks  []string
+}
+
+func (n *notes) problem(row, column int, read, allowed string) {
+	n.problems = append(n.problems, Problem{Row: row, Column: column, Read: read, Allowed: allowed})
+}
+
+func (n *notes) remark(text string) { n.remarks = append(n.remarks, text) }
 
 // Column is what was made of one column of the text.
 type Column struct {
@@ -28,7 +52,7 @@ type Column struct {
 	As      string    // Sw, Krw, Kro, or "" for none
 	Percent bool      // values were divided by 100
 	Oil     bool      // the saturation column held oil: sw = 1 - so was taken
-	Values  []float64 // as fractions; nil when As is ""
+	Values  []float64 // as fractions, in the order of Cells; NaN where a cell could not be read; nil when As is ""
 }
 
 // Problem is a cell or a column that could not be read. Row and Column are

@@ -1,0 +1,80 @@
+package paste
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+)
+
+// cut makes cells of every line and drops rows without any. Empty cells at the end
+// of a row, left by trailing separators, are dropped too.
+func cut(lines []string, sep separator) (rows [][]string, widest int) {
+	rows = make([][]string, 0, len(lines))
+	for _, line := range lines {
+		cells := sep.cells(line)
+		for len(cells) > 0 && cells[len(cells)-1] == "" {
+			cells = cells[:len(cells)-1]
+		}
+		if len(cells) > 0 {
+			rows = append(rows, cells)
+			widest = max(widest, len(cells))
+		}
+	}
+	return rows, widest
+}
+
+// arrange sets the heading rows apart from the data rows. Data starts at the first
+// row with two numbers or more that make up more than half of its cells; failing
+// that, at the first row of one number. Below, rows of words are left out when they
+// repeat a heading or have not as many cells as the data, and said so; any other is
+// data, and its words will be problems.
+func arrange(rows [][]string, said *notes) (heading, data [][]string) {
+	first := firstData(rows)
+	if first < 0 {
+		return nil, nil
+	}
+	heading, width := rows[:first], len(rows[first])
+	for i, cells := range rows[first:] {
+		if countNumbers(cells) == 0 && (len(cells) != width || contains(heading, cells)) {
+			said.remark(fmt.Sprintf("Line %d, \"%s\", holds no number and was left out.", first+i+1, clip(strings.Join(cells, " "))))
+			continue
+		}
+		data = append(data, cells)
+	}
+	return heading, data
+}
+
+func firstData(rows [][]string) int {
+	for _, least := range []int{2, 1} {
+		for i, cells := range rows {
+			if n := countNumbers(cells); n >= least && 2*n > countFilled(cells) {
+				return i
+			}
+		}
+	}
+	return -1
+}
+
+func contains(rows [][]string, cells []string) bool {
+	return slices.ContainsFunc(rows, func(row []string) bool { return slices.Equal(row, cells) })
+}
+
+func countNumbers(cells []string) int {
+	n := 0
+	for _, c := range cells {
+		if numeric(c) {
+			n++
+		}
+	}
+	return n
+}
+
+func countFilled(cells []string) int {
+	n := 0
+	for _, c := range cells {
+		if c != "" {
+			n++
+		}
+	}
+	return n
+}

@@ -23,8 +23,9 @@ func normalise(sw, swc, sor float64) normal {
 	return normal{s: (sw - swc) / width, t: (swmax - sw) / width, ds: 1 / width}
 }
 
-// nextToEnd is how close to an end a slope that is infinite at the end itself is
-// evaluated: about the spacing of floating point numbers between 0 and 1.
+// nextToEnd is how close to an end the leading power alone is the curve, and where
+// a slope that is infinite at the end itself is evaluated: less than the spacing of
+// floating point numbers just below 1.
 const nextToEnd = 0x1p-60
 
 // powerSlope is d(x^n)/dx for 0 <= x <= 1, exact at x = 0 for n >= 1. For n < 1

@@ -48,7 +48,7 @@ func Read(text string) Reading {
 
 	r := Reading{Separator: sep.name}
 	var said notes
-	heading, data := arrange(rows, &said)
+	heading, data := arrange(upright(rows, widest, &said), &said)
 	if len(data) > MaxRows {
 		return refused(fmt.Sprintf("%s rows", thousands(len(data))), fmt.Sprintf("at most %s rows", thousands(MaxRows)))
 	}

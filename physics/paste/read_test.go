@@ -48,6 +48,7 @@ func TestRead(t *testing.T) {
 		{"extra columns", "No.\tSw\tPc, psi\tkrw\tkro\tkrw/kro\n1\t0.2\t12\t0\t0.85\t0\n2\t0.4\t5\t0.05\t0.4\t0.125\n3\t0.6\t2\t0.18\t0.1\t1.8\n4\t0.75\t0\t0.3\t0\t", "tab", point, "- sw - krw kro -", nil},
 		{"names over two rows", "Water\tRelative permeability\tRelative permeability\nsaturation\tto water\tto oil\n0.2\t0\t0.85\n0.4\t0.05\t0.4\n0.6\t0.18\t0.1\n0.75\t0.3\t0", "tab", point, "sw krw kro", nil},
 		{"one name only", "Sw\tA\tB\n0.2\t0\t0.85\n0.4\t0.05\t0.4\n0.6\t0.18\t0.1\n0.75\t0.3\t0", "tab", point, "sw krw kro", []string{"by position: column 2 as krw, column 3 as kro"}},
+		{"on its side", "Sw\t0.2\t0.4\t0.6\t0.75\nkrw\t0\t0.05\t0.18\t0.3\nkro\t0.85\t0.4\t0.1\t0", "tab", point, "sw krw kro", []string{"on its side"}},
 		{"falling rows", "Sw\tkrw\tkro\n0.75\t0.3\t0\n0.6\t0.18\t0.1\n0.4\t0.05\t0.4\n0.2\t0\t0.85", "tab", point, "sw krw kro", []string{"turned round"}},
 		{"captions, blank lines, footnote", "Plug 7A, invented, 2134.5 m\n\n\tSw\tkrw\tkro\n\n\t0.2\t0\t0.85\n\t0.4\t0.05\t0.4\n\n\t0.6\t0.18\t0.1\n\t0.75\t0.3\t0\nMeasured at room temperature\n", "tab", point, "- sw krw kro", []string{"Line 7, \"Measured at room temperature\", holds no number"}},
 		{"heading repeated on the next page", "Sw krw kro\n0.2 0 0.85\n0.4 0.05 0.4\nSw krw kro\n0.6 0.18 0.1\n0.75 0.3 0", "spaces", point, "sw krw kro", []string{"Line 4"}},

@@ -25,21 +25,25 @@ func (r Reading) assign() (roles []role, remarks []string) {
 	found := r.byHeading(roles, &said)
 	named := found[Krw] || found[Kro]
 
-	var placed []string
+	var placed []int
 	next := r.unnamed()
 	for _, as := range inOrder {
 		if found[as] || len(next) == 0 {
 			continue
 		}
 		roles[next[0]].as = as
-		placed = append(placed, fmt.Sprintf("column %d as %s", next[0]+1, labels[as]))
+		placed = append(placed, next[0])
 		next = next[1:]
-	}
-	if len(placed) > 0 {
-		said.remark("No heading says so, so by position: " + strings.Join(placed, ", ") + ".")
 	}
 	if !named {
 		r.turnSwapped(roles, &said)
+	}
+	if len(placed) > 0 {
+		texts := make([]string, len(placed))
+		for i, column := range placed {
+			texts[i] = fmt.Sprintf("column %d as %s", column+1, labels[roles[column].as])
+		}
+		said.remark("No heading names them, so columns were read by position: " + strings.Join(texts, ", ") + ".")
 	}
 	return roles, said.remarks
 }

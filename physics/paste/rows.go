@@ -23,6 +23,31 @@ func cut(lines []string, sep separator) (rows [][]string, widest int) {
 	return rows, widest
 }
 
+// upright turns a table that lies on its side, with two of the names or more at the
+// head of its rows, so that each quantity has a column.
+func upright(rows [][]string, widest int, said *notes) [][]string {
+	named := 0
+	for _, cells := range rows {
+		if nameOf(cells[0]) != "" && countNumbers(cells) > 0 {
+			named++
+		}
+	}
+	if named < 2 || len(rows) > MaxColumns {
+		return rows
+	}
+	turned := make([][]string, widest)
+	for i := range turned {
+		turned[i] = make([]string, len(rows))
+		for j, cells := range rows {
+			if i < len(cells) {
+				turned[i][j] = cells[i]
+			}
+		}
+	}
+	said.remark("The table lies on its side, one row for each quantity; it was turned upright.")
+	return turned
+}
+
 // arrange sets the heading rows apart from the data rows. Data starts at the first
 // row with two numbers or more that make up more than half of its cells; failing
 // that, at the first row of one number. Below, rows of words are left out when they

@@ -175,42 +175,46 @@ func (d *Displacement) at(xi float64) Node {
 // pore volumes have been injected: the state behind a shock that just arrives. The cut
 // leaves [0, 1] where flow is counter-current.
 func (d *Displacement) Outlet(q float64) (sw, f float64) {
-	n := d.at(1 / q)
-	return n.S, n.F
+	s := d.After(q)
+	return s.Sw, s.Cut
 }
 
-// Average is the mean saturation,
+// State is the displacement after Q pore volumes, all in pore volumes at reservoir
+// conditions.
+type State struct {
+	Sw, Cut    float64 // at the outlet
+	Average    float64 // mean saturation
+	Recovery   float64 // savg - Si: the oil displaced, negative where water is
+	Oil, Water float64 // cumulative outflow
+}
+
+// After returns the state when q pore volumes have been injected:
 //
-//	savg = S_out + Q (f_inlet - f_out)
+//	savg  = S_out + Q (f_inlet - f_out)
+//	water = Q f_inlet - (savg - Si),  oil = Q - water
 //
-// which is Welge's tangent for any number of waves.
+// which is Welge's tangent for any number of waves. Before break-through the recovery
+// is Q (f_inlet - f(Si)). Oil produced differs from recovery where the injected stream
+// holds oil, or where oil leaves at the inlet.
 //
 // Source: Welge (1952), eq. 5, with the fractional flow of the inlet face for 1.
-func (d *Displacement) Average(q float64) float64 {
-	if q <= 0 {
-		return d.initial
+func (d *Displacement) After(q float64) State {
+	if !(q > 0) {
+		return State{Sw: d.initial, Cut: d.ahead.F, Average: d.initial}
 	}
-	s, f := d.Outlet(q)
-	return s + q*(d.face.F-f)
+	n := d.at(1 / q)
+	gain := (n.S - d.initial) + q*(d.face.F-n.F)
+	return State{
+		Sw: n.S, Cut: n.F, Average: d.initial + gain, Recovery: gain,
+		Oil: gain + q*(1-d.face.F), Water: q*d.face.F - gain,
+	}
 }
 
-// Recovery is savg - Si in pore volumes: the oil displaced, negative where it is the
-// other phase that is displaced. Before break-through it is Q (f_inlet - f(Si)).
-func (d *Displacement) Recovery(q float64) float64 {
-	if q < d.Breakthrough() {
-		return math.Max(q, 0) * (d.face.F - d.ahead.F)
-	}
-	s, f := d.Outlet(q)
-	return (s - d.initial) + q*(d.face.F-f)
-}
+// Average is the mean saturation; see After.
+func (d *Displacement) Average(q float64) float64 { return d.After(q).Average }
 
-// Produced returns the oil and water that have left at the outlet, in pore volumes at
-// reservoir conditions: water = Q f_inlet - recovery, oil = Q - water. Oil differs from
-// the recovery where the injected stream holds oil, or where oil leaves at the inlet.
-func (d *Displacement) Produced(q float64) (oil, water float64) {
-	r := d.Recovery(q)
-	return r + q*(1-d.face.F), q*d.face.F - r
-}
+// Recovery is savg - Si in pore volumes; see After.
+func (d *Displacement) Recovery(q float64) float64 { return d.After(q).Recovery }
 
 // OfOilInPlace turns a recovery in pore volumes into a fraction of the oil in place, 1 - Si.
 func (d *Displacement) OfOilInPlace(recovery float64) float64 { return recovery / (1 - d.initial) }

@@ -36,17 +36,23 @@ var _ Function = Flow{}
 
 // At implements Function.
 func (w Flow) At(sw float64) (f, dfds float64) {
+	f, dfds, _, _ = w.Full(sw)
+	return f, dfds
+}
+
+// Full returns f, its slope, the total mobility and its slope together.
+func (w Flow) Full(sw float64) (f, dfds, lambdaT, dLambdaT float64) {
 	p := w.Curves.At(sw)
 	lw, lo := p.Krw/w.MuW, p.Kro/w.MuO
 	dlw, dlo := p.DKrw/w.MuW, p.DKro/w.MuO
-	lt := lw + lo
+	lt, dlt := lw+lo, dlw+dlo
 	fw := lw / lt
 	dfw := dlw/lt*(lo/lt) - fw*(dlo/lt)
 	if w.Gravity == 0 {
-		return fw, dfw
+		return fw, dfw, lt, dlt
 	}
 	back := 1 - w.Gravity*lo
-	return fw * back, dfw*back - fw*w.Gravity*dlo
+	return fw * back, dfw*back - fw*w.Gravity*dlo, lt, dlt
 }
 
 // Ends implements Function.
@@ -58,8 +64,8 @@ func (w Flow) Knots() []float64 { return w.Curves.Knots() }
 // Mobility returns the total mobility per unit permeability,
 // krw/muw + kro/muo in 1/(Pa s), and its slope.
 func (w Flow) Mobility(sw float64) (lambdaT, dLambdaT float64) {
-	p := w.Curves.At(sw)
-	return p.Krw/w.MuW + p.Kro/w.MuO, p.DKrw/w.MuW + p.DKro/w.MuO
+	_, _, lambdaT, dLambdaT = w.Full(sw)
+	return lambdaT, dLambdaT
 }
 
 // EndPointMobilityRatio is lw(injected)/lo(initial): the mobility of water where

@@ -132,5 +132,22 @@ var independentCases = []Check{
 			{"resistance after 1.5 PV, Pa s", 0.0026167592908890756, 1e-11, independentError},
 			{"resistance after 3 PV, Pa s", 0.0021599321789334373, 1e-11, independentError},
 		},
-		compute: func() ([]float64, error) { return nil, nil }},
+		compute: func() ([]float64, error) {
+			flow := fracflow.Flow{Curves: waterWet, MuW: 0.00047, MuO: 0.00593}
+			d, err := displace.New(flow, 0.763, 0.213)
+			if err != nil {
+				return nil, err
+			}
+			flood, err := reservoir.NewLinear(reservoir.Layer{Length: 151, Area: 1, Porosity: 0.217, Permeability: 8.7e-14,
+				Bw: 1, Bo: 1, Uptime: 1, Drive: reservoir.ConstantPressure{DP: 2.3e6}}, flow, d)
+			if err != nil {
+				return nil, err
+			}
+			arrival, _ := flood.Breakthrough()
+			values, resistances := []float64{arrival}, []float64{}
+			for _, q := range []float64{0.1, 0.3, 0.7, 1.5, 3} {
+				values, resistances = append(values, flood.TimeAt(q)), append(resistances, flood.Resistance(q))
+			}
+			return append(values, resistances...), nil
+		}},
 }

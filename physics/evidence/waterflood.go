@@ -61,8 +61,8 @@ var waterfloods = []Check{
 		Inputs: dakeInputs + "µo = 5 cp, µw = 0.5 cp", How: "monotone cubic through the table, envelope solution",
 		Items: []Item{
 			{"Sw at the front", 0.45, 0.01, handDrawn},
-			{"fw at the front, reservoir", 0.70, 0.025, handDrawn},
-			{"fw at the front, surface", 0.75, 0.025, handDrawn},
+			{"fw at the front, reservoir", 0.70, 0.028, handDrawn + "; 0.01 in Sw is 0.028 in fw there"},
+			{"fw at the front, surface", 0.75, 0.028, handDrawn + "; as above"},
 			{"average Sw at breakthrough", 0.55, 0.01, handDrawn},
 			{"recovery at breakthrough, PV", 0.35, 0.01, handDrawn},
 		},
@@ -105,7 +105,7 @@ var waterfloods = []Check{
 			return []float64{years, 0.35 * years}, nil
 		}},
 	{ID: "ahmed-breakthrough", Topic: "Field", Title: "Water at the producer of a linear flood", Source: ref.Ahmed2001, Place: "Breakthrough examples", Provenance: Memory,
-		Inputs: "pore volume 775 779 bbl, 900 bbl/d, Swi 0.20, front at Sw 0.596, fw 0.78, slope 1.973, Bo 1.25, Bw 1.02", How: "Welge's construction from the printed tangent; water cut at surface",
+		Inputs: "pore volume 775 779 bbl, 900 bbl/d, Swi 0.20, front at Sw 0.596, fw 0.78, slope 1.973, Bo 1.25, Bw 1.02", How: "volumes and time from the printed slope of the tangent; water cut at surface from the printed fw",
 		Items: []Item{
 			{"days to breakthrough", 436.88, 0.01, lastDigit},
 			{"injected at breakthrough, bbl", 393198, 0.5, lastDigit},
@@ -118,7 +118,7 @@ var waterfloods = []Check{
 			q := 1 / 1.973
 			volume := si(units.Volume, 775779, "bbl")
 			cut := fracflow.SurfaceCut(0.78, 1.02, 1.25)
-			average := 0.596 + (1-0.78)*q
+			average := 0.2 + q // no water is produced before
 			return []float64{
 				q * volume / si(units.Rate, 900, "bbl/d") / si(units.Duration, 1, "d"), q * volume / si(units.Volume, 1, "bbl"), q,
 				average, (average - 0.2) / (1 - 0.2), cut / (1 - cut),

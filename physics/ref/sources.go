@@ -3,6 +3,7 @@ package ref
 // The sources, by ID. Add here, cite everywhere else.
 const (
 	Ahmed2001           ID = "ahmed-2001"
+	BrooksCorey1964     ID = "brooks-corey-1964"
 	BuckleyLeverett1942 ID = "buckley-leverett-1942"
 	Chaudhry2004        ID = "chaudhry-2004"
 	Corey1954           ID = "corey-1954"
@@ -18,6 +19,7 @@ const (
 
 var sources = map[ID]Source{
 	Ahmed2001:           {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing, ch. 14"},
+	BrooksCorey1964:     {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
 	Chaudhry2004:        {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
 	LeVeque2002:         {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press, sec. 16.1"},
 	NISTSP811:           {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811, app. B"},

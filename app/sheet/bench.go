@@ -1,13 +1,102 @@
-// Package sheet is what the person sees: one file a sheet. Sheets read the model
-// and send messages; they compute nothing.
+// Package sheet is what the person sees: one file a sheet, and the frame around
+// them. Sheets read the model and send messages; they compute nothing.
 package sheet
 
-import "github.com/maxence-charriere/go-app/v9/pkg/app"
+import (
+	"strings"
 
-// Bench is the root of the screen.
-type Bench struct{ app.Compo }
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/app/browser"
+	"brinefront/app/runner"
+	"brinefront/app/state"
+	"brinefront/app/widget"
+	"brinefront/physics/report"
+	"brinefront/physics/study"
+)
+
+// Bench is the root of the screen. It holds the model, acts on messages through
+// state.Update, and has the runner carry out what Update asks for.
+type Bench struct {
+	app.Compo
+
+	ctx      app.Context
+	model    state.Model
+	runner   *runner.Runner
+	unshown  int    // messages acted on whose pictures are not drawn yet
+	sentence string // the answer last announced
+}
+
+var _ widget.Desk = (*Bench)(nil)
+
+// OnInit starts with what a first visitor sees.
+func (b *Bench) OnInit() { b.model = state.New() }
+
+// OnMount connects the bench to the browser.
+func (b *Bench) OnMount(ctx app.Context) {
+	b.ctx = ctx
+	b.runner = runner.New(func(msg state.Msg) {
+		ctx.Dispatch(func(app.Context) { b.Send(msg) })
+	})
+	browser.PublishIdle(func() bool { return b.unshown == 0 && b.runner.Idle() })
+	b.runner.Start()
+}
+
+// Send acts on a message.
+func (b *Bench) Send(msg state.Msg) {
+	var effects []state.Effect
+	b.model, effects = state.Update(b.model, msg)
+	b.runner.Do(effects)
+	b.announce()
+	b.unshown++
+	b.ctx.Defer(func(ctx app.Context) {
+		// Pictures are drawn by what the rendering has just queued; this queues behind.
+		ctx.Dispatcher().Dispatch(app.Dispatch{Mode: app.Next, Source: ctx.Src(), Function: func(app.Context) { b.unshown-- }})
+	})
+}
+
+// announce lets a screen reader say the answer when it has changed.
+func (b *Bench) announce() {
+	part := b.model.Result.Parts[study.Sheet(b.model.Route.Sheet)]
+	if said := report.Sentence(part, b.model.System); said != "" && said != b.sentence {
+		b.sentence = said
+		browser.Announce(said)
+	}
+}
+
+// Find brings the person to the field of an input.
+func (b *Bench) Find(path string) {
+	if at := sheetOf(path); at != b.model.Route.Sheet {
+		fragment := fragmentOf(at, b.model.Route.Embed)
+		browser.SetFragment(fragment)
+		b.Send(state.Routed{Fragment: fragment})
+	}
+	b.ctx.Defer(func(app.Context) {
+		if field := app.Window().GetElementByID(widget.FieldID(path)); field.Truthy() {
+			field.Call("focus")
+		}
+	})
+}
 
 // Render draws the frame and the sheet the address names.
-func (b *Bench) Render() app.UI {
-	return app.Div().ID("bench").Body(app.H1().Text("Brinefront"))
+func (b *Bench) Render() app.UI { return screen(b, b.model) }
+
+// sheetOf is the sheet whose form holds an input.
+func sheetOf(path string) string {
+	if spec, ok := study.Find(path); ok {
+		return string(spec.Sheet)
+	}
+	first, _, found := strings.Cut(path, ".")
+	if !found {
+		return "report"
+	}
+	return first
+}
+
+// fragmentOf is the address of a sheet.
+func fragmentOf(sheet string, embed bool) string {
+	if embed {
+		return "/" + sheet + "?embed"
+	}
+	return "/" + sheet
 }

@@ -3,6 +3,7 @@ package report
 import (
 	"strings"
 
+	"brinefront/physics/ref"
 	"brinefront/physics/study"
 	"brinefront/physics/units"
 )
@@ -91,4 +92,13 @@ func guarded(value, before, after string) string {
 		return "(" + value + ")"
 	}
 	return value
+}
+
+// Sources spells out the sources of a working.
+func Sources(w study.Working) []string {
+	long := make([]string, len(w.Sources))
+	for i, id := range w.Sources {
+		long[i] = ref.Get(id).Long()
+	}
+	return long
 }

@@ -1,0 +1,26 @@
+package sheet
+
+import (
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/app/state"
+	"brinefront/app/widget"
+	"brinefront/physics/study"
+)
+
+// Front is the sheet of the moving front.
+type Front struct {
+	app.Compo
+
+	Desk  widget.Desk
+	Model state.Model
+}
+
+// Render draws the sheet.
+func (f *Front) Render() app.UI {
+	d, m := f.Desk, f.Model
+	return laid(d, m, study.SheetFront,
+		widget.Group(d, m, study.SheetFront, "Fluids", "Fluids at reservoir conditions", nil),
+		widget.Group(d, m, study.SheetFront, "States", "Saturations before and behind", nil),
+	)
+}

@@ -1,0 +1,55 @@
+package sheet
+
+import (
+	"strconv"
+
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/app/state"
+	"brinefront/app/widget"
+	"brinefront/physics/report"
+	"brinefront/physics/study"
+)
+
+// laid is a sheet of the job: the answers, what they still want, the pictures and
+// tables, and beside them the inputs.
+func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.UI {
+	part := m.Result.Parts[sheet]
+	drawn := make([]app.UI, len(part.Charts))
+	for i, c := range part.Charts {
+		drawn[i] = &widget.Picture{Chart: c, System: m.System}
+	}
+	grids := make([]app.UI, len(part.Tables))
+	for i, g := range part.Tables {
+		grids[i] = widget.Grid("grid-"+g.ID, report.Print(g, m.System))
+	}
+	class := "sheet"
+	if len(drawn) == 0 {
+		class += " bare"
+	}
+	return app.Article().Class(class).DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
+		heading(string(sheet)),
+		&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
+		widget.Wanting(d, part, m.Result.Problems),
+		widget.Notes(d, part.Notes),
+		app.Div().Class("work").Body(
+			app.Div().Class("shown").Body(
+				app.Section().Class("pictures").Aria("label", "Pictures").Body(drawn...),
+				app.Section().Class("grids").Aria("label", "Tables").Body(grids...),
+			),
+			app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("labelledby", "inputs-title").Body(
+				append([]app.UI{app.H2().ID("inputs-title").Text("Inputs")}, forms...)...,
+			),
+		),
+	)
+}
+
+// heading is the title of a sheet and the question it answers.
+func heading(name string) app.UI {
+	for _, s := range sheets {
+		if s.name == name {
+			return app.Header().Class("heading").Body(app.H1().Text(s.title), app.P().Text(s.question))
+		}
+	}
+	panic("sheet: no sheet is called " + name)
+}

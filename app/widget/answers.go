@@ -1,0 +1,92 @@
+package widget
+
+import (
+	"strconv"
+
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/physics/report"
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// Answers is a sheet's answer: the sentence, the strip of figures, and the
+// working of the figure that is looked at.
+type Answers struct {
+	app.Compo
+
+	Desk   Desk
+	Sheet  study.Sheet
+	Part   study.Part
+	System units.System
+
+	open string // the figure whose working is shown
+}
+
+// Render draws the answer.
+func (a *Answers) Render() app.UI {
+	var strip, rest []app.UI
+	for _, f := range a.Part.Figures {
+		if f.Strip {
+			strip = append(strip, a.figure(f))
+		} else {
+			rest = append(rest, a.figure(f))
+		}
+	}
+	return app.Div().Class("answers").Body(
+		app.P().Class("sentence").ID("answer-"+string(a.Sheet)).Body(a.sentence()...),
+		app.P().Class("stopped").Hidden(a.Part.Status != study.Stopped).
+			Text("◐ The computation stopped short. What it reached is shown; treat it as provisional."),
+		app.Ul().Class("strip").Aria("label", "Figures; each opens its working").Body(strip...),
+		a.working(),
+		app.Details().Class("rest").Hidden(len(rest) == 0).Body(
+			app.Summary().Text("More figures ("+strconv.Itoa(len(rest))+")"),
+			app.Ul().Class("strip").Body(rest...),
+		),
+	)
+}
+
+func (a *Answers) sentence() []app.UI {
+	var words []app.UI
+	for _, phrase := range a.Part.Answer {
+		if phrase.Text != "" {
+			words = append(words, app.Text(phrase.Text))
+		}
+		if f, ok := a.Part.Figure(phrase.Figure); ok {
+			words = append(words, button(report.Value(f, a.System)).Class("inline").Title("Show the working").
+				Aria("expanded", strconv.FormatBool(a.open == f.ID)).OnClick(a.toggle(f.ID), f.ID))
+		}
+	}
+	return words
+}
+
+// figure is one number of the strip: a button that opens its working.
+func (a *Answers) figure(f study.Figure) app.UI {
+	return app.Li().Body(app.Button().Type("button").
+		DataSet("figure", f.ID).
+		DataSet("value", strconv.FormatFloat(f.Value, 'g', -1, 64)).
+		Aria("expanded", strconv.FormatBool(a.open == f.ID)).
+		OnClick(a.toggle(f.ID), f.ID).
+		Body(
+			app.Span().Class("value").Text(report.Value(f, a.System)),
+			app.Span().Class("label").Body(app.Text(f.Label+" "), app.Span().Class("symbol").Text(f.Symbol)),
+		))
+}
+
+func (a *Answers) toggle(id string) app.EventHandler {
+	return func(app.Context, app.Event) {
+		if a.open == id {
+			a.open = ""
+		} else {
+			a.open = id
+		}
+	}
+}
+
+func (a *Answers) working() app.UI {
+	f, ok := a.Part.Figure(a.open)
+	if !ok {
+		return app.Section().Class("working").Hidden(true)
+	}
+	return Working(a.Desk, f, a.System, a.toggle(f.ID))
+}

@@ -1,0 +1,148 @@
+package widget
+
+import (
+	"strconv"
+	"strings"
+
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/app/state"
+	"brinefront/physics/study"
+)
+
+// pasteBox is the id of the text area in which a table can be pasted.
+const pasteBox = "paste-box"
+
+// What of a pasted table is shown before it is used.
+const (
+	previewRows    = 8
+	previewColumns = 8
+	previewLines   = 6
+)
+
+// columnRoles are what a pasted column may be.
+var columnRoles = []study.Choice{
+	{Value: "", Label: "not used"},
+	{Value: "sw", Label: "Sw"},
+	{Value: "krw", Label: "krw"},
+	{Value: "kro", Label: "kro"},
+}
+
+// Pasting is where a table is pasted, and how it was read before it is used.
+func Pasting(d Desk, m state.Model) app.UI {
+	text := ""
+	if m.Paste != nil {
+		text = m.Paste.Text
+	}
+	return app.Div().Class("pasting").DataSet("paste", "table").Body(
+		app.Label().For(pasteBox).Text("Paste a table from a spreadsheet or a report"),
+		&Input{Desk: d, ID: pasteBox, Path: tablePath, Kind: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: m.Messages[tablePath] != ""},
+		app.P().ID("paste-help").Class("help").Text("Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row."),
+		app.P().ID(messageID(tablePath)).Class("message").Text(m.Messages[tablePath]),
+		preview(d, m.Paste),
+	)
+}
+
+func preview(d Desk, p *state.PasteDraft) app.UI {
+	if p == nil {
+		return app.Section().ID("paste-preview").Hidden(true)
+	}
+	r := p.Reading
+	var lines []string
+	for _, problem := range r.Problems[:min(len(r.Problems), previewLines)] {
+		lines = append(lines, place(problem.Row, problem.Column)+"read "+strconv.Quote(problem.Read)+"; allowed: "+problem.Allowed+".")
+	}
+	accept, acceptScope := does(d, state.PasteAccepted{})
+	forget, forgetScope := does(d, state.PasteDropped{})
+	return app.Section().ID("paste-preview").Hidden(false).Aria("label", "How the pasted table was read").Body(
+		app.H4().Text("How it was read"),
+		app.P().Text("Columns apart by "+r.Separator+", decimal "+r.Decimal+", "+header(r.Header)+", "+counted(len(r.Cells), "row")+"."),
+		app.Ul().Class("message").ID("paste-problems").Body(items(lines, len(r.Problems))...),
+		app.Ul().Class("help").ID("paste-remarks").Body(items(r.Remarks, len(r.Remarks))...),
+		app.Div().Class("scroll").TabIndex(0).Role("group").Aria("label", "First rows of the pasted table").Body(
+			previewTable(d, p),
+		),
+		app.Div().Class("actions").Body(
+			button("Use this table").ID("paste-accept").Class("main").Disabled(len(r.Problems) > 0).OnClick(accept, acceptScope),
+			button("Forget it").ID("paste-forget").OnClick(forget, forgetScope),
+		),
+	)
+}
+
+func previewTable(d Desk, p *state.PasteDraft) app.UI {
+	r := p.Reading
+	width := min(len(r.Columns), previewColumns)
+	head := make([]app.UI, width)
+	for i := range width {
+		head[i] = app.Th().Scope("col").Body(role(d, i, r.Columns[i].Title, r.Columns[i].As))
+	}
+	var rows []app.UI
+	for _, cells := range r.Cells[:min(len(r.Cells), previewRows)] {
+		row := make([]app.UI, 0, width)
+		for i := range min(len(cells), width) {
+			row = append(row, app.Td().Text(cells[i]))
+		}
+		rows = append(rows, app.Tr().Body(row...))
+	}
+	return app.Table().Body(
+		app.THead().Body(app.Tr().Body(head...)),
+		app.TBody().Body(rows...),
+	)
+}
+
+// role is the list that says what a pasted column is.
+func role(d Desk, column int, title, as string) app.UI {
+	number := strconv.Itoa(column + 1)
+	options := make([]app.UI, len(columnRoles))
+	for i, c := range columnRoles {
+		options[i] = option(c.Value, c.Label, c.Value == as)
+	}
+	return app.Div().Body(
+		app.Span().Text(title),
+		app.Select().ID("paste-column-"+number).Aria("label", "What column "+number+" is").
+			OnChange(func(ctx app.Context, _ app.Event) {
+				d.Send(state.PasteMapped{Column: column, As: valueOf(ctx)})
+			}, column).
+			Body(options...),
+	)
+}
+
+func place(row, column int) string {
+	var at []string
+	if row >= 0 {
+		at = append(at, "row "+strconv.Itoa(row+1))
+	}
+	if column >= 0 {
+		at = append(at, "column "+strconv.Itoa(column+1))
+	}
+	if len(at) == 0 {
+		return "The table: "
+	}
+	return strings.ToUpper(at[0][:1]) + strings.Join(at, ", ")[1:] + ": "
+}
+
+func header(cells []string) string {
+	if cells == nil {
+		return "no header row"
+	}
+	return "header row " + strings.Join(cells, " | ")
+}
+
+func counted(n int, noun string) string {
+	if n == 1 {
+		return "1 " + noun
+	}
+	return strconv.Itoa(n) + " " + noun + "s"
+}
+
+// items are the first lines of a list that has so many in all.
+func items(lines []string, all int) []app.UI {
+	var list []app.UI
+	for _, line := range lines[:min(len(lines), previewLines)] {
+		list = append(list, app.Li().Text(line))
+	}
+	if more := all - previewLines; more > 0 {
+		list = append(list, app.Li().Text("and "+strconv.Itoa(more)+" more"))
+	}
+	return list
+}

@@ -1,0 +1,156 @@
+package widget
+
+import (
+	"math"
+	"strconv"
+	"strings"
+
+	"github.com/maxence-charriere/go-app/v9/pkg/app"
+
+	"brinefront/app/state"
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// tablePath is the path of the laboratory table; a cell's is
+// "rock.table.<row>.<column>".
+const tablePath = "rock.table"
+
+// rowsShown is how many rows of a long table are on the page at a time: enough
+// for any plug, few enough that ten thousand points stay quick to edit.
+const rowsShown = 60
+
+// columns of the laboratory table.
+var columns = []struct {
+	name, label string
+	values      func(*study.Table) []float64
+}{
+	{"sw", "Sw", func(t *study.Table) []float64 { return t.Sw }},
+	{"krw", "krw", func(t *study.Table) []float64 { return t.Krw }},
+	{"kro", "kro", func(t *study.Table) []float64 { return t.Kro }},
+}
+
+// Points is the laboratory table as a grid of fields. Enter and the arrows up
+// and down move between rows; a table pasted into any cell is previewed.
+type Points struct {
+	app.Compo
+
+	Desk  Desk
+	Model state.Model
+
+	first int // row at the top
+}
+
+// Render draws the grid.
+func (p *Points) Render() app.UI {
+	rows := tableRows(p.Model)
+	p.first = max(0, min(p.first, (rows-1)/rowsShown*rowsShown))
+	last := min(rows, p.first+rowsShown)
+	body := make([]app.UI, 0, last-p.first)
+	for row := p.first; row < last; row++ {
+		body = append(body, p.row(row))
+	}
+	head := []app.UI{app.Th().Scope("col").Text("#")}
+	for _, c := range columns {
+		head = append(head, app.Th().Scope("col").Text(c.label))
+	}
+	add, scope := does(p.Desk, state.RowAdded{After: rows - 1})
+	return app.Div().Class("points").DataSet("paste", "table").Body(
+		app.Table().ID("points").Aria("label", "Laboratory points").Hidden(rows == 0).Body(
+			app.THead().Body(app.Tr().Body(append(head, app.Td())...)),
+			app.TBody().Body(body...),
+		),
+		app.Div().Class("paging").Hidden(rows <= rowsShown).Body(
+			button("Earlier rows").Disabled(p.first == 0).OnClick(p.earlier),
+			app.Span().Text("Rows "+strconv.Itoa(p.first+1)+" to "+strconv.Itoa(last)+" of "+strconv.Itoa(rows)),
+			button("Later rows").Disabled(last == rows).OnClick(p.later),
+		),
+		button("Add a row").ID("row-add").OnClick(add, scope),
+	)
+}
+
+func (p *Points) earlier(app.Context, app.Event) { p.first -= rowsShown }
+func (p *Points) later(app.Context, app.Event)   { p.first += rowsShown }
+
+// row is one point, with what is wrong with it beneath.
+func (p *Points) row(row int) app.UI {
+	number := strconv.Itoa(row + 1)
+	cells := []app.UI{app.Th().Scope("row").Text(number)}
+	for _, c := range columns {
+		path := cellPath(row, c.name)
+		message := p.Model.Messages[path]
+		cells = append(cells, app.Td().Body(
+			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Kind: CellInput, Text: cellText(p.Model, row, c.name, c.values),
+				Bad: message != "", Told: messageID(path), Name: c.label + ", row " + number},
+			app.Span().ID(messageID(path)).Class("message").Text(message),
+		))
+	}
+	remove, scope := does(p.Desk, state.RowRemoved{Row: row})
+	return app.Tr().Body(append(cells, app.Td().Body(
+		button("×").Class("remove").Aria("label", "Remove row "+number).OnClick(remove, scope),
+	))...)
+}
+
+// tableRows counts the rows the study holds and those only typed so far.
+func tableRows(m state.Model) int {
+	rows := 0
+	if m.Study.Rock.Table != nil {
+		rows = len(m.Study.Rock.Table.Sw)
+	}
+	for path := range m.Drafts {
+		if row, _, ok := cellAt(path); ok {
+			rows = max(rows, row+1)
+		}
+	}
+	return rows
+}
+
+func cellPath(row int, column string) string {
+	return tablePath + "." + strconv.Itoa(row) + "." + column
+}
+
+// cellAt is the row and column of a cell's path.
+func cellAt(path string) (row int, column string, ok bool) {
+	rest, ok := strings.CutPrefix(path, tablePath+".")
+	if !ok {
+		return 0, "", false
+	}
+	number, column, ok := strings.Cut(rest, ".")
+	if !ok {
+		return 0, "", false
+	}
+	row, err := strconv.Atoi(number)
+	return row, column, err == nil
+}
+
+// cellText is what was typed while it cannot be used, else the study's number.
+func cellText(m state.Model, row int, column string, values func(*study.Table) []float64) string {
+	if draft, ok := m.Drafts[cellPath(row, column)]; ok {
+		return draft.Text
+	}
+	if t := m.Study.Rock.Table; t != nil && row < len(values(t)) && !math.IsNaN(values(t)[row]) {
+		return units.Exact(values(t)[row])
+	}
+	return ""
+}
+
+// moved brings the caret to the same column of another row.
+func (i *Input) moved(_ app.Context, e app.Event) {
+	row, column, ok := cellAt(i.Path)
+	if !ok {
+		return
+	}
+	switch e.Get("key").String() {
+	case "ArrowUp":
+		row--
+	case "ArrowDown", "Enter":
+		row++
+	default:
+		return
+	}
+	e.PreventDefault()
+	if next := app.Window().GetElementByID(FieldID(cellPath(row, column))); next.Truthy() {
+		next.Call("focus")
+		next.Call("select")
+	}
+}

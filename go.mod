@@ -11,5 +11,6 @@ require (
 	github.com/maxence-charriere/go-app/v9 v9.8.0 // indirect
 	golang.org/x/crypto v0.59.0 // indirect
 	golang.org/x/net v0.62.0 // indirect
+	golang.org/x/sys v0.50.0 // indirect
 	gonum.org/v1/gonum v0.17.0 // indirect
 )

@@ -17,10 +17,9 @@ func screen(d widget.Desk, m state.Model) app.UI {
 		class += " embed"
 	}
 	return app.Div().ID("bench").Class(class).Body(
-		app.Div().ID("announce").Class("hint").Role("status").Aria("live", "polite"),
-		widget.Notices(d, m.Notices),
 		top(d, m),
 		rail(m),
+		widget.Notices(d, m.Notices),
 		app.Main().ID("main").TabIndex(-1).Body(
 			failure(d, m),
 			demonstration(d, m),

@@ -26,7 +26,7 @@ func Field(d Desk, m state.Model, spec study.Spec) app.UI {
 			app.Span().Text(spec.Label+" "), app.Span().Class("symbol").Text(spec.Symbol), optional(spec),
 		),
 		app.Div().Class("entry").Body(
-			&Input{Desk: d, ID: FieldID(spec.Path), Path: spec.Path, Kind: NumberInput, Text: text, With: unit,
+			&Input{Desk: d, ID: FieldID(spec.Path), Path: spec.Path, Sort: NumberInput, Text: text, With: unit,
 				Bad: message != "", Told: messageID(spec.Path) + " " + help},
 			unitChoice(d, spec, text, unit),
 		),
@@ -107,12 +107,12 @@ func origin(d Desk, m state.Model, spec study.Spec) app.UI {
 	return app.Details().Class("origin").Hidden(false).Body(
 		app.Summary().Body(hint(spec.Label+": "), app.Span().Text("Source and range: "), app.Span().Class("said").Text(said)),
 		app.Label().For("source-"+path).Text("Where it comes from: report and page, analogue, assumption"),
-		&Input{Desk: d, ID: "source-" + path, Path: spec.Path, Kind: SourceInput, Text: in.Source},
+		&Input{Desk: d, ID: "source-" + path, Path: spec.Path, Sort: SourceInput, Text: in.Source},
 		app.Div().Class("range").Body(
 			app.Label().For("low-"+path).Text("Low"),
-			&Input{Desk: d, ID: "low-" + path, Path: spec.Path, Kind: LowInput, Text: low, With: high, Bad: problem != "", Told: "msg-range-" + path},
+			&Input{Desk: d, ID: "low-" + path, Path: spec.Path, Sort: LowInput, Text: low, With: high, Bad: problem != "", Told: "msg-range-" + path},
 			app.Label().For("high-"+path).Text("High"),
-			&Input{Desk: d, ID: "high-" + path, Path: spec.Path, Kind: HighInput, Text: high, With: low, Bad: problem != "", Told: "msg-range-" + path},
+			&Input{Desk: d, ID: "high-" + path, Path: spec.Path, Sort: HighInput, Text: high, With: low, Bad: problem != "", Told: "msg-range-" + path},
 			app.Span().Class("unit").Text(in.Unit),
 		),
 		app.P().ID("msg-range-"+path).Class("message").Text(problem),

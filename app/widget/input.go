@@ -17,7 +17,7 @@ type Input struct {
 	Desk  Desk
 	ID    string
 	Path  string
-	Kind  InputKind
+	Sort  InputSort
 	Text  string
 	With  string // sent along: the unit of a number, the other end of a range
 	Bad   bool   // the text cannot be used
@@ -30,24 +30,24 @@ type Input struct {
 	typed string // what the element holds now
 }
 
-// InputKind decides what an edit sends, and how the element looks.
-type InputKind string
+// InputSort decides what an edit sends, and how the element looks.
+type InputSort string
 
-// The kinds of input.
+// The sorts of input.
 const (
-	NumberInput InputKind = "number"  // Edited
-	CellInput   InputKind = "cell"    // Edited; arrows move between rows
-	LowInput    InputKind = "low"     // Ranged
-	HighInput   InputKind = "high"    // Ranged
-	SourceInput InputKind = "source"  // Sourced
-	WordsInput  InputKind = "words"   // Written
-	BlockInput  InputKind = "block"   // Written, many lines
-	PasteInput  InputKind = "pasting" // Pasted, many lines
+	NumberInput InputSort = "number"  // Edited
+	CellInput   InputSort = "cell"    // Edited; arrows move between rows
+	LowInput    InputSort = "low"     // Ranged
+	HighInput   InputSort = "high"    // Ranged
+	SourceInput InputSort = "source"  // Sourced
+	WordsInput  InputSort = "words"   // Written
+	BlockInput  InputSort = "block"   // Written, many lines
+	PasteInput  InputSort = "pasting" // Pasted, many lines
 )
 
 // message is what an edit sends.
 func (i *Input) message(text string) state.Msg {
-	switch i.Kind {
+	switch i.Sort {
 	case LowInput:
 		return state.Ranged{Path: i.Path, Low: text, High: i.With}
 	case HighInput:
@@ -81,18 +81,18 @@ func (i *Input) Render() app.UI {
 	if !i.drawn {
 		i.drawn, i.first, i.typed = true, i.Text, i.Text
 	}
-	if i.Kind == BlockInput || i.Kind == PasteInput {
+	if i.Sort == BlockInput || i.Sort == PasteInput {
 		return i.block()
 	}
 	return i.line()
 }
 
 func (i *Input) line() app.UI {
-	in := app.Input().ID(i.ID).Type("text").Class(string(i.Kind)).AutoComplete(false).OnInput(i.edited)
+	in := app.Input().ID(i.ID).Type("text").Class(string(i.Sort)).AutoComplete(false).OnInput(i.edited)
 	if i.first != "" {
 		in = in.Attr("value", i.first)
 	}
-	switch i.Kind {
+	switch i.Sort {
 	case CellInput:
 		in = in.Attr("inputmode", "decimal").OnKeyDown(i.moved)
 	case NumberInput, LowInput, HighInput:
@@ -105,7 +105,7 @@ func (i *Input) line() app.UI {
 }
 
 func (i *Input) block() app.UI {
-	area := app.Textarea().ID(i.ID).Class(string(i.Kind)).Rows(3).OnInput(i.edited)
+	area := app.Textarea().ID(i.ID).Class(string(i.Sort)).Rows(3).OnInput(i.edited)
 	if i.first != "" {
 		area = area.Attr("value", i.first)
 	}

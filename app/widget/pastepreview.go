@@ -36,7 +36,7 @@ func Pasting(d Desk, m state.Model) app.UI {
 	}
 	return app.Div().Class("pasting").DataSet("paste", "table").Body(
 		app.Label().For(pasteBox).Text("Paste a table from a spreadsheet or a report"),
-		&Input{Desk: d, ID: pasteBox, Path: tablePath, Kind: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: m.Messages[tablePath] != ""},
+		&Input{Desk: d, ID: pasteBox, Path: tablePath, Sort: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: m.Messages[tablePath] != ""},
 		app.P().ID("paste-help").Class("help").Text("Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row."),
 		app.P().ID(messageID(tablePath)).Class("message").Text(m.Messages[tablePath]),
 		preview(d, m.Paste),

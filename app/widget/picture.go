@@ -50,7 +50,7 @@ func (p *Picture) Render() app.UI {
 			app.Span().Class("title").Text(p.Chart.Title),
 			p.saving(),
 		),
-		app.Div().ID(p.holder()).Class("drawing").Role("img").Aria("label", p.Chart.Title).Aria("describedby", p.holder()+"-text"),
+		app.Div().ID(p.holder()).Class("drawing"),
 		app.P().ID(p.holder()+"-text").Class("summary").Text(p.Chart.Summary),
 		app.P().Class("message").Text(p.fault),
 	)

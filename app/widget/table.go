@@ -80,7 +80,7 @@ func (p *Points) row(row int) app.UI {
 		path := cellPath(row, c.name)
 		message := p.Model.Messages[path]
 		cells = append(cells, app.Td().Body(
-			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Kind: CellInput, Text: cellText(p.Model, row, c.name, c.values),
+			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Sort: CellInput, Text: cellText(p.Model, row, c.name, c.values),
 				Bad: message != "", Told: messageID(path), Name: c.label + ", row " + number},
 			app.Span().ID(messageID(path)).Class("message").Text(message),
 		))
@@ -153,4 +153,16 @@ func (i *Input) moved(_ app.Context, e app.Event) {
 		next.Call("focus")
 		next.Call("select")
 	}
+}
+
+// TableSource is where the laboratory table comes from.
+func TableSource(d Desk, m state.Model) app.UI {
+	said := ""
+	if m.Study.Rock.Table != nil {
+		said = m.Study.Rock.Table.Source
+	}
+	return app.Div().Class("field").Hidden(m.Study.Rock.Table == nil).Body(
+		app.Label().For("source-rock-table").Text("Where the points come from: laboratory report and page"),
+		&Input{Desk: d, ID: "source-rock-table", Path: tablePath, Sort: SourceInput, Text: said},
+	)
 }

@@ -2,6 +2,7 @@ package fracflow
 
 import (
 	"math"
+	"sort"
 
 	"brinefront/physics/numeric"
 )
@@ -90,6 +91,47 @@ type chord struct {
 func (c chord) slope() float64 { return slope(c.left.node, c.right.node) }
 
 func slope(a, b node) float64 { return (b.g - a.g) / (b.y - a.y) }
+
+// envelope finds the vertices and the straight pieces. An arc that rises above a piece
+// only between two samples is given a sample at its summit, and all is done again.
+func (h *hull) envelope() ([]int, []chord) {
+	for pass := 0; ; pass++ {
+		vertices := h.vertices()
+		chords := h.chords(vertices)
+		summits := h.summits(chords)
+		if len(summits) == 0 || pass == 50 { // each pass lifts the envelope; a handful is the rule
+			return vertices, chords
+		}
+		h.nodes = append(h.nodes, summits...)
+		sort.Slice(h.nodes, func(i, j int) bool { return h.nodes[i].y < h.nodes[j].y })
+	}
+}
+
+// summits are the points of largest g above a chord inside concave cells beneath it.
+func (h *hull) summits(chords []chord) []node {
+	var out []node
+	for _, c := range chords {
+		m := c.slope()
+		over := func(n node) float64 { return n.g - c.left.g - m*(n.y-c.left.y) }
+		for i := c.left.k; i < c.right.k; i++ {
+			a, b := h.nodes[i], h.nodes[i+1]
+			up, down := a.right-m, b.left-m
+			if a.y <= c.left.y || b.y >= c.right.y || up <= 0 || down >= 0 {
+				continue
+			}
+			// Where the tangents at both ends of the cell meet bounds its summit.
+			ea, eb := over(a), over(b)
+			if ea+up*(eb-ea-down*(b.y-a.y))/(up-down) <= 0 {
+				continue
+			}
+			n := h.at(numeric.Zero(func(y float64) float64 { return h.at(y).right - m }, a.y, b.y, up, down))
+			if n.y > a.y && n.y < b.y && over(n) > 4*ulp*math.Abs(n.g) {
+				out = append(out, n)
+			}
+		}
+	}
+	return out
+}
 
 // chords are the straight pieces of the envelope, refined on the true function.
 func (h *hull) chords(vertices []int) []chord {

@@ -28,6 +28,10 @@ func atKnot(fn Function, s float64) Sample {
 // extreme the mobility ratio: its features are never much narrower than 1/exponent.
 const spacing = 0.86
 
+// boxing is how often a cell that seems to hold an inflection is halved: afterwards
+// the slope is monotone in every cell but for 1/4^boxing or so of its change.
+const boxing = 24
+
 // Samples returns the function at points between a and b (a first, b last, either
 // may be the larger): at every knot, graded towards the ends of every smooth
 // piece between knots, and added to until no step in f exceeds a small part of
@@ -45,25 +49,40 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 	if len(ends) > 0 && ends[len(ends)-1] == hi {
 		ends = ends[:len(ends)-1]
 	}
-	inside := max(1, budget/(len(ends)+1))
-	coarse := make([]Sample, 1, (inside+1)*(len(ends)+1)+1)
+	pieces := len(ends) + 1
+	inside := max(1, budget/pieces, min(10, 2000/pieces))
+	coarse := make([]Sample, 1, (inside+3)*pieces+1)
 	coarse[0] = at(fn, lo)
 	from := lo
+	// Next to a knot the second derivative may have another sign than a little further
+	// on. A guard on either side, as near as the rounding of f allows a slope to be told
+	// from a chord, shows it.
+	guard := 1e-6 * (hi - lo)
 	for i := 0; i <= len(ends); i++ {
 		to := hi
 		if i < len(ends) {
 			to = ends[i]
 		}
-		for j := 1; j <= inside; j++ {
-			t := (float64(j) - float64(inside+1)/2) * spacing
-			share := 1 / (1 + math.Exp(math.Abs(t)))
-			s := from + share*(to-from)
-			if t > 0 {
-				s = to - share*(to-from)
-			}
+		add := func(s float64) {
 			if s > coarse[len(coarse)-1].S && s < to {
 				coarse = append(coarse, at(fn, s))
 			}
+		}
+		guarded := to-from > 8*guard
+		if guarded {
+			add(from + guard)
+		}
+		for j := 1; j <= inside; j++ {
+			t := (float64(j) - float64(inside+1)/2) * spacing
+			share := 1 / (1 + math.Exp(math.Abs(t)))
+			if t < 0 {
+				add(from + share*(to-from))
+			} else {
+				add(to - share*(to-from))
+			}
+		}
+		if guarded {
+			add(to - guard)
 		}
 		if i < len(inner) {
 			coarse = append(coarse, atKnot(fn, to))
@@ -79,9 +98,10 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 	g := grid{fn: fn, reach: high - low, thin: 1e-13 * (hi - lo), out: make([]Sample, 0, 2*len(coarse))}
 	g.out = append(g.out, coarse[0])
 	for i := 1; i < len(coarse); i++ {
-		g.split(coarse[i-1], coarse[i], 5)
+		g.split(coarse[i-1], coarse[i], boxing)
 		g.out = append(g.out, coarse[i])
 	}
+	g.box()
 	if a > b {
 		for i, j := 0, len(g.out)-1; i < j; i, j = i+1, j-1 {
 			g.out[i], g.out[j] = g.out[j], g.out[i]
@@ -105,10 +125,12 @@ func (g *grid) split(a, b Sample, box int) {
 	}
 	steep := math.Abs(rise) > g.reach/32
 	if !steep {
-		// The mean slope of a cell without inflection lies between its end slopes.
-		// Below the rounding of f the mean slope says nothing.
-		mean := rise / width
-		bent := math.Abs(rise) > 1e-11*g.reach && (mean-a.Above)*(b.Below-mean) < 0
+		// The cubic with the slopes and the mean slope of the cell has an inflection when
+		// the mean lies outside the middle third between the slopes. Rounding of f blurs
+		// the mean.
+		off := math.Abs(rise/width - (a.Above+b.Below)/2)
+		blur := 8 * ulp * math.Max(math.Abs(a.F), math.Abs(b.F)) / width
+		bent := off > math.Abs(b.Below-a.Above)/6+blur
 		if !bent || box == 0 {
 			return
 		}
@@ -119,4 +141,44 @@ func (g *grid) split(a, b Sample, box int) {
 	g.split(a, m, box)
 	g.out = append(g.out, m)
 	g.split(m, b, box)
+}
+
+// box closes in on inflections that lie beside a sample: where the slope turns from
+// rising to falling, or back, between two cells, both are halved again and again.
+func (g *grid) box() {
+	var added []Sample
+	n := g.out
+	for i := 1; i+1 < len(n); i++ {
+		a, m, b := n[i-1], n[i], n[i+1]
+		for range boxing {
+			if !turns(a, m, b) || b.S-a.S <= g.thin {
+				break
+			}
+			left, right := at(g.fn, a.S+(m.S-a.S)/2), at(g.fn, m.S+(b.S-m.S)/2)
+			added = append(added, left, right)
+			switch {
+			case turns(a, left, m):
+				b, m = m, left
+			case turns(m, right, b):
+				a, m = m, right
+			default:
+				a, b = left, right
+			}
+		}
+	}
+	if len(added) > 0 {
+		g.out = append(n, added...)
+		sort.Slice(g.out, func(i, j int) bool { return g.out[i].S < g.out[j].S })
+	}
+}
+
+// turns tells whether the slope has an extremum near the middle one of three samples,
+// which is not a kink.
+func turns(a, m, b Sample) bool {
+	falls := func(from, to float64) bool { return rises(to, from, alike) }
+	if rises(m.Below, m.Above, kink) || rises(m.Above, m.Below, kink) {
+		return false
+	}
+	return rises(a.Above, m.Below, alike) && falls(m.Above, b.Below) ||
+		falls(a.Above, m.Below) && rises(m.Above, b.Below, alike)
 }

@@ -80,8 +80,7 @@ func within(fn Function, name string, s float64) (float64, error) {
 
 // waves reads the waves off the envelope, from the inlet (the largest y) outwards.
 func (h *hull) waves() []Wave {
-	vertices := h.vertices()
-	chords := h.chords(vertices)
+	vertices, chords := h.envelope()
 	var out path
 	top := touch{node: h.nodes[len(h.nodes)-1]}
 	speed := top.left
@@ -99,16 +98,18 @@ func (h *hull) waves() []Wave {
 	for i := len(chords) - 1; i >= 0; i-- {
 		c := chords[i]
 		m := c.slope()
-		end := c.right.right
+		// Beside a bridge the fan is never on the wrong side of its speed, and at a true
+		// tangent it has just that speed.
+		end, next := math.Min(c.right.right, m), math.Max(c.left.left, m)
 		if c.right.inside {
 			end = m
 		}
+		if c.left.inside {
+			next = m
+		}
 		fan(c.right, end)
 		out.add(Shock, c.right.node, c.left.node, m, m)
-		top, speed = c.left, c.left.left
-		if c.left.inside {
-			speed = m
-		}
+		top, speed = c.left, next
 	}
 	bottom := touch{node: h.nodes[0]}
 	fan(bottom, bottom.right)

@@ -1,0 +1,95 @@
+package plot
+
+import (
+	"encoding/csv"
+	"slices"
+	"strconv"
+	"strings"
+)
+
+// CSV is the picture's numbers for a spreadsheet (RFC 4180): one header row with
+// units, the series side by side at full precision, a decimal point. Series that
+// share their x share its column. A gap is an empty cell.
+func (p Picture) CSV() string {
+	columns := p.columns()
+	header := make([]string, len(columns))
+	rows := 0
+	for i, c := range columns {
+		header[i] = c.heading
+		rows = max(rows, len(c.cells))
+	}
+	var b strings.Builder
+	w := csv.NewWriter(&b)
+	w.UseCRLF = true
+	write(w, header)
+	for r := range rows {
+		record := make([]string, len(columns))
+		for i, c := range columns {
+			if r < len(c.cells) {
+				record[i] = c.cells[r]
+			}
+		}
+		write(w, record)
+	}
+	w.Flush()
+	return b.String()
+}
+
+// write cannot fail: the writer's target is memory.
+func write(w *csv.Writer, record []string) {
+	if err := w.Write(record); err != nil {
+		panic("plot: " + err.Error())
+	}
+}
+
+type column struct {
+	heading string
+	cells   []string
+}
+
+func (p Picture) columns() []column {
+	var list []column
+	var last [][2]float64 // whose x column stands furthest to the right
+	for _, l := range p.Lines {
+		if len(list) == 0 || !sameX(last, l.Data) {
+			list = append(list, column{p.X.Title, cells(l.Data, 0)})
+			last = l.Data
+		}
+		if l.Low != nil {
+			list = append(list, column{l.Label + ", lower edge: " + p.Y.Title, cells(l.Low, 1)})
+			list = append(list, column{l.Label + ", upper edge: " + p.Y.Title, cells(l.Data, 1)})
+			continue
+		}
+		list = append(list, column{l.Label + ": " + p.Y.Title, cells(l.Data, 1)})
+	}
+	if len(p.Marks) == 0 {
+		return list
+	}
+	mark, x, y := column{heading: "Marked point"}, column{heading: p.X.Title}, column{heading: p.Y.Title}
+	for _, m := range p.Marks {
+		mark.cells = append(mark.cells, m.Label)
+		x.cells = append(x.cells, full(m.X))
+		y.cells = append(y.cells, full(m.Y))
+	}
+	return append(list, mark, x, y)
+}
+
+func sameX(a, b [][2]float64) bool {
+	return slices.EqualFunc(a, b, func(p, q [2]float64) bool { return full(p[0]) == full(q[0]) })
+}
+
+func cells(data [][2]float64, coordinate int) []string {
+	list := make([]string, len(data))
+	for i, p := range data {
+		list[i] = full(p[coordinate])
+	}
+	return list
+}
+
+// full writes every digit that a number has, and nothing for none.
+func full(v float64) string {
+	if !finite(v) {
+		return ""
+	}
+	return strconv.FormatFloat(v, 'g', -1, 64)
+}

@@ -1,0 +1,109 @@
+package plot
+
+import (
+	"encoding/json"
+	"strconv"
+)
+
+// pictureDigits is how many significant digits reach the drawing: a screen is a
+// few thousand dots wide, so seven are already finer than can be seen or zoomed.
+const pictureDigits = 7
+
+// JSON is the picture as the drawing script reads it. Numbers are rounded to
+// pictureDigits; a pair that is not finite is written null, which draws a gap.
+// It is written by hand because it is written at every keystroke, and numbers
+// are nearly all of it.
+func (p Picture) JSON() string {
+	b := make([]byte, 0, 1024+p.points()*24)
+	b = field(b, '{', "id", p.ID)
+	b = field(b, ',', "title", p.Title)
+	b = field(b, ',', "summary", p.Summary)
+	b = p.X.append(append(b, `,"x":`...))
+	b = p.Y.append(append(b, `,"y":`...))
+	b = append(b, `,"lines":[`...)
+	for i, l := range p.Lines {
+		b = l.append(comma(b, i))
+	}
+	b = append(b, `],"marks":[`...)
+	for i, m := range p.Marks {
+		b = field(comma(b, i), '{', "label", m.Label)
+		b = number(append(b, `,"x":`...), m.X)
+		b = number(append(b, `,"y":`...), m.Y)
+		b = append(b, '}')
+	}
+	return string(append(b, `]}`...))
+}
+
+func (p Picture) points() int {
+	n := 0
+	for _, l := range p.Lines {
+		n += len(l.Data) + len(l.Low)
+	}
+	return n
+}
+
+func (a Axis) append(b []byte) []byte {
+	b = field(b, '{', "title", a.Title)
+	b = field(b, ',', "short", a.Short)
+	b = field(b, ',', "unit", a.Unit)
+	b = strconv.AppendBool(append(b, `,"log":`...), a.Log)
+	b = strconv.AppendBool(append(b, `,"canLog":`...), a.CanLog)
+	if a.Min != nil {
+		b = number(append(b, `,"min":`...), *a.Min)
+	}
+	if a.Max != nil {
+		b = number(append(b, `,"max":`...), *a.Max)
+	}
+	return append(b, '}')
+}
+
+func (l Line) append(b []byte) []byte {
+	b = field(b, '{', "id", l.ID)
+	b = field(b, ',', "label", l.Label)
+	b = field(b, ',', "role", l.Role)
+	b = field(b, ',', "kind", l.Kind)
+	b = appendPairs(append(b, `,"data":`...), l.Data)
+	if l.Low != nil {
+		b = appendPairs(append(b, `,"low":`...), l.Low)
+	}
+	return append(b, '}')
+}
+
+func appendPairs(b []byte, data [][2]float64) []byte {
+	b = append(b, '[')
+	for i, p := range data {
+		b = comma(b, i)
+		if !point(p).finite() {
+			b = append(b, "null"...)
+			continue
+		}
+		b = number(append(b, '['), p[0])
+		b = number(append(b, ','), p[1])
+		b = append(b, ']')
+	}
+	return append(b, ']')
+}
+
+func comma(b []byte, i int) []byte {
+	if i > 0 {
+		return append(b, ',')
+	}
+	return b
+}
+
+// field writes a text under a name after the given mark.
+func field(b []byte, before byte, name, text string) []byte {
+	b = append(append(append(b, before, '"'), name...), `":`...)
+	quoted, err := json.Marshal(text)
+	if err != nil {
+		panic("plot: " + err.Error()) // a string always marshals
+	}
+	return append(b, quoted...)
+}
+
+func number(b []byte, v float64) []byte {
+	if !finite(v) {
+		return append(b, "null"...)
+	}
+	return strconv.AppendFloat(b, v, 'g', pictureDigits, 64)
+}

@@ -1,0 +1,148 @@
+// Pictures: the only file family that knows the drawing library. The interface
+// describes a picture as JSON (package plot) and names the element that holds it.
+import { init, use } from "echarts/core";
+import { CustomChart, LineChart, ScatterChart } from "echarts/charts";
+import { GridComponent } from "echarts/components";
+import { SVGRenderer } from "echarts/renderers";
+import { controls } from "./plot/controls.js";
+import { drawing } from "./plot/drawing.js";
+import { colours, darkScheme, light } from "./plot/palette.js";
+import { attach } from "./plot/pointer.js";
+import { savePNG, saveSVG } from "./plot/save.js";
+import { style } from "./plot/style.js";
+
+use([LineChart, ScatterChart, CustomChart, GridComponent, SVGRenderer]);
+
+const printedWidth = 640; // dots: the text area of A4 and of Letter, near enough; the page scales the rest
+const plots = new Map(); // by holder
+let printing = false;
+
+class Plot {
+  constructor(holder) {
+    style();
+    this.holder = holder;
+    this.state = { logX: false, logY: false, view: null, hidden: new Set() };
+    this.figure = element("div", "plot-figure", { role: "img", tabindex: "0" });
+    this.canvas = element("div", "plot-canvas", {});
+    this.row = element("div", "plot-row", {});
+    this.said = element("div", "plot-said", { "aria-live": "polite" });
+    const hint = element("div", "plot-hint", { id: `${holder.id}-hint` });
+    hint.textContent = "Arrow keys read values, + and − zoom, Escape shows the whole picture. With the mouse: drag a box, or turn the wheel.";
+    this.figure.setAttribute("aria-describedby", hint.id);
+    this.figure.append(this.canvas);
+    const root = element("div", "plot", {});
+    root.append(this.figure, hint, this.row, this.said);
+    holder.replaceChildren(root);
+
+    const act = {
+      toggle: (id) => this.toggle(id),
+      logX: () => this.change({ logX: !this.state.logX, view: null }),
+      logY: () => this.change({ logY: !this.state.logY, view: null }),
+      zoomIn: () => this.pointer.zoomIn(),
+      whole: () => this.change({ view: null }),
+    };
+    this.updateRow = controls(this.row, act);
+    this.pointer = attach({
+      figure: this.figure,
+      lay: () => this.drawn.lay, labels: () => this.drawn.labels, picture: () => this.picture, palette: () => this.palette,
+      setView: (view) => this.change({ view }), toggle: act.toggle, say: (text) => { this.said.textContent = text; },
+    });
+    this.watcher = new ResizeObserver(() => printing || this.redraw());
+    this.watcher.observe(this.figure);
+  }
+
+  draw(json) {
+    if (json === this.json) return;
+    const picture = JSON.parse(json);
+    if (picture.id !== this.picture?.id) {
+      Object.assign(this.state, { logX: picture.x.log, logY: picture.y.log, view: null, hidden: new Set() });
+    }
+    this.json = json;
+    this.picture = picture;
+    this.figure.setAttribute("aria-label", `${picture.title}. ${picture.summary}`);
+    this.pointer.leave();
+    this.redraw();
+  }
+
+  change(part) {
+    Object.assign(this.state, part);
+    this.redraw();
+  }
+
+  toggle(id) {
+    const { hidden } = this.state;
+    if (!hidden.delete(id)) hidden.add(id);
+    this.redraw();
+  }
+
+  // redraw draws at the size the page gives now; nothing while it gives none.
+  redraw() {
+    const width = printing ? printedWidth : this.figure.clientWidth;
+    if (!this.picture || width === 0) return;
+    const height = Math.round(Math.min(420, Math.max(260, 0.58 * width)));
+    this.palette = printing ? light : colours(this.holder);
+    this.family = getComputedStyle(this.holder).fontFamily;
+    this.drawn = drawing(this.picture, this.state, width, height, this.family, this.palette);
+    this.figure.style.height = `${height}px`;
+    this.chart ??= init(this.canvas, null, { renderer: "svg", width, height });
+    if (this.chart.getWidth() !== width || this.chart.getHeight() !== height) this.chart.resize({ width, height });
+    const structure = this.drawn.option.series.map((s) => s.type + s.id).join();
+    this.chart.setOption(this.drawn.option, structure === this.structure ? {} : { notMerge: true });
+    this.structure = structure;
+    // A picture that is scaled, as on paper, keeps its proportions.
+    this.canvas.querySelector("svg")?.setAttribute("viewBox", `0 0 ${width} ${height}`);
+    this.updateRow(this.picture, this.state, this.palette);
+  }
+
+  async save(format, name) {
+    if (format === "svg") return saveSVG(this.picture, this.state, this.family, name);
+    if (format === "png") return savePNG(this.picture, this.state, this.family, name);
+    throw new Error(`a picture cannot be saved as ${format}; svg and png are possible`);
+  }
+
+  forget() {
+    this.watcher.disconnect();
+    this.chart?.dispose();
+  }
+}
+
+function element(tag, name, attributes) {
+  const e = document.createElement(tag);
+  e.className = name;
+  for (const [k, v] of Object.entries(attributes)) e.setAttribute(k, v);
+  return e;
+}
+
+function redrawAll() {
+  for (const plot of plots.values()) plot.redraw();
+}
+
+darkScheme.addEventListener("change", redrawAll);
+addEventListener("beforeprint", () => { printing = true; redrawAll(); });
+addEventListener("afterprint", () => { printing = false; redrawAll(); });
+
+self.brinefrontPlot = {
+  // draw shows a picture in the element with this id; the same again costs nothing.
+  draw(holderId, json) {
+    const holder = document.getElementById(holderId);
+    if (!holder) throw new Error(`the page has no place called ${holderId} for a picture`);
+    let plot = plots.get(holderId);
+    if (plot?.holder !== holder || !holder.contains(plot.figure)) {
+      plot?.forget();
+      plot = new Plot(holder);
+      plots.set(holderId, plot);
+    }
+    plot.draw(json);
+  },
+  forget(holderId) {
+    plots.get(holderId)?.forget();
+    plots.delete(holderId);
+  },
+  save(holderId, format, name) {
+    const plot = plots.get(holderId);
+    if (!plot) throw new Error(`no picture is drawn in ${holderId}`);
+    return plot.save(format, name);
+  },
+  // theme reads the page's colours anew, after the page changed them by itself.
+  theme: redrawAll,
+};

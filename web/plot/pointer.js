@@ -1,0 +1,160 @@
+// What mouse, finger and keyboard do on a picture. The page keeps its wheel until
+// a picture has the focus.
+import { heading, readings } from "./read.js";
+import { look } from "./palette.js";
+import { boxed, moved, zoomed } from "./zoom.js";
+
+const least = 8; // dots: a shorter drag is a click
+const stride = 8; // dots that an arrow key moves the reading line
+const closer = 0.8; // one notch of the wheel
+
+// attach gives a plot its pointer and keys. plot: {figure, lay(), picture(),
+// labels(), palette(), setView(view), toggle(id), say(text)}.
+export function attach(plot) {
+  const { figure } = plot;
+  const hair = part("plot-hair"), box = part("plot-box"), slip = part("plot-slip");
+  let from = null; // where a drag began
+  let readAt = null; // the reading line, dots
+
+  function part(name) {
+    const element = document.createElement("div");
+    element.className = name;
+    element.hidden = true;
+    figure.append(element);
+    return element;
+  }
+
+  const clamp = (v, lo, hi) => Math.min(hi, Math.max(lo, v));
+  const within = (event) => {
+    const frame = figure.getBoundingClientRect(), { rect } = plot.lay();
+    const x = event.clientX - frame.left, y = event.clientY - frame.top;
+    return { x: clamp(x, rect.left, rect.right), y: clamp(y, rect.top, rect.bottom), rawX: x, rawY: y };
+  };
+
+  function read(dotX, dotY) {
+    const lay = plot.lay(), { rect } = lay;
+    const rows = readings(lay, dotX, plot.picture());
+    readAt = dotX;
+    place(hair, dotX, rect.top, 0, rect.bottom - rect.top);
+    slip.replaceChildren(row("plot-at", heading(lay, dotX, plot.picture())), ...rows.map((r) => entry(r)));
+    slip.hidden = false;
+    const right = dotX + 14 + slip.offsetWidth <= lay.width;
+    slip.style.left = `${right ? dotX + 14 : Math.max(0, dotX - 14 - slip.offsetWidth)}px`;
+    slip.style.top = `${clamp(dotY - slip.offsetHeight / 2, 0, Math.max(0, lay.height - slip.offsetHeight))}px`;
+    return rows;
+  }
+
+  function row(name, text) {
+    const element = document.createElement("div");
+    element.className = name;
+    element.textContent = text;
+    return element;
+  }
+
+  function entry({ line, text }) {
+    const element = row("plot-entry", "");
+    const label = row("plot-name", line.label);
+    label.style.color = look(line, plot.palette()).colour;
+    element.append(label, row("plot-value", text));
+    return element;
+  }
+
+  function place(element, x, y, w, h) {
+    Object.assign(element.style, { left: `${x}px`, top: `${y}px`, width: `${w}px`, height: `${h}px` });
+    element.hidden = false;
+  }
+
+  function leave() {
+    hair.hidden = slip.hidden = box.hidden = true;
+    from = readAt = null;
+  }
+
+  const labelAt = ({ rawX, rawY }) =>
+    plot.labels().find((l) => l.line && rawX >= l.x && rawX <= l.x + l.w && rawY >= l.y && rawY <= l.y + l.h);
+
+  figure.addEventListener("pointermove", (event) => {
+    const at = within(event);
+    figure.style.cursor = labelAt(at) ? "pointer" : "crosshair";
+    if (from) {
+      hair.hidden = slip.hidden = true;
+      return place(box, ...corner(from, at));
+    }
+    read(at.x, at.y);
+  });
+  const corner = (a, b) => [Math.min(a.x, b.x), Math.min(a.y, b.y), Math.abs(a.x - b.x), Math.abs(a.y - b.y)];
+
+  figure.addEventListener("pointerdown", (event) => {
+    const at = within(event);
+    if (event.pointerType === "touch" || event.button !== 0 || labelAt(at)) return;
+    from = at;
+    figure.setPointerCapture(event.pointerId);
+  });
+  figure.addEventListener("pointerup", (event) => {
+    if (!from) return;
+    const a = from, b = within(event), lay = plot.lay(), { rect } = lay;
+    leave();
+    const wide = Math.abs(a.x - b.x) >= least, high = Math.abs(a.y - b.y) >= least;
+    if (!wide && !high) return read(b.x, b.y);
+    const x = wide ? [a.x, b.x] : [rect.left, rect.right], y = high ? [a.y, b.y] : [rect.bottom, rect.top];
+    plot.setView(boxed(x.map(lay.x.place), y.map(lay.y.place), lay.whole));
+  });
+  figure.addEventListener("pointercancel", leave);
+  figure.addEventListener("pointerleave", () => from || leave());
+  figure.addEventListener("click", (event) => {
+    const label = labelAt(within(event));
+    if (label) plot.toggle(label.line);
+  });
+  figure.addEventListener("dblclick", () => plot.setView(null));
+  figure.addEventListener("blur", leave);
+
+  figure.addEventListener("wheel", (event) => {
+    if (document.activeElement !== figure) return;
+    event.preventDefault();
+    const at = within(event), lay = plot.lay();
+    zoomAt(event.deltaY < 0 ? closer : 1 / closer, lay.x.place(at.x), lay.y.place(at.y));
+    read(at.x, at.y);
+  }, { passive: false });
+
+  function zoomAt(factor, x, y) {
+    const lay = plot.lay();
+    plot.setView(zoomed(lay.view, lay.whole, factor, { x, y }));
+  }
+
+  // zoomIn and its opposite keep the reading line in place, else the middle.
+  function zoomHere(factor) {
+    const lay = plot.lay(), { rect } = lay;
+    zoomAt(factor, lay.x.place(readAt ?? (rect.left + rect.right) / 2), (lay.y.lo + lay.y.hi) / 2);
+    if (readAt !== null) read(readAt, (rect.top + rect.bottom) / 2);
+  }
+
+  // The arrows move the reading line; at the edge of a part they move the part.
+  function step(direction) {
+    const lay = plot.lay(), { rect } = lay;
+    let next = readAt === null ? (rect.left + rect.right) / 2 : readAt + direction * stride;
+    if (next < rect.left || next > rect.right) {
+      plot.setView(moved(lay.view, lay.whole, direction * 0.1, 0));
+      next = clamp(next, rect.left, rect.right);
+    }
+    const rows = read(next, (rect.top + rect.bottom) / 2);
+    plot.say([heading(plot.lay(), next, plot.picture()), ...rows.map((r) => `${r.line.label} ${r.text}`)].join("; "));
+  }
+
+  const shift = (dy) => {
+    const lay = plot.lay();
+    plot.setView(moved(lay.view, lay.whole, 0, dy));
+  };
+  const keys = {
+    "+": () => zoomHere(closer), "=": () => zoomHere(closer), "-": () => zoomHere(1 / closer),
+    Escape: () => (plot.setView(null), leave()),
+    ArrowLeft: () => step(-1), ArrowRight: () => step(1), ArrowUp: () => shift(0.1), ArrowDown: () => shift(-0.1),
+  };
+  figure.addEventListener("keydown", (event) => {
+    const act = keys[event.key];
+    if (!act || event.ctrlKey || event.metaKey || event.altKey) return;
+    const lay = plot.lay(), upright = event.key === "ArrowUp" || event.key === "ArrowDown";
+    if (upright && lay.view === lay.whole) return; // the page scrolls
+    event.preventDefault();
+    act();
+  });
+  return { leave, zoomIn: () => zoomHere(0.5) };
+}

@@ -35,13 +35,6 @@ func (c Cell) between(y float64) float64 {
 	return max(min(c.Y0, c.Y1), min(y, max(c.Y0, c.Y1)))
 }
 
-// curvature returns the second derivative of the cell's cubic at its two ends.
-func (c Cell) curvature() (left, right float64) {
-	h := c.X1 - c.X0
-	chord := (c.Y1 - c.Y0) / h
-	return (6*chord - 4*c.D0 - 2*c.D1) / h, (2*c.D0 + 4*c.D1 - 6*chord) / h
-}
-
 // Locate returns the index of the cell of rising nodes that holds x: the cell to
 // the right of a node, but the last cell for the last node. Points outside belong
 // to the first and the last cell; NaN belongs to the first.

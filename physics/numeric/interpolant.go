@@ -1,6 +1,6 @@
 // Package numeric holds the few numerical methods that the standard library and
-// gonum lack: monotone interpolation with slopes, hulls of points, bracketing
-// roots to the last digit. It knows nothing of rocks and fluids.
+// gonum lack: monotone interpolation with slopes, and bracketed roots to the last
+// digit. It knows nothing of rocks and fluids.
 package numeric
 
 import "math"
@@ -95,18 +95,6 @@ func NewMonotoneCubic(x, y []float64) MonotoneCubic {
 
 // At implements Interpolant.
 func (m MonotoneCubic) At(x float64) (value, slope float64) { return m.at(x, Cell.Cubic) }
-
-// Jumps returns, for each interior node in order, by how much the second
-// derivative jumps there, right minus left.
-func (m MonotoneCubic) Jumps() []float64 {
-	jumps := make([]float64, len(m.cells)-1)
-	for i := range jumps {
-		_, before := m.cells[i].curvature()
-		after, _ := m.cells[i+1].curvature()
-		jumps[i] = after - before
-	}
-	return jumps
-}
 
 // monotoneSlopes returns the slope at every node of cells that carry the slopes
 // of their chords.

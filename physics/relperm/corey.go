@@ -9,7 +9,8 @@ import "math"
 //	kro = kro0 (1-s)^no
 //
 // Valid for 0 <= swc, 0 <= sor, swc + sor < 1, krw0 > 0, kro0 > 0, nw >= 1, no >= 1.
-// Source: Corey (1954), whose exponents are 4 and 2; free exponents are common practice.
+// Source: Corey (1954), who has krw = s^4 and kro = (1-s)²(1-s²) for drainage; powers
+// with free exponents and end points are common practice.
 type Corey struct {
 	Swc, Sor   float64 // connate water and residual oil saturation
 	Krw0, Kro0 float64 // end points: krw at 1-sor, kro at swc

@@ -5,6 +5,7 @@ const (
 	Ahmed2001           ID = "ahmed-2001"
 	BrooksCorey1964     ID = "brooks-corey-1964"
 	BuckleyLeverett1942 ID = "buckley-leverett-1942"
+	Chandrupatla1997    ID = "chandrupatla-1997"
 	Chaudhry2004        ID = "chaudhry-2004"
 	Corey1954           ID = "corey-1954"
 	Craig1971           ID = "craig-1971"
@@ -20,6 +21,7 @@ const (
 var sources = map[ID]Source{
 	Ahmed2001:           {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing, ch. 14"},
 	BrooksCorey1964:     {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
+	Chandrupatla1997:    {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
 	Chaudhry2004:        {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
 	LeVeque2002:         {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press, sec. 16.1"},
 	NISTSP811:           {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811, app. B"},

@@ -5,6 +5,7 @@ import (
 	"strconv"
 
 	"brinefront/physics/numeric"
+	"brinefront/physics/units"
 )
 
 // Kind is the way a table is read between its rows.
@@ -83,7 +84,7 @@ func checkTable(sw, krw, kro []float64) error {
 			highest float64
 		}{{"sw", sw[i], 1}, {"krw", krw[i], MaxKr}, {"kro", kro[i], MaxKr}} {
 			if !(v.value >= 0 && v.value <= v.highest) {
-				return &TableError{i + 1, v.column, exact(v.value), fmt.Sprintf("0 to %g, as a fraction", v.highest)}
+				return &TableError{i + 1, v.column, units.Exact(v.value), fmt.Sprintf("0 to %g, as a fraction", v.highest)}
 			}
 		}
 		if krw[i] == 0 && kro[i] == 0 {
@@ -94,17 +95,15 @@ func checkTable(sw, krw, kro []float64) error {
 		}
 		switch {
 		case sw[i] <= sw[i-1]:
-			return &TableError{i + 1, "sw", exact(sw[i]), "more than " + exact(sw[i-1]) + " of the row before"}
+			return &TableError{i + 1, "sw", units.Exact(sw[i]), "more than " + units.Exact(sw[i-1]) + " of the row before"}
 		case krw[i] < krw[i-1]:
-			return &TableError{i + 1, "krw", exact(krw[i]), "not less than " + exact(krw[i-1]) + " of the row before"}
+			return &TableError{i + 1, "krw", units.Exact(krw[i]), "not less than " + units.Exact(krw[i-1]) + " of the row before"}
 		case kro[i] > kro[i-1]:
-			return &TableError{i + 1, "kro", exact(kro[i]), "not more than " + exact(kro[i-1]) + " of the row before"}
+			return &TableError{i + 1, "kro", units.Exact(kro[i]), "not more than " + units.Exact(kro[i-1]) + " of the row before"}
 		}
 	}
 	return nil
 }
-
-func exact(v float64) string { return strconv.FormatFloat(v, 'g', -1, 64) }
 
 // At implements Curves.
 func (t Table) At(sw float64) Point {

@@ -3,6 +3,7 @@ package relperm
 import (
 	"errors"
 	"math"
+	"strconv"
 	"strings"
 	"testing"
 )
@@ -74,8 +75,8 @@ func TestTableRefusals(t *testing.T) {
 		"percent":          {[]float64{20, 50, 80}, up, down, 1, "sw", "read 20; allowed: 0 to 1, as a fraction"},
 		"negative":         {ok, []float64{0, -0.1, 0.4}, down, 2, "krw", "read -0.1"},
 		"kr in percent":    {ok, up, []float64{90, 20, 0}, 1, "kro", "0 to 2"},
-		"not a number":     {ok, up, []float64{0.9, math.NaN(), 0}, 2, "kro", "read NaN"},
-		"infinite":         {ok, []float64{0, 0.1, math.Inf(1)}, down, 3, "krw", "read +Inf"},
+		"not a number":     {ok, up, []float64{0.9, math.NaN(), 0}, 2, "kro", "read not a number"},
+		"infinite":         {ok, []float64{0, 0.1, math.Inf(1)}, down, 3, "krw", "read ∞"},
 		"duplicate":        {[]float64{0.2, 0.2, 0.8}, up, down, 2, "sw", "more than 0.2"},
 		"falling sw":       {[]float64{0.2, 0.8, 0.5}, up, down, 3, "sw", "more than 0.8"},
 		"falling krw":      {ok, []float64{0, 0.4, 0.1}, down, 3, "krw", "not less than 0.4"},
@@ -129,6 +130,30 @@ func BenchmarkAt(b *testing.B) {
 			}
 			if math.IsNaN(sum) {
 				b.Fatal("not a number")
+			}
+		})
+	}
+}
+
+// BenchmarkTableRows shows how reading a table scales with its length.
+func BenchmarkTableRows(b *testing.B) {
+	for _, rows := range []int{10, 100, 1000, 10000} {
+		b.Run(strconv.Itoa(rows), func(b *testing.B) {
+			sw, krw, kro := make([]float64, rows), make([]float64, rows), make([]float64, rows)
+			for i := range sw {
+				s := float64(i) / float64(rows-1)
+				sw[i], krw[i], kro[i] = s, s*s, (1-s)*(1-s)
+			}
+			table, err := NewTable(sw, krw, kro, MonotoneCubic)
+			if err != nil {
+				b.Fatal(err)
+			}
+			s := 0.0
+			for b.Loop() {
+				if s += 0.6180339887; s > 1 {
+					s--
+				}
+				table.At(s)
 			}
 		})
 	}

@@ -17,26 +17,33 @@ const (
 // space from 10 000 up, and an exponent only below 1e-4 and from 1e7 up. ParseNumber
 // reads it back. Infinite is "∞"; what is not a number says so.
 func Format(number float64, digits int) string {
-	switch {
-	case math.IsNaN(number):
-		return "not a number"
-	case math.IsInf(number, 0):
-		return sign(number) + "∞"
-	case number == 0:
-		return "0"
+	if text, ok := special(number); ok {
+		return text
 	}
 	figures, exponent := decimal(number, max(digits, 1)-1)
 	return sign(number) + layOut(figures, exponent, minus, narrowSpace)
 }
 
 // Exact prints a finite number so that it reads back as the very same number and
-// can be edited: as few digits as that takes, no groups, a plain minus sign.
+// can be edited: as few digits as that takes, no groups, a plain minus sign. What is
+// not finite prints as in Format.
 func Exact(number float64) string {
-	if number == 0 {
-		return "0"
+	if text, ok := special(number); ok {
+		return text
 	}
 	figures, exponent := decimal(number, -1)
 	return strings.Replace(sign(number), minus, "-", 1) + layOut(figures, exponent, "-", "")
+}
+
+// special prints the numbers that have no digits to lay out.
+func special(number float64) (text string, ok bool) {
+	switch {
+	case math.IsNaN(number):
+		return "not a number", true
+	case math.IsInf(number, 0):
+		return sign(number) + "∞", true
+	}
+	return "0", number == 0
 }
 
 func sign(number float64) string {

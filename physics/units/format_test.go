@@ -34,7 +34,7 @@ func TestFormat(t *testing.T) {
 func TestExact(t *testing.T) {
 	for number, want := range map[float64]string{
 		0: "0", 0.25: "0.25", 1234567: "1234567", 123456.75: "123456.75", -0.0001: "-0.0001", 1e7: "1e7", 1.5e-5: "1.5e-5", 0.30000000000000004: "0.30000000000000004",
-		math.MaxFloat64: "1.7976931348623157e308", math.SmallestNonzeroFloat64: "5e-324",
+		math.MaxFloat64: "1.7976931348623157e308", math.SmallestNonzeroFloat64: "5e-324", math.Inf(1): "∞", math.NaN(): "not a number",
 	} {
 		if got := Exact(number); got != want {
 			t.Errorf("Exact(%v) = %q, want %q", number, got, want)

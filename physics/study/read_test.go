@@ -97,7 +97,7 @@ func TestReleasedDemoKeepsItsMeaning(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	if in := st.Fluids.OilViscosity; in == nil || in.Value != 2.3 || in.Unit != "cp" {
+	if in := st.Fluids.OilViscosity; in == nil || in.Value != 8.3 || in.Unit != "cp" {
 		t.Errorf("oil viscosity: %+v", in)
 	}
 	if table := st.Rock.Table; table == nil || len(table.Sw) != 12 || table.Sw[3] != 0.339 || table.Krw[3] != 0.00243 || table.Kro[3] != 0.523 {

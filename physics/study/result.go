@@ -139,7 +139,8 @@ type Grid struct {
 	Columns []Column `json:"columns"`
 }
 
-// Column is one column of a Grid. A column holds numbers, or words.
+// Column is one column of a Grid. A column holds numbers, or words; the quantity
+// of words is units.Number.
 type Column struct {
 	Label    string         `json:"label"`
 	Symbol   string         `json:"symbol"`

@@ -13,7 +13,7 @@ func Empty() Study {
 const invented = "invented for demonstration"
 
 // Demo is the study that is open on a first visit. Everything in it is invented
-// and says so: a water-wet sandstone plug with scattered points, a light oil and
+// and says so: a water-wet sandstone plug with scattered points, a medium oil and
 // a flood of the usual size. It is an example of a filled form, never the
 // authority for a number.
 func Demo() Study {
@@ -33,8 +33,8 @@ func Demo() Study {
 		value float64
 		unit  string
 	}{
-		{"rock.permeability", 214, "md"},
-		{"rock.oilPermeability", 187, "md"},
+		{"rock.permeability", 436, "md"},
+		{"rock.oilPermeability", 381, "md"},
 
 		{"rock.corey.swc", 0.227, "fraction"},
 		{"rock.corey.sor", 0.284, "fraction"},
@@ -55,7 +55,7 @@ func Demo() Study {
 		{"rock.let.to", 1.1, ""},
 
 		{"fluids.waterViscosity", 0.47, "cp"},
-		{"fluids.oilViscosity", 2.3, "cp"},
+		{"fluids.oilViscosity", 8.3, "cp"},
 		{"fluids.waterFormationFactor", 1.02, "rb/stb"},
 		{"fluids.oilFormationFactor", 1.27, "rb/stb"},
 
@@ -63,12 +63,12 @@ func Demo() Study {
 		{"field.width", 830, "ft"},
 		{"field.thickness", 41, "ft"},
 		{"field.porosity", 0.213, "fraction"},
-		{"field.permeability", 176, "md"},
-		{"field.rate", 1470, "bbl/d"},
+		{"field.permeability", 391, "md"},
+		{"field.rate", 960, "bbl/d"},
 		{"field.pressure", 1340, "psi"},
 		{"field.uptime", 93, "%"},
-		{"field.waterCut", 95, "%"},
-		{"field.oilRate", 90, "bbl/d"},
+		{"field.waterCut", 97, "%"},
+		{"field.oilRate", 40, "bbl/d"},
 	} {
 		spec, ok := Find(given.path)
 		if !ok {

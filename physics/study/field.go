@@ -1,0 +1,127 @@
+package study
+
+import (
+	"math"
+
+	"brinefront/physics/reservoir"
+)
+
+// field is the flood in the ground.
+type field struct {
+	linear  *reservoir.Linear
+	front   *front
+	limit   reservoir.Limit
+	end     float64 // the forecast runs to here, in pore volumes
+	history []reservoir.State
+}
+
+// runField answers the Field sheet.
+func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part {
+	s := newSheet(st, frontPart)
+	s.await(frontPart)
+	layer := s.layer(front)
+	limit := s.limit()
+	horizon, bounded := s.input("field.horizon")
+	if p := CheckStart(st.Field.Start); p != nil {
+		s.problems = append(s.problems, *p)
+	}
+	*problems = append(*problems, s.problems...)
+	standing := s.standing()
+	if frontPart.Status == Refused {
+		standing = Refused
+	}
+	if standing != Ready || front == nil {
+		if standing == Ready {
+			standing = frontPart.Status
+		}
+		return s.close(standing)
+	}
+	linear, err := reservoir.NewLinear(layer, front.flow, front.displacement)
+	if err != nil {
+		s.note(Note{ID: "field.numerics", Level: "caution", Text: "The flood could not be computed: " + err.Error() + ".", Cause: "An input leaves no flow.", Do: "Look at the block and at the drive."})
+		return s.close(Stopped)
+	}
+	f := &field{linear: linear, front: front}
+	f.limit = limit(linear)
+	f.end = f.reach(horizon, bounded)
+	extra := []float64{1}
+	if f.limit.Outcome == reservoir.Reached {
+		extra = append(extra, f.limit.PVI*(1-aside), f.limit.PVI*(1+aside))
+	}
+	for _, q := range injections(front.displacement, f.end, extra...) {
+		f.history = append(f.history, linear.AtPVI(q))
+	}
+	f.figures(s)
+	f.charts(s)
+	s.part.Tables = append(s.part.Tables, f.forecast(st.Field.Start))
+	f.notes(s)
+	f.answer(s)
+	return s.close(frontPart.Status)
+}
+
+// layer reads the block and the drive.
+func (s *sheet) layer(front *front) reservoir.Layer {
+	l := reservoir.Layer{
+		Length: s.need("field.length"), Area: s.need("field.width") * s.need("field.thickness"),
+		Porosity: s.need("field.porosity"), Uptime: 1,
+	}
+	if front != nil {
+		l.Bw, l.Bo = front.bw, front.bo
+	}
+	if uptime, given := s.input("field.uptime"); given {
+		l.Uptime = uptime
+	}
+	if s.st.Field.Drive == "pressure" {
+		l.Permeability = s.need("field.permeability")
+		l.Drive = reservoir.ConstantPressure{DP: s.need("field.pressure")}
+		return l
+	}
+	l.Drive = reservoir.ConstantRate{Q: s.need("field.rate")}
+	// At constant rate the permeability decides the pressure difference only. When
+	// it is not given any number serves: no pressure is shown then.
+	l.Permeability = 1
+	if s.st.Field.Permeability != nil {
+		l.Permeability = s.need("field.permeability")
+	}
+	return l
+}
+
+// limit reads the economic limit.
+func (s *sheet) limit() func(*reservoir.Linear) reservoir.Limit {
+	if s.st.Field.Limit == "oilRate" {
+		rate := s.need("field.oilRate")
+		return func(l *reservoir.Linear) reservoir.Limit { return l.AtOilRate(rate) }
+	}
+	cut := s.need("field.waterCut")
+	return func(l *reservoir.Linear) reservoir.Limit { return l.AtWaterCut(cut) }
+}
+
+// reach is how far the forecast runs, in pore volumes: to the horizon when one is
+// given, else a little past the limit, else to where little more is to be had.
+func (f *field) reach(horizon float64, bounded bool) float64 {
+	const past, unlimited = 1.15, 3.0
+	bt := f.front.displacement.Breakthrough()
+	switch {
+	case bounded:
+		return f.linear.PVIAt(horizon)
+	case f.limit.Outcome == reservoir.Reached:
+		return past * math.Max(f.limit.PVI, bt)
+	}
+	return unlimited * math.Max(1, bt)
+}
+
+func (f *field) answer(s *sheet) {
+	s.answer("Water arrives after {field.breakthrough} ({field.injectedAtBreakthrough} injected) with {field.recoveryAtBreakthrough} of the pore volume produced")
+	what := "at the water cut of the limit"
+	if s.st.Field.Limit == "oilRate" {
+		what = "at the oil rate of the limit"
+	}
+	switch f.limit.Outcome {
+	case reservoir.Reached:
+		s.answer("; "+what+", {field.limit}, after {field.limitTime}, it is {field.recoveryAtLimit}", ".")
+	case reservoir.FromTheStart:
+		s.answer("; the flood is beyond its limit from the start.")
+	default:
+		s.answer("; the limit is never reached.")
+	}
+}

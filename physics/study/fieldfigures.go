@@ -1,0 +1,162 @@
+package study
+
+import (
+	"math"
+
+	"brinefront/physics/ref"
+	"brinefront/physics/reservoir"
+	"brinefront/physics/units"
+)
+
+func (f *field) figures(s *sheet) {
+	f.volumeFigures(s)
+	f.startFigures(s)
+	s.borrow("front.breakthrough", "field.injectedAtBreakthrough", "Injected when water arrives")
+	t, _ := f.linear.Breakthrough()
+	f.timeFigure(s, Figure{ID: "field.breakthrough", Label: "Water arrives after", Symbol: "tbt", Value: t, Quantity: units.Duration, Strip: true}, "field.injectedAtBreakthrough")
+	s.borrow("front.recoveryAtBreakthrough", "field.recoveryAtBreakthrough", "Recovery at breakthrough, of the pore volume")
+	f.cumulativeFigures(s, "AtBreakthrough", "at breakthrough", "bt", "field.injectedAtBreakthrough", "field.recoveryAtBreakthrough")
+	if f.limit.Outcome == reservoir.Reached {
+		f.limitFigures(s)
+	}
+}
+
+// borrow shows a figure of an earlier sheet on this one, working and all.
+func (s *sheet) borrow(id, as, label string) {
+	if figure, ok := s.find(id); ok {
+		figure.ID, figure.Label = as, label
+		s.part.Figures = append(s.part.Figures, figure)
+	}
+}
+
+func (f *field) volumeFigures(s *sheet) {
+	pv := f.linear.PoreVolume()
+	s.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: pv, Quantity: units.Volume, Strip: true},
+		s.by("{PV} = {L} {W} {h} {φ}", "").input("field.length").input("field.width").input("field.thickness").input("field.porosity"))
+	s.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: pv * (1 - f.front.swi) / f.front.bo, Quantity: units.Volume, Strip: true},
+		s.by("{N} = {PV} (1 - {Swi}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term("front.initialWater").input("fluids.oilFormationFactor"))
+	uptime := s.by("", "None is typed: injection is on all the time.")
+	if s.st.Field.Uptime != nil {
+		uptime = s.by("", "As typed.").rests("field.uptime")
+	}
+	s.figure(Figure{ID: "field.uptime", Label: "Share of time on", Symbol: "u", Value: f.linear.Uptime, Quantity: units.Share}, uptime)
+	onePV := Figure{ID: "field.timePerPoreVolume", Label: "Time to inject one pore volume", Symbol: "tPV", Value: f.linear.TimeAt(1), Quantity: units.Duration}
+	if f.rateHeld() {
+		s.figure(onePV, s.by("{tPV} = {PV} / ({q} {u})", "Calendar time.").term("field.poreVolume").input("field.rate").term("field.uptime"))
+	} else {
+		s.figure(onePV, f.clock(s))
+	}
+}
+
+func (f *field) rateHeld() bool {
+	_, held := f.linear.Drive.(reservoir.ConstantRate)
+	return held
+}
+
+// clock is how time follows from volume at a constant pressure difference.
+func (f *field) clock(s *sheet) *working {
+	return s.by("", "At a constant pressure difference the rate follows the resistance of the flood: t = φ L²/(k Δp u) ∫ R dQ with R(Q) = ∫ dx/λt from injector to producer, integrated exactly over the states of the displacement.", ref.Dake1978).
+		rests("field.length", "field.porosity", "field.permeability", "field.pressure").on("field.uptime", "front.breakthrough")
+}
+
+// timeFigure adds the calendar time at which a volume, itself a figure, has been injected.
+func (f *field) timeFigure(s *sheet, figure Figure, volume string) {
+	v, ok := s.find(volume)
+	switch {
+	case !ok:
+	case !f.rateHeld():
+		s.figure(figure, f.clock(s).on(volume))
+	default:
+		s.figure(figure, s.by("{"+figure.Symbol+"} = {"+v.Symbol+"} {PV} / ({q} {u})", "Calendar time at the constant rate.").
+			term(volume).term("field.poreVolume").input("field.rate").term("field.uptime"))
+	}
+}
+
+// startFigures are the rates on the first day, and the pressure it takes.
+func (f *field) startFigures(s *sheet) {
+	first := f.linear.AtPVI(0)
+	resistance := f.linear.Resistance(0)
+	rate := Figure{ID: "field.startRate", Label: "Injection rate at the start, calendar", Symbol: "qi", Value: first.InjectionRate, Quantity: units.Rate}
+	if f.rateHeld() {
+		s.figure(rate, s.by("{qi} = {q} {u}", "Reservoir volume per calendar day.").input("field.rate").term("field.uptime"))
+	} else {
+		s.figure(rate, s.by("{qi} = {k} {W} {h} {Δp} {u} / ({L} {R0})", "Darcy's law; R0 is the inverse of the total mobility at the initial saturation.", ref.Dake1978).
+			input("field.permeability").input("field.width").input("field.thickness").input("field.pressure").term("field.uptime").input("field.length").
+			value("R0", "resistance at the start", resistance, units.Viscosity).on("front.breakthrough"))
+	}
+	s.figure(Figure{ID: "field.startOilRate", Label: "Oil rate at the start, calendar, at surface", Symbol: "qoi", Value: first.OilRate, Quantity: units.Rate, Strip: true},
+		s.by("{qoi} = {qi} (1 - {fwi}) / {Bo}", "").term("field.startRate").
+			value("fwi", "water cut at the initial saturation", first.ReservoirCut, units.Share).input("fluids.oilFormationFactor").on("front.breakthrough"))
+	peak := first
+	for _, state := range f.history {
+		if state.OilRate > peak.OilRate {
+			peak = state
+		}
+	}
+	s.figure(Figure{ID: "field.peakOilRate", Label: "Highest oil rate, calendar, at surface", Symbol: "qo,max", Value: peak.OilRate, Quantity: units.Rate},
+		s.by("", "The largest of the forecast, after "+units.Format(peak.PVI, 3)+" PV.").on("field.startOilRate", "field.timePerPoreVolume"))
+	if f.rateHeld() && s.st.Field.Permeability != nil {
+		s.figure(Figure{ID: "field.startPressure", Label: "Pressure difference at the start, while on", Symbol: "Δp0", Value: first.PressureDrop, Quantity: units.Pressure},
+			s.by("{Δp0} = {q} {L} {R0} / ({k} {W} {h})", "Darcy's law in a straight block; R0 is the inverse of the total mobility at the initial saturation. The pressure that converging flow near the wells takes comes on top.", ref.Dake1978).
+				input("field.rate").input("field.length").value("R0", "resistance at the start", resistance, units.Viscosity).
+				input("field.permeability").input("field.width").input("field.thickness").on("front.breakthrough"))
+	}
+}
+
+// limitFigures are the state of the flood when it stops paying.
+func (f *field) limitFigures(s *sheet) {
+	path := limitPath(s.st)
+	spec, _ := Find(path)
+	typed, _ := s.input(path)
+	s.figure(Figure{ID: "field.limit", Label: spec.Label, Symbol: spec.Symbol, Value: typed, Quantity: spec.Quantity}, s.by("", "As typed.").rests(path))
+
+	d := f.front.displacement
+	q := f.limit.PVI
+	sw, cut := d.Outlet(q * (1 + aside))
+	_, inlet := d.InletFace()
+	arriving := s.by("", "Of the state that arrives at the producer as the limit is met; a limit inside the step of a front is met when the front arrives.", ref.Welge1952).
+		rests(path).on("front.surfaceCutAtBreakthrough")
+	if path == "field.oilRate" {
+		arriving.on("field.startOilRate", "field.timePerPoreVolume")
+	}
+	s.figure(Figure{ID: "field.limitCut", Label: "Water cut at the limit, reservoir", Symbol: "fw2", Value: cut, Quantity: units.Share}, arriving)
+	s.figure(Figure{ID: "field.limitInjected", Label: "Injected at the limit", Symbol: "Qlim", Value: q, Quantity: units.PoreVolumes},
+		s.by("{Qlim} = 1 / {v2}", "v2 is the speed dfw/dSw of the state that arrives at the producer as the limit is met.", ref.Welge1952).
+			value("v2", "speed of the arriving state", 1/q, units.Number).on("field.limitCut"))
+	f.timeFigure(s, Figure{ID: "field.limitTime", Label: "Limit reached after", Symbol: "tlim", Value: f.limit.Time, Quantity: units.Duration, Strip: true}, "field.limitInjected")
+	s.recovery("field.recoveryAtLimit", "Recovery at the limit", "Rlim", d.Recovery(q), true,
+		s.by("{Rlim} = {Sw2} + ({fwj} - {fw2}) {Qlim} - {Swi}", "Average saturation by Welge's tangent, less the initial one.", ref.Welge1952).
+			value("Sw2", "outlet saturation", sw, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
+			term("field.limitCut").term("field.limitInjected").term("front.initialWater"))
+	s.inPlace("field.recoveryAtLimit", "Rlim,o", "front.initialWater")
+	f.cumulativeFigures(s, "AtLimit", "at the limit", "lim", "field.limitInjected", "field.recoveryAtLimit")
+	s.figure(Figure{ID: "field.waterOilRatioAtLimit", Label: "Water-oil ratio at the limit, at surface", Symbol: "WOR", Value: cut * f.front.bo / ((1 - cut) * f.front.bw), Quantity: units.WaterOilRatio},
+		s.by("{WOR} = {fw2} {Bo} / ((1 - {fw2}) {Bw})", "").term("field.limitCut").input("fluids.oilFormationFactor").input("fluids.waterFormationFactor"))
+}
+
+// cumulativeFigures are oil and water produced when a volume has been injected.
+func (f *field) cumulativeFigures(s *sheet, suffix, when, mark, volume, recovery string) {
+	v, ok := s.find(volume)
+	r, known := s.find(recovery)
+	if !ok || !known {
+		return
+	}
+	state := f.linear.AtPVI(v.Value)
+	_, inlet := f.front.displacement.InletFace()
+	oil, water := "Np"+mark, "Wp"+mark
+	s.figure(Figure{ID: "field.oil" + suffix, Label: "Oil produced " + when + ", at surface", Symbol: oil, Value: state.CumOil, Quantity: units.Volume, Strip: suffix == "AtLimit"},
+		s.by("{"+oil+"} = {PV} ({"+r.Symbol+"} + {"+v.Symbol+"} (1 - {fwj})) / {Bo}", "The term with 1 − fwj is oil that was injected: none when water alone is.").
+			term("field.poreVolume").term(recovery).term(volume).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).input("fluids.oilFormationFactor"))
+	// What was injected and not kept has come out; told from the injected volume it
+	// would be a small difference of large numbers before breakthrough.
+	s.figure(Figure{ID: "field.water" + suffix, Label: "Water produced " + when + ", at surface", Symbol: water, Value: math.Max(0, state.CumWater), Quantity: units.Volume},
+		s.by("{"+water+"} = {PV} ({"+v.Symbol+"} {fwj} - {"+r.Symbol+"}) / {Bw}", "Water injected less water that stayed in the rock.").
+			term("field.poreVolume").term(volume).term(recovery).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).input("fluids.waterFormationFactor"))
+}
+
+func limitPath(st *Study) string {
+	if st.Field.Limit == "oilRate" {
+		return "field.oilRate"
+	}
+	return "field.waterCut"
+}

@@ -1,0 +1,106 @@
+package study
+
+import (
+	"strings"
+
+	"brinefront/physics/fit"
+	"brinefront/physics/units"
+)
+
+// inspect tells what is wrong with the laboratory points: as problems where the
+// curve rests on them and they cannot be used, else as notes. It reports whether
+// they can be used.
+func (s *sheet) inspect(points fit.Points, used bool) bool {
+	sound := true
+	for _, finding := range fit.Inspect(points) {
+		if finding.Refuse && used {
+			sound = false
+			s.problem("rock.table", finding.Read, strings.TrimSuffix(finding.Text+" "+finding.Do, "."))
+			continue
+		}
+		level := "remark"
+		if used {
+			level = "caution"
+		}
+		s.note(Note{ID: "rock.points." + finding.ID, Level: level, Text: finding.Text, Cause: "Read: " + finding.Read + ".", Do: finding.Do, Paths: []string{"rock.table"}})
+	}
+	return sound
+}
+
+func (r *rock) notes(s *sheet) {
+	if r.fitted != nil {
+		r.fitNotes(s)
+	}
+	r.wettability(s)
+	r.reference(s)
+}
+
+// fitNotes passes on what the fit says of itself.
+func (r *rock) fitNotes(s *sheet) {
+	if len(r.fitted.Verdict) > 0 {
+		s.note(Note{ID: "rock.fit", Level: "remark", Text: strings.Join(r.fitted.Verdict, " "),
+			Cause: "Root mean square of curve minus point: " + units.Format(r.fitted.RMSKrw, 2) + " in krw, " + units.Format(r.fitted.RMSKro, 2) + " in kro.", Do: "Compare with the table itself and with the other family.", Paths: []string{"rock.curve"}})
+	}
+	if r.fitted.Status != fit.Converged {
+		s.note(Note{ID: "rock.fitStopped", Level: "caution", Text: "The fit stopped short: " + r.fitted.Status.String() + ".",
+			Cause: "The answer rests on the best curve found so far.", Do: "Look at the points, or use another curve.", Paths: []string{"rock.curve"}})
+	}
+}
+
+// sign is one of Craig's signs of wettability.
+type sign struct {
+	text             string
+	waterWet, oilWet bool
+}
+
+// wettability weighs Craig's (1971) rules of thumb.
+func (r *rock) wettability(s *sheet) {
+	ratio, crossover := s.number("rock.krwOverKro"), s.number("rock.crossover")
+	signs := []sign{
+		{"krw at Sor is " + units.Format(ratio, 2) + " of ko(Swi)", ratio < 0.3, ratio > 0.5},
+		{"Swc is " + units.Format(r.swc, 2), r.swc > 0.2, r.swc < 0.15},
+	}
+	if _, crosses := s.part.Figure("rock.crossover"); crosses {
+		signs = append(signs, sign{"the curves cross at Sw = " + units.Format(crossover, 2), crossover > 0.5, crossover < 0.5})
+	}
+	var texts []string
+	water, oil := 0, 0
+	for _, sign := range signs {
+		points := "neither"
+		switch {
+		case sign.waterWet:
+			points = "water-wet"
+			water++
+		case sign.oilWet:
+			points = "oil-wet"
+			oil++
+		}
+		texts = append(texts, sign.text+" ("+points+")")
+	}
+	verdict := "The signs do not agree: intermediate or mixed wettability, or curves that deserve a second look."
+	switch len(signs) {
+	case water:
+		verdict = "All signs are those of water-wet rock."
+	case oil:
+		verdict = "All signs are those of oil-wet rock."
+	}
+	s.note(Note{ID: "rock.wettability", Level: "remark", Text: verdict + " By Craig's rules of thumb (1971): " + strings.Join(texts, "; ") + ".",
+		Cause: "Rules of thumb, not a measurement.", Do: "Confirm with an Amott or USBM test where it matters.", Paths: r.inputs})
+}
+
+// reference says which permeability kr refers to, and doubts it where it looks wrong.
+func (r *rock) reference(s *sheet) {
+	start := r.reported.At(r.swc).Kro
+	switch {
+	case s.st.Rock.Reference == "oil":
+		s.note(Note{ID: "rock.converted", Level: "remark", Text: "kr was reported relative to ko(Swi) and is used relative to absolute permeability: multiplied by ko(Swi)/k = " + units.Format(r.factor, 4) + ".",
+			Cause: "Rates and pressures need one reference; fractional flow does not change.", Do: "Look whether the laboratory report says the same.", Paths: []string{"rock.reference", "rock.permeability", "rock.oilPermeability"}})
+		if !r.measures() && start != 1 {
+			s.note(Note{ID: "rock.referenceStart", Level: "caution", Text: "kro starts at " + units.Format(start, 3) + ", though kr is said to refer to ko(Swi).",
+				Cause: "Relative to the oil permeability at initial water kro starts at 1.", Do: "Look which permeability the laboratory report names.", Paths: []string{"rock.reference"}})
+		}
+	case start == 1 && !r.measures():
+		s.note(Note{ID: "rock.referenceAbsolute", Level: "caution", Text: "kro starts at exactly 1, though kr is said to refer to absolute permeability.",
+			Cause: "Oil beside connate water hardly ever flows as easily as water alone; a start at 1 is how curves relative to ko(Swi) look.", Do: "Look which permeability the laboratory report names.", Paths: []string{"rock.reference"}})
+	}
+}

@@ -1,0 +1,41 @@
+package main
+
+import (
+	"archive/zip"
+	"errors"
+	"fmt"
+	"os"
+	"path/filepath"
+)
+
+// packUSB writes one zip that unpacks to one folder.
+func packUSB() (err error) {
+	if err := checkSite(); err != nil {
+		return err
+	}
+	path := filepath.Join(outFolder, "brinefront-usb.zip")
+	file, err := os.Create(path)
+	if err != nil {
+		return err
+	}
+	defer func() { err = errors.Join(err, file.Close()) }()
+	pack := zip.NewWriter(file)
+	for _, name := range siteFiles {
+		content, err := os.ReadFile(filepath.Join(siteFolder, name))
+		if err != nil {
+			return err
+		}
+		w, err := pack.Create("brinefront/" + name)
+		if err != nil {
+			return err
+		}
+		if _, err := w.Write(content); err != nil {
+			return err
+		}
+	}
+	if err := pack.Close(); err != nil {
+		return err
+	}
+	fmt.Printf("%s: unpack it and double-click brinefront/index.html\n", path)
+	return nil
+}

@@ -1,0 +1,86 @@
+package report
+
+import (
+	"encoding/csv"
+	"strings"
+	"testing"
+
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// TestDemoText: the hand-over of the demonstration has every section, every
+// given input with its origin, every figure with its working, and no trace of a
+// number that is none.
+func TestDemoText(t *testing.T) {
+	st := study.Demo()
+	r := study.Run(st)
+	for _, system := range units.Systems {
+		d := Build(st, r, system)
+		for _, id := range []string{"summary", "inputs", "answers", "pictures", "tables", "workings", "notes", "cautions", "sources"} {
+			if _, ok := d.Section(id); !ok {
+				t.Errorf("%s: no section %s", system, id)
+			}
+		}
+		text := Text(d)
+		for _, spec := range study.Specs() {
+			if spec.Get(&st) != nil && !strings.Contains(text, spec.Label) {
+				t.Errorf("%s: input %s is missing", system, spec.Path)
+			}
+		}
+		for _, part := range r.Parts {
+			for _, f := range part.Figures {
+				if !strings.Contains(text, f.Label) || !strings.Contains(text, Value(f, system)) {
+					t.Errorf("%s: figure %s is missing", system, f.ID)
+				}
+			}
+		}
+		for _, bad := range []string{"NaN", "Inf", "∞", "not a number", "%!", "{"} {
+			if strings.Contains(text, bad) {
+				t.Errorf("%s: the text holds %q", system, bad)
+			}
+		}
+		for _, caution := range Cautions {
+			if !strings.Contains(text, caution) {
+				t.Errorf("%s: a caution is missing: %s", system, caution)
+			}
+		}
+	}
+}
+
+// TestEmptyStudy: a study that cannot answer is reported as one, with what it lacks.
+func TestEmptyStudy(t *testing.T) {
+	st := study.Empty()
+	text := Text(Build(st, study.Run(st), units.Field))
+	for _, want := range []string{"Untitled study", "No answer yet", "Oil viscosity"} {
+		if !strings.Contains(text, want) {
+			t.Errorf("the report of an empty study does not say %q:\n%s", want, text)
+		}
+	}
+}
+
+// TestCSV: every table of results reads back with as many records as it has rows,
+// and its numbers convert back to the SI values.
+func TestCSV(t *testing.T) {
+	r := study.Run(study.Demo())
+	for sheet, part := range r.Parts {
+		for _, g := range part.Tables {
+			records, err := csv.NewReader(strings.NewReader(CSV(g, units.Field))).ReadAll()
+			if err != nil {
+				t.Fatalf("%s %s: %v", sheet, g.ID, err)
+			}
+			for i, c := range g.Columns {
+				for row, want := range c.Values {
+					got, err := units.ParseNumber(records[row+1][i])
+					if err != nil {
+						t.Fatalf("%s %s row %d: %v", sheet, g.ID, row, err)
+					}
+					si := units.Field.Unit(c.Quantity).ToSI(got)
+					if diff := si - want; diff > 1e-12*max(1, want) || -diff > 1e-12*max(1, want) {
+						t.Errorf("%s %s, %s, row %d: %v reads back as %v", sheet, g.ID, c.Label, row, want, si)
+					}
+				}
+			}
+		}
+	}
+}

@@ -25,13 +25,15 @@ class Plot {
     this.figure = element("div", "plot-figure", { role: "img", tabindex: "0" });
     this.canvas = element("div", "plot-canvas", {});
     this.row = element("div", "plot-row", {});
-    this.said = element("div", "plot-said", { "aria-live": "polite" });
-    const hint = element("div", "plot-hint", { id: `${holder.id}-hint` });
-    hint.textContent = "Arrow keys read values, + and − zoom, Escape shows the whole picture. With the mouse: drag a box, or turn the wheel.";
-    this.figure.setAttribute("aria-describedby", hint.id);
-    this.figure.append(this.canvas);
+    this.said = element("div", "plot-said plot-unseen", { "aria-live": "polite" });
+    const hint = element("div", "plot-hint", { "aria-hidden": "true" });
+    hint.textContent = "← → read   + − zoom   Esc all";
+    const keys = element("div", "plot-unseen", { id: `${holder.id}-keys` });
+    keys.textContent = "Arrow keys read values, plus and minus zoom, Escape shows the whole picture.";
+    this.figure.setAttribute("aria-describedby", keys.id);
+    this.figure.append(this.canvas, hint);
     const root = element("div", "plot", {});
-    root.append(this.figure, hint, this.row, this.said);
+    root.append(this.figure, keys, this.row, this.said);
     holder.replaceChildren(root);
 
     const act = {
@@ -47,8 +49,17 @@ class Plot {
       lay: () => this.drawn.lay, labels: () => this.drawn.labels, picture: () => this.picture, palette: () => this.palette,
       setView: (view) => this.change({ view }), toggle: act.toggle, say: (text) => { this.said.textContent = text; },
     });
-    this.watcher = new ResizeObserver(() => printing || this.redraw());
+    // Size and style are asked for only when they may have changed: each question
+    // makes the browser lay out the page, and a picture is redrawn at every keystroke.
+    this.width = this.figure.clientWidth;
+    this.watcher = new ResizeObserver(([entry]) => {
+      const width = Math.floor(entry.contentRect.width);
+      if (printing || width === this.width) return;
+      this.width = width;
+      this.redraw();
+    });
     this.watcher.observe(this.figure);
+    this.restyle();
   }
 
   draw(json) {
@@ -64,6 +75,11 @@ class Plot {
     this.redraw();
   }
 
+  restyle() {
+    this.palette = printing ? light : colours(this.holder);
+    this.family = getComputedStyle(this.holder).fontFamily.replaceAll('"', "'");
+  }
+
   change(part) {
     Object.assign(this.state, part);
     this.redraw();
@@ -77,20 +93,21 @@ class Plot {
 
   // redraw draws at the size the page gives now; nothing while it gives none.
   redraw() {
-    const width = printing ? printedWidth : this.figure.clientWidth;
+    const width = printing ? printedWidth : this.width;
     if (!this.picture || width === 0) return;
     const height = Math.round(Math.min(420, Math.max(260, 0.58 * width)));
-    this.palette = printing ? light : colours(this.holder);
-    this.family = getComputedStyle(this.holder).fontFamily;
     this.drawn = drawing(this.picture, this.state, width, height, this.family, this.palette);
-    this.figure.style.height = `${height}px`;
     this.chart ??= init(this.canvas, null, { renderer: "svg", width, height });
-    if (this.chart.getWidth() !== width || this.chart.getHeight() !== height) this.chart.resize({ width, height });
+    if (this.size !== `${width} ${height}`) {
+      this.size = `${width} ${height}`;
+      this.figure.style.height = `${height}px`;
+      this.chart.resize({ width, height });
+      // A picture that is scaled, as on paper, keeps its proportions.
+      this.canvas.querySelector("svg").setAttribute("viewBox", `0 0 ${this.size}`);
+    }
     const structure = this.drawn.option.series.map((s) => s.type + s.id).join();
     this.chart.setOption(this.drawn.option, structure === this.structure ? {} : { notMerge: true });
     this.structure = structure;
-    // A picture that is scaled, as on paper, keeps its proportions.
-    this.canvas.querySelector("svg")?.setAttribute("viewBox", `0 0 ${width} ${height}`);
     this.updateRow(this.picture, this.state, this.palette);
   }
 
@@ -114,7 +131,10 @@ function element(tag, name, attributes) {
 }
 
 function redrawAll() {
-  for (const plot of plots.values()) plot.redraw();
+  for (const plot of plots.values()) {
+    plot.restyle();
+    plot.redraw();
+  }
 }
 
 darkScheme.addEventListener("change", redrawAll);

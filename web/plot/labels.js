@@ -17,7 +17,7 @@ export function placeLabels(lay, marks) {
   for (const m of marks) {
     const dot = { x: lay.x.dot(m.x), y: lay.y.dot(m.y) };
     if (!inside(dot, lay.rect)) continue;
-    take(m.label, null, [...beside(dot, 8), ...beside(dot, 18)], false);
+    take(m.label, null, [...beside(dot, 8), ...beside(dot, 18, 8)], false);
   }
   // Free ends of lines are the clearest places: they are given away first.
   for (const c of drawn.filter((c) => lay.endLabels.has(c.line.id))) {
@@ -41,21 +41,23 @@ export function placeLabels(lay, marks) {
       if (placed.some((p) => touches(box, p))) continue;
       let crossed = 0, nearest = clear;
       for (const s of samples) {
+        if (s.x < box.x - clear || s.x > box.x + w + clear || s.y < box.y - clear || s.y > box.y + h + clear) continue;
         const d = distance(s, box);
         if (d < 2) crossed++;
         else if (s.of !== line) nearest = Math.min(nearest, d);
       }
-      const score = nearest - 12 * crossed;
+      const score = nearest - 12 * crossed - a.cost;
       if (best === null || score > best.score) best = { score, box, crossed };
     }
     if (best && (best.crossed === 0 || !optional)) placed.push({ ...best.box, text, line: line?.id });
   }
 }
 
-function beside({ x, y }, d) {
+// beside are four places around a dot; cost is how much less they are worth.
+function beside({ x, y }, d, cost = 0) {
   return [
-    { x: x + d, y: y - d / 2, upwards: true }, { x: x + d, y: y + d / 2 },
-    { x: x - d, y: y - d / 2, leftwards: true, upwards: true }, { x: x - d, y: y + d / 2, leftwards: true },
+    { x: x + d, y: y - d / 2, upwards: true, cost }, { x: x + d, y: y + d / 2, cost },
+    { x: x - d, y: y - d / 2, leftwards: true, upwards: true, cost }, { x: x - d, y: y + d / 2, leftwards: true, cost },
   ];
 }
 
@@ -81,5 +83,5 @@ const touches = (a, b) => a.x < b.x + b.w + 6 && b.x < a.x + a.w + 6 && a.y < b.
 
 function distance({ x, y }, b) {
   const dx = Math.max(b.x - x, 0, x - b.x - b.w), dy = Math.max(b.y - y, 0, y - b.y - b.h);
-  return Math.hypot(dx, dy);
+  return Math.sqrt(dx * dx + dy * dy);
 }

@@ -94,7 +94,7 @@ function annotations(lay, labels, marks, palette, title) {
   list.push(text(title.x, rect.right, rect.bottom + 24, { align: "right", width: rect.right, overflow: "truncate" }));
   const courses = new Map(lay.courses.map((c) => [c.line.id, c.line]));
   for (const l of labels) {
-    const fill = l.line ? look(courses.get(l.line), palette).colour : palette.ink;
+    const fill = l.line ? look(courses.get(l.line), palette).words : palette.ink;
     list.push(text(l.text, l.x, l.y + 2, { fill, stroke: palette.paper, lineWidth: 3 }));
   }
   for (const m of marks) {

@@ -54,7 +54,7 @@ export function attach(plot) {
   function entry({ line, text }) {
     const element = row("plot-entry", "");
     const label = row("plot-name", line.label);
-    label.style.color = look(line, plot.palette()).colour;
+    label.style.color = look(line, plot.palette()).words;
     element.append(label, row("plot-value", text));
     return element;
   }
@@ -85,7 +85,8 @@ export function attach(plot) {
 
   figure.addEventListener("pointerdown", (event) => {
     const at = within(event);
-    if (event.pointerType === "touch" || event.button !== 0 || labelAt(at)) return;
+    if (event.pointerType === "touch") return void read(at.x, at.y); // a finger's drag scrolls the page
+    if (event.button !== 0 || labelAt(at)) return;
     from = at;
     figure.setPointerCapture(event.pointerId);
   });
@@ -99,7 +100,7 @@ export function attach(plot) {
     plot.setView(boxed(x.map(lay.x.place), y.map(lay.y.place), lay.whole));
   });
   figure.addEventListener("pointercancel", leave);
-  figure.addEventListener("pointerleave", () => from || leave());
+  figure.addEventListener("pointerleave", (event) => from || event.pointerType === "touch" || leave());
   figure.addEventListener("click", (event) => {
     const label = labelAt(within(event));
     if (label) plot.toggle(label.line);

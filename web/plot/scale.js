@@ -23,8 +23,8 @@ export function extent(axis, values, scale) {
   const min = scale.to(axis.min ?? NaN), max = scale.to(axis.max ?? NaN);
   if (seen.length === 0) [lo, hi] = scale === log ? [-1, 0] : [0, 1];
   if (scale === log) {
-    hi = Number.isFinite(max) ? max : Math.ceil(hi - 1e-9);
-    lo = Number.isFinite(min) ? min : Math.max(Math.floor(lo + 1e-9), hi - decades);
+    hi = Number.isFinite(max) ? max : -roundLog(-hi);
+    lo = Number.isFinite(min) ? min : Math.max(roundLog(lo), Math.floor(hi) - decades);
     return lo < hi ? [lo, hi] : [hi - 1, hi];
   }
   if (lo === hi) [lo, hi] = lo === 0 ? [0, 1] : [Math.min(0, 2 * lo), Math.max(0, 2 * hi)];
@@ -34,6 +34,13 @@ export function extent(axis, values, scale) {
   lo = Number.isFinite(min) ? min : Math.floor(lo / step + 1e-9) * step;
   hi = Number.isFinite(max) ? max : Math.ceil(hi / step - 1e-9) * step;
   return lo < hi ? [lo, hi] : [lo, lo + (Math.abs(lo) || 1)];
+}
+
+// roundLog is the last of 1, 2 and 5 times a power of ten at or below 10^u; these
+// are the same set seen from above, so -roundLog(-u) is the first at or above.
+function roundLog(u) {
+  const d = Math.floor(u + 1e-9);
+  return d + [Math.log10(5), Math.log10(2), 0].find((m) => d + m <= u + 1e-9);
 }
 
 // ticks are round numbers within [lo, hi] (scale coordinates) with their texts.
@@ -49,14 +56,15 @@ export function ticks([lo, hi], count, scale) {
 }
 
 function logTicks(lo, hi, count) {
-  const every = Math.max(1, Math.ceil((hi - lo) / count));
-  const within = hi - lo <= 1.5 ? [1, 2, 5] : [1];
+  const every = Math.max(1, Math.ceil((hi - lo) / (2 * count))); // their texts are short
+  const within = hi - lo <= 2 ? [1, 2, 5] : [1];
+  const plain = lo > -4 && hi < 6;
   const list = [];
   for (let d = Math.floor(lo); d <= hi + 1e-9; d++) {
     if (d % every !== 0) continue;
     for (const m of within) {
       const at = d + Math.log10(m);
-      if (at > lo - 1e-9 && at < hi + 1e-9) list.push({ at, text: power(m, d) });
+      if (at > lo - 1e-9 && at < hi + 1e-9) list.push({ at, text: plain ? fixed(m * 10 ** d, m * 10 ** d) : power(m, d) });
     }
   }
   return list;
@@ -78,7 +86,7 @@ function times10(v, step) {
 }
 
 function power(m, d) {
-  if (d >= -3 && d <= 5) return apart((m * 10 ** d).toFixed(Math.max(0, -d)));
+  if (d === 0) return String(m);
   return (m === 1 ? "" : `${m}×`) + `10${raised(d)}`;
 }
 

@@ -4,31 +4,32 @@
 const rules = `
 :where(.plot) { position: relative; }
 :where(.plot-figure) { position: relative; width: 100%; touch-action: pan-y; break-inside: avoid; user-select: none; }
-:where(.plot-figure:focus-visible) { outline: 2px solid var(--line-water, #1b6f8a); outline-offset: 2px; }
-:where(.plot-hair) { position: absolute; border-left: 1px solid var(--quiet, #6a665c); pointer-events: none; }
-:where(.plot-box) { position: absolute; border: 1px solid var(--quiet, #6a665c); background: var(--rule, #e4e0d6); opacity: 0.5; pointer-events: none; }
+:where(.plot-figure:focus-visible) { outline: 2px solid var(--line-water, #1f6aa5); outline-offset: 2px; }
+:where(.plot-hair) { position: absolute; border-left: 1px solid var(--quiet, #565a5c); pointer-events: none; }
+:where(.plot-box) { position: absolute; border: 1px solid var(--quiet, #565a5c); background: var(--rule, #d9d4c6); opacity: 0.5; pointer-events: none; }
 :where(.plot-slip) { position: absolute; z-index: 2; padding: 0.3rem 0.5rem; max-width: 70%; font-size: 0.75rem; line-height: 1.4; pointer-events: none;
-  color: var(--ink, #26241f); background: var(--paper, #fff); border: 1px solid var(--rule, #e4e0d6); font-variant-numeric: tabular-nums; }
-:where(.plot-at) { color: var(--quiet, #6a665c); }
+  color: var(--ink, #1d2226); background: var(--paper, #fff); border: 1px solid var(--rule, #d9d4c6); font-variant-numeric: tabular-nums; }
+:where(.plot-at) { color: var(--quiet, #565a5c); }
 :where(.plot-entry) { display: flex; gap: 1em; justify-content: space-between; }
 :where(.plot-value) { white-space: nowrap; }
 .plot-row { display: flex; flex-wrap: wrap; gap: 0.1rem 0.9rem; align-items: baseline; font-size: 0.75rem; margin-top: 0.2rem; }
-.plot-row button { font: inherit; color: var(--ink, #26241f); background: none; border: 0; padding: 0.25rem 0.1rem; min-height: 1.75rem; cursor: pointer; text-align: left; }
-.plot-row button:focus-visible { outline: 2px solid var(--line-water, #1b6f8a); }
+.plot-row button { font: inherit; color: var(--ink, #1d2226); background: none; border: 0; padding: 0.25rem 0.1rem; min-height: 1.75rem; cursor: pointer; text-align: left; }
+.plot-row button:focus-visible { outline: 2px solid var(--line-water, #1f6aa5); }
 .plot-row svg { vertical-align: -1px; margin-right: 0.4em; }
-.plot-line[aria-pressed="false"] { color: var(--quiet, #6a665c); text-decoration: line-through; }
+.plot-line[aria-pressed="false"] { color: var(--quiet, #565a5c); text-decoration: line-through; }
 .plot-line[aria-pressed="false"] svg { opacity: 0.25; }
 .plot-acts { display: flex; flex-wrap: wrap; gap: 0 0.9rem; margin-left: auto; }
-.plot-row .plot-act { color: var(--quiet, #6a665c); text-decoration: underline; text-decoration-thickness: 1px; text-underline-offset: 3px; }
-.plot-row .plot-act[aria-pressed="true"] { color: var(--ink, #26241f); font-weight: 600; }
-:where(.plot-hint) { font-size: 0.75rem; color: var(--quiet, #6a665c); display: none; }
-:where(.plot-figure:focus-visible ~ .plot-hint) { display: block; }
+.plot-row .plot-act { color: var(--quiet, #565a5c); text-decoration: underline; text-decoration-thickness: 1px; text-underline-offset: 3px; }
+.plot-row .plot-act[aria-pressed="true"] { color: var(--ink, #1d2226); font-weight: 600; }
+:where(.plot-hint) { position: absolute; left: 2px; bottom: 2px; font-size: 0.75rem; line-height: 1.2; white-space: pre; visibility: hidden; pointer-events: none;
+  color: var(--quiet, #565a5c); background: var(--paper, #fff); }
+:where(.plot-figure:focus-visible .plot-hint) { visibility: visible; }
 .plot-hair[hidden], .plot-box[hidden], .plot-slip[hidden], .plot-row [hidden] { display: none; }
-.plot-said { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
+.plot-unseen { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
 @media print {
   .plot { break-inside: avoid; }
   .plot-acts, .plot-hint, .plot-hair, .plot-box, .plot-slip, .plot-line[aria-pressed="false"] { display: none !important; }
-  .plot-row button { color: #26241f; }
+  .plot-row button { color: #1d2226; }
   .plot-figure, .plot-canvas, .plot-canvas > div, .plot-canvas svg { width: 100% !important; height: auto !important; }
   .plot-canvas svg { position: static !important; display: block; }
 }

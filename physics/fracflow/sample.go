@@ -95,7 +95,7 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 	for _, p := range coarse {
 		low, high = math.Min(low, p.F), math.Max(high, p.F)
 	}
-	g := grid{fn: fn, reach: high - low, thin: 1e-13 * (hi - lo), out: make([]Sample, 0, 2*len(coarse))}
+	g := grid{fn: fn, reach: high - low, thin: math.Max(1e-13*(hi-lo), 4*ulp*math.Max(math.Abs(lo), math.Abs(hi))), out: make([]Sample, 0, 2*len(coarse))}
 	g.out = append(g.out, coarse[0])
 	for i := 1; i < len(coarse); i++ {
 		g.split(coarse[i-1], coarse[i], boxing)

@@ -13,7 +13,7 @@ type (
 		Study    study.Study
 	}
 	// Keep writes the autosave; replies Kept or NotKept.
-	Keep struct{ Text string }
+	Keep struct{ Study study.Study }
 	// SetAside stores a damaged autosave under another key, never overwriting.
 	SetAside struct{ Text string }
 	// Download hands a file to the person.
@@ -22,8 +22,9 @@ type (
 	PickFile struct{}
 	// Go changes the address without loading anything.
 	Go struct{ Fragment string }
-	// Copy puts a text on the clipboard; replies Told.
-	Copy struct{ Text, Done string }
+	// CopyLink puts the page's address with a fragment on the clipboard; replies
+	// Told with Done when it is there.
+	CopyLink struct{ Fragment, Done string }
 	// Print opens the print dialogue once nothing is pending.
 	Print struct{}
 	// ListEvidence asks for the checks; replies EvidenceListed.
@@ -38,7 +39,7 @@ func (SetAside) effect()      {}
 func (Download) effect()      {}
 func (PickFile) effect()      {}
 func (Go) effect()            {}
-func (Copy) effect()          {}
+func (CopyLink) effect()      {}
 func (Print) effect()         {}
 func (ListEvidence) effect()  {}
 func (CheckEvidence) effect() {}

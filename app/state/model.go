@@ -16,8 +16,9 @@ type Model struct {
 	Revision int         // rises with every change of Study
 	System   units.System
 
-	Drafts   map[string]Draft  // what the person typed, by path, while it differs from the study
+	Drafts   map[string]Draft  // what the person typed, by path, while it differs from the study; ends of a range at path+".low" and ".high"
 	Messages map[string]string // what is wrong with an input and what is allowed, by path
+	Rows     []Row             // the laboratory table as typed: what the grid shows; Study.Rock.Table is the last good reading of it
 
 	Result         study.Result
 	ResultRevision int    // the Study.Revision that Result answers
@@ -36,6 +37,9 @@ type Model struct {
 	Checking bool            // some of them are still to be computed
 
 	history history
+	linked  bool   // the address holds the study that is open
+	owed    string // an export asked for while the answers to it were still being computed
+	noticed int    // the ID of the newest notice
 }
 
 // Draft is a text as typed and the unit chosen beside it.

@@ -1,0 +1,202 @@
+package state
+
+import (
+	"errors"
+	"fmt"
+	"strings"
+	"unicode/utf8"
+
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// edited reads what is typed for an input. A good text changes the study; a bad
+// one is kept as typed, with what was read and what is allowed, and the last good
+// value stays in use.
+func (m Model) edited(msg Edited) (Model, []Effect) {
+	if row, column, ok := cellAt(msg.Path); ok {
+		return m.cellEdited(row, column, msg)
+	}
+	spec, ok := study.Find(msg.Path)
+	if !ok {
+		return m, nil
+	}
+	unit, ok := units.Find(spec.Quantity, msg.Unit)
+	if !ok {
+		unit = m.System.Unit(spec.Quantity)
+	}
+	// Choosing another unit is a step of its own.
+	key := msg.Path + " " + unit.Symbol
+	var former *study.Input
+	if before := m.history.last(key); before != nil {
+		former = spec.Get(&before.study)
+	}
+	return m.amend(key, func(p *page) { p.input(spec, clean(msg.Text), unit, former) })
+}
+
+// input takes a text for an input. former is what it held before it was emptied
+// by keystrokes of the same step: a number typed over another keeps its source.
+func (p *page) input(spec study.Spec, text string, unit units.Unit, former *study.Input) {
+	path := spec.Path
+	in := spec.Get(&p.study)
+	delete(p.messages, path)
+	if strings.TrimSpace(text) == "" {
+		spec.Set(&p.study, nil)
+		p.forgetRange(path)
+		delete(p.drafts, path)
+		if unit != units.System(p.study.System).Unit(spec.Quantity) {
+			p.drafts[path] = Draft{"", unit.Symbol} // the next number typed is in this unit too
+		}
+		return
+	}
+	number, unit, err := units.Parse(spec.Quantity, text, unit)
+	if err != nil {
+		p.refuse(path, Draft{text, unit.Symbol}, asRead(err), inUse(spec, in))
+		return
+	}
+	if problem := study.Check(spec, number, unit); problem != nil {
+		p.refuse(path, Draft{text, unit.Symbol}, problem, inUse(spec, in))
+		return
+	}
+	if in == nil {
+		in = former
+	}
+	changed := study.Input{}
+	if in != nil {
+		changed = *in
+	}
+	low, high := p.rangeText(path+lowEnd, changed.Low), p.rangeText(path+highEnd, changed.High)
+	changed.Value, changed.Unit = number, unit.Symbol
+	spec.Set(&p.study, &changed)
+	p.keep(path, Draft{text, unit.Symbol}, units.Exact(number))
+	p.span(spec, low, high)
+}
+
+// keep holds a text as a draft while it is written otherwise than the study's own.
+func (p *page) keep(path string, typed Draft, exact string) {
+	delete(p.drafts, path)
+	if typed.Text != exact {
+		p.drafts[path] = typed
+	}
+}
+
+// refuse holds a text that cannot be used and says why.
+func (p *page) refuse(path string, typed Draft, problem *study.Problem, use string) {
+	p.drafts[path] = typed
+	p.messages[path] = says(problem) + use
+}
+
+// says is a problem as a sentence.
+func says(p *study.Problem) string { return "Read " + p.Read + "; allowed: " + p.Allowed + "." }
+
+// asRead is why a number could not be read.
+func asRead(err error) *study.Problem {
+	var fault *units.ReadError
+	if !errors.As(err, &fault) {
+		panic("state: a text was refused without a reason: " + err.Error())
+	}
+	return &study.Problem{Read: fault.Read, Allowed: fault.Allowed}
+}
+
+// inUse says what stays in use while a text is bad.
+func inUse(spec study.Spec, in *study.Input) string {
+	if in == nil {
+		return ""
+	}
+	return " In use: " + amount(spec, in.Value, in.Unit) + "."
+}
+
+// amount is a number as typed with its unit.
+func amount(spec study.Spec, number float64, symbol string) string {
+	if unit, ok := units.Find(spec.Quantity, symbol); ok && symbol != "" {
+		return units.Exact(number) + " " + unit.Label()
+	}
+	return units.Exact(number)
+}
+
+// written takes a text of the study: its title, author and note, and the first
+// day of injection.
+func (m Model) written(msg Written) (Model, []Effect) {
+	return m.amend(msg.Path, func(p *page) {
+		text := clean(msg.Text)
+		at := textAt(&p.study, msg.Path)
+		if at == nil {
+			return
+		}
+		delete(p.drafts, msg.Path)
+		delete(p.messages, msg.Path)
+		problem := tooLong(msg.Path, text)
+		if msg.Path == "field.start" && problem == nil {
+			problem = study.CheckStart(strings.TrimSpace(text))
+		}
+		if problem != nil {
+			use := ""
+			if msg.Path == "field.start" && *at != "" {
+				use = " In use: " + *at + "."
+			}
+			p.refuse(msg.Path, Draft{Text: text}, problem, use)
+			return
+		}
+		if msg.Path == "field.start" {
+			p.keep(msg.Path, Draft{Text: text}, strings.TrimSpace(text))
+			text = strings.TrimSpace(text)
+		}
+		*at = text
+	})
+}
+
+// textAt is where a study keeps a text; nil when the path holds none.
+func textAt(st *study.Study, path string) *string {
+	switch path {
+	case "title":
+		return &st.Title
+	case "author":
+		return &st.Author
+	case "note":
+		return &st.Note
+	case "field.start":
+		return &st.Field.Start
+	}
+	return nil
+}
+
+// sourced takes the source note of an input or of the table. A note belongs to
+// what is given; where nothing is, there is nothing to note.
+func (m Model) sourced(msg Sourced) (Model, []Effect) {
+	path := msg.Path + ".source"
+	return m.amend(path, func(p *page) {
+		text := clean(msg.Text)
+		delete(p.drafts, path)
+		delete(p.messages, path)
+		if problem := tooLong(path, text); problem != nil {
+			p.refuse(path, Draft{Text: text}, problem, "")
+			return
+		}
+		if t := p.study.Rock.Table; msg.Path == tablePath && t != nil {
+			changed := *t
+			changed.Source = text
+			p.study.Rock.Table = &changed
+		}
+		if spec, ok := study.Find(msg.Path); ok && spec.Get(&p.study) != nil {
+			changed := *spec.Get(&p.study)
+			changed.Source = text
+			spec.Set(&p.study, &changed)
+		}
+	})
+}
+
+func tooLong(path, text string) *study.Problem {
+	limit := study.TextLimit(path)
+	if n := utf8.RuneCountInString(text); n > limit {
+		return &study.Problem{Path: path, Read: fmt.Sprintf("%d characters", n), Allowed: fmt.Sprintf("up to %d", limit)}
+	}
+	return nil
+}
+
+// chosen takes an enumerated value; one that its field cannot have changes nothing.
+func (m Model) chosen(msg Chosen) (Model, []Effect) {
+	return m.amend("", func(p *page) { study.Choose(&p.study, msg.Path, msg.Value) })
+}
+
+// clean is a text without the broken characters that a file could not hold.
+func clean(text string) string { return strings.ToValidUTF8(text, "\uFFFD") }

@@ -1,0 +1,102 @@
+package state
+
+import (
+	"maps"
+	"reflect"
+	"slices"
+
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// page is what undo brings back: the study, and all that is typed into its
+// forms. A page is never changed once it is shown: a change makes another, which
+// shares with it whatever stays the same. That holds for the study too: its
+// inputs and its table are replaced, never written to.
+type page struct {
+	study    study.Study
+	drafts   map[string]Draft
+	messages map[string]string
+	rows     []Row
+}
+
+// fresh is the page of a study that nobody has typed into yet.
+func fresh(st study.Study) page {
+	return page{study: st, drafts: map[string]Draft{}, messages: map[string]string{}, rows: rowsOf(st.Rock.Table)}
+}
+
+func (m Model) page() page { return page{m.Study, m.Drafts, m.Messages, m.Rows} }
+
+// amend makes one undo step of a change to the page. Successive changes under
+// one key, as the keystrokes in one field, are one step; "" is a key of its own.
+func (m Model) amend(key string, change func(*page)) (Model, []Effect) {
+	before := m.page()
+	after := before
+	after.drafts, after.messages = map[string]Draft{}, map[string]string{}
+	maps.Copy(after.drafts, before.drafts)
+	maps.Copy(after.messages, before.messages)
+	change(&after)
+	return m.turn(key, after)
+}
+
+// turn makes one undo step of a whole other page.
+func (m Model) turn(key string, after page) (Model, []Effect) {
+	before := m.page()
+	if before.same(after) {
+		return m, nil
+	}
+	m.history = m.history.push(key, before)
+	return m.show(after)
+}
+
+// show puts a page on the screen. A changed study has a new revision, to be
+// computed and kept, and is no longer what the address holds.
+func (m Model) show(p page) (Model, []Effect) {
+	changed := !sameStudy(m.Study, p.study)
+	m.Study, m.Drafts, m.Messages, m.Rows = p.study, p.drafts, p.messages, p.rows
+	m.System = units.System(m.Study.System)
+	m.CanUndo, m.CanRedo = m.history.has()
+	if !changed {
+		return m, nil
+	}
+	m.Revision++
+	m, effects := m.compute()
+	// A page within another page is for looking at: it leaves the person's own
+	// autosave alone.
+	if !m.Route.Embed {
+		m.Saved.Done = false
+		effects = append(effects, Keep{m.Study})
+	}
+	if m.linked {
+		m.linked = false
+		effects = append(effects, Go{m.Route.fragment()})
+	}
+	return m, effects
+}
+
+// compute asks for the answers to the study.
+func (m Model) compute() (Model, []Effect) {
+	m.Computing = true
+	return m, []Effect{Run{m.Revision, m.Study}}
+}
+
+func (p page) same(q page) bool {
+	return maps.Equal(p.drafts, q.drafts) && maps.Equal(p.messages, q.messages) &&
+		slices.EqualFunc(p.rows, q.rows, func(a, b Row) bool { return a.Text == b.Text }) &&
+		sameStudy(p.study, q.study)
+}
+
+// sameStudy compares the table apart from the rest, which is quick, so that a
+// keystroke in a table of ten thousand rows is.
+func sameStudy(a, b study.Study) bool {
+	s, t := a.Rock.Table, b.Rock.Table
+	a.Rock.Table, b.Rock.Table = nil, nil
+	return sameTable(s, t) && reflect.DeepEqual(a, b)
+}
+
+func sameTable(s, t *study.Table) bool {
+	if s == nil || t == nil {
+		return s == t
+	}
+	return s.Source == t.Source && slices.Equal(s.Sw, t.Sw) && slices.Equal(s.Krw, t.Krw) && slices.Equal(s.Kro, t.Kro)
+}

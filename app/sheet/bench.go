@@ -72,7 +72,11 @@ func (b *Bench) Find(path string) {
 		b.Send(state.Routed{Fragment: fragment})
 	}
 	b.ctx.Defer(func(app.Context) {
-		if field := app.Window().GetElementByID(widget.FieldID(path)); field.Truthy() {
+		field := app.Window().GetElementByID(widget.FieldID(path))
+		if !field.Truthy() { // a row of a long table that is not on the page
+			field = app.Window().GetElementByID("inputs")
+		}
+		if field.Truthy() {
 			field.Call("focus")
 		}
 	})

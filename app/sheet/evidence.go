@@ -35,7 +35,7 @@ func (e *Evidence) Render() app.UI {
 	return app.Article().Class("sheet evidence").DataSet("sheet", "evidence").Body(
 		heading("evidence"),
 		app.P().Class("sentence").ID("answer-evidence").Role("status").Text(tally(e.Model.Evidence)),
-		app.Div().Class("actions").Body(
+		app.Div().Class("actions").ID("inputs").TabIndex(-1).Body(
 			widget.Action(e.Desk, "evidence-run", "Compute here, now", state.EvidenceAsked{}, !e.Model.Checking),
 		),
 		app.Ol().Class("checks").Body(checks...),

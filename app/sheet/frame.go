@@ -151,11 +151,15 @@ func failure(d widget.Desk, m state.Model) app.UI {
 	)
 }
 
+// invented is the note that the demonstration study carries; as long as a study
+// carries it, its numbers are nobody's.
+var invented = study.Demo().Note
+
 // demonstration says that what is open is invented, and how to start one's own;
 // beside it stands what could not be restored.
 func demonstration(d widget.Desk, m state.Model) app.UI {
 	return app.Div().Class("openings").Body(
-		app.P().ID("demonstration").Hidden(!m.Demonstration()).Body(
+		app.P().ID("demonstration").Hidden(m.Study.Note != invented).Body(
 			app.Text("This is an invented demonstration study. "),
 			widget.Link(d, "start-empty", "Start empty", state.StartedEmpty{}),
 			app.Text(" or "),

@@ -23,23 +23,18 @@ func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.
 	for i, g := range part.Tables {
 		grids[i] = widget.Grid("grid-"+g.ID, report.Print(g, m.System))
 	}
-	class := "sheet"
-	if len(drawn) == 0 {
-		class += " bare"
-	}
-	return app.Article().Class(class).DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
-		heading(string(sheet)),
-		&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
-		widget.Wanting(d, part, m.Result.Problems),
-		widget.Notes(d, part.Notes),
-		app.Div().Class("work").Body(
-			app.Div().Class("shown").Body(
-				app.Section().Class("pictures").Aria("label", "Pictures").Body(drawn...),
-				app.Section().Class("grids").Aria("label", "Tables").Body(grids...),
-			),
-			app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("labelledby", "inputs-title").Body(
-				append([]app.UI{app.H2().ID("inputs-title").Text("Inputs")}, forms...)...,
-			),
+	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
+		app.Div().Class("told").Body(
+			heading(string(sheet)),
+			&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
+			widget.Wanting(d, part, m.Result.Problems),
+			widget.Notes(d, "Cautions", "caution", part.Notes),
+			app.Section().Class("pictures").Aria("label", "Pictures").Body(drawn...),
+			widget.Notes(d, "Remarks", "remark", part.Notes),
+			app.Section().Class("grids").Aria("label", "Tables").Body(grids...),
+		),
+		app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("labelledby", "inputs-title").Body(
+			append([]app.UI{app.H2().ID("inputs-title").Text("Inputs")}, forms...)...,
 		),
 	)
 }
@@ -48,7 +43,8 @@ func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.
 func heading(name string) app.UI {
 	for _, s := range sheets {
 		if s.name == name {
-			return app.Header().Class("heading").Body(app.H1().Text(s.title), app.P().Text(s.question))
+			return app.Header().Class("heading").Body(app.H1().Text(s.title), app.P().Text(s.question),
+				app.A().Class("jump").Href("#inputs").Text("Inputs"))
 		}
 	}
 	panic("sheet: no sheet is called " + name)

@@ -53,12 +53,9 @@ func Block(d Desk, m state.Model, path, label, text, help string) app.UI {
 }
 
 func words(d Desk, m state.Model, path, label, text, empty, help string, sort InputSort) app.UI {
-	if draft, ok := m.Drafts[path]; ok {
-		text = draft.Text
-	}
 	return app.Div().Class("field").Body(
 		app.Label().For(FieldID(path)).Text(label),
-		&Input{Desk: d, ID: FieldID(path), Path: path, Sort: sort, Text: text, Empty: empty,
+		&Input{Desk: d, ID: FieldID(path), Path: path, Sort: sort, Text: drafted(m, path, text), Empty: empty,
 			Bad: m.Messages[path] != "", Told: messageID(path) + " help-" + dashed(path)},
 		app.P().ID(messageID(path)).Class("message").Text(m.Messages[path]),
 		app.P().ID("help-"+dashed(path)).Class("help").Text(help),

@@ -102,31 +102,37 @@ func origin(d Desk, m state.Model, spec study.Spec) app.UI {
 		said = in.Source
 	}
 	path := dashed(spec.Path)
-	low, high := rangeText(m, spec.Path+".low", in.Low), rangeText(m, spec.Path+".high", in.High)
-	problem := m.Messages[spec.Path+".low"] + m.Messages[spec.Path+".high"]
+	low, high := drafted(m, spec.Path+".low", end(in.Low)), drafted(m, spec.Path+".high", end(in.High))
+	lowBad, highBad, sourceBad := m.Messages[spec.Path+".low"], m.Messages[spec.Path+".high"], m.Messages[spec.Path+".source"]
 	return app.Details().Class("origin").Hidden(false).Body(
 		app.Summary().Body(hint(spec.Label+": "), app.Span().Text("Source and range: "), app.Span().Class("said").Text(said)),
 		app.Label().For("source-"+path).Text("Where it comes from: report and page, analogue, assumption"),
-		&Input{Desk: d, ID: "source-" + path, Path: spec.Path, Sort: SourceInput, Text: in.Source},
+		&Input{Desk: d, ID: "source-" + path, Path: spec.Path, Sort: SourceInput, Text: drafted(m, spec.Path+".source", in.Source),
+			Bad: sourceBad != "", Told: "msg-origin-" + path},
 		app.Div().Class("range").Body(
 			app.Label().For("low-"+path).Text("Low"),
-			&Input{Desk: d, ID: "low-" + path, Path: spec.Path, Sort: LowInput, Text: low, With: high, Bad: problem != "", Told: "msg-range-" + path},
+			&Input{Desk: d, ID: "low-" + path, Path: spec.Path, Sort: LowInput, Text: low, With: high, Bad: lowBad != "", Told: "msg-origin-" + path},
 			app.Label().For("high-"+path).Text("High"),
-			&Input{Desk: d, ID: "high-" + path, Path: spec.Path, Sort: HighInput, Text: high, With: low, Bad: problem != "", Told: "msg-range-" + path},
+			&Input{Desk: d, ID: "high-" + path, Path: spec.Path, Sort: HighInput, Text: high, With: low, Bad: highBad != "", Told: "msg-origin-" + path},
 			app.Span().Class("unit").Text(in.Unit),
 		),
-		app.P().ID("msg-range-"+path).Class("message").Text(problem),
+		app.P().ID("msg-origin-"+path).Class("message").Text(strings.TrimSpace(sourceBad+" "+lowBad+" "+highBad)),
 	)
 }
 
-func rangeText(m state.Model, path string, end *float64) string {
+// drafted is what was typed while it differs from the study, else the study's own.
+func drafted(m state.Model, path, own string) string {
 	if draft, ok := m.Drafts[path]; ok {
 		return draft.Text
 	}
-	if end == nil {
+	return own
+}
+
+func end(of *float64) string {
+	if of == nil {
 		return ""
 	}
-	return units.Exact(*end)
+	return units.Exact(*of)
 }
 
 // Group is the fields of one group of a sheet's form, under one heading, those

@@ -10,27 +10,33 @@ import (
 	"brinefront/physics/study"
 )
 
-// Notes are the cautions and remarks of a sheet: what was found, why it matters,
-// what to do, and the inputs it is about.
-func Notes(d Desk, notes []study.Note) app.UI {
-	list := make([]app.UI, len(notes))
-	for i, n := range notes {
-		mark := "· Remark. "
-		if n.Level == "caution" {
-			mark = "▲ Caution. "
+// marks tell the levels of a note apart without colour.
+var marks = map[string]string{"caution": "▲ Caution. ", "remark": "· "}
+
+// Notes are a sheet's notes of one level: what was found, why it matters, what to
+// do, and the inputs it is about.
+func Notes(d Desk, title, level string, notes []study.Note) app.UI {
+	var list []app.UI
+	for _, n := range notes {
+		if n.Level == level {
+			list = append(list, note(d, n))
 		}
-		body := []app.UI{
-			app.P().Body(app.Strong().Text(mark), app.Text(n.Text)),
-			app.P().Class("quiet").Text(strings.TrimSpace(n.Cause + " " + n.Do)),
-		}
-		for _, path := range n.Paths {
-			body = append(body, toField(d, path, report.Label(path)))
-		}
-		list[i] = app.Li().Class(n.Level).DataSet("note", n.ID).Body(body...)
 	}
-	return app.Section().Class("notes").Aria("label", "Cautions and remarks").Hidden(len(notes) == 0).Body(
+	return app.Section().Class("notes").Hidden(len(list) == 0).Body(
+		app.H2().Text(title),
 		app.Ul().Body(list...),
 	)
+}
+
+func note(d Desk, n study.Note) app.UI {
+	body := []app.UI{
+		app.P().Body(app.Strong().Text(marks[n.Level]), app.Text(n.Text)),
+		app.P().Class("quiet").Text(strings.TrimSpace(n.Cause + " " + n.Do)),
+	}
+	for _, path := range n.Paths {
+		body = append(body, toField(d, path, report.Label(path)))
+	}
+	return app.Li().Class(n.Level).DataSet("note", n.ID).Body(body...)
 }
 
 // Wanting says what a sheet still needs before it can answer: inputs that are

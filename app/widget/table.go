@@ -1,15 +1,12 @@
 package widget
 
 import (
-	"math"
 	"strconv"
 	"strings"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
 	"brinefront/app/state"
-	"brinefront/physics/study"
-	"brinefront/physics/units"
 )
 
 // tablePath is the path of the laboratory table; a cell's is
@@ -20,15 +17,8 @@ const tablePath = "rock.table"
 // for any plug, few enough that ten thousand points stay quick to edit.
 const rowsShown = 60
 
-// columns of the laboratory table.
-var columns = []struct {
-	name, label string
-	values      func(*study.Table) []float64
-}{
-	{"sw", "Sw", func(t *study.Table) []float64 { return t.Sw }},
-	{"krw", "krw", func(t *study.Table) []float64 { return t.Krw }},
-	{"kro", "kro", func(t *study.Table) []float64 { return t.Kro }},
-}
+// columns of the laboratory table, in the order of state.Row.
+var columns = [3]struct{ name, label string }{{"sw", "Sw"}, {"krw", "krw"}, {"kro", "kro"}}
 
 // Points is the laboratory table as a grid of fields. Enter and the arrows up
 // and down move between rows; a table pasted into any cell is previewed.
@@ -43,7 +33,7 @@ type Points struct {
 
 // Render draws the grid.
 func (p *Points) Render() app.UI {
-	rows := tableRows(p.Model)
+	rows := len(p.Model.Rows)
 	p.first = max(0, min(p.first, (rows-1)/rowsShown*rowsShown))
 	last := min(rows, p.first+rowsShown)
 	body := make([]app.UI, 0, last-p.first)
@@ -76,11 +66,11 @@ func (p *Points) later(app.Context, app.Event)   { p.first += rowsShown }
 func (p *Points) row(row int) app.UI {
 	number := strconv.Itoa(row + 1)
 	cells := []app.UI{app.Th().Scope("row").Text(number)}
-	for _, c := range columns {
+	for i, c := range columns {
 		path := cellPath(row, c.name)
 		message := p.Model.Messages[path]
 		cells = append(cells, app.Td().Body(
-			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Sort: CellInput, Text: cellText(p.Model, row, c.name, c.values),
+			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Sort: CellInput, Text: p.Model.Rows[row].Text[i],
 				Bad: message != "", Told: messageID(path), Name: c.label + ", row " + number},
 			app.Span().ID(messageID(path)).Class("message").Text(message),
 		))
@@ -89,20 +79,6 @@ func (p *Points) row(row int) app.UI {
 	return app.Tr().Body(append(cells, app.Td().Body(
 		button("×").Class("remove").Aria("label", "Remove row "+number).OnClick(remove, scope),
 	))...)
-}
-
-// tableRows counts the rows the study holds and those only typed so far.
-func tableRows(m state.Model) int {
-	rows := 0
-	if m.Study.Rock.Table != nil {
-		rows = len(m.Study.Rock.Table.Sw)
-	}
-	for path := range m.Drafts {
-		if row, _, ok := cellAt(path); ok {
-			rows = max(rows, row+1)
-		}
-	}
-	return rows
 }
 
 func cellPath(row int, column string) string {
@@ -123,18 +99,8 @@ func cellAt(path string) (row int, column string, ok bool) {
 	return row, column, err == nil
 }
 
-// cellText is what was typed while it cannot be used, else the study's number.
-func cellText(m state.Model, row int, column string, values func(*study.Table) []float64) string {
-	if draft, ok := m.Drafts[cellPath(row, column)]; ok {
-		return draft.Text
-	}
-	if t := m.Study.Rock.Table; t != nil && row < len(values(t)) && !math.IsNaN(values(t)[row]) {
-		return units.Exact(values(t)[row])
-	}
-	return ""
-}
-
-// moved brings the caret to the same column of another row.
+// moved brings the caret to the same column of another row; Enter in the last one
+// adds a row.
 func (i *Input) moved(_ app.Context, e app.Event) {
 	row, column, ok := cellAt(i.Path)
 	if !ok {
@@ -149,9 +115,13 @@ func (i *Input) moved(_ app.Context, e app.Event) {
 		return
 	}
 	e.PreventDefault()
-	if next := app.Window().GetElementByID(FieldID(cellPath(row, column))); next.Truthy() {
-		next.Call("focus")
-		next.Call("select")
+	next := cellPath(row, column)
+	if field := app.Window().GetElementByID(FieldID(next)); field.Truthy() {
+		field.Call("focus")
+		field.Call("select")
+	} else if e.Get("key").String() == "Enter" {
+		i.Desk.Send(state.RowAdded{After: row - 1})
+		i.Desk.Find(next)
 	}
 }
 
@@ -161,8 +131,11 @@ func TableSource(d Desk, m state.Model) app.UI {
 	if m.Study.Rock.Table != nil {
 		said = m.Study.Rock.Table.Source
 	}
+	path := tablePath + ".source"
 	return app.Div().Class("field").Hidden(m.Study.Rock.Table == nil).Body(
 		app.Label().For("source-rock-table").Text("Where the points come from: laboratory report and page"),
-		&Input{Desk: d, ID: "source-rock-table", Path: tablePath, Sort: SourceInput, Text: said},
+		&Input{Desk: d, ID: "source-rock-table", Path: tablePath, Sort: SourceInput, Text: drafted(m, path, said),
+			Bad: m.Messages[path] != "", Told: messageID(path)},
+		app.P().ID(messageID(path)).Class("message").Text(m.Messages[path]),
 	)
 }

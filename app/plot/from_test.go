@@ -1,0 +1,133 @@
+package plot
+
+import (
+	"math"
+	"testing"
+
+	"brinefront/physics/study"
+	"brinefront/physics/units"
+)
+
+// The expected numbers stand on exact definitions: a US barrel of petroleum is
+// 0.158987294928 m3, a pound-force 4.4482216152605 N and an inch 0.0254 m (NIST
+// SP 811, appendix B, exact), a year is 365.25 days (IAU, Julian year).
+func TestFromConvertsToTheUnitsOfTheSystem(t *testing.T) {
+	for _, c := range []struct {
+		quantity units.Quantity
+		system   units.System
+		si, want float64
+		title    string
+	}{
+		{units.Rate, units.Field, 0.158987294928, 86400, "Label, s (bbl/d)"},
+		{units.Rate, units.Metric, 1, 86400, "Label, s (m³/d)"},
+		{units.Pressure, units.Field, 4.4482216152605 / (0.0254 * 0.0254), 1, "Label, s (psi)"},
+		{units.Pressure, units.Lab, 2500, 2.5, "Label, s (kPa)"},
+		{units.Fraction, units.Field, 0.37, 0.37, "Label, s"},
+		{units.Share, units.Field, 0.37, 37, "Label, s (%)"},
+		{units.Duration, units.Field, 10 * 365.25 * 86400, 10, "Label, s (yr)"},
+	} {
+		chart := study.Chart{
+			X:     study.Axis{Label: "Sw", Symbol: "Sw", Quantity: units.Fraction},
+			Y:     study.Axis{Label: "Label", Symbol: "s", Quantity: c.quantity, Min: &c.si, Max: &c.si},
+			Lines: []study.Line{{Kind: "line", X: []float64{0.25}, Y: []float64{c.si}}},
+			Marks: []study.Mark{{X: 0.25, Y: c.si}},
+		}
+		p := From(chart, c.system)
+		if p.X.Title != "Sw" {
+			t.Errorf("a label that is its own symbol is titled %q", p.X.Title)
+		}
+		if p.Y.Title != c.title {
+			t.Errorf("%s in %s: title %q, want %q", c.quantity, c.system, p.Y.Title, c.title)
+		}
+		for place, got := range map[string]float64{
+			"line": p.Lines[0].Data[0][1], "mark": p.Marks[0].Y, "axis minimum": *p.Y.Min, "axis maximum": *p.Y.Max,
+		} {
+			// Two roundings of a conversion: 4 units in the last place.
+			if math.Abs(got-c.want) > 4*2.3e-16*c.want {
+				t.Errorf("%s in %s: %s %v, want %v", c.quantity, c.system, place, got, c.want)
+			}
+		}
+	}
+}
+
+func TestDurationsAreToldInAUnitThatSuits(t *testing.T) {
+	const day = 86400.0
+	for _, c := range []struct {
+		longest float64
+		want    string
+	}{
+		{30, "s"}, {300, "min"}, {3 * 3600, "h"}, {30 * day, "d"}, {1.9 * 365.25 * day, "d"}, {2 * 365.25 * day, "yr"},
+		{0, "h"}, // nothing to go by: the system's own
+	} {
+		chart := study.Chart{
+			X:     study.Axis{Label: "Time", Quantity: units.Duration},
+			Y:     study.Axis{Label: "Recovery", Quantity: units.Share},
+			Lines: []study.Line{{Kind: "line", X: []float64{0, c.longest}, Y: []float64{0, 0.5}}},
+		}
+		if got := From(chart, units.Lab).X.Unit; got != c.want {
+			t.Errorf("an axis of %v s is in %q, want %q", c.longest, got, c.want)
+		}
+		chart.X.Max = &chart.Lines[0].X[1]
+		chart.Lines[0].X[0] = 100 * 365.25 * day // beyond what the axis shows
+		if got := From(chart, units.Lab).X.Unit; got != c.want {
+			t.Errorf("an axis cut at %v s is in %q, want %q", c.longest, got, c.want)
+		}
+	}
+}
+
+func TestFromDropsNothing(t *testing.T) {
+	chart := invented()
+	for _, s := range units.Systems {
+		p := From(chart, s)
+		if len(p.Lines) != len(chart.Lines) || len(p.Marks) != len(chart.Marks) {
+			t.Fatalf("%s: %d lines and %d marks", s, len(p.Lines), len(p.Marks))
+		}
+		for i, l := range p.Lines {
+			want := chart.Lines[i]
+			if len(l.Data) != len(want.X) || len(l.Low) != len(want.Low) {
+				t.Errorf("%s, %s: %d points and %d low, want %d and %d", s, l.ID, len(l.Data), len(l.Low), len(want.X), len(want.Low))
+			}
+			if l.ID != want.ID || l.Label != want.Label || l.Role != want.Role || l.Kind != want.Kind {
+				t.Errorf("%s: line %d became %s, %s, %s, %s", s, i, l.ID, l.Label, l.Role, l.Kind)
+			}
+		}
+	}
+}
+
+func TestALineBreaksWhereANumberIsMissing(t *testing.T) {
+	for _, bad := range badNumbers {
+		p := From(broken(bad), units.Metric)
+		if at := p.Lines[0].Data; len(at) != 3 || point(at[1]).finite() || !point(at[0]).finite() || !point(at[2]).finite() {
+			t.Errorf("%v: the line is %v, want a gap in the middle", bad, at)
+		}
+		if n := len(p.Lines[3].Data); n != 1 {
+			t.Errorf("%v: %d markers, want the one that has a place", bad, n)
+		}
+		if n := len(p.Marks); n != 1 {
+			t.Errorf("%v: %d marks, want the one that has a place", bad, n)
+		}
+		if p.X.Min != nil || p.Y.Min != nil || p.Y.Max != nil {
+			t.Errorf("%v: an axis limit came through", bad)
+		}
+	}
+}
+
+func TestProgrammersMistakesPanic(t *testing.T) {
+	short, noLow, strayLow := invented(), invented(), invented()
+	short.Lines[0].Y = short.Lines[0].Y[:2]
+	noLow.Lines[2].Low = nil
+	strayLow.Lines[0].Low = []float64{0, 0, 0}
+	for _, c := range []struct {
+		chart study.Chart
+		want  string
+	}{{short, errLengths}, {noLow, errBand}, {strayLow, errBand}} {
+		func() {
+			defer func() {
+				if got := recover(); got != c.want {
+					t.Errorf("panic %v, want %v", got, c.want)
+				}
+			}()
+			From(c.chart, units.Field)
+		}()
+	}
+}

@@ -1,0 +1,284 @@
+package study
+
+import (
+	"encoding/json"
+	"fmt"
+	"math"
+	"reflect"
+	"slices"
+	"strings"
+	"testing"
+
+	"brinefront/physics/ref"
+	"brinefront/physics/units"
+)
+
+// variants are studies of every kind that Run meets, by name.
+func variants() map[string]Study {
+	all := map[string]Study{"empty": Empty(), "demo": Demo(), "full": full()}
+	add := func(name string, change func(*Study)) {
+		st := Demo()
+		change(&st)
+		all[name] = st
+	}
+	for _, curve := range CurveKinds {
+		for _, drive := range Drives {
+			for _, limit := range Limits {
+				for _, reference := range References {
+					add(strings.Join([]string{curve.Value, drive.Value, limit.Value, reference.Value}, " "), func(st *Study) {
+						st.Rock.Curve, st.Rock.Reference, st.Field.Drive, st.Field.Limit = curve.Value, reference.Value, drive.Value, limit.Value
+					})
+				}
+			}
+		}
+	}
+	for _, spec := range Specs() {
+		add("without "+spec.Path, func(st *Study) { spec.Set(st, nil) })
+		add("typed curve without "+spec.Path, func(st *Study) { st.Rock.Curve = "corey"; spec.Set(st, nil) })
+		for name, si := range map[string]float64{"lowest": spec.Min, "highest": spec.Max} {
+			add(name+" "+spec.Path, func(st *Study) {
+				unit := units.Of(spec.Quantity)[0]
+				spec.Set(st, &Input{Value: unit.FromSI(si), Unit: unit.Symbol})
+			})
+		}
+	}
+	add("no table", func(st *Study) { st.Rock.Table = nil })
+	add("empty table", func(st *Study) { st.Rock.Table = &Table{} })
+	add("no table, typed", func(st *Study) { st.Rock.Table = nil; st.Rock.Curve = "let" })
+	add("mobile water", func(st *Study) { st.Front.InitialWater = &Input{Value: 0.41, Unit: "fraction"} })
+	add("oil injected too", func(st *Study) { st.Front.InjectedWater = &Input{Value: 0.66, Unit: "fraction"} })
+	add("short horizon", func(st *Study) { st.Field.Horizon = &Input{Value: 200, Unit: "d"} })
+	add("long horizon", func(st *Study) { st.Field.Horizon = &Input{Value: 300, Unit: "yr"} })
+	add("limit in the jump", func(st *Study) { st.Field.WaterCut.Value = 30 })
+	add("limit from the start", func(st *Study) { st.Field.Limit = "oilRate"; st.Field.OilRate.Value = 5000 })
+	add("no jump", func(st *Study) {
+		st.Rock.Curve = "corey"
+		st.Rock.Corey.Nw.Value, st.Rock.Corey.No.Value = 1, 1
+	})
+	add("three points", func(st *Study) {
+		st.Rock.Table = &Table{Sw: []float64{0.2, 0.5, 0.7}, Krw: []float64{0, 0.1, 0.3}, Kro: []float64{1, 0.2, 0}}
+	})
+	add("four points, straight", func(st *Study) {
+		st.Rock.Curve = "table-linear"
+		st.Rock.Table = &Table{Sw: []float64{0.2, 0.4, 0.5, 0.7}, Krw: []float64{0, 0.05, 0.1, 0.3}, Kro: []float64{1, 0.4, 0.2, 0}}
+	})
+	add("percent", func(st *Study) {
+		for i := range st.Rock.Table.Sw {
+			st.Rock.Table.Sw[i] *= 100
+		}
+	})
+	add("swapped", func(st *Study) { t := st.Rock.Table; t.Krw, t.Kro = t.Kro, t.Krw })
+	add("turned", func(st *Study) { st.Rock.Table.Krw[5] = 0.001; st.Rock.Curve = "table" })
+	add("not a number", func(st *Study) { st.Rock.Table.Krw[5] = math.NaN() })
+	add("plug", func(st *Study) {
+		st.Field.Length = &Input{Value: 7.31, Unit: "cm"}
+		st.Field.Width = &Input{Value: 3.35, Unit: "cm"}
+		st.Field.Thickness = &Input{Value: 3.35, Unit: "cm"}
+		st.Field.Rate = &Input{Value: 0.87, Unit: "cm3/min"}
+	})
+	return all
+}
+
+// TestEveryResultIsSound walks through the results of every kind of study.
+func TestEveryResultIsSound(t *testing.T) {
+	ready := 0
+	for name, st := range variants() {
+		r := Run(st)
+		if r.Parts[SheetField].Status == Ready {
+			ready++
+		}
+		for _, fault := range faults(r) {
+			t.Errorf("%s: %s", name, fault)
+		}
+		if again := Run(st); !reflect.DeepEqual(r, again) {
+			t.Errorf("%s: a second run differs", name)
+		}
+	}
+	if ready < 50 {
+		t.Errorf("only %d kinds of study are answered to the end", ready)
+	}
+}
+
+// faults lists what is wrong with the form of a result.
+func faults(r Result) []string {
+	var list []string
+	blame := func(format string, a ...any) { list = append(list, fmt.Sprintf(format, a...)) }
+	numbers(reflect.ValueOf(r), "result", blame)
+	for _, p := range r.Problems {
+		if !knownPath(p.Path) || p.Read == "" || p.Allowed == "" {
+			blame("problem %+v", p)
+		}
+	}
+	for _, sheet := range []Sheet{SheetRock, SheetFront, SheetField} {
+		part, ok := r.Parts[sheet]
+		if !ok {
+			blame("no part %s", sheet)
+		}
+		ids := map[string]bool{}
+		for _, f := range part.Figures {
+			if ids[f.ID] || !strings.HasPrefix(f.ID, string(sheet)+".") || f.Label == "" || f.Symbol == "" {
+				blame("figure %q (twice: %v)", f.ID, ids[f.ID])
+			}
+			ids[f.ID] = true
+			if err := checkWorking(f); err != nil {
+				blame("%v", err)
+			}
+			for _, source := range f.Working.Sources {
+				if !slices.ContainsFunc(ref.All(), func(s ref.Source) bool { return s.ID == source }) {
+					blame("%s cites %q", f.ID, source)
+				}
+			}
+			if len(f.Working.Inputs) == 0 && f.ID != "field.uptime" {
+				blame("%s rests on no input", f.ID)
+			}
+			for _, path := range f.Working.Inputs {
+				if !knownPath(path) {
+					blame("%s rests on %q", f.ID, path)
+				}
+			}
+		}
+		for _, phrase := range part.Answer {
+			if phrase.Figure != "" && !ids[phrase.Figure] {
+				blame("the answer of %s names %q", sheet, phrase.Figure)
+			}
+		}
+		for _, path := range part.Missing {
+			if !knownPath(path) {
+				blame("%s misses %q", sheet, path)
+			}
+		}
+		for _, n := range part.Notes {
+			if n.ID == "" || n.Text == "" || n.Do == "" || (n.Level != "caution" && n.Level != "remark") {
+				blame("note %+v", n)
+			}
+			for _, path := range n.Paths {
+				if !knownPath(path) {
+					blame("note %s is about %q", n.ID, path)
+				}
+			}
+		}
+		switch part.Status {
+		case Ready:
+			if len(part.Answer) == 0 || len(part.Figures) == 0 || len(part.Charts) == 0 || len(part.Missing) > 0 {
+				blame("%s is ready without an answer", sheet)
+			}
+		case Waiting:
+			if len(part.Missing) == 0 || len(part.Figures) > 0 {
+				blame("%s waits for nothing, or has figures", sheet)
+			}
+		case Refused:
+			if len(r.Problems) == 0 || len(part.Figures) > 0 {
+				blame("%s is refused without a problem, or has figures", sheet)
+			}
+		case Stopped:
+			if !slices.ContainsFunc(part.Notes, func(n Note) bool { return n.Level == "caution" }) && sheet == SheetRock {
+				blame("%s stopped without a note", sheet)
+			}
+		default:
+			blame("%s has status %q", sheet, part.Status)
+		}
+		for _, c := range part.Charts {
+			list = append(list, chartFaults(c)...)
+		}
+		for _, g := range part.Tables {
+			list = append(list, gridFaults(g)...)
+		}
+	}
+	text, err := json.Marshal(r)
+	var back Result
+	if err != nil || json.Unmarshal(text, &back) != nil || !reflect.DeepEqual(back, r) {
+		blame("the result does not survive the way to the interface (%v)", err)
+	}
+	return list
+}
+
+func chartFaults(c Chart) []string {
+	var list []string
+	if c.ID == "" || c.Title == "" || c.Summary == "" || len(c.Lines) == 0 {
+		list = append(list, "chart "+c.ID+" lacks something")
+	}
+	ids := map[string]bool{}
+	for _, l := range c.Lines {
+		switch {
+		case len(l.X) != len(l.Y) || (l.Kind == "band") != (len(l.Low) == len(l.X) && l.Low != nil):
+			list = append(list, fmt.Sprintf("%s %s: %d x, %d y, %d low", c.ID, l.ID, len(l.X), len(l.Y), len(l.Low)))
+		case len(l.X) < 2 && l.Kind != "points":
+			list = append(list, c.ID+" "+l.ID+" is no line")
+		case len(l.X) > 700 && l.Kind != "points":
+			list = append(list, fmt.Sprintf("%s %s has %d points", c.ID, l.ID, len(l.X)))
+		case l.Kind == "line" && !slices.IsSorted(l.X):
+			list = append(list, c.ID+" "+l.ID+" runs back")
+		case ids[l.ID] && l.ID != "tangent":
+			list = append(list, c.ID+" "+l.ID+" is there twice")
+		}
+		ids[l.ID] = true
+	}
+	return list
+}
+
+func gridFaults(g Grid) []string {
+	var list []string
+	for _, c := range g.Columns {
+		if len(c.Values)+len(c.Words) != len(g.Columns[0].Values)+len(g.Columns[0].Words) || c.Quantity == "" || c.Label == "" {
+			list = append(list, "table "+g.ID+", column "+c.Label)
+		}
+	}
+	return list
+}
+
+// numbers walks through a value: every number finite, every list there.
+func numbers(v reflect.Value, at string, blame func(string, ...any)) {
+	switch v.Kind() {
+	case reflect.Float64:
+		if math.IsNaN(v.Float()) || math.IsInf(v.Float(), 0) {
+			blame("%s is %g", at, v.Float())
+		}
+	case reflect.Slice:
+		for i := range v.Len() {
+			numbers(v.Index(i), fmt.Sprintf("%s[%d]", at, i), blame)
+		}
+	case reflect.Map:
+		for _, key := range v.MapKeys() {
+			numbers(v.MapIndex(key), at+"."+key.String(), blame)
+		}
+	case reflect.Pointer:
+		if !v.IsNil() {
+			numbers(v.Elem(), at, blame)
+		}
+	case reflect.Struct:
+		for i := range v.NumField() {
+			field := v.Type().Field(i)
+			if v.Field(i).Kind() == reflect.Slice && v.Field(i).IsNil() && !strings.Contains(field.Tag.Get("json"), "omitempty") {
+				blame("%s.%s is no list", at, field.Name)
+			}
+			numbers(v.Field(i), at+"."+field.Name, blame)
+		}
+	}
+}
+
+// knownPath reports whether a path names something of the document.
+func knownPath(path string) bool {
+	if _, ok := Find(path); ok {
+		return true
+	}
+	return Choices(path) != nil || path == "rock.table" || path == "field.start" || strings.HasPrefix(path, "rock.table.")
+}
+
+func TestForecastNeverRunsBack(t *testing.T) {
+	rising := map[string]bool{"Time": true, "Injected": true, "Water cut, surface": true, "Oil produced": true, "Water produced": true, "Recovery, of the pore volume": true}
+	for name, st := range variants() {
+		part := Run(st).Parts[SheetField]
+		for _, g := range part.Tables {
+			for _, c := range g.Columns {
+				if !rising[c.Label] {
+					continue
+				}
+				for i := 1; i < len(c.Values); i++ {
+					if c.Values[i] < c.Values[i-1]*(1-1e-12) {
+						t.Errorf("%s: %s falls from %g to %g", name, c.Label, c.Values[i-1], c.Values[i])
+					}
+				}
+			}
+		}
+	}
+}

@@ -1,0 +1,275 @@
+package fit
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/mat"
+	"gonum.org/v1/gonum/stat/distuv"
+
+	"brinefront/physics/relperm"
+)
+
+const (
+	level         = 0.95
+	singular      = 1e-13 // of the largest eigenvalue of the scaled curvature
+	participates  = 0.1   // component of a direction that the points do not see
+	vague         = 0.25  // standard error over size from which a parameter is not determined
+	entangled     = 0.98  // correlation from which two parameters cannot be told apart ...
+	entangledFrom = 0.1   // ... when the standard error is more than this of the value
+	offCurve      = 3.0   // studentised deviation from which a point lies off
+	offAtLeast    = 0.1   // ... when it is more than this share of the floor
+)
+
+// confidence is what the linearised fit knows of its own error (Seber & Wild 1989,
+// ch. 5): with s² = SS/(degrees of freedom), the covariance of the fitted
+// parameters is s² (JᵀJ)⁻¹.
+type confidence struct {
+	family     family
+	values     []float64
+	active     []int         // parameters fitted and not at a bound
+	covariance *mat.SymDense // of the active ones, as the minimiser moves them
+	blind      []bool        // active ones in a direction that the points do not see
+	variance   float64       // s²
+	student    float64       // two-sided quantile of Student's t
+}
+
+// conclude reports the fit.
+func (t *task) conclude() Fit {
+	c := confidence{family: t.family, values: t.values}
+	for _, j := range t.free() {
+		if !t.atBound[j] {
+			c.active = append(c.active, j)
+		}
+	}
+	f := Fit{Curves: t.family.curves(t.values), Status: t.status, Iterations: t.iterations,
+		DegreesOfFreedom: t.used([]int{0, 1}) - len(c.active)}
+	rows := t.linearise(f.Curves, c.active)
+	normal := mat.NewSymDense(max(len(c.active), 1), nil)
+	sum, squares := 0.0, [2]float64{}
+	for _, row := range rows {
+		squares[row.phase] += row.deviation * row.deviation
+		if row.sigma > 0 {
+			sum += row.deviation * row.deviation / (row.sigma * row.sigma)
+			for p, a := range row.slopes {
+				for q := p; q < len(row.slopes); q++ {
+					normal.SetSym(p, q, normal.At(p, q)+a*row.slopes[q])
+				}
+			}
+		}
+	}
+	n := float64(len(t.points.Sw))
+	f.RMSKrw, f.RMSKro = math.Sqrt(squares[0]/n), math.Sqrt(squares[1]/n)
+	c.variance = sum / float64(f.DegreesOfFreedom)
+	c.student = distuv.StudentsT{Mu: 0, Sigma: 1, Nu: float64(f.DegreesOfFreedom)}.Quantile((1 + level) / 2)
+	c.covariance, c.blind = invert(normal)
+	c.covariance.ScaleSym(c.variance, c.covariance)
+	f.state = c
+	f.Covariance, f.Correlation = c.matrices(len(t.values))
+	f.Parameters = c.parameters(t, f.Correlation)
+	f.Verdict = t.verdict(f, c.off(rows, t.options.Floor))
+	return f
+}
+
+// row is a point beside its curve.
+type row struct {
+	phase            int
+	sw               float64
+	deviation, sigma float64
+	slopes           []float64 // of deviation/sigma, with respect to the active parameters
+}
+
+// linearise sets every point beside the final curves.
+func (t *task) linearise(curves relperm.Curves, active []int) []row {
+	rows := make([]row, 0, 2*len(t.points.Sw))
+	slopes := [2][]float64{make([]float64, len(t.values)), make([]float64, len(t.values))}
+	store := make([]float64, 2*len(t.points.Sw)*len(active))
+	for i, sw := range t.points.Sw {
+		at := curves.At(sw)
+		t.family.slopes(t.values, sw, at, slopes[0], slopes[1])
+		for k := range slopes {
+			r := row{phase: k, sw: sw, deviation: t.deviation(k, i, at), sigma: t.sigma[k][i]}
+			if r.sigma > 0 {
+				r.slopes, store = store[:len(active)], store[len(active):]
+				for p, j := range active {
+					r.slopes[p] = slopes[k][j] / r.sigma
+				}
+			}
+			rows = append(rows, r)
+		}
+	}
+	return rows
+}
+
+// invert returns the inverse of a curvature matrix through the eigenvalues of the
+// matrix scaled to a unit diagonal. An eigenvalue that is zero to rounding marks a
+// direction in which the points do not tell the parameters; it is raised to the
+// threshold, so that the covariance there is large but finite, and the parameters
+// that take part are blind.
+func invert(normal *mat.SymDense) (inverse *mat.SymDense, blind []bool) {
+	n := normal.SymmetricDim()
+	scale := make([]float64, n)
+	for j := range scale {
+		scale[j] = math.Sqrt(normal.At(j, j))
+		if scale[j] == 0 {
+			scale[j] = 1
+		}
+	}
+	scaled := mat.NewSymDense(n, nil)
+	for j := range n {
+		for k := j; k < n; k++ {
+			scaled.SetSym(j, k, normal.At(j, k)/(scale[j]*scale[k]))
+		}
+	}
+	inverse, blind = mat.NewSymDense(n, nil), make([]bool, n)
+	var eigen mat.EigenSym
+	if !eigen.Factorize(scaled, true) {
+		for j := range blind {
+			blind[j] = true
+		}
+		return inverse, blind
+	}
+	values := eigen.Values(nil)
+	var vectors mat.Dense
+	eigen.VectorsTo(&vectors)
+	threshold := singular * max(values[n-1], 1)
+	for e, value := range values {
+		for j := range n {
+			if value < threshold && math.Abs(vectors.At(j, e)) > participates {
+				blind[j] = true
+			}
+			for k := j; k < n; k++ {
+				part := vectors.At(j, e) * vectors.At(k, e) / max(value, threshold)
+				inverse.SetSym(j, k, inverse.At(j, k)+part/(scale[j]*scale[k]))
+			}
+		}
+	}
+	return inverse, blind
+}
+
+// outward is d(parameter)/d(what the minimiser moves).
+func (c confidence) outward(j int) float64 {
+	if c.family.specs[j].log {
+		return c.values[j]
+	}
+	return 1
+}
+
+// matrices spreads the covariance over all n parameters.
+func (c confidence) matrices(n int) (covariance, correlation [][]float64) {
+	covariance, correlation = square(n), square(n)
+	for j := range n {
+		correlation[j][j] = 1
+	}
+	for p, j := range c.active {
+		for q, k := range c.active {
+			v := c.covariance.At(p, q)
+			covariance[j][k] = v * c.outward(j) * c.outward(k)
+			if scale := math.Sqrt(c.covariance.At(p, p) * c.covariance.At(q, q)); p != q && scale > 0 {
+				correlation[j][k] = min(max(v/scale, -1), 1)
+			}
+		}
+	}
+	return covariance, correlation
+}
+
+func square(n int) [][]float64 {
+	rows := make([][]float64, n)
+	for i := range rows {
+		rows[i] = make([]float64, n)
+	}
+	return rows
+}
+
+// parameters reports each parameter with its interval.
+func (c confidence) parameters(t *task, correlation [][]float64) []Parameter {
+	list := make([]Parameter, len(c.values))
+	for j, s := range c.family.specs {
+		v := c.values[j]
+		list[j] = Parameter{Symbol: s.symbol, Label: s.label, Value: v, Low: v, High: v, Min: t.low[j], Max: t.high[j],
+			AtBound: t.atBound[j], Held: t.held[j], Determined: !t.atBound[j]}
+	}
+	for p, j := range c.active {
+		q, s := &list[j], c.family.specs[j]
+		stdErr := math.Sqrt(c.covariance.At(p, p))
+		q.StdErr = stdErr * c.outward(j)
+		if c.blind[p] {
+			q.Low, q.High, q.Determined = q.Min, q.Max, false
+			continue
+		}
+		q.Low = max(s.outer(s.inner(q.Value)-c.student*stdErr), q.Min)
+		q.High = min(s.outer(s.inner(q.Value)+c.student*stdErr), q.Max)
+		relative := q.StdErr / c.size(j)
+		_, r := strongest(correlation, j)
+		q.Determined = relative <= vague && (math.Abs(r) <= entangled || relative <= entangledFrom)
+	}
+	return list
+}
+
+// size is what a parameter's standard error is judged against: its value, or, for
+// the end saturations, the movable range.
+func (c confidence) size(j int) float64 {
+	if j < iKrw0 {
+		return 1 - c.values[iSwc] - c.values[iSor]
+	}
+	return c.values[j]
+}
+
+// strongest returns the parameter that j is most correlated with.
+func strongest(correlation [][]float64, j int) (other int, r float64) {
+	for k, v := range correlation[j] {
+		if k != j && math.Abs(v) > math.Abs(r) {
+			other, r = k, v
+		}
+	}
+	return other, r
+}
+
+// off returns the rows whose deviation, studentised by s sqrt(1-h) with h the row's
+// leverage, is too large to be chance.
+func (c confidence) off(rows []row, floor float64) []row {
+	var list []row
+	for _, r := range rows {
+		if r.sigma == 0 || math.Abs(r.deviation) < offAtLeast*floor {
+			continue
+		}
+		left := c.variance - c.spread(r.slopes)
+		if left > 0 && math.Abs(r.deviation)/r.sigma > offCurve*math.Sqrt(left) {
+			list = append(list, r)
+		}
+	}
+	return list
+}
+
+// spread is the variance gᵀ C g of what has slopes g.
+func (c confidence) spread(g []float64) float64 {
+	sum := 0.0
+	for p, a := range g {
+		for q, b := range g {
+			sum += a * b * c.covariance.At(p, q)
+		}
+	}
+	return max(sum, 0)
+}
+
+// Band returns the 95 % confidence band of the curves at sw, by the delta method:
+// kr ± t sqrt(gᵀ C g) with g the slopes of kr with respect to the fitted
+// parameters, C their covariance and t Student's quantile. It is the band of the
+// curve, not of a further measurement; it is cut at 0. Where every parameter is
+// held or at a bound it is the curve itself. Outside the curves' ends the end
+// values hold. Source: Seber & Wild (1989), sec. 5.1.
+func (f Fit) Band(sw float64) (krwLow, krwHigh, kroLow, kroHigh float64) {
+	c := f.state
+	at := f.Curves.At(sw)
+	n := len(c.values)
+	slopes := [2][]float64{make([]float64, n), make([]float64, n)}
+	c.family.slopes(c.values, sw, at, slopes[0], slopes[1])
+	var half [2]float64
+	for k := range slopes {
+		g := make([]float64, len(c.active))
+		for p, j := range c.active {
+			g[p] = slopes[k][j]
+		}
+		half[k] = c.student * math.Sqrt(c.spread(g))
+	}
+	return max(at.Krw-half[0], 0), at.Krw + half[0], max(at.Kro-half[1], 0), at.Kro + half[1]
+}

@@ -112,13 +112,13 @@ func (f *field) reach(horizon float64, bounded bool) float64 {
 
 func (f *field) answer(s *sheet) {
 	s.answer("Water arrives after {field.breakthrough} ({field.injectedAtBreakthrough} injected) with {field.recoveryAtBreakthrough} of the pore volume produced")
-	what := "at the water cut of the limit"
+	limit := "at {field.limit} water cut"
 	if s.st.Field.Limit == "oilRate" {
-		what = "at the oil rate of the limit"
+		limit = "at an oil rate of {field.limit}"
 	}
 	switch f.limit.Outcome {
 	case reservoir.Reached:
-		s.answer("; "+what+", {field.limit}, after {field.limitTime}, it is {field.recoveryAtLimit}", ".")
+		s.answer("; "+limit+", after {field.limitTime}, it is {field.recoveryAtLimit}", ".")
 	case reservoir.FromTheStart:
 		s.answer("; the flood is beyond its limit from the start.")
 	default:

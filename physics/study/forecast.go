@@ -17,7 +17,7 @@ var steps = func() []float64 {
 }()
 
 // forecastRows is how long a forecast table may get.
-const forecastRows = 40
+const forecastRows = 24
 
 // forecast is the flood at even steps of time, years where that suits, to the end.
 func (f *field) forecast(start string) Grid {

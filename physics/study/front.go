@@ -53,7 +53,7 @@ func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, 
 	if _, _, shock := d.Front(); shock {
 		s.answer("; the water cut jumps to {front.surfaceCutAtBreakthrough} at surface")
 	}
-	s.answer("; after 1 PV it is {front.recoveryAtOne}", ".")
+	s.answer("; after 1 PV the recovery is {front.recoveryAtOne}", ".")
 	return s.close(rockPart.Status), f
 }
 

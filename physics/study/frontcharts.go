@@ -3,6 +3,7 @@ package study
 import (
 	"math"
 
+	"brinefront/physics/displace"
 	"brinefront/physics/fracflow"
 	"brinefront/physics/units"
 )
@@ -22,8 +23,12 @@ var saturationAxis = axis("Water saturation", "Sw", units.Fraction).from(0, 1)
 func (f *front) charts(s *sheet) {
 	end := math.Max(1.5, 3*f.displacement.Breakthrough())
 	s.part.Charts = append(s.part.Charts, f.flowChart(s), f.profileChart(s))
-	history := injections(f.displacement, end, 1)
-	s.part.Charts = append(s.part.Charts, f.recoveryChart(s, history), f.cutChart(s, history))
+	injected := injections(f.displacement, end, 1)
+	history := make([]displace.State, len(injected))
+	for i, q := range injected {
+		history[i] = f.displacement.After(q)
+	}
+	s.part.Charts = append(s.part.Charts, f.recoveryChart(s, injected, history), f.cutChart(injected, history))
 }
 
 // flowChart is the fractional flow curve with the straight pieces of its envelope.
@@ -121,29 +126,28 @@ func (f *front) profile(q float64) (x, sw []float64) {
 	return x, sw
 }
 
-func (f *front) recoveryChart(s *sheet, history []float64) Chart {
+func (f *front) recoveryChart(s *sheet, injected []float64, history []displace.State) Chart {
 	c := Chart{
 		ID: "front.recovery", Title: "Recovery",
 		X: axis("Water injected", "Q", units.PoreVolumes), Y: axis("Recovery", "R", units.Share).from(0, 1),
 		Marks: []Mark{{"breakthrough", s.number("front.breakthrough"), s.number("front.recoveryAtBreakthrough")}},
 	}
-	d := f.displacement
 	pore := make([]float64, len(history))
 	place, movable := make([]float64, len(history)), make([]float64, len(history))
-	for i, q := range history {
-		pore[i] = d.Recovery(q)
-		place[i], movable[i] = pore[i]/(1-f.swi), pore[i]/(f.swj-f.swi)
+	for i, state := range history {
+		pore[i] = state.Recovery
+		place[i], movable[i] = f.displacement.OfOilInPlace(pore[i]), f.displacement.OfMovableOil(pore[i])
 	}
 	c.Lines = []Line{
-		{ID: "pore", Label: "of the pore volume", Role: "oil", Kind: "line", X: history, Y: pore},
-		{ID: "place", Label: "of the oil in place", Role: "total", Kind: "line", X: history, Y: place},
-		{ID: "movable", Label: "of the movable oil", Role: "aid", Kind: "dashed", X: history, Y: movable},
+		{ID: "pore", Label: "of the pore volume", Role: "oil", Kind: "line", X: injected, Y: pore},
+		{ID: "place", Label: "of the oil in place", Role: "total", Kind: "line", X: injected, Y: place},
+		{ID: "movable", Label: "of the movable oil", Role: "aid", Kind: "dashed", X: injected, Y: movable},
 	}
 	c.Summary = "Recovery against pore volumes of water injected: a straight rise until breakthrough, then ever slower."
 	return c
 }
 
-func (f *front) cutChart(s *sheet, history []float64) Chart {
+func (f *front) cutChart(injected []float64, history []displace.State) Chart {
 	c := Chart{
 		ID: "front.waterCut", Title: "Water cut",
 		X: axis("Water injected", "Q", units.PoreVolumes), Y: axis("Water cut", "fw", units.Share).from(0, 1),
@@ -151,16 +155,12 @@ func (f *front) cutChart(s *sheet, history []float64) Chart {
 		Summary: "Water cut at the producer against pore volumes of water injected: it stays low until breakthrough, jumps, and then climbs slowly towards 100 %.",
 	}
 	reservoir, surface := make([]float64, len(history)), make([]float64, len(history))
-	for i, q := range history {
-		cut, _ := f.flow.At(f.swi)
-		if q > 0 {
-			_, cut = f.displacement.Outlet(q)
-		}
-		reservoir[i], surface[i] = cut, fracflow.SurfaceCut(cut, f.bw, f.bo)
+	for i, state := range history {
+		reservoir[i], surface[i] = state.Cut, fracflow.SurfaceCut(state.Cut, f.bw, f.bo)
 	}
 	c.Lines = []Line{
-		{ID: "surface", Label: "at surface", Role: "water", Kind: "line", X: history, Y: surface},
-		{ID: "reservoir", Label: "at reservoir conditions", Role: "aid", Kind: "dashed", X: history, Y: reservoir},
+		{ID: "surface", Label: "at surface", Role: "water", Kind: "line", X: injected, Y: surface},
+		{ID: "reservoir", Label: "at reservoir conditions", Role: "aid", Kind: "dashed", X: injected, Y: reservoir},
 	}
 	return c
 }

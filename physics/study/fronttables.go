@@ -47,10 +47,10 @@ func (f *front) volumeTable() Grid {
 	pore := Column{Label: "Recovery, of the pore volume", Quantity: units.Share}
 	place := Column{Label: "Recovery, of the oil in place", Quantity: units.Share}
 	for _, q := range injected.Values {
-		sw, cut := d.Outlet(q)
-		outlet.Values, average.Values = append(outlet.Values, sw), append(average.Values, d.Average(q))
-		reservoir.Values, surface.Values = append(reservoir.Values, cut), append(surface.Values, fracflow.SurfaceCut(cut, f.bw, f.bo))
-		pore.Values, place.Values = append(pore.Values, d.Recovery(q)), append(place.Values, d.OfOilInPlace(d.Recovery(q)))
+		state := d.After(q)
+		outlet.Values, average.Values = append(outlet.Values, state.Sw), append(average.Values, state.Average)
+		reservoir.Values, surface.Values = append(reservoir.Values, state.Cut), append(surface.Values, fracflow.SurfaceCut(state.Cut, f.bw, f.bo))
+		pore.Values, place.Values = append(pore.Values, state.Recovery), append(place.Values, d.OfOilInPlace(state.Recovery))
 	}
 	return Grid{ID: "front.volumes", Title: "After round volumes injected", Columns: []Column{injected, outlet, average, reservoir, surface, pore, place}}
 }

@@ -100,7 +100,7 @@ func TestReleasedDemoKeepsItsMeaning(t *testing.T) {
 	if in := st.Fluids.OilViscosity; in == nil || in.Value != 8.3 || in.Unit != "cp" {
 		t.Errorf("oil viscosity: %+v", in)
 	}
-	if table := st.Rock.Table; table == nil || len(table.Sw) != 12 || table.Sw[3] != 0.339 || table.Krw[3] != 0.00243 || table.Kro[3] != 0.523 {
+	if table := st.Rock.Table; table == nil || len(table.Sw) != 12 || table.Sw[3] != 0.339 || table.Krw[3] != 0.00219 || table.Kro[3] != 0.523 {
 		t.Errorf("table: %+v", table)
 	}
 	if st.Rock.Reference != "oil" || st.Field.Start != "2027-03-01" {

@@ -158,6 +158,8 @@ func TestWettabilitySigns(t *testing.T) {
 		{[6]float64{0.25, 0.3, 0.2, 0.9, 4, 2}, "All signs are those of water-wet rock"},
 		{[6]float64{0.08, 0.2, 0.8, 0.9, 2, 4}, "All signs are those of oil-wet rock"},
 		{[6]float64{0.25, 0.2, 0.8, 0.9, 2, 4}, "The signs do not agree"},
+		{[6]float64{0.25, 0.3, 0.36, 0.9, 4, 2}, "Signs of water-wet rock, none of oil-wet rock"},
+		{[6]float64{0.08, 0.2, 0.36, 0.9, 2, 4}, "Signs of oil-wet rock, none of water-wet rock"},
 	} {
 		notes := Run(typed(c.corey, 1e-3, 2e-3)).Parts[SheetRock].Notes
 		i := slices.IndexFunc(notes, func(n Note) bool { return n.ID == "rock.wettability" })

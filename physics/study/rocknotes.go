@@ -39,7 +39,7 @@ func (r *rock) notes(s *sheet) {
 func (r *rock) fitNotes(s *sheet) {
 	if len(r.fitted.Verdict) > 0 {
 		s.note(Note{ID: "rock.fit", Level: "remark", Text: strings.Join(r.fitted.Verdict, " "),
-			Cause: "Root mean square of curve minus point: " + units.Format(r.fitted.RMSKrw, 2) + " in krw, " + units.Format(r.fitted.RMSKro, 2) + " in kro.", Do: "Compare with the table itself and with the other family.", Paths: []string{"rock.curve"}})
+			Cause: "A fit smooths the scatter of the points and keeps to the shape of its family.", Do: "Compare with the table itself and with the other family.", Paths: []string{"rock.curve"}})
 	}
 	if r.fitted.Status != fit.Converged {
 		s.note(Note{ID: "rock.fitStopped", Level: "caution", Text: "The fit stopped short: " + r.fitted.Status.String() + ".",
@@ -78,11 +78,15 @@ func (r *rock) wettability(s *sheet) {
 		texts = append(texts, sign.text+" ("+points+")")
 	}
 	verdict := "The signs do not agree: intermediate or mixed wettability, or curves that deserve a second look."
-	switch len(signs) {
-	case water:
+	switch {
+	case water == len(signs):
 		verdict = "All signs are those of water-wet rock."
-	case oil:
+	case oil == len(signs):
 		verdict = "All signs are those of oil-wet rock."
+	case water > 0 && oil == 0:
+		verdict = "Signs of water-wet rock, none of oil-wet rock."
+	case oil > 0 && water == 0:
+		verdict = "Signs of oil-wet rock, none of water-wet rock."
 	}
 	s.note(Note{ID: "rock.wettability", Level: "remark", Text: verdict + " By Craig's rules of thumb (1971): " + strings.Join(texts, "; ") + ".",
 		Cause: "Rules of thumb, not a measurement.", Do: "Confirm with an Amott or USBM test where it matters.", Paths: r.inputs})

@@ -23,7 +23,7 @@ func Demo() Study {
 	st.Rock.Reference = "oil"
 	st.Rock.Table = &Table{
 		Sw:     []float64{0.227, 0.256, 0.295, 0.339, 0.383, 0.427, 0.471, 0.516, 0.56, 0.604, 0.657, 0.716},
-		Krw:    []float64{0, 2.9e-05, 0.000444, 0.00243, 0.00733, 0.0156, 0.0312, 0.0517, 0.0868, 0.126, 0.201, 0.304},
+		Krw:    []float64{0, 2.6e-05, 0.0004, 0.00219, 0.0066, 0.014, 0.0281, 0.0465, 0.0781, 0.113, 0.181, 0.274},
 		Kro:    []float64{1, 0.853, 0.71, 0.523, 0.408, 0.286, 0.184, 0.12, 0.0675, 0.0285, 0.00648, 0},
 		Source: invented,
 	}
@@ -38,14 +38,14 @@ func Demo() Study {
 
 		{"rock.corey.swc", 0.227, "fraction"},
 		{"rock.corey.sor", 0.284, "fraction"},
-		{"rock.corey.krw0", 0.304, "fraction"},
+		{"rock.corey.krw0", 0.274, "fraction"},
 		{"rock.corey.kro0", 1, "fraction"},
 		{"rock.corey.nw", 3.3, ""},
 		{"rock.corey.no", 2.4, ""},
 
 		{"rock.let.swc", 0.227, "fraction"},
 		{"rock.let.sor", 0.284, "fraction"},
-		{"rock.let.krw0", 0.304, "fraction"},
+		{"rock.let.krw0", 0.274, "fraction"},
 		{"rock.let.kro0", 1, "fraction"},
 		{"rock.let.lw", 3.1, ""},
 		{"rock.let.ew", 2.7, ""},

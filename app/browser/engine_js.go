@@ -44,7 +44,7 @@ func (e *Engine) Post(text string) {
 // Stop ends the worker at once, whatever it is doing; it says nothing any more.
 func (e *Engine) Stop() {
 	if e.worker.Truthy() && !e.stopped {
+		e.stopped = true
 		e.worker.Call("stop")
 	}
-	e.stopped = true
 }

@@ -1,6 +1,9 @@
 package browser
 
-import "syscall/js"
+import (
+	"errors"
+	"syscall/js"
+)
 
 // Download hands a file to the person: a temporary link is clicked, which the
 // interface's own link handling passes by because it carries a name to save as.
@@ -100,6 +103,6 @@ func read(file js.Value, limit int, done func(name, data string, err error)) {
 		n := js.CopyBytesToGo(data, js.Global().Get("Uint8Array").New(buffer))
 		done(name, string(data[:n]), nil)
 	}, func(cause js.Value) {
-		done(name, "", refused("read the file "+name, js.Error{Value: cause}))
+		done(name, "", refused("read the file "+name, errors.New(words(cause))))
 	})
 }

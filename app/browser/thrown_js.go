@@ -2,6 +2,7 @@ package browser
 
 import (
 	"errors"
+	"strings"
 	"syscall/js"
 )
 
@@ -22,12 +23,13 @@ func attempt(calls func()) (err error) {
 	return nil
 }
 
-// words is the message of whatever was thrown or rejected.
+// words is the message of whatever was thrown or rejected, to stand within a sentence.
 func words(thrown js.Value) string {
+	text := thrown
 	if thrown.Type() == js.TypeObject && thrown.Get("message").Type() == js.TypeString {
-		return thrown.Get("message").String()
+		text = thrown.Get("message")
 	}
-	return js.Global().Call("String", thrown).String()
+	return strings.TrimRight(js.Global().Call("String", text).String(), ".")
 }
 
 func document() js.Value { return js.Global().Get("document") }

@@ -17,7 +17,7 @@ export function placeLabels(lay, marks) {
   for (const m of marks) {
     const dot = { x: lay.x.dot(m.x), y: lay.y.dot(m.y) };
     if (!inside(dot, lay.rect)) continue;
-    take(m.label, null, [...beside(dot, 8), ...beside(dot, 18, 8)], false);
+    take(m.label, null, [...beside(dot, 8), ...beside(dot, 18, 8), ...beside(dot, 34, 16), ...over(dot, 8, 6)], false);
   }
   // Free ends of lines are the clearest places: they are given away first.
   for (const c of drawn.filter((c) => lay.endLabels.has(c.line.id))) {
@@ -34,12 +34,14 @@ export function placeLabels(lay, marks) {
 
   function take(text, line, anchors, optional) {
     const w = lay.measure(text), h = lineHeight;
+    const right = line ? lay.rect.right : lay.width - 2; // a mark's words may use the margin
+    const far = line ? clear : clear / 2;
     let best = null;
     for (const a of anchors) {
-      const box = { x: a.x - (a.leftwards ? w : 0), y: a.y - (a.upwards ? h : 0), w, h };
-      if (box.x < lay.rect.left + 2 || box.x + w > lay.rect.right || box.y < lay.rect.top - 12 || box.y + h > lay.rect.bottom) continue;
+      const box = { x: a.x - (a.leftwards ? w : a.centred ? w / 2 : 0), y: a.y - (a.upwards ? h : 0), w, h };
+      if (box.x < lay.rect.left + 2 || box.x + w > right || box.y < lay.rect.top - 12 || box.y + h > lay.rect.bottom) continue;
       if (placed.some((p) => touches(box, p))) continue;
-      let crossed = 0, nearest = clear;
+      let crossed = 0, nearest = far;
       for (const s of samples) {
         if (s.x < box.x - clear || s.x > box.x + w + clear || s.y < box.y - clear || s.y > box.y + h + clear) continue;
         const d = distance(s, box);
@@ -77,6 +79,9 @@ function sample({ line, dots }, rect) {
   }
   return list;
 }
+
+// over are the places right above and below a dot.
+const over = ({ x, y }, d, cost) => [{ x, y: y - d, upwards: true, centred: true, cost }, { x, y: y + d, centred: true, cost }];
 
 const inside = ({ x, y }, r) => x >= r.left && x <= r.right && y >= r.top && y <= r.bottom;
 const touches = (a, b) => a.x < b.x + b.w + 6 && b.x < a.x + a.w + 6 && a.y < b.y + b.h && b.y < a.y + a.h;

@@ -34,7 +34,7 @@ function standalone(picture, state, family) {
 <title>${text(picture.title)}</title>
 <desc>${text(picture.summary)}</desc>
 <rect width="100%" height="100%" fill="#ffffff"/>
-<text x="12" y="20" font-weight="600" ${font}>${text(picture.title)}</text>
+<text x="2" y="20" font-weight="600" ${font}>${text(picture.title)}</text>
 <g transform="translate(0 ${band})">${inner}</g>
 </svg>
 `;

@@ -28,6 +28,7 @@ const rules = `
 .plot-unseen { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
 @media print {
   .plot { break-inside: avoid; }
+  .plot-figure { outline: none !important; }
   .plot-acts, .plot-hint, .plot-hair, .plot-box, .plot-slip, .plot-line[aria-pressed="false"] { display: none !important; }
   .plot-row button { color: #1d2226; }
   .plot-figure, .plot-canvas, .plot-canvas > div, .plot-canvas svg { width: 100% !important; height: auto !important; }

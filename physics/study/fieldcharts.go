@@ -81,9 +81,11 @@ func (f *field) chart(s *sheet, c Chart, lines ...Line) {
 // when no water flows together with oil within the forecast.
 func (f *field) ratioChart() (Chart, bool) {
 	l := Line{ID: "ratio", Label: "water-oil ratio", Role: "water", Kind: "line"}
+	oil := 0.0
 	for _, state := range f.history {
 		if state.WOR > 0 && !math.IsInf(state.WOR, 1) {
-			l.X, l.Y = append(l.X, state.CumOil), append(l.Y, state.WOR)
+			oil = math.Max(oil, state.CumOil) // late in a flood it stands still but for rounding
+			l.X, l.Y = append(l.X, oil), append(l.Y, state.WOR)
 		}
 	}
 	return Chart{ID: "field.waterOilRatio", Title: "Water-oil ratio", X: axis("Oil produced, surface", "Np", units.Volume),

@@ -1,0 +1,86 @@
+package study
+
+import (
+	"math"
+	"math/rand/v2"
+	"slices"
+	"testing"
+
+	"brinefront/physics/units"
+)
+
+// TestRandomStudiesAreSound runs studies of lawful but arbitrary content, always
+// the same ones.
+func TestRandomStudiesAreSound(t *testing.T) {
+	const count = 300
+	answered := 0
+	for seed := range uint64(count) {
+		st := randomStudy(rand.New(rand.NewPCG(seed, 7)))
+		if _, err := Read(Write(st)); err != nil {
+			t.Fatalf("seed %d: no lawful study: %v", seed, err)
+		}
+		r := Run(st)
+		if r.Parts[SheetField].Status == Ready {
+			answered++
+		}
+		for _, fault := range faults(r) {
+			t.Errorf("seed %d: %s", seed, fault)
+		}
+	}
+	if answered < count/10 {
+		t.Errorf("only %d of %d are answered to the end", answered, count)
+	}
+}
+
+// randomStudy draws every choice, most inputs and a table. Half of the inputs lie
+// near the demonstration's, the rest anywhere in their range.
+func randomStudy(r *rand.Rand) Study {
+	st := Demo()
+	for _, f := range choiceFields {
+		*f.at(&st) = f.list[r.IntN(len(f.list))].Value
+	}
+	for _, spec := range Specs() {
+		unit := units.Of(spec.Quantity)[r.IntN(len(units.Of(spec.Quantity)))]
+		in := spec.Get(&st)
+		switch dice := r.Float64(); {
+		case dice < 0.03:
+			spec.Set(&st, nil)
+			continue
+		case in == nil && dice < 0.8:
+			continue
+		case in != nil && dice < 0.9:
+			from, _ := units.Find(spec.Quantity, in.Unit)
+			in = &Input{Value: unit.FromSI(from.ToSI(in.Value) * math.Exp(0.4*r.NormFloat64())), Unit: unit.Symbol}
+		default:
+			share := math.Pow(r.Float64(), 3)
+			in = &Input{Value: unit.FromSI(spec.Min + share*(spec.Max-spec.Min)), Unit: unit.Symbol}
+		}
+		if Check(spec, in.Value, unit) == nil {
+			spec.Set(&st, in)
+		}
+	}
+	st.Rock.Table = randomTable(r)
+	return st
+}
+
+// randomTable is a table of a few to some dozens of rows: most rise and fall as
+// they must, some are rough, a few are out of order.
+func randomTable(r *rand.Rand) *Table {
+	rows := 1 + r.IntN(30)
+	t := &Table{}
+	for range rows {
+		t.Sw = append(t.Sw, math.Round(1000*(0.1+0.8*r.Float64()))/1000)
+		t.Krw = append(t.Krw, r.Float64()*math.Pow(10, -3*r.Float64()))
+		t.Kro = append(t.Kro, r.Float64()*math.Pow(10, -3*r.Float64()))
+	}
+	if r.Float64() < 0.9 {
+		slices.Sort(t.Sw)
+		slices.Sort(t.Krw)
+		slices.Sort(t.Kro)
+		slices.Reverse(t.Kro)
+	}
+	if r.Float64() < 0.7 {
+		t.Krw[0], t.Kro[rows-1] = 0, 0
+	}
+	return t
+}

@@ -163,7 +163,7 @@ func (c confidence) matrices(n int) (covariance, correlation [][]float64) {
 	for p, j := range c.active {
 		for q, k := range c.active {
 			v := c.covariance.At(p, q)
-			covariance[j][k] = v * c.outward(j) * c.outward(k)
+			covariance[j][k] = v * (c.outward(j) * c.outward(k)) // the same both ways round
 			if scale := math.Sqrt(c.covariance.At(p, p) * c.covariance.At(q, q)); p != q && scale > 0 {
 				correlation[j][k] = min(max(v/scale, -1), 1)
 			}

@@ -61,7 +61,7 @@ type Options struct {
 	HoldEnds bool
 	// Hold holds parameters, by symbol, at values within their bounds. Default: none.
 	Hold map[string]float64
-	// Iterations limits the work of the minimiser for each start. Default 200.
+	// Iterations limits the work of the minimiser for each start. Default 500.
 	Iterations int
 }
 

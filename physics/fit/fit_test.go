@@ -4,13 +4,10 @@ import (
 	_ "embed"
 	"encoding/json"
 	"errors"
-	"fmt"
 	"math"
 	"math/rand/v2"
 	"strings"
 	"testing"
-
-	"gonum.org/v1/gonum/stat"
 
 	"brinefront/physics/relperm"
 )
@@ -151,109 +148,6 @@ func TestSlopes(t *testing.T) {
 	}
 }
 
-// noisy adds seeded normal errors with the standard deviation that relative weights
-// assume, share times the larger of kr and the floor. The rows at the ends keep
-// their zeros.
-func noisy(p Points, share float64, seed uint64) Points {
-	return noisyAbove(p, share, defaultFloor, seed)
-}
-
-func noisyAbove(p Points, share, floor float64, seed uint64) Points {
-	random := rand.New(rand.NewPCG(seed, 7))
-	q := Points{Sw: p.Sw, Krw: append([]float64(nil), p.Krw...), Kro: append([]float64(nil), p.Kro...)}
-	for _, kr := range [][]float64{q.Krw, q.Kro} {
-		for i, v := range kr {
-			if v > 0 {
-				kr[i] = max(v+share*max(v, floor)*random.NormFloat64(), 0)
-			}
-		}
-	}
-	return q
-}
-
-// TestCoverage: over 400 seeded tables the 95 % intervals hold the true parameters,
-// and the 95 % bands the true curves, about 95 % of the times. 90 to 99 % is more
-// than four standard deviations of such a count to either side, curvature included.
-func TestCoverage(t *testing.T) {
-	const times = 400
-	for _, test := range []struct {
-		name  string
-		fit   func(Points, Options) (Fit, error)
-		c     relperm.Curves
-		want  []float64
-		share float64
-	}{{"Corey", Corey, trueCorey, coreyValues(trueCorey), 0.03}, {"LET", LET, trueLET, letValues(trueLET), 0.01}} {
-		exact := table(test.c, 13)
-		inside := map[string]int{}
-		for seed := range uint64(times) {
-			f, err := test.fit(noisy(exact, test.share, seed), Options{})
-			if err != nil {
-				t.Fatal(err)
-			}
-			for j, p := range f.Parameters {
-				if !p.Held && p.Low <= test.want[j] && test.want[j] <= p.High {
-					inside[p.Symbol]++
-				}
-			}
-			for _, sw := range []float64{0.35, 0.5, 0.65} {
-				krwLow, krwHigh, kroLow, kroHigh := f.Band(sw)
-				at := test.c.At(sw)
-				if krwLow <= at.Krw && at.Krw <= krwHigh {
-					inside[fmt.Sprintf("krw at %g", sw)]++
-				}
-				if kroLow <= at.Kro && at.Kro <= kroHigh {
-					inside[fmt.Sprintf("kro at %g", sw)]++
-				}
-			}
-		}
-		if len(inside) != len(test.want)-2+6 {
-			t.Errorf("%s: counted %v", test.name, inside)
-		}
-		for what, n := range inside {
-			if n < times*90/100 || n > times*99/100 {
-				t.Errorf("%s: %s is inside %d times of %d", test.name, what, n, times)
-			}
-		}
-	}
-}
-
-// TestLogLinear: with the end point held and errors growing small, relative least
-// squares tends to the straight line through the origin of ln(kr/kr0) against ln s,
-// whose slope gonum's stat.LinearRegression gives independently. The two differ by
-// the square of the errors: a tenth of the errors, a hundredth of the difference.
-func TestLogLinear(t *testing.T) {
-	exact := table(trueCorey, 13)
-	hold := map[string]float64{"krw0": trueCorey.Krw0, "kro0": trueCorey.Kro0}
-	var difference [2][2]float64
-	for k, share := range []float64{1e-3, 1e-4} {
-		p := noisyAbove(exact, share, 0, 11)
-		f, err := Corey(p, Options{Hold: hold, Floor: 1e-9})
-		if err != nil {
-			t.Fatal(err)
-		}
-		for j, kr := range [][]float64{p.Krw, p.Kro} {
-			var x, y []float64
-			for i, sw := range p.Sw[1:12] {
-				s := (sw - trueCorey.Swc) / (1 - trueCorey.Swc - trueCorey.Sor)
-				if j == 1 {
-					s = 1 - s
-				}
-				x, y = append(x, math.Log(s)), append(y, math.Log(kr[i+1]/[]float64{trueCorey.Krw0, trueCorey.Kro0}[j]))
-			}
-			_, slope := stat.LinearRegression(x, y, nil, true)
-			difference[k][j] = math.Abs(f.Parameters[iShape+j].Value - slope)
-			if difference[k][j] > 10*share*share {
-				t.Errorf("errors of %g: %s = %.10g, regression %.10g", share, f.Parameters[iShape+j].Symbol, f.Parameters[iShape+j].Value, slope)
-			}
-		}
-	}
-	for j := range 2 {
-		if ratio := difference[0][j] / difference[1][j]; ratio < 30 || ratio > 300 {
-			t.Errorf("a tenth of the errors makes the difference %.3g times smaller, want about 100", ratio)
-		}
-	}
-}
-
 // TestDake fits the table of Dake (1978), exercise 10.1.
 func TestDake(t *testing.T) {
 	p := dake(t)
@@ -376,81 +270,6 @@ func TestStudent(t *testing.T) {
 	}
 }
 
-// TestAtBound: points more bent than any lawful exponent push no to its bound 1.
-func TestAtBound(t *testing.T) {
-	p := table(trueCorey, 13)
-	for i, sw := range p.Sw {
-		p.Kro[i] = 0.83 * math.Sqrt(max(1-trueCorey.Sor-sw, 0)/(1-trueCorey.Swc-trueCorey.Sor))
-	}
-	f, err := Corey(p, Options{})
-	if err != nil {
-		t.Fatal(err)
-	}
-	no := f.Parameters[5]
-	if no.Value != 1 || !no.AtBound || no.StdErr != 0 || no.Low != 1 || no.High != 1 || no.Determined {
-		t.Errorf("no %+v", no)
-	}
-	says(t, f, "no lies at its bound 1")
-	checkMatrices(t, f)
-	checkBand(t, f)
-	// krw was exact and is fitted apart, so it is found again.
-	if !near(f.Parameters[4].Value, trueCorey.Nw, 1e-8) || f.DegreesOfFreedom != 24-3 {
-		t.Errorf("nw %+v, %d degrees of freedom", f.Parameters[4], f.DegreesOfFreedom)
-	}
-}
-
-func says(t *testing.T, f Fit, want string) {
-	t.Helper()
-	if !strings.Contains(strings.Join(f.Verdict, "\n"), want) {
-		t.Errorf("verdict %q does not say %q", f.Verdict, want)
-	}
-}
-
-func TestVerdict(t *testing.T) {
-	p := table(trueCorey, 13)
-	f, err := Corey(p, Options{})
-	if err != nil {
-		t.Fatal(err)
-	}
-	says(t, f, "The points determine every fitted parameter.")
-
-	p = noisy(p, 0.005, 4)
-	p.Krw[8] *= 1.3
-	if f, err = Corey(p, Options{}); err != nil {
-		t.Fatal(err)
-	}
-	says(t, f, fmt.Sprintf("lies krw at Sw = %.4g.", p.Sw[8]))
-
-	// Few and scattered rows leave the shape of LET open.
-	if f, err = LET(noisy(table(trueLET, 7), 0.1, 2), Options{}); err != nil {
-		t.Fatal(err)
-	}
-	says(t, f, "is not determined by these points")
-
-	// Rows next to one end only: krw is a multiple of krw0 s^nw over a narrow s.
-	near := sample(trueCorey, trueCorey.Swc, trueCorey.Swc+0.05, 9)
-	if f, err = Corey(noisy(near, 0.2, 9), Options{FreeSaturations: true}); err != nil {
-		t.Fatal(err)
-	}
-	says(t, f, "is not determined by these points")
-	for _, sentence := range f.Verdict {
-		if strings.Contains(sentence, "NaN") || strings.Contains(sentence, "Inf") {
-			t.Errorf("verdict %q", sentence)
-		}
-	}
-
-	// The printed table of Dake is not a Corey curve up to its oil end.
-	if f, err = Corey(dake(t), Options{}); err != nil {
-		t.Fatal(err)
-	}
-	says(t, f, "where the points have 0.8 at Sw = 0.2")
-
-	if f, err = LET(dake(t), Options{Iterations: 2}); err != nil || f.Status != IterationLimit {
-		t.Fatalf("status %v, %v", f.Status, err)
-	}
-	says(t, f, "iteration limit")
-}
-
 // TestHold: what is held stays and has no error.
 func TestHold(t *testing.T) {
 	f, err := Corey(table(trueCorey, 13), Options{Hold: map[string]float64{"nw": 4, "krw0": 0.3, "kro0": 0.8, "no": 2}})
@@ -501,24 +320,5 @@ func TestRefused(t *testing.T) {
 		if _, err := test.fit(table(trueCorey, test.n), Options{}); err == nil || !strings.Contains(err.Error(), test.want) {
 			t.Errorf("error %v, want %q", err, test.want)
 		}
-	}
-}
-
-func BenchmarkFit(b *testing.B) {
-	for _, bench := range []struct {
-		name string
-		fit  func(Points, Options) (Fit, error)
-		p    Points
-	}{
-		{"Corey 13 rows", Corey, dake(b)}, {"LET 13 rows", LET, dake(b)},
-		{"Corey 10000 rows", Corey, noisy(table(trueCorey, 10_000), 0.03, 1)}, {"LET 10000 rows", LET, noisy(table(trueLET, 10_000), 0.03, 1)},
-	} {
-		b.Run(bench.name, func(b *testing.B) {
-			for b.Loop() {
-				if _, err := bench.fit(bench.p, Options{}); err != nil {
-					b.Fatal(err)
-				}
-			}
-		})
 	}
 }

@@ -11,7 +11,7 @@ import (
 
 const (
 	defaultFloor      = 0.01
-	defaultIterations = 200
+	defaultIterations = 500
 	thinnedRows       = 64    // a longer table is thinned to this while starts are tried
 	atEnd             = 1e-12 // saturations closer than this are the same
 )
@@ -180,8 +180,8 @@ func (t *task) solve() {
 			continue
 		}
 		var best minimum
-		for k, start := range t.family.starts {
-			if m := t.minimise(b, few, t.start(b, start)); k == 0 || m.sum < best.sum {
+		for k, x := range t.starts(b) {
+			if m := t.minimise(b, few, x); k == 0 || m.sum < best.sum {
 				best = m
 			}
 		}
@@ -199,21 +199,34 @@ func (t *task) solve() {
 	}
 }
 
-// start is the vector that a block starts from. Free saturations start a little
-// inside their bound, where both curves respond to them.
-func (t *task) start(b block, shape []float64) []float64 {
-	x := make([]float64, len(b.free))
-	for p, j := range b.free {
-		switch {
-		case j < iKrw0:
-			x[p] = 0.9 * t.high[j]
-		case j < iShape:
-			x[p] = t.values[j]
-		default:
-			x[p] = shape[(j-iShape)%t.family.shapes]
+// starts are the vectors that a block starts from: every shape of the family, and
+// with free saturations each from their bound and from well inside. These reach the
+// least sum of squares of noisy invented tables when the saturations are held; when
+// they are free, LET may stop at a neighbouring minimum whose sum is larger by a
+// percent or two, far less than its error.
+func (t *task) starts(b block) [][]float64 {
+	shares := []float64{1}
+	if len(b.phases) > 1 {
+		shares = []float64{1, 0.7}
+	}
+	var list [][]float64
+	for _, shape := range t.family.starts {
+		for _, share := range shares {
+			x := make([]float64, len(b.free))
+			for p, j := range b.free {
+				switch {
+				case j < iKrw0:
+					x[p] = share * t.high[j]
+				case j < iShape:
+					x[p] = t.values[j]
+				default:
+					x[p] = shape[(j-iShape)%t.family.shapes]
+				}
+			}
+			list = append(list, x)
 		}
 	}
-	return x
+	return list
 }
 
 // take sets the parameters of a block from what the minimiser moves.

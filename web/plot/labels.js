@@ -5,7 +5,7 @@
 import { lineHeight } from "./layout.js";
 
 const spacing = 6; // dots between samples of a line
-const every = 3; // samples between places tried
+const tries = 30; // places tried along a line
 const gap = 5; // between a line and its label
 const clear = 30; // farther from other lines than this is no better
 
@@ -14,10 +14,10 @@ export function placeLabels(lay, marks) {
   const drawn = lay.courses.filter((c) => c.shown && c.line.kind !== "band");
   const samples = drawn.flatMap((c) => sample(c, lay.rect).map(([x, y]) => ({ x, y, of: c.line })));
   const placed = [];
-  for (const m of marks) {
-    const dot = { x: lay.x.dot(m.x), y: lay.y.dot(m.y) };
-    if (!inside(dot, lay.rect)) continue;
-    take(m.label, null, [...beside(dot, 8), ...beside(dot, 18, 8), ...beside(dot, 34, 16), ...over(dot, 8, 6)], false);
+  const points = marks.map((m) => ({ x: lay.x.dot(m.x), y: lay.y.dot(m.y), of: m, mark: true })).filter((m) => inside(m, lay.rect));
+  samples.push(...points);
+  for (const dot of points) {
+    take(dot.of.label, null, around(dot), false);
   }
   // Free ends of lines are the clearest places: they are given away first.
   for (const c of drawn.filter((c) => lay.endLabels.has(c.line.id))) {
@@ -27,7 +27,8 @@ export function placeLabels(lay, marks) {
   for (const c of drawn) {
     if (lay.endLabels.has(c.line.id)) continue;
     const own = samples.filter((s) => s.of === c.line);
-    const tried = own.filter((_, i) => i % every === 0);
+    const stride = Math.ceil(own.length / tries);
+    const tried = own.filter((_, i) => i % stride === 0);
     take(c.line.label, c.line, tried.flatMap((s) => beside(s, gap)), c.line.kind === "points");
   }
   return placed;
@@ -45,7 +46,7 @@ export function placeLabels(lay, marks) {
       for (const s of samples) {
         if (s.x < box.x - clear || s.x > box.x + w + clear || s.y < box.y - clear || s.y > box.y + h + clear) continue;
         const d = distance(s, box);
-        if (d < 2) crossed++;
+        if (d < 2 || (s.mark && d < 5)) crossed += s.mark ? 5 : 1;
         else if (s.of !== line) nearest = Math.min(nearest, d);
       }
       const score = nearest - 12 * crossed - a.cost;
@@ -63,24 +64,32 @@ function beside({ x, y }, d, cost = 0) {
   ];
 }
 
-// sample walks along what is seen of a course.
+// sample walks along what is seen of a course: one dot for each small cell of the
+// picture that it meets, so that ten thousand points cost no more than a few hundred.
 function sample({ line, dots }, rect) {
-  if (line.kind === "points") return dots.filter((d) => d && inside({ x: d[0], y: d[1] }, rect));
-  const list = [];
-  for (let i = 1; i < dots.length; i++) {
-    const a = dots[i - 1], b = dots[i];
-    if (!a || !b) continue;
-    const n = Math.max(1, Math.ceil(Math.min(4000, Math.hypot(b[0] - a[0], b[1] - a[1])) / spacing));
-    for (let k = 0; k < n; k++) {
-      const x = a[0] + ((b[0] - a[0]) * k) / n, y = a[1] + ((b[1] - a[1]) * k) / n;
-      const last = list.at(-1);
-      if (inside({ x, y }, rect) && !(last && Math.hypot(x - last[0], y - last[1]) < spacing)) list.push([x, y]);
-    }
-  }
+  const list = [], met = new Set();
+  const visit = (x, y) => {
+    if (!inside({ x, y }, rect)) return;
+    const cell = Math.round(x / spacing) * 10000 + Math.round(y / spacing);
+    if (met.has(cell)) return;
+    met.add(cell);
+    list.push([x, y]);
+  };
+  dots.forEach((b, i) => {
+    const a = line.kind === "points" ? null : dots[i - 1];
+    if (!b) return;
+    if (!a) return visit(b[0], b[1]);
+    const n = Math.max(1, Math.ceil(Math.min(4000, Math.hypot(b[0] - a[0], b[1] - a[1])) / spacing)) || 1;
+    for (let k = 1; k <= n; k++) visit(a[0] + ((b[0] - a[0]) * k) / n, a[1] + ((b[1] - a[1]) * k) / n);
+  });
   return list;
 }
 
-// over are the places right above and below a dot.
+// around are the places a mark's words may take, the nearest worth most.
+const around = (dot) => [
+  ...beside(dot, 8), ...beside(dot, 18, 8), ...beside(dot, 34, 16), ...over(dot, 8, 6), ...over(dot, 26, 20), ...over(dot, 44, 30),
+];
+
 const over = ({ x, y }, d, cost) => [{ x, y: y - d, upwards: true, centred: true, cost }, { x, y: y + d, centred: true, cost }];
 
 const inside = ({ x, y }, r) => x >= r.left && x <= r.right && y >= r.top && y <= r.bottom;

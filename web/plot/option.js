@@ -41,7 +41,7 @@ function seriesOf(course, lay, palette) {
   switch (line.kind) {
     case "points":
       return [{
-        ...base, type: "scatter", z: 4, data: data(), symbol: style.marker, symbolSize: style.marker === "rect" ? 7 : 8,
+        ...base, type: "scatter", z: 4, data: apart(course, data()), symbol: style.marker, symbolSize: style.marker === "rect" ? 7 : 8,
         itemStyle: { color: palette.paper, borderColor: style.colour, borderWidth: 1.5, opacity: 1 },
       }];
     case "band":
@@ -54,11 +54,21 @@ function seriesOf(course, lay, palette) {
   }
 }
 
+// apart leaves out markers that would lie on another to within a dot or two: a
+// drawing of thousands is slow and shows no more. A closer view shows them again.
+function apart({ dots }, data) {
+  const met = new Set();
+  return data.filter((_, i) => {
+    const cell = `${Math.round(dots[i][0] / 2)} ${Math.round(dots[i][1] / 2)}`;
+    return !met.has(cell) && met.add(cell);
+  });
+}
+
 // words is a series that draws given shapes at given dots.
 function words(id, children, z) {
   return {
     id, type: "custom", coordinateSystem: "none", silent: true, z, data: [0], emphasis: { disabled: true },
-    renderItem: () => ({ type: "group", children: children() }),
+    renderItem: () => ({ type: "group", $mergeChildren: false, children: children() }),
   };
 }
 

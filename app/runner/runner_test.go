@@ -1,0 +1,489 @@
+package runner
+
+import (
+	"encoding/json"
+	"errors"
+	"slices"
+	"strings"
+	"testing"
+	"time"
+
+	"brinefront/app/browser"
+	"brinefront/app/state"
+	"brinefront/app/wire"
+	"brinefront/physics/study"
+)
+
+// bench is the interface without a screen: a model, a runner, a browser that the
+// test plays, and a clock that the test moves on.
+type bench struct {
+	t      *testing.T
+	model  state.Model
+	runner *Runner
+	came   []state.Msg // all that the runner has delivered
+
+	now    time.Duration
+	timers []timer
+}
+
+type timer struct {
+	due time.Duration
+	do  func()
+}
+
+func newBench(t *testing.T) *bench {
+	browser.Pretend.Reset()
+	t.Cleanup(browser.Pretend.Reset)
+	b := &bench{t: t, model: state.New()}
+	b.runner = newWith(b.send, func(wait time.Duration, do func()) {
+		b.timers = append(b.timers, timer{b.now + wait, do})
+	})
+	return b
+}
+
+// started is a bench of which the first study is computed.
+func started(t *testing.T) *bench {
+	b := newBench(t)
+	b.runner.Start()
+	b.wait(time.Second)
+	b.reply()
+	if !b.runner.Idle() {
+		t.Fatal("something is pending after the first answer")
+	}
+	b.came = nil
+	return b
+}
+
+func (b *bench) send(msg state.Msg) {
+	b.came = append(b.came, msg)
+	b.act(msg)
+}
+
+// act is what the person does.
+func (b *bench) act(msg state.Msg) {
+	var effects []state.Effect
+	b.model, effects = state.Update(b.model, msg)
+	b.runner.Do(effects)
+}
+
+// wait moves the clock on and has everything done that is due.
+func (b *bench) wait(d time.Duration) {
+	end := b.now + d
+	for {
+		slices.SortStableFunc(b.timers, func(x, y timer) int { return int(x.due - y.due) })
+		if len(b.timers) == 0 || b.timers[0].due > end {
+			break
+		}
+		first := b.timers[0]
+		b.timers = b.timers[1:]
+		b.now = first.due
+		first.do()
+	}
+	b.now = end
+}
+
+// engine is the newest one.
+func (b *bench) engine() *browser.Engine {
+	b.t.Helper()
+	all := browser.Pretend.Engines()
+	if len(all) == 0 {
+		b.t.Fatal("no engine was started")
+	}
+	return all[len(all)-1]
+}
+
+// asked lists what the newest engine was asked.
+func (b *bench) asked() []wire.Request {
+	b.t.Helper()
+	var list []wire.Request
+	for _, text := range b.engine().Posted() {
+		var request wire.Request
+		if err := json.Unmarshal([]byte(text), &request); err != nil {
+			b.t.Fatal(err)
+		}
+		list = append(list, request)
+	}
+	return list
+}
+
+func (b *bench) last() wire.Request {
+	b.t.Helper()
+	list := b.asked()
+	if len(list) == 0 {
+		b.t.Fatal("the engine was asked nothing")
+	}
+	return list[len(list)-1]
+}
+
+// reply answers the newest request as the engine would.
+func (b *bench) reply() {
+	b.t.Helper()
+	asked := b.last()
+	answer := wire.Reply{ID: asked.ID, Kind: asked.Kind}
+	if asked.Kind == wire.Run {
+		result := study.Run(*asked.Study)
+		answer.Result = &result
+	}
+	b.answer(answer)
+}
+
+func (b *bench) answer(reply wire.Reply) {
+	b.t.Helper()
+	text, err := json.Marshal(reply)
+	if err != nil {
+		b.t.Fatal(err)
+	}
+	b.engine().Reply(string(text))
+}
+
+// kept is what the browser holds under a key; "" for nothing.
+func kept(t *testing.T, key string) string {
+	t.Helper()
+	text, _, err := browser.Load(key)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return text
+}
+
+func title(text string) state.Written { return state.Written{Path: "title", Text: text} }
+
+// count counts what has come of one type.
+func count[M state.Msg](b *bench) int {
+	n := 0
+	for _, msg := range b.came {
+		if _, ok := msg.(M); ok {
+			n++
+		}
+	}
+	return n
+}
+
+func TestStart(t *testing.T) {
+	b := newBench(t)
+	st := study.Empty()
+	st.Title = "Kept"
+	if err := browser.Save(studyKey, study.Write(st)); err != nil {
+		t.Fatal(err)
+	}
+	browser.SetFragment("/field")
+	b.runner.Start()
+	if b.model.Study.Title != "Kept" || b.model.Route.Sheet != "field" {
+		t.Errorf("after start: %q on %q", b.model.Study.Title, b.model.Route.Sheet)
+	}
+	if b.runner.Idle() {
+		t.Error("idle before the first answer")
+	}
+	b.wait(time.Second)
+	if b.runner.Idle() {
+		t.Error("idle while the engine computes")
+	}
+	b.reply()
+	if !b.runner.Idle() || b.model.Computing || b.model.ResultRevision != b.model.Revision {
+		t.Error("the first answer did not arrive")
+	}
+}
+
+func TestWhatThePersonDoes(t *testing.T) {
+	b := started(t)
+	browser.Pretend.Go("/rock")
+	if b.model.Route.Sheet != "rock" {
+		t.Error("a move to another address goes nowhere")
+	}
+	if !browser.Pretend.Paste("sw\tkrw\tkro\n0.2\t0\t1\n0.5\t0.1\t0.3\n0.7\t0.3\t0\n") || b.model.Paste == nil {
+		t.Error("a paste is not used")
+	}
+	b.act(title("One"))
+	if !browser.Pretend.Press("z", false) || b.model.Study.Title == "One" {
+		t.Error("the keys for undo do nothing")
+	}
+	if !browser.Pretend.Press("y", false) || b.model.Study.Title != "One" {
+		t.Error("the keys for redo do nothing")
+	}
+	if !browser.Pretend.Press("s", false) || len(browser.Pretend.Downloads()) != 1 {
+		t.Error("the keys for saving do nothing")
+	}
+	file := browser.Pretend.Downloads()[0]
+	b.act(state.StartedEmpty{})
+	if !browser.Pretend.Press("o", false) || !browser.Pretend.Choose(file.Name, file.Data) || b.model.Study.Title != "One" {
+		t.Error("the saved file does not open")
+	}
+	b.act(state.StartedEmpty{})
+	if !browser.Pretend.Drop(file.Name, file.Data) || b.model.Study.Title != "One" {
+		t.Error("a dropped file does not open")
+	}
+	browser.Pretend.Drop("big.json", strings.Repeat("x", study.MaxBytes+1))
+	if count[state.FileRefused](b) != 1 || b.model.Study.Title != "One" {
+		t.Error("a file that is too large is not refused")
+	}
+}
+
+func TestShare(t *testing.T) {
+	b := started(t)
+	b.act(state.ShareAsked{})
+	address, fragment, _ := strings.Cut(browser.Pretend.Copied(), "#")
+	if address != browser.Address() || !strings.HasPrefix(fragment, "/front?study=") || count[state.Told](b) != 1 {
+		t.Errorf("copied is %.60q", browser.Pretend.Copied())
+	}
+}
+
+func TestRunsTheNewest(t *testing.T) {
+	b := started(t)
+	before := len(b.asked())
+	b.act(title("a"))
+	b.act(title("ab"))
+	b.wait(runWait)
+	if got := b.asked(); len(got) != before+1 || got[before].Study.Title != "ab" {
+		t.Fatalf("asked are %d runs, want one of the newest study", len(got)-before)
+	}
+	old := b.last()
+	b.act(title("abc"))
+	b.wait(runWait)
+	b.act(title("abcd"))
+	b.wait(runWait)
+	if len(b.asked()) != before+1 {
+		t.Fatal("the engine is asked while it computes")
+	}
+	b.answer(wire.Reply{ID: old.ID, Kind: old.Kind, Result: &study.Result{}})
+	if count[state.Answered](b) != 0 {
+		t.Error("the answer to an earlier study is delivered")
+	}
+	if got := b.asked(); len(got) != before+2 || got[before+1].Study.Title != "abcd" {
+		t.Fatalf("then asked are %d runs, want one of the newest study", len(got)-before)
+	}
+	b.reply()
+	if count[state.Answered](b) != 1 || b.model.Computing {
+		t.Error("the newest answer is not delivered")
+	}
+}
+
+func TestKeeps(t *testing.T) {
+	b := started(t)
+	b.act(title("One"))
+	b.wait(keepWait / 2)
+	b.act(title("Two"))
+	if kept(t, studyKey) != "" || b.model.Saved.Done {
+		t.Error("kept at once")
+	}
+	b.wait(keepWait)
+	if kept(t, studyKey) != study.Write(b.model.Study) || !b.model.Saved.Done || count[state.Kept](b) != 1 {
+		t.Error("not kept in time, or kept twice")
+	}
+	browser.Pretend.BreakStore(errors.New("the disk is full"))
+	b.act(title("Three"))
+	b.wait(keepWait)
+	if !strings.Contains(b.model.Saved.Reason, "the disk is full") {
+		t.Errorf("the reason it is not kept is %q", b.model.Saved.Reason)
+	}
+	b.reply() // to the study before
+	b.reply()
+	if !b.runner.Idle() {
+		t.Error("a failure to keep leaves something pending")
+	}
+}
+
+func TestDamagedIsSetAside(t *testing.T) {
+	const damaged = `{"type": "brinefront/study", "ver`
+	b := newBench(t)
+	for key, text := range map[string]string{studyKey: damaged, asideKey + "1": "an older one"} {
+		if err := browser.Save(key, text); err != nil {
+			t.Fatal(err)
+		}
+	}
+	b.runner.Start()
+	if kept(t, asideKey+"2") != damaged || kept(t, asideKey+"1") != "an older one" || b.model.Damaged != damaged {
+		t.Error("the damaged study is not set aside, or over another")
+	}
+	b.runner.Do([]state.Effect{state.SetAside{Text: damaged}})
+	if kept(t, asideKey+"3") != "" {
+		t.Error("it is set aside twice")
+	}
+	b.act(title("Mine"))
+	b.wait(keepWait)
+	if !strings.Contains(kept(t, studyKey), "Mine") {
+		t.Error("the next study is not kept")
+	}
+}
+
+func TestDamagedIsNotOverwritten(t *testing.T) {
+	b := newBench(t)
+	const damaged = "damaged"
+	if err := browser.Save(studyKey, damaged); err != nil {
+		t.Fatal(err)
+	}
+	browser.Pretend.BreakStore(errors.New("forbidden"))
+	b.runner.Do([]state.Effect{state.SetAside{Text: damaged}})
+	browser.Pretend.BreakStore(nil)
+	b.act(title("Mine"))
+	b.wait(keepWait)
+	if kept(t, studyKey) != damaged || !strings.Contains(b.model.Saved.Reason, "could not be set aside") {
+		t.Errorf("kept is %q, reason %q", kept(t, studyKey), b.model.Saved.Reason)
+	}
+}
+
+func TestNoRoomAside(t *testing.T) {
+	b := newBench(t)
+	for n := range mostAside {
+		b.runner.Do([]state.Effect{state.SetAside{Text: strings.Repeat("x", n+1)}})
+	}
+	if len(b.came) > 0 {
+		t.Fatalf("came %v while there was room", b.came)
+	}
+	b.runner.Do([]state.Effect{state.SetAside{Text: "one more"}})
+	if !strings.Contains(b.model.Saved.Reason, "already holds 20") {
+		t.Errorf("reason is %q", b.model.Saved.Reason)
+	}
+}
+
+func TestStoreForbidden(t *testing.T) {
+	b := newBench(t)
+	browser.Pretend.BreakStore(errors.New("forbidden"))
+	b.runner.Start()
+	b.wait(time.Second)
+	b.reply()
+	if !strings.Contains(b.model.Saved.Reason, "forbidden") || b.model.ResultRevision != b.model.Revision {
+		t.Errorf("without storage: reason %q, answered %d of %d", b.model.Saved.Reason, b.model.ResultRevision, b.model.Revision)
+	}
+}
+
+func TestEngineDies(t *testing.T) {
+	b := started(t)
+	first := b.engine()
+	b.act(title("One"))
+	b.wait(time.Second)
+	b.engine().Die("out of memory")
+	if b.model.Failure != "out of memory" || b.model.Computing || !b.runner.Idle() || len(browser.Pretend.Engines()) != 1 {
+		t.Fatalf("failure %q, computing %t, %d engines", b.model.Failure, b.model.Computing, len(browser.Pretend.Engines()))
+	}
+	b.act(title("Two"))
+	b.wait(time.Second)
+	if len(browser.Pretend.Engines()) != 2 {
+		t.Fatal("the next run starts no other engine")
+	}
+	first.Die("again")
+	first.Reply(`{"id": 3, "kind": "run", "failure": "from the grave"}`)
+	b.reply()
+	if b.model.Failure != "" || b.model.ResultRevision != b.model.Revision {
+		t.Errorf("after the restart: failure %q", b.model.Failure)
+	}
+}
+
+func TestEngineDiesWithARunWaiting(t *testing.T) {
+	b := started(t)
+	b.act(title("One"))
+	b.wait(time.Second)
+	b.act(title("Two"))
+	b.wait(time.Second)
+	b.engine().Die("out of memory")
+	if n := len(browser.Pretend.Engines()); n != 2 || b.last().Study.Title != "Two" {
+		t.Fatalf("%d engines; the run that waited is lost", n)
+	}
+	b.engine().Die("again")
+	if n := len(browser.Pretend.Engines()); n != 2 || b.model.Failure != "again" || !b.runner.Idle() {
+		t.Errorf("%d engines, failure %q", n, b.model.Failure)
+	}
+}
+
+func TestEngineSpeaksNonsense(t *testing.T) {
+	for name, reply := range map[string]string{
+		"no JSON":   "hello",
+		"no answer": `{"id": 2, "kind": "run"}`,
+		"a bug":     `{"id": 2, "kind": "run", "failure": "a bug"}`,
+	} {
+		t.Run(name, func(t *testing.T) {
+			b := started(t)
+			b.act(title("One"))
+			b.wait(time.Second)
+			b.engine().Reply(reply)
+			if b.model.Failure == "" || b.model.Computing || !b.runner.Idle() {
+				t.Errorf("failure %q, computing %t, idle %t", b.model.Failure, b.model.Computing, b.runner.Idle())
+			}
+			b.act(title("Two"))
+			b.wait(time.Second)
+			if b.reply(); b.model.Failure != "" {
+				t.Error("the next run does not mend it")
+			}
+		})
+	}
+	b := started(t)
+	b.answer(wire.Reply{ID: 77, Kind: wire.Run})
+	if len(b.came) > 0 || !b.runner.Idle() {
+		t.Error("an answer to nothing is delivered")
+	}
+}
+
+func TestEvidence(t *testing.T) {
+	b := started(t)
+	b.act(state.EvidenceAsked{})
+	if asked := b.last(); asked.Kind != wire.Checks {
+		t.Fatalf("asked for %q", asked.Kind)
+	}
+	b.answer(wire.Reply{ID: b.last().ID, Kind: wire.Checks, Checks: []wire.Evidence{{ID: "a"}, {ID: "b"}}})
+	if asked := b.last(); asked.Kind != wire.Check || asked.CheckID != "a" {
+		t.Fatalf("asked for %q %q", asked.Kind, asked.CheckID)
+	}
+	b.answer(wire.Reply{ID: b.last().ID, Kind: wire.Check, Failure: "a bug"})
+	if asked := b.last(); asked.CheckID != "b" {
+		t.Fatalf("asked for %q", asked.CheckID)
+	}
+	b.answer(wire.Reply{ID: b.last().ID, Kind: wire.Check, Checks: []wire.Evidence{{ID: "b", Title: "B", Done: true}}})
+	if e := b.model.Evidence; b.model.Checking || e[0].Failure != "a bug" || e[1].Title != "B" || !b.runner.Idle() {
+		t.Errorf("evidence is %+v", e)
+	}
+	b.act(state.EvidenceAsked{})
+	b.engine().Die("gone")
+	if b.model.Checking || b.model.Failure != "gone" {
+		t.Error("the checks go on without an engine")
+	}
+}
+
+func TestPrintsTheNewestAnswer(t *testing.T) {
+	b := started(t)
+	b.act(title("One"))
+	b.act(state.PrintAsked{})
+	b.wait(time.Second)
+	if browser.Pretend.Prints() != 0 || b.runner.Idle() {
+		t.Fatal("printed before the answer came, or forgotten")
+	}
+	b.reply()
+	b.wait(time.Second)
+	if browser.Pretend.Prints() != 1 || !b.runner.Idle() {
+		t.Errorf("printed %d times", browser.Pretend.Prints())
+	}
+}
+
+func TestAddressFollows(t *testing.T) {
+	b := started(t)
+	b.runner.Do([]state.Effect{state.Go{Fragment: "/rock"}})
+	if browser.Fragment() != "/rock" {
+		t.Errorf("the address is at %q", browser.Fragment())
+	}
+}
+
+// New's own clock, and messages from other goroutines.
+func TestRealClock(t *testing.T) {
+	browser.Pretend.Reset()
+	t.Cleanup(browser.Pretend.Reset)
+	came := make(chan state.Msg, 1)
+	r := New(func(msg state.Msg) { came <- msg })
+	r.Do([]state.Effect{state.Keep{Study: study.Empty()}})
+	if msg := <-came; msg != (state.Kept{}) {
+		t.Errorf("came %v, want the study kept", msg)
+	}
+}
+
+// A result is decoded on the thread of the interface: a few milliseconds, no more.
+func BenchmarkDecodeReply(b *testing.B) {
+	result := study.Run(study.Demo())
+	text, err := json.Marshal(wire.Reply{ID: 1, Kind: wire.Run, Result: &result})
+	if err != nil {
+		b.Fatal(err)
+	}
+	b.SetBytes(int64(len(text)))
+	for b.Loop() {
+		var reply wire.Reply
+		if err := json.Unmarshal(text, &reply); err != nil {
+			b.Fatal(err)
+		}
+	}
+}

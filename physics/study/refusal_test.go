@@ -122,6 +122,7 @@ func TestNotesAreRaised(t *testing.T) {
 		"rock.points.reference":  func(st *Study) { st.Rock.Reference = "absolute" },
 		"rock.fit":               func(st *Study) {},
 		"rock.wettability":       func(st *Study) {},
+		"rock.otherFamily":       func(st *Study) { st.Rock.Table = letTable() },
 	} {
 		st := Demo()
 		change(&st)
@@ -134,6 +135,18 @@ func TestNotesAreRaised(t *testing.T) {
 			t.Errorf("%s is not raised; problems %+v", id, r.Problems)
 		}
 	}
+}
+
+// letTable holds points of LET curves that no power has the shape of.
+func letTable() *Table {
+	t := &Table{}
+	for i := range 15 {
+		s := float64(i) / 14
+		t.Sw = append(t.Sw, 0.2+0.5*s)
+		t.Krw = append(t.Krw, 0.4*math.Pow(s, 4)/(math.Pow(s, 4)+3*math.Pow(1-s, 4)))
+		t.Kro = append(t.Kro, math.Pow(1-s, 4)/(math.Pow(1-s, 4)+3*math.Pow(s, 4)))
+	}
+	return t
 }
 
 // thinned keeps the ends and every fourth value.

@@ -23,6 +23,7 @@ type rock struct {
 	parameters []fit.Parameter   // of a parametric curve, in its own order
 	origins    map[string]string // how a parameter was found, by symbol
 	fitted     *fit.Fit          // nil unless fitted
+	others     []candidate       // other families through the same points
 }
 
 // runRock answers the Rock sheet; nil when there is no curve to build on.
@@ -108,22 +109,25 @@ func (r *rock) measured(s *sheet) {
 		options.Weights = fit.Absolute
 	}
 	switch s.st.Rock.Curve {
-	case "corey-fit":
-		r.fit(s, fit.Corey, points, options, ref.Corey1954)
-	case "let-fit":
-		r.fit(s, fit.LET, points, options, ref.Lomeland2005)
-	case "table-linear":
-		r.table(s, points, relperm.StraightLine)
-	default:
+	case "table":
 		r.sources = []ref.ID{ref.FritschCarlson1980}
 		r.table(s, points, relperm.MonotoneCubic)
+	case "table-linear":
+		r.table(s, points, relperm.StraightLine)
+	}
+	for _, f := range families {
+		if f.kind == s.st.Rock.Curve {
+			r.fit(s, f, points, options)
+		} else {
+			r.compare(f, points, options)
+		}
 	}
 }
 
-func (r *rock) fit(s *sheet, family func(fit.Points, fit.Options) (fit.Fit, error), points fit.Points, options fit.Options, source ref.ID) {
+func (r *rock) fit(s *sheet, f family, points fit.Points, options fit.Options) {
 	r.inputs = append(r.inputs, "rock.weights")
-	r.sources = []ref.ID{source}
-	fitted, err := family(points, options)
+	r.sources = []ref.ID{f.source}
+	fitted, err := f.through(points, options)
 	if err != nil {
 		s.problem("rock.table", strconv.Itoa(len(points.Sw))+" rows: "+err.Error(), "points that determine the curve, or another kind of curve")
 		return

@@ -30,6 +30,7 @@ func (s *sheet) inspect(points fit.Points, used bool) bool {
 func (r *rock) notes(s *sheet) {
 	if r.fitted != nil {
 		r.fitNotes(s)
+		r.closer(s)
 	}
 	r.wettability(s)
 	r.reference(s)

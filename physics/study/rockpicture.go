@@ -22,7 +22,7 @@ func (r *rock) chart(s *sheet) Chart {
 		p := r.curves.At(sw)
 		krw.Y, kro.Y = append(krw.Y, p.Krw), append(kro.Y, p.Kro)
 	}
-	c.Lines = append(c.Lines, krw, kro)
+	c.Lines = append(append(c.Lines, krw, kro), r.otherLines(sws)...)
 	if points, given := s.points(); given {
 		c.Lines = append(c.Lines,
 			Line{ID: "krw-points", Label: "krw, laboratory", Role: "water", Kind: "points", X: points.Sw, Y: scaled(points.Krw, r.factor)},
@@ -62,6 +62,9 @@ func (r *rock) tables(s *sheet) {
 	}
 	if r.fitted != nil {
 		s.part.Tables = append(s.part.Tables, r.fitTable())
+	}
+	if len(r.others) > 0 {
+		s.part.Tables = append(s.part.Tables, r.familyTable(s))
 	}
 }
 

@@ -41,8 +41,12 @@ var otherScale = []string{"*", "norm", "reduced", "effective", "mobile"}
 var spelled = strings.NewReplacer("v/v", " fraction ", "[-]", " fraction ", "(-)", " fraction ", " - ", " fraction ",
 	"%", " % ", "#", " # ")
 
+// maxTitle is how much of a heading is read, in bytes; more is no heading.
+const maxTitle = 200
+
 // words cuts a heading into lower-case words; a unit is a word.
 func words(title string) []string {
+	title = title[:min(len(title), maxTitle)]
 	title = spelled.Replace(" " + strings.ToLower(title) + " ")
 	return strings.FieldsFunc(title, func(c rune) bool {
 		return !(c >= 'a' && c <= 'z' || c >= '0' && c <= '9' || c == '%' || c == '#' || c > 0x7f)
@@ -52,7 +56,7 @@ func words(title string) []string {
 // nameOf returns what a heading names: Sw, So, Krw, Kro, or "" when it names
 // nothing of the trade or two things at once, such as the ratio krw/kro.
 func nameOf(title string) string {
-	lower := strings.ToLower(title)
+	lower := strings.ToLower(title[:min(len(title), maxTitle)])
 	for _, scale := range otherScale {
 		if strings.Contains(lower, scale) {
 			return ""

@@ -51,6 +51,7 @@ func TestRead(t *testing.T) {
 		{"on its side", "Sw\t0.2\t0.4\t0.6\t0.75\nkrw\t0\t0.05\t0.18\t0.3\nkro\t0.85\t0.4\t0.1\t0", "tab", point, "sw krw kro", []string{"on its side"}},
 		{"falling rows", "Sw\tkrw\tkro\n0.75\t0.3\t0\n0.6\t0.18\t0.1\n0.4\t0.05\t0.4\n0.2\t0\t0.85", "tab", point, "sw krw kro", []string{"turned round"}},
 		{"captions, blank lines, footnote", "Plug 7A, invented, 2134.5 m\n\n\tSw\tkrw\tkro\n\n\t0.2\t0\t0.85\n\t0.4\t0.05\t0.4\n\n\t0.6\t0.18\t0.1\n\t0.75\t0.3\t0\nMeasured at room temperature\n", "tab", point, "- sw krw kro", []string{"Line 7, \"Measured at room temperature\", holds no number"}},
+		{"two footnotes", "Sw\tkrw\tkro\n0.2\t0\t0.85\n0.4\t0.05\t0.4\n0.6\t0.18\t0.1\n0.75\t0.3\t0\nInvented\nSee page nine", "tab", point, "sw krw kro", []string{"2 lines, the first of them line 6, \"Invented\", hold no number"}},
 		{"heading repeated on the next page", "Sw krw kro\n0.2 0 0.85\n0.4 0.05 0.4\nSw krw kro\n0.6 0.18 0.1\n0.75 0.3 0", "spaces", point, "sw krw kro", []string{"Line 4"}},
 		{"non-breaking spaces, unicode minus, exponent", "Sw\u00a0(frac)\tkrw\tkro\n0.2\u00a0\t\u22120\t8.5e\u22121\n0.4\t5E-2\t0.4\n0.6\t0.18\t+0.1\n0.75\t0.3\t0", "tab", point, "sw krw kro", nil},
 		{"old line ends", "Sw\tkrw\tkro\r0.2\t0\t0.85\r0.4\t0.05\t0.4\r0.6\t0.18\t0.1\r0.75\t0.3\t0\r", "tab", point, "sw krw kro", nil},
@@ -258,6 +259,14 @@ func TestManyProblems(t *testing.T) {
 	r := Read("Sw\tkrw\tkro\n" + strings.Repeat("-1\t2\t3\n", 9000))
 	if n := len(r.Problems); n != maxProblems+1 || !strings.HasPrefix(r.Problems[n-1].Read, "26,800 more") {
 		t.Errorf("%d problems, the last %+v", n, r.Problems[n-1])
+	}
+}
+
+// TestLongHeading: a heading of a megabyte is looked at no longer than a short one.
+func TestLongHeading(t *testing.T) {
+	r := Read("Sw" + strings.Repeat(" a", MaxBytes/2-100) + "\tkrw\tkro\n0.2\t0\t0.8\n0.3\t0.1\t0.5\n0.4\t0.2\t0.3")
+	if got := rolesOf(r); got != "sw krw kro" || len(r.Problems) > 0 {
+		t.Errorf("roles %q, problems %v", got, r.Problems)
 	}
 }
 

@@ -59,12 +59,21 @@ func arrange(rows [][]string, said *notes) (heading, data [][]string) {
 		return nil, nil
 	}
 	heading, width := rows[:first], len(rows[first])
+	var left []int
 	for i, cells := range rows[first:] {
 		if countNumbers(cells) == 0 && (len(cells) != width || contains(heading, cells)) {
-			said.remark(fmt.Sprintf("Line %d, \"%s\", holds no number and was left out.", first+i+1, clip(strings.Join(cells, " "))))
+			left = append(left, first+i)
 			continue
 		}
 		data = append(data, cells)
+	}
+	switch len(left) {
+	case 0:
+	case 1:
+		said.remark(fmt.Sprintf("Line %d, \"%s\", holds no number and was left out.", left[0]+1, clip(strings.Join(rows[left[0]], " "))))
+	default:
+		said.remark(fmt.Sprintf("%s lines, the first of them line %d, \"%s\", hold no number and were left out.",
+			thousands(len(left)), left[0]+1, clip(strings.Join(rows[left[0]], " "))))
 	}
 	return heading, data
 }

@@ -4,6 +4,7 @@ package sheet
 
 import (
 	"strings"
+	"sync/atomic"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
@@ -23,8 +24,8 @@ type Bench struct {
 	ctx      app.Context
 	model    state.Model
 	runner   *runner.Runner
-	unshown  int    // messages acted on whose pictures are not drawn yet
-	sentence string // the answer last announced
+	unshown  atomic.Int32 // messages told or acted on whose pictures are not drawn yet
+	sentence string       // the answer last announced
 }
 
 var _ widget.Desk = (*Bench)(nil)
@@ -36,9 +37,13 @@ func (b *Bench) OnInit() { b.model = state.New() }
 func (b *Bench) OnMount(ctx app.Context) {
 	b.ctx = ctx
 	b.runner = runner.New(func(msg state.Msg) {
-		ctx.Dispatch(func(app.Context) { b.Send(msg) })
+		b.unshown.Add(1)
+		ctx.Dispatch(func(app.Context) {
+			b.Send(msg)
+			b.unshown.Add(-1)
+		})
 	})
-	browser.PublishIdle(func() bool { return b.unshown == 0 && b.runner.Idle() })
+	browser.PublishIdle(func() bool { return b.unshown.Load() == 0 && b.runner.Idle() })
 	b.runner.Start()
 }
 
@@ -48,10 +53,10 @@ func (b *Bench) Send(msg state.Msg) {
 	b.model, effects = state.Update(b.model, msg)
 	b.runner.Do(effects)
 	b.announce()
-	b.unshown++
+	b.unshown.Add(1)
 	b.ctx.Defer(func(ctx app.Context) {
 		// Pictures are drawn by what the rendering has just queued; this queues behind.
-		ctx.Dispatcher().Dispatch(app.Dispatch{Mode: app.Next, Source: ctx.Src(), Function: func(app.Context) { b.unshown-- }})
+		ctx.Dispatcher().Dispatch(app.Dispatch{Mode: app.Next, Source: ctx.Src(), Function: func(app.Context) { b.unshown.Add(-1) }})
 	})
 }
 

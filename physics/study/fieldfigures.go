@@ -11,10 +11,10 @@ import (
 func (f *field) figures(s *sheet) {
 	f.volumeFigures(s)
 	f.startFigures(s)
-	s.borrow("front.breakthrough", "field.injectedAtBreakthrough", "Injected when water arrives")
+	s.borrow("front.breakthrough", "field.injectedAtBreakthrough", "Injected when water arrives", false)
 	t, _ := f.linear.Breakthrough()
 	f.timeFigure(s, Figure{ID: "field.breakthrough", Label: "Water arrives after", Symbol: "tbt", Value: t, Quantity: units.Duration, Strip: true}, "field.injectedAtBreakthrough")
-	s.borrow("front.recoveryAtBreakthrough", "field.recoveryAtBreakthrough", "Recovery at breakthrough, of the pore volume")
+	s.borrow("front.recoveryAtBreakthrough", "field.recoveryAtBreakthrough", "Recovery at breakthrough, of the pore volume", true)
 	f.cumulativeFigures(s, "AtBreakthrough", "at breakthrough", "bt", "field.injectedAtBreakthrough", "field.recoveryAtBreakthrough")
 	if f.limit.Outcome == reservoir.Reached {
 		f.limitFigures(s)
@@ -22,16 +22,16 @@ func (f *field) figures(s *sheet) {
 }
 
 // borrow shows a figure of an earlier sheet on this one, working and all.
-func (s *sheet) borrow(id, as, label string) {
+func (s *sheet) borrow(id, as, label string, strip bool) {
 	if figure, ok := s.find(id); ok {
-		figure.ID, figure.Label = as, label
+		figure.ID, figure.Label, figure.Strip = as, label, strip
 		s.part.Figures = append(s.part.Figures, figure)
 	}
 }
 
 func (f *field) volumeFigures(s *sheet) {
 	pv := f.linear.PoreVolume()
-	s.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: pv, Quantity: units.Volume, Strip: true},
+	s.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: pv, Quantity: units.Volume},
 		s.by("{PV} = {L} {W} {h} {φ}", "").input("field.length").input("field.width").input("field.thickness").input("field.porosity"))
 	s.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: pv * (1 - f.front.swi) / f.front.bo, Quantity: units.Volume, Strip: true},
 		s.by("{N} = {PV} (1 - {Swi}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term("front.initialWater").input("fluids.oilFormationFactor"))
@@ -128,7 +128,7 @@ func (f *field) limitFigures(s *sheet) {
 		s.by("{Rlim} = {Sw2} + ({fwj} - {fw2}) {Qlim} - {Swi}", "Average saturation by Welge's tangent, less the initial one.", ref.Welge1952).
 			value("Sw2", "outlet saturation", sw, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
 			term("field.limitCut").term("field.limitInjected").term("front.initialWater"))
-	s.inPlace("field.recoveryAtLimit", "Rlim,o", "front.initialWater")
+	s.inPlace("field.recoveryAtLimit", "Rlim,o", false)
 	f.cumulativeFigures(s, "AtLimit", "at the limit", "lim", "field.limitInjected", "field.recoveryAtLimit")
 	s.figure(Figure{ID: "field.waterOilRatioAtLimit", Label: "Water-oil ratio at the limit, at surface", Symbol: "WOR", Value: cut * f.front.bo / ((1 - cut) * f.front.bw), Quantity: units.WaterOilRatio},
 		s.by("{WOR} = {fw2} {Bo} / ((1 - {fw2}) {Bw})", "").term("field.limitCut").input("fluids.oilFormationFactor").input("fluids.waterFormationFactor"))

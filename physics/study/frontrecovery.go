@@ -13,7 +13,7 @@ func (f *front) recoveryFigures(s *sheet, behind, cut float64) {
 	_, inlet := d.InletFace()
 	s.figure(Figure{ID: "front.breakthrough", Label: "Water arrives after", Symbol: "Qbt", Value: bt, Quantity: units.PoreVolumes, Strip: true},
 		s.by("{Qbt} = 1 / {v}", "Pore volumes injected until the front reaches the producer.", ref.BuckleyLeverett1942, ref.Welge1952).term("front.speed"))
-	s.figure(Figure{ID: "front.averageAtBreakthrough", Label: "Average saturation at breakthrough", Symbol: "Sav", Value: d.Average(bt), Quantity: units.Fraction, Strip: true},
+	s.figure(Figure{ID: "front.averageAtBreakthrough", Label: "Average saturation at breakthrough", Symbol: "Sav", Value: d.Average(bt), Quantity: units.Fraction},
 		s.by("{Sav} = {Swf} + ({fwj} - {fwf}) {Qbt}", "Welge's tangent carried to the fractional flow of the inlet.", ref.Welge1952).
 			value("Swf", "saturation behind the front", behind, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
 			value("fwf", "water cut behind the front", cut, units.Fraction).term("front.breakthrough"))
@@ -28,9 +28,9 @@ func (f *front) recoveryFigures(s *sheet, behind, cut float64) {
 			term("front.initialWater").on("front.breakthrough"))
 	s.figure(Figure{ID: "front.movable", Label: "Movable oil", Symbol: "Rmax", Value: f.swj - f.swi, Quantity: units.Share},
 		s.by("{Rmax} = {Swj} - {Swi}", "What endless injection would displace, as a part of the pore volume.").term("front.injectedWater").term("front.initialWater"))
-	s.inPlace("front.recoveryAtBreakthrough", "Rbt,o", "front.initialWater")
+	s.inPlace("front.recoveryAtBreakthrough", "Rbt,o", true)
 	s.movable("front.recoveryAtBreakthrough", "Rbt,m")
-	s.inPlace("front.recoveryAtOne", "R1,o", "front.initialWater")
+	s.inPlace("front.recoveryAtOne", "R1,o", false)
 }
 
 // recovery adds a recovery in pore volumes.
@@ -39,13 +39,13 @@ func (s *sheet) recovery(id, label, symbol string, value float64, strip bool, w 
 }
 
 // inPlace adds the same recovery as a part of the oil in place.
-func (s *sheet) inPlace(id, symbol, initial string) {
+func (s *sheet) inPlace(id, symbol string, strip bool) {
 	f, ok := s.find(id)
 	if !ok {
 		return
 	}
-	s.figure(Figure{ID: id + "InPlace", Label: trimmed(f.Label) + ", of the oil in place", Symbol: symbol, Value: f.Value / (1 - s.number(initial)), Quantity: units.Share, Strip: f.Strip},
-		s.by("{"+symbol+"} = {"+f.Symbol+"} / (1 - {Swi})", "").term(id).term(initial))
+	s.figure(Figure{ID: id + "InPlace", Label: trimmed(f.Label) + ", of the oil in place", Symbol: symbol, Value: f.Value / (1 - s.number("front.initialWater")), Quantity: units.Share, Strip: strip},
+		s.by("{"+symbol+"} = {"+f.Symbol+"} / (1 - {Swi})", "").term(id).term("front.initialWater"))
 }
 
 // movable adds the same recovery as a part of the oil that water can move.

@@ -288,5 +288,8 @@ func FuzzRead(f *testing.F) {
 		if err != nil || !reflect.DeepEqual(again, st) {
 			t.Fatalf("accepted, but not after being written again (%v)", err)
 		}
+		for _, fault := range faults(Run(st)) {
+			t.Error(fault)
+		}
 	})
 }

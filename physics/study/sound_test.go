@@ -114,8 +114,11 @@ func faults(r Result) []string {
 		if !ok {
 			blame("no part %s", sheet)
 		}
-		ids := map[string]bool{}
+		ids, strip := map[string]bool{}, 0
 		for _, f := range part.Figures {
+			if f.Strip {
+				strip++
+			}
 			if ids[f.ID] || !strings.HasPrefix(f.ID, string(sheet)+".") || f.Label == "" || f.Symbol == "" {
 				blame("figure %q (twice: %v)", f.ID, ids[f.ID])
 			}
@@ -136,6 +139,9 @@ func faults(r Result) []string {
 					blame("%s rests on %q", f.ID, path)
 				}
 			}
+		}
+		if part.Status == Ready && (strip < 4 || strip > 7) {
+			blame("the strip of %s has %d figures, want 4 to 7", sheet, strip)
 		}
 		for _, phrase := range part.Answer {
 			if phrase.Figure != "" && !ids[phrase.Figure] {

@@ -148,7 +148,9 @@ self.brinefrontPlot = {
     if (!holder) throw new Error(`the page has no place called ${holderId} for a picture`);
     let plot = plots.get(holderId);
     if (plot?.holder !== holder || !holder.contains(plot.figure)) {
-      plot?.forget();
+      for (const [id, old] of plots) {
+        if (id === holderId || old.holder === holder || !old.holder.isConnected) self.brinefrontPlot.forget(id);
+      }
       plot = new Plot(holder);
       plots.set(holderId, plot);
     }

@@ -76,6 +76,8 @@ func TestAxesHaveRoundNumbers(t *testing.T) {
 		{`ticks([-3, 0], 5, log).map((t) => t.text)`, `["0.001","0.01","0.1","1"]`},
 		{`ticks([-6, 0], 5, log).map((t) => t.text)`, `["10⁻⁶","10⁻⁵","10⁻⁴","10⁻³","10⁻²","10⁻¹","1"]`},
 		{`ticks([-1, 0.4], 5, log).map((t) => t.text)`, `["0.1","0.2","0.5","1","2"]`},
+		{`ticks([Math.log10(5), Math.log10(50)], 3, log).map((t) => t.text)`, `["5","10","20","50"]`},
+		{`ticks([Math.log10(610), Math.log10(790)], 4, log).map((t) => t.text)`, `["650","700","750"]`}, // within a decade: evenly
 		// Every tick lies on the axis, says its own number, and no two say the same.
 		{`[...Array(400)].map((_, i) => {
 			const lo = Math.sin(i) * 10 ** (i % 9 - 4), hi = lo + (1.1 + Math.cos(3 * i)) * 10 ** (i % 7 - 3);

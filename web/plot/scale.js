@@ -45,7 +45,7 @@ function roundLog(u) {
 
 // ticks are round numbers within [lo, hi] (scale coordinates) with their texts.
 export function ticks([lo, hi], count, scale) {
-  if (scale === log && hi - lo >= 1) return logTicks(lo, hi, count);
+  if (scale === log && hi - lo >= 0.9) return logTicks(lo, hi, count);
   const from = scale.from(lo), to = scale.from(hi);
   const step = roundStep(to - from, count);
   const list = [];

@@ -24,7 +24,7 @@ type Bench struct {
 	ctx      app.Context
 	model    state.Model
 	runner   *runner.Runner
-	unshown  atomic.Int32 // messages told or acted on whose pictures are not drawn yet
+	unshown  atomic.Int32 // messages and changes that are not on the screen yet
 	sentence string       // the answer last announced
 }
 
@@ -53,6 +53,11 @@ func (b *Bench) Send(msg state.Msg) {
 	b.model, effects = state.Update(b.model, msg)
 	b.runner.Do(effects)
 	b.announce()
+	b.Await()
+}
+
+// Await counts a change as pending until it is rendered and its pictures drawn.
+func (b *Bench) Await() {
 	b.unshown.Add(1)
 	b.ctx.Defer(func(ctx app.Context) {
 		// Pictures are drawn by what the rendering has just queued; this queues behind.

@@ -53,6 +53,7 @@ func top(d widget.Desk, m state.Model) app.UI {
 		app.A().Class("skip").Href("#inputs").Text("Skip to the inputs"),
 		app.P().Class("product").Text("Brinefront"),
 		widget.Words(d, m, "title", "Study", m.Study.Title, "Untitled study", ""),
+		app.P().Class("kept").ID("kept").Text(kept(m.Saved)),
 		widget.Radios(d, "system", "Units", string(m.System), systems),
 		app.Div().Class("actions").Role("group").Aria("label", "Study").Body(
 			widget.Action(d, "undo", "Undo", state.Undone{}, m.CanUndo),
@@ -63,7 +64,6 @@ func top(d widget.Desk, m state.Model) app.UI {
 			widget.Action(d, "new", "New", state.StartedEmpty{}, true),
 			widget.Action(d, "demo", "Demo", state.DemoOpened{}, true),
 		),
-		app.P().Class("kept").ID("kept").Text(kept(m.Saved)),
 	)
 }
 

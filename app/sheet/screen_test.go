@@ -19,6 +19,7 @@ type desk struct{ sent []state.Msg }
 
 func (d *desk) Send(msg state.Msg) { d.sent = append(d.sent, msg) }
 func (d *desk) Find(string)        {}
+func (d *desk) Await()             {}
 
 // after is the model after messages, answered as the engine would.
 func after(messages ...state.Msg) state.Model {

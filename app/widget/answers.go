@@ -80,6 +80,7 @@ func (a *Answers) toggle(id string) app.EventHandler {
 		} else {
 			a.open = id
 		}
+		a.Desk.Await()
 	}
 }
 

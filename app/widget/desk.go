@@ -18,6 +18,9 @@ type Desk interface {
 	Send(msg state.Msg)
 	// Find brings the person to the field of an input, on whichever sheet it is.
 	Find(path string)
+	// Await counts what a widget has just changed in itself as pending until it
+	// is on the screen.
+	Await()
 }
 
 // dashed is a path as part of an element's id.

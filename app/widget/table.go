@@ -59,8 +59,13 @@ func (p *Points) Render() app.UI {
 	)
 }
 
-func (p *Points) earlier(app.Context, app.Event) { p.first -= rowsShown }
-func (p *Points) later(app.Context, app.Event)   { p.first += rowsShown }
+func (p *Points) earlier(app.Context, app.Event) { p.turn(-rowsShown) }
+func (p *Points) later(app.Context, app.Event)   { p.turn(rowsShown) }
+
+func (p *Points) turn(by int) {
+	p.first += by
+	p.Desk.Await()
+}
 
 // row is one point, with what is wrong with it beneath.
 func (p *Points) row(row int) app.UI {

@@ -75,7 +75,7 @@ func (d *Displacement) trace() {
 			d.push(w.Behind, w.SpeedBehind)
 			d.push(w.Ahead, w.SpeedAhead)
 		default:
-			d.traceFan(w, max(1, 48/fans))
+			d.traceFan(w, 64/fans)
 		}
 	}
 }

@@ -31,7 +31,9 @@ func newHull(fn Function, injected, initial float64) hull {
 	if injected < initial {
 		h.sign = -1
 	}
-	samples := Samples(fn, initial, injected, 64)
+	// Ten points in each piece of a short table, fewer in each of a long one.
+	pieces := len(fn.Knots()) + 1
+	samples := Samples(fn, initial, injected, max(64, min(10*pieces, 2000)))
 	h.nodes = make([]node, len(samples))
 	for i, p := range samples {
 		n := node{h.sign * p.S, h.sign * p.F, p.Below, p.Above}
@@ -67,7 +69,7 @@ func (h *hull) vertices() []int {
 		for len(kept) >= 2 {
 			a, b := kept[len(kept)-2], kept[len(kept)-1]
 			arc := b-a == 1 && c-b == 1 && h.concave(a) && h.concave(b) && !rises(n[b].left, n[b].right, alike)
-			if arc || (n[b].g-n[a].g)*(n[c].y-n[b].y) > (n[c].g-n[b].g)*(n[b].y-n[a].y) {
+			if arc || h.rise(a, b) > h.rise(b, c) {
 				break
 			}
 			kept = kept[:len(kept)-1]
@@ -75,6 +77,17 @@ func (h *hull) vertices() []int {
 		kept = append(kept, c)
 	}
 	return kept
+}
+
+// rise is the mean slope of g between two nodes; across a cell so narrow that rounding of
+// g blurs it more than the slope changes, it is that of the two end slopes.
+func (h *hull) rise(i, j int) float64 {
+	a, b := h.nodes[i], h.nodes[j]
+	blur := 4 * ulp * math.Max(math.Abs(a.g), math.Abs(b.g))
+	if j == i+1 && blur > math.Abs(b.left-a.right)*(b.y-a.y) {
+		return (a.right + b.left) / 2
+	}
+	return slope(a, b)
 }
 
 // touch is one end of a chord: the place, and the node it is at or beside.

@@ -23,10 +23,12 @@ func atKnot(fn Function, s float64) Sample {
 	return p
 }
 
-// spacing is the step of the grading in ln(u/(1-u)), u the place inside a piece.
-// Power laws of mobility make f a smooth function of that variable, however
-// extreme the mobility ratio: its features are never much narrower than 1/exponent.
-const spacing = 0.86
+// spacing is the step of the grading of n points in ln(u/(1-u)), u the place inside a
+// piece. Power laws of mobility make f a smooth function of that variable, however
+// extreme the mobility ratio: its features are never much narrower than 1/exponent. Many
+// points reach down to 1e-12 of a piece from either end; few, as the short pieces of a
+// table get, stay closer together in its middle.
+func spacing(n int) float64 { return 0.43 * (1 + math.Min(1, float64(n)/64)) }
 
 // boxing is how often a cell that seems to hold an inflection is halved: afterwards
 // the slope is monotone in every cell but for 1/4^boxing or so of its change.
@@ -50,7 +52,8 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 		ends = ends[:len(ends)-1]
 	}
 	pieces := len(ends) + 1
-	inside := max(1, budget/pieces, min(10, 2000/pieces))
+	inside := max(1, budget/pieces)
+	step := spacing(inside)
 	coarse := make([]Sample, 1, (inside+3)*pieces+1)
 	coarse[0] = at(fn, lo)
 	from := lo
@@ -68,20 +71,23 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 				coarse = append(coarse, at(fn, s))
 			}
 		}
+		// Not where the grading itself goes nearer, which it does at lo and hi alone.
+		nearest := (to - from) / (1 + math.Exp(float64(inside-1)/2*step))
 		guarded := to-from > 8*guard
-		if guarded {
+		if guarded && (from != lo || nearest > guard) {
 			add(from + guard)
 		}
 		for j := 1; j <= inside; j++ {
-			t := (float64(j) - float64(inside+1)/2) * spacing
-			share := 1 / (1 + math.Exp(math.Abs(t)))
-			if t < 0 {
-				add(from + share*(to-from))
-			} else {
-				add(to - share*(to-from))
+			t := (float64(j) - float64(inside+1)/2) * step
+			offset := (to - from) / (1 + math.Exp(math.Abs(t)))
+			if t < 0 && (from == lo || offset > guard) {
+				add(from + offset)
+			}
+			if t >= 0 && (to == hi || offset > guard) {
+				add(to - offset)
 			}
 		}
-		if guarded {
+		if guarded && (to != hi || nearest > guard) {
 			add(to - guard)
 		}
 		if i < len(inner) {

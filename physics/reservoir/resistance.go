@@ -47,13 +47,16 @@ func newResistance(flow fracflow.Flow, d *displace.Displacement) resistance {
 	s, _ := d.InletFace()
 	r.ahead, r.face = r.drag(d.Initial()), r.drag(s)
 	r.least = math.Min(r.ahead, r.face)
+	volumes := make([]float64, n) // int dQ/lt over the cell that ends at the node
 	for i, b := range nodes {
 		r.least = math.Min(r.least, r.drag(b.S))
 		if i == 0 {
 			r.j[0] = b.Xi * r.face
 			continue
 		}
-		r.j[i] = r.j[i-1] + r.placePanel(nodes[i-1], b)
+		a := nodes[i-1]
+		place, volume := r.panel(a, b)
+		r.j[i], volumes[i] = r.j[i-1]+place, volume
 	}
 	r.least /= 2 // between nodes lt may be a little larger than at them
 	for i := n - 1; i >= 0; i-- {
@@ -61,7 +64,7 @@ func newResistance(flow fracflow.Flow, d *displace.Displacement) resistance {
 		if i == n-1 {
 			r.k[i] = q * r.ahead
 		} else {
-			r.k[i] = r.k[i+1] + r.volumePanel(nodes[i+1], nodes[i], nodes[i].S)
+			r.k[i] = r.k[i+1] + volumes[i+1]
 		}
 		r.t[i] = math.Inf(1)
 		if !math.IsInf(q, 1) {
@@ -77,48 +80,59 @@ func (r *resistance) drag(s float64) float64 {
 	return 1 / lt
 }
 
-// placePanel is int dxi/lt from node a outwards to b.
-func (r *resistance) placePanel(a, b displace.Node) float64 {
+// panel is int dxi/lt from node a outwards to b, and int dQ/lt from b inwards to a,
+// which is infinite when Q is at a.
+func (r *resistance) panel(a, b displace.Node) (place, volume float64) {
+	da, db := r.drag(a.S), r.drag(b.S)
 	switch {
 	case a.Xi == b.Xi:
-		return 0
+		return 0, 0
 	case a.S == b.S:
-		return (b.Xi - a.Xi) * r.drag(a.S)
+		return (b.Xi - a.Xi) * da, (1/a.Xi - 1/b.Xi) * da
 	}
-	return b.Xi*r.drag(b.S) - a.Xi*r.drag(a.S) + r.gauss(a.S, b.S, func(v float64) float64 { return v })
+	place, volume = r.gauss(a.S, b.S)
+	place += b.Xi*db - a.Xi*da
+	if a.Xi == 0 {
+		return place, math.Inf(1)
+	}
+	return place, da/a.Xi - db/b.Xi - volume
 }
 
-// volumePanel is int dQ/lt from node b inwards to a. Towards an inlet face of speed 0
-// the integrand grows like a power of the distance from the saturation at end, so the
-// panel is halved in that distance.
-func (r *resistance) volumePanel(b, a displace.Node, end float64) float64 {
-	switch {
-	case a.Xi == b.Xi:
-		return 0
-	case a.Xi == 0:
-		return math.Inf(1)
-	case a.S == b.S:
-		return (1/a.Xi - 1/b.Xi) * r.drag(a.S)
+// outer is int dQ/lt from node b inwards to a state within its cell. Towards an inlet
+// face of speed 0, where saturation is end, the integrand grows like a power of the
+// distance from it, so the panel is cut where that distance halves.
+func (r *resistance) outer(b, state displace.Node, end float64) float64 {
+	sum := 0.0
+	for math.Abs(b.S-end) > 2*math.Abs(state.S-end) {
+		half := displace.Node{S: end + (b.S-end)/2}
+		if half.S == end || half.S == b.S {
+			// Saturation is too coarse to tell the states that are left apart.
+			return sum + (1/state.Xi-1/b.Xi)*r.drag(end)
+		}
+		_, half.Xi = r.flow.At(half.S)
+		_, volume := r.panel(half, b)
+		sum += volume
+		b = half
 	}
-	sum := r.drag(a.S)/a.Xi - r.drag(b.S)/b.Xi
-	from, to := b.S-end, a.S-end
-	for ; to != 0 && from/to > 2; from /= 2 {
-		sum += r.gauss(end+from, end+from/2, func(v float64) float64 { return 1 / v })
-	}
-	return sum + r.gauss(end+from, a.S, func(v float64) float64 { return 1 / v })
+	_, volume := r.panel(state, b)
+	return sum + volume
 }
 
-// gauss is int weight(f') lt'/lt^2 dS by the eight-point Gauss-Legendre rule.
-func (r *resistance) gauss(a, b float64, weight func(v float64) float64) float64 {
+// gauss is int v lt'/lt^2 dS and int (1/v) lt'/lt^2 dS with v = f', by the eight-point
+// Gauss-Legendre rule.
+func (r *resistance) gauss(a, b float64) (speed, slowness float64) {
 	half, mid := (b-a)/2, (a+b)/2
-	var sum float64
 	for i, x := range gaussX {
 		for _, s := range [2]float64{mid - half*x, mid + half*x} {
 			_, v, lt, slope := r.flow.Full(s)
-			sum += gaussW[i] * weight(v) * slope / (lt * lt)
+			part := gaussW[i] * half * slope / (lt * lt)
+			speed += v * part
+			if v > 0 { // not where rounding puts the abscissa on an inlet face of speed 0
+				slowness += part / v
+			}
 		}
 	}
-	return sum * half
+	return speed, slowness
 }
 
 // Abscissae and weights of the eight-point Gauss-Legendre rule: Abramowitz & Stegun
@@ -151,8 +165,9 @@ func (r *resistance) at(q float64) (now, spent float64) {
 	}
 	a, b := r.nodes[i-1], r.nodes[i]
 	here := displace.Node{S: r.d.Saturation(xi), Xi: xi}
-	j := r.j[i-1] + r.placePanel(a, here)
-	k := r.k[i] + r.volumePanel(b, here, a.S)
+	place, _ := r.panel(a, here)
+	j := r.j[i-1] + place
+	k := r.k[i] + r.outer(b, here, a.S)
 	return q * j, (q*q*j + k) / 2
 }
 

@@ -130,3 +130,83 @@ func TestRockPictureIsInOneReference(t *testing.T) {
 	krw := must(t, part, "rock.kr", "krw")
 	near(t, "end of krw", krw.Y[len(krw.Y)-1], end.Value, 1e-15)
 }
+
+// The same independent computation, for the table of round volumes injected.
+func TestVolumeTableAgainstIndependentValues(t *testing.T) {
+	part := Run(typed([6]float64{0.213, 0.237, 0.327, 0.861, 2.7, 2.15}, 0.00047, 0.00193)).Parts[SheetFront]
+	columns := map[string][]float64{}
+	for _, g := range part.Tables {
+		for _, c := range g.Columns {
+			if g.ID == "front.volumes" {
+				columns[c.Label] = c.Values
+			}
+		}
+	}
+	rows := map[float64]int{}
+	for i, q := range columns["Injected"] {
+		rows[q] = i
+	}
+	for _, c := range []struct{ q, outlet, cut, average, recovery float64 }{
+		{0.5, 0.5977706373116174, 0.8874876734723659, 0.6540268005754344, 0.4410268005754344},
+		{1, 0.645465095476452, 0.9574309675635815, 0.6880341279128706, 0.4750341279128706},
+		{2, 0.6821798977027791, 0.9843009396912047, 0.7135780183203699, 0.50057801832037},
+		{5, 0.7173505979136179, 0.9961723036066469, 0.736489079880383, 0.5234890798803831},
+	} {
+		i, ok := rows[c.q]
+		if !ok {
+			t.Errorf("no row of %g PV", c.q)
+			continue
+		}
+		near(t, "outlet saturation", columns["Sw at the producer"][i], c.outlet, 1e-9)
+		near(t, "water cut, reservoir", columns["Water cut, reservoir"][i], c.cut, 1e-9)
+		near(t, "water cut, surface", columns["Water cut, surface"][i], c.cut, 1e-9) // Bw = Bo
+		near(t, "average saturation", columns["Sw, average"][i], c.average, 1e-10)
+		near(t, "recovery", columns["Recovery, of the pore volume"][i], c.recovery, 1e-10)
+		near(t, "recovery of the oil in place", columns["Recovery, of the oil in place"][i], c.recovery/(1-0.213), 1e-10)
+	}
+}
+
+// Marks stand where the figures say, on the line they belong to.
+func TestMarksStandOnTheirFigures(t *testing.T) {
+	r := Run(Demo())
+	value := func(sheet Sheet, id string) float64 {
+		f, ok := r.Parts[sheet].Figure(id)
+		if !ok {
+			t.Fatalf("no figure %s", id)
+		}
+		return f.Value
+	}
+	for _, c := range []struct {
+		sheet       Sheet
+		chart, mark string
+		x           string
+		y           string // a figure, or empty: any
+	}{
+		{SheetRock, "rock.kr", "curves cross", "rock.crossover", ""},
+		{SheetFront, "front.fractionalFlow", "front", "front.shockSaturation", "front.cutAtBreakthrough"},
+		{SheetFront, "front.fractionalFlow", "average at breakthrough", "front.averageAtBreakthrough", ""},
+		{SheetFront, "front.recovery", "breakthrough", "front.breakthrough", "front.recoveryAtBreakthrough"},
+		{SheetField, "field.recovery", "breakthrough", "field.breakthrough", "field.recoveryAtBreakthrough"},
+		{SheetField, "field.recovery", "limit", "field.limitTime", "field.recoveryAtLimit"},
+		{SheetField, "field.waterCut", "limit", "field.limitTime", "field.limit"},
+		{SheetField, "field.cumulative", "limit", "field.limitTime", "field.oilAtLimit"},
+		{SheetField, "field.waterCut", "breakthrough", "field.breakthrough", ""},
+	} {
+		found := false
+		for _, chart := range r.Parts[c.sheet].Charts {
+			for _, m := range chart.Marks {
+				if chart.ID != c.chart || m.Label != c.mark {
+					continue
+				}
+				found = true
+				near(t, c.chart+" "+c.mark+", x", m.X, value(c.sheet, c.x), 1e-9*m.X)
+				if c.y != "" {
+					near(t, c.chart+" "+c.mark+", y", m.Y, value(c.sheet, c.y), 1e-9*m.Y)
+				}
+			}
+		}
+		if !found {
+			t.Errorf("%s has no mark %q", c.chart, c.mark)
+		}
+	}
+}

@@ -101,7 +101,7 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 	for _, p := range coarse {
 		low, high = math.Min(low, p.F), math.Max(high, p.F)
 	}
-	g := grid{fn: fn, reach: high - low, thin: math.Max(1e-13*(hi-lo), 4*ulp*math.Max(math.Abs(lo), math.Abs(hi))), out: make([]Sample, 0, 2*len(coarse))}
+	g := grid{fn: fn, reach: high - low, thin: math.Max(1e-13*(hi-lo), 4*ulp*math.Max(math.Abs(lo), math.Abs(hi))), most: 4000 + 40*len(coarse), out: make([]Sample, 0, 2*len(coarse))}
 	g.out = append(g.out, coarse[0])
 	for i := 1; i < len(coarse); i++ {
 		g.split(coarse[i-1], coarse[i], boxing)
@@ -119,6 +119,7 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 type grid struct {
 	fn          Function
 	reach, thin float64 // range of f; the narrowest cell worth cutting
+	most        int     // samples, should rounding look like inflections without end
 	out         []Sample
 }
 
@@ -126,7 +127,7 @@ type grid struct {
 // often a cell that holds an inflection may still be halved.
 func (g *grid) split(a, b Sample, box int) {
 	rise, width := b.F-a.F, b.S-a.S
-	if width <= g.thin {
+	if width <= g.thin || len(g.out) >= g.most {
 		return
 	}
 	steep := math.Abs(rise) > g.reach/32

@@ -2,49 +2,51 @@ package ref
 
 // The sources, by ID. Add here, cite everywhere else.
 const (
-	Ahmed2001           ID = "ahmed-2001"
-	Bertsekas1982       ID = "bertsekas-1982"
-	BrooksCorey1964     ID = "brooks-corey-1964"
-	BuckleyLeverett1942 ID = "buckley-leverett-1942"
-	Chandrupatla1997    ID = "chandrupatla-1997"
-	Chaudhry2004        ID = "chaudhry-2004"
-	Corey1954           ID = "corey-1954"
-	Craig1971           ID = "craig-1971"
-	Dake1978            ID = "dake-1978"
-	FritschCarlson1980  ID = "fritsch-carlson-1980"
-	LeVeque2002         ID = "leveque-2002"
-	Levenberg1944       ID = "levenberg-1944"
-	Lomeland2005        ID = "lomeland-2005"
-	Marquardt1963       ID = "marquardt-1963"
-	More1978            ID = "more-1978"
-	NISTStRD            ID = "nist-strd"
-	Nielsen1999         ID = "nielsen-1999"
-	NISTSP811           ID = "nist-sp-811"
-	Oleinik1957         ID = "oleinik-1957"
-	SeberWild1989       ID = "seber-wild-1989"
-	Welge1952           ID = "welge-1952"
+	AbramowitzStegun1964 ID = "abramowitz-stegun-1964"
+	Ahmed2001            ID = "ahmed-2001"
+	Bertsekas1982        ID = "bertsekas-1982"
+	BrooksCorey1964      ID = "brooks-corey-1964"
+	BuckleyLeverett1942  ID = "buckley-leverett-1942"
+	Chandrupatla1997     ID = "chandrupatla-1997"
+	Chaudhry2004         ID = "chaudhry-2004"
+	Corey1954            ID = "corey-1954"
+	Craig1971            ID = "craig-1971"
+	Dake1978             ID = "dake-1978"
+	FritschCarlson1980   ID = "fritsch-carlson-1980"
+	LeVeque2002          ID = "leveque-2002"
+	Levenberg1944        ID = "levenberg-1944"
+	Lomeland2005         ID = "lomeland-2005"
+	Marquardt1963        ID = "marquardt-1963"
+	More1978             ID = "more-1978"
+	NISTStRD             ID = "nist-strd"
+	Nielsen1999          ID = "nielsen-1999"
+	NISTSP811            ID = "nist-sp-811"
+	Oleinik1957          ID = "oleinik-1957"
+	SeberWild1989        ID = "seber-wild-1989"
+	Welge1952            ID = "welge-1952"
 )
 
 var sources = map[ID]Source{
-	Ahmed2001:           {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing, ch. 14"},
-	Bertsekas1982:       {Authors: "Bertsekas", Year: 1982, Title: "Projected Newton methods for optimization problems with simple constraints", Where: "SIAM J. Control Optim. 20(2), 221-246"},
-	BrooksCorey1964:     {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
-	Chandrupatla1997:    {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
-	Chaudhry2004:        {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
-	LeVeque2002:         {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press, sec. 16.1"},
-	NISTSP811:           {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811, app. B"},
-	BuckleyLeverett1942: {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
-	Corey1954:           {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
-	Craig1971:           {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
-	Dake1978:            {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier, ch. 10"},
-	FritschCarlson1980:  {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
-	Levenberg1944:       {Authors: "Levenberg", Year: 1944, Title: "A method for the solution of certain non-linear problems in least squares", Where: "Quart. Appl. Math. 2(2), 164-168"},
-	Marquardt1963:       {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
-	More1978:            {Authors: "Moré", Year: 1978, Title: "The Levenberg-Marquardt algorithm: implementation and theory", Where: "in Watson (ed.) Numerical Analysis, Springer, 105-116"},
-	NISTStRD:            {Authors: "National Institute of Standards and Technology", Year: 1998, Title: "Statistical Reference Datasets: nonlinear regression", Where: "NIST Standard Reference Database 140"},
-	Nielsen1999:         {Authors: "Nielsen", Year: 1999, Title: "Damping parameter in Marquardt's method", Where: "Report IMM-REP-1999-05, Technical University of Denmark"},
-	Lomeland2005:        {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
-	Oleinik1957:         {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
-	SeberWild1989:       {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
-	Welge1952:           {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
+	AbramowitzStegun1964: {Authors: "Abramowitz & Stegun", Year: 1964, Title: "Handbook of Mathematical Functions", Where: "National Bureau of Standards, table 25.4"},
+	Ahmed2001:            {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing, ch. 14"},
+	Bertsekas1982:        {Authors: "Bertsekas", Year: 1982, Title: "Projected Newton methods for optimization problems with simple constraints", Where: "SIAM J. Control Optim. 20(2), 221-246"},
+	BrooksCorey1964:      {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
+	Chandrupatla1997:     {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
+	Chaudhry2004:         {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
+	LeVeque2002:          {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press, sec. 16.1"},
+	NISTSP811:            {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811, app. B"},
+	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
+	Corey1954:            {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
+	Craig1971:            {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
+	Dake1978:             {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier, ch. 10"},
+	FritschCarlson1980:   {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
+	Levenberg1944:        {Authors: "Levenberg", Year: 1944, Title: "A method for the solution of certain non-linear problems in least squares", Where: "Quart. Appl. Math. 2(2), 164-168"},
+	Marquardt1963:        {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
+	More1978:             {Authors: "Moré", Year: 1978, Title: "The Levenberg-Marquardt algorithm: implementation and theory", Where: "in Watson (ed.) Numerical Analysis, Springer, 105-116"},
+	NISTStRD:             {Authors: "National Institute of Standards and Technology", Year: 1998, Title: "Statistical Reference Datasets: nonlinear regression", Where: "NIST Standard Reference Database 140"},
+	Nielsen1999:          {Authors: "Nielsen", Year: 1999, Title: "Damping parameter in Marquardt's method", Where: "Report IMM-REP-1999-05, Technical University of Denmark"},
+	Lomeland2005:         {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
+	Oleinik1957:          {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
+	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
+	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 }

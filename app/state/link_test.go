@@ -3,6 +3,7 @@ package state
 import (
 	"bytes"
 	"compress/flate"
+	"runtime"
 	"strings"
 	"testing"
 
@@ -87,14 +88,17 @@ func TestLinkRefused(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
+	packed, err := linkText.DecodeString(good)
+	if err != nil {
+		t.Fatal(err)
+	}
 	for name, test := range map[string]struct{ link, said string }{
 		"cut":              {good[:len(good)/2], "cut or changed"},
 		"no base64url":     {"a+b/c", "cut or changed"},
 		"padded":           {good + "==", "cut or changed"},
 		"line breaks":      {good[:20] + "\n" + good[20:], "cut or changed"},
-		"something behind": {good + linkText.EncodeToString([]byte("more")), "cut or changed"},
+		"something behind": {linkText.EncodeToString(append(packed, "more"...)), "cut or changed"},
 		"no study":         {pack(t, []byte("hello")), "cannot be opened"},
-		"a bomb":           {pack(t, make([]byte, 5<<20)), "more than 4 MB"},
 		"endless":          {strings.Repeat("A", maxLink+1), "at most"},
 	} {
 		t.Run(name, func(t *testing.T) {
@@ -105,6 +109,43 @@ func TestLinkRefused(t *testing.T) {
 			}
 			holds(t, "notice", lastNotice(m), test.said)
 		})
+	}
+}
+
+// One study has one link: bits that decoding would pass over are not passed over.
+func TestLinkIsReadToItsLastBit(t *testing.T) {
+	st := study.Empty()
+	for i := range 9 {
+		st.Title = strings.Repeat("x", i)
+		link, err := writeLink(st)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if len(link)%4 == 0 {
+			continue // no bits are left over
+		}
+		const digits = "ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789-_"
+		last := strings.IndexByte(digits, link[len(link)-1])
+		if _, err := readLink(link[:len(link)-1] + string(digits[last|1])); err == nil {
+			t.Errorf("a link of %d characters opens with its last bit changed", len(link))
+		}
+		return
+	}
+	t.Error("no link has bits left over")
+}
+
+// A small link may not fill the memory.
+func TestLinkThatSwells(t *testing.T) {
+	bomb := pack(t, make([]byte, 40<<20))
+	var before, after runtime.MemStats
+	runtime.ReadMemStats(&before)
+	_, err := readLink(bomb)
+	runtime.ReadMemStats(&after)
+	if err == nil || !strings.Contains(err.Error(), "more than 4 MB") {
+		t.Errorf("a link that swells to 40 MB: %v", err)
+	}
+	if used := after.TotalAlloc - before.TotalAlloc; used > 40<<20 {
+		t.Errorf("it used %d MB before it was refused", used>>20)
 	}
 }
 

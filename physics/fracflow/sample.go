@@ -101,7 +101,7 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 	for _, p := range coarse {
 		low, high = math.Min(low, p.F), math.Max(high, p.F)
 	}
-	g := grid{fn: fn, reach: high - low, thin: math.Max(1e-13*(hi-lo), 4*ulp*math.Max(math.Abs(lo), math.Abs(hi))), most: 4000 + 40*len(coarse), out: make([]Sample, 0, 2*len(coarse))}
+	g := grid{fn: fn, step: (high - low) / float64(max(4, min(32, budget/2))), thin: math.Max(1e-13*(hi-lo), 4*ulp*math.Max(math.Abs(lo), math.Abs(hi))), most: 4000 + 40*len(coarse), out: make([]Sample, 0, 2*len(coarse))}
 	g.out = append(g.out, coarse[0])
 	for i := 1; i < len(coarse); i++ {
 		g.split(coarse[i-1], coarse[i], boxing)
@@ -117,10 +117,10 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 }
 
 type grid struct {
-	fn          Function
-	reach, thin float64 // range of f; the narrowest cell worth cutting
-	most        int     // samples, should rounding look like inflections without end
-	out         []Sample
+	fn         Function
+	step, thin float64 // the largest rise of f in a cell; the narrowest cell worth cutting
+	most       int     // samples, should rounding look like inflections without end
+	out        []Sample
 }
 
 // split appends what is missing strictly between a and b, in order. box is how
@@ -130,7 +130,7 @@ func (g *grid) split(a, b Sample, box int) {
 	if width <= g.thin || len(g.out) >= g.most {
 		return
 	}
-	steep := math.Abs(rise) > g.reach/32
+	steep := math.Abs(rise) > g.step
 	if !steep {
 		// The cubic with the slopes and the mean slope of the cell has an inflection when
 		// the mean lies outside the middle third between the slopes. Rounding of f blurs

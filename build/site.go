@@ -105,7 +105,8 @@ func gzipped(content []byte) ([]byte, error) {
 		return nil, err
 	}
 	_, err = w.Write(content)
-	return out.Bytes(), errors.Join(err, w.Close())
+	err = errors.Join(err, w.Close()) // before the bytes are taken: closing writes the end
+	return out.Bytes(), err
 }
 
 func megabytes(bytes int) float64 { return float64(bytes) / 1e6 }

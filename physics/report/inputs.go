@@ -35,7 +35,8 @@ var choiceLabels = map[string]string{
 	"title": "Title", "author": "Author", "note": "Note",
 }
 
-// inputs lists every given input with its unit as typed, its range and origin.
+// inputs lists every input the study asks for, with its unit as typed, its range
+// and its origin.
 func inputs(st study.Study, s units.System) Section {
 	section := Section{ID: "inputs", Title: "Inputs and where they come from"}
 	table := &Table{
@@ -45,9 +46,10 @@ func inputs(st study.Study, s units.System) Section {
 	for _, spec := range study.Specs() {
 		in := spec.Get(&st)
 		switch {
+		case !spec.Applies(&st):
 		case in != nil:
 			table.Rows = append(table.Rows, []string{spec.Label, spec.Symbol, given(spec, in.Value, in.Unit), span(spec, in), orNone(in.Source)})
-		case spec.Optional && spec.Sheet != study.SheetRock:
+		case spec.Optional:
 			table.Rows = append(table.Rows, []string{spec.Label, spec.Symbol, spec.Default, "", "default"})
 		}
 	}

@@ -87,7 +87,7 @@ func joined(text string, after, before bool) string {
 
 func guarded(value, before, after string) string {
 	negative := strings.HasPrefix(value, "-") || strings.HasPrefix(value, "−")
-	compound := strings.Contains(value, " ") && (strings.HasSuffix(before, "/") || strings.HasPrefix(after, "^"))
+	compound := strings.Contains(value, "\u00a0") && (strings.HasSuffix(before, "/") || strings.HasPrefix(after, "^"))
 	if negative || compound {
 		return "(" + value + ")"
 	}

@@ -19,7 +19,8 @@ type Spec struct {
 	Default  string // what an empty optional input means, in words
 	Help     string // one sentence
 
-	at func(*Study) **Input
+	at   func(*Study) **Input
+	when func(*Study) bool // the choices under which the study asks for it; nil: under all
 }
 
 // Specs lists every numeric input in the order of the forms.
@@ -35,35 +36,47 @@ func Find(path string) (Spec, bool) {
 	return Spec{}, false
 }
 
+// Applies reports whether the study, with the choices it has, asks for the input.
+func (s Spec) Applies(st *Study) bool { return s.when == nil || s.when(st) }
+
 // Get returns the input of a study, nil when nothing is given.
 func (s Spec) Get(st *Study) *Input { return *s.at(st) }
 
 // Set changes the input of a study; nil empties it.
 func (s Spec) Set(st *Study, in *Input) { *s.at(st) = in }
 
+// The choices under which an input is asked for.
+func typedCorey(s *Study) bool    { return s.Rock.Curve == "corey" }
+func typedLET(s *Study) bool      { return s.Rock.Curve == "let" }
+func relativeToOil(s *Study) bool { return s.Rock.Reference == "oil" }
+func heldRate(s *Study) bool      { return s.Field.Drive == "rate" }
+func heldPressure(s *Study) bool  { return s.Field.Drive == "pressure" }
+func limitedByCut(s *Study) bool  { return s.Field.Limit == "waterCut" }
+func limitedByOil(s *Study) bool  { return s.Field.Limit == "oilRate" }
+
 var specs = []Spec{
 	{Path: "rock.permeability", Sheet: SheetRock, Group: "Plug", Label: "Permeability, absolute", Symbol: "k", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Optional: true, Default: "not needed unless kr refers to another permeability",
-		Help: "Brine permeability of the plug at full saturation.", at: func(s *Study) **Input { return &s.Rock.Permeability }},
+		Help: "Brine permeability of the plug at full saturation.", at: func(s *Study) **Input { return &s.Rock.Permeability }, when: relativeToOil},
 	{Path: "rock.oilPermeability", Sheet: SheetRock, Group: "Plug", Label: "Oil permeability at initial water", Symbol: "ko(Swi)", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Optional: true, Default: "needed when kr refers to it",
-		Help: "Converts curves that the laboratory reported relative to ko(Swi) to absolute permeability.", at: func(s *Study) **Input { return &s.Rock.OilPermeability }},
+		Help: "Converts curves that the laboratory reported relative to ko(Swi) to absolute permeability.", at: func(s *Study) **Input { return &s.Rock.OilPermeability }, when: relativeToOil},
 
-	{Path: "rock.corey.swc", Sheet: SheetRock, Group: "Corey", Label: "Connate water", Symbol: "Swc", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.Corey.Swc }},
-	{Path: "rock.corey.sor", Sheet: SheetRock, Group: "Corey", Label: "Residual oil", Symbol: "Sor", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.Corey.Sor }},
-	{Path: "rock.corey.krw0", Sheet: SheetRock, Group: "Corey", Label: "krw at Sor", Symbol: "krw0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.Corey.Krw0 }},
-	{Path: "rock.corey.kro0", Sheet: SheetRock, Group: "Corey", Label: "kro at Swc", Symbol: "kro0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.Corey.Kro0 }},
-	{Path: "rock.corey.nw", Sheet: SheetRock, Group: "Corey", Label: "Water exponent", Symbol: "nw", Quantity: units.Number, Min: 1, Max: 15, at: func(s *Study) **Input { return &s.Rock.Corey.Nw }},
-	{Path: "rock.corey.no", Sheet: SheetRock, Group: "Corey", Label: "Oil exponent", Symbol: "no", Quantity: units.Number, Min: 1, Max: 15, at: func(s *Study) **Input { return &s.Rock.Corey.No }},
+	{Path: "rock.corey.swc", Sheet: SheetRock, Group: "Corey", Label: "Connate water", Symbol: "Swc", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.Corey.Swc }, when: typedCorey},
+	{Path: "rock.corey.sor", Sheet: SheetRock, Group: "Corey", Label: "Residual oil", Symbol: "Sor", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.Corey.Sor }, when: typedCorey},
+	{Path: "rock.corey.krw0", Sheet: SheetRock, Group: "Corey", Label: "krw at Sor", Symbol: "krw0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.Corey.Krw0 }, when: typedCorey},
+	{Path: "rock.corey.kro0", Sheet: SheetRock, Group: "Corey", Label: "kro at Swc", Symbol: "kro0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.Corey.Kro0 }, when: typedCorey},
+	{Path: "rock.corey.nw", Sheet: SheetRock, Group: "Corey", Label: "Water exponent", Symbol: "nw", Quantity: units.Number, Min: 1, Max: 15, at: func(s *Study) **Input { return &s.Rock.Corey.Nw }, when: typedCorey},
+	{Path: "rock.corey.no", Sheet: SheetRock, Group: "Corey", Label: "Oil exponent", Symbol: "no", Quantity: units.Number, Min: 1, Max: 15, at: func(s *Study) **Input { return &s.Rock.Corey.No }, when: typedCorey},
 
-	{Path: "rock.let.swc", Sheet: SheetRock, Group: "LET", Label: "Connate water", Symbol: "Swc", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.LET.Swc }},
-	{Path: "rock.let.sor", Sheet: SheetRock, Group: "LET", Label: "Residual oil", Symbol: "Sor", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.LET.Sor }},
-	{Path: "rock.let.krw0", Sheet: SheetRock, Group: "LET", Label: "krw at Sor", Symbol: "krw0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.LET.Krw0 }},
-	{Path: "rock.let.kro0", Sheet: SheetRock, Group: "LET", Label: "kro at Swc", Symbol: "kro0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.LET.Kro0 }},
-	{Path: "rock.let.lw", Sheet: SheetRock, Group: "LET", Label: "Water, lower part", Symbol: "Lw", Quantity: units.Number, Min: 1, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Lw }},
-	{Path: "rock.let.ew", Sheet: SheetRock, Group: "LET", Label: "Water, elevation", Symbol: "Ew", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Ew }},
-	{Path: "rock.let.tw", Sheet: SheetRock, Group: "LET", Label: "Water, top part", Symbol: "Tw", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Tw }},
-	{Path: "rock.let.lo", Sheet: SheetRock, Group: "LET", Label: "Oil, lower part", Symbol: "Lo", Quantity: units.Number, Min: 1, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Lo }},
-	{Path: "rock.let.eo", Sheet: SheetRock, Group: "LET", Label: "Oil, elevation", Symbol: "Eo", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Eo }},
-	{Path: "rock.let.to", Sheet: SheetRock, Group: "LET", Label: "Oil, top part", Symbol: "To", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.To }},
+	{Path: "rock.let.swc", Sheet: SheetRock, Group: "LET", Label: "Connate water", Symbol: "Swc", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.LET.Swc }, when: typedLET},
+	{Path: "rock.let.sor", Sheet: SheetRock, Group: "LET", Label: "Residual oil", Symbol: "Sor", Quantity: units.Fraction, Min: 0, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Rock.LET.Sor }, when: typedLET},
+	{Path: "rock.let.krw0", Sheet: SheetRock, Group: "LET", Label: "krw at Sor", Symbol: "krw0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.LET.Krw0 }, when: typedLET},
+	{Path: "rock.let.kro0", Sheet: SheetRock, Group: "LET", Label: "kro at Swc", Symbol: "kro0", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 2, at: func(s *Study) **Input { return &s.Rock.LET.Kro0 }, when: typedLET},
+	{Path: "rock.let.lw", Sheet: SheetRock, Group: "LET", Label: "Water, lower part", Symbol: "Lw", Quantity: units.Number, Min: 1, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Lw }, when: typedLET},
+	{Path: "rock.let.ew", Sheet: SheetRock, Group: "LET", Label: "Water, elevation", Symbol: "Ew", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Ew }, when: typedLET},
+	{Path: "rock.let.tw", Sheet: SheetRock, Group: "LET", Label: "Water, top part", Symbol: "Tw", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Tw }, when: typedLET},
+	{Path: "rock.let.lo", Sheet: SheetRock, Group: "LET", Label: "Oil, lower part", Symbol: "Lo", Quantity: units.Number, Min: 1, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.Lo }, when: typedLET},
+	{Path: "rock.let.eo", Sheet: SheetRock, Group: "LET", Label: "Oil, elevation", Symbol: "Eo", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Eo }, when: typedLET},
+	{Path: "rock.let.to", Sheet: SheetRock, Group: "LET", Label: "Oil, top part", Symbol: "To", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.To }, when: typedLET},
 
 	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Help: "At reservoir temperature.", at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
 	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Help: "Live oil, at reservoir temperature and pressure.", at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
@@ -78,10 +91,10 @@ var specs = []Spec{
 	{Path: "field.thickness", Sheet: SheetField, Group: "Block", Label: "Net thickness", Symbol: "h", Quantity: units.Length, Min: 0, OpenMin: true, Max: 5e3, at: func(s *Study) **Input { return &s.Field.Thickness }},
 	{Path: "field.porosity", Sheet: SheetField, Group: "Block", Label: "Porosity", Symbol: "φ", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Field.Porosity }},
 	{Path: "field.permeability", Sheet: SheetField, Group: "Drive", Label: "Permeability, absolute", Symbol: "k", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Help: "Decides the rate when the pressure difference is held; at a constant rate it tells what pressure difference that takes.", at: func(s *Study) **Input { return &s.Field.Permeability }},
-	{Path: "field.rate", Sheet: SheetField, Group: "Drive", Label: "Injection rate while on", Symbol: "q", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Reservoir volume of water per day while the injector is on.", at: func(s *Study) **Input { return &s.Field.Rate }},
-	{Path: "field.pressure", Sheet: SheetField, Group: "Drive", Label: "Pressure difference", Symbol: "Δp", Quantity: units.Pressure, Min: 0, OpenMin: true, Max: 1e9, Help: "Injector to producer, held constant. Keep injection below fracture pressure.", at: func(s *Study) **Input { return &s.Field.Pressure }},
+	{Path: "field.rate", Sheet: SheetField, Group: "Drive", Label: "Injection rate while on", Symbol: "q", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Reservoir volume of water per day while the injector is on.", at: func(s *Study) **Input { return &s.Field.Rate }, when: heldRate},
+	{Path: "field.pressure", Sheet: SheetField, Group: "Drive", Label: "Pressure difference", Symbol: "Δp", Quantity: units.Pressure, Min: 0, OpenMin: true, Max: 1e9, Help: "Injector to producer, held constant. Keep injection below fracture pressure.", at: func(s *Study) **Input { return &s.Field.Pressure }, when: heldPressure},
 	{Path: "field.uptime", Sheet: SheetField, Group: "Drive", Label: "Share of time on", Symbol: "u", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "100 %", at: func(s *Study) **Input { return &s.Field.Uptime }},
-	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface; common practice, no source: 90 to 98 %.", at: func(s *Study) **Input { return &s.Field.WaterCut }},
-	{Path: "field.oilRate", Sheet: SheetField, Group: "Limit", Label: "Oil rate at the limit", Symbol: "qo,lim", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Calendar-day average at surface.", at: func(s *Study) **Input { return &s.Field.OilRate }},
+	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface; common practice, no source: 90 to 98 %.", at: func(s *Study) **Input { return &s.Field.WaterCut }, when: limitedByCut},
+	{Path: "field.oilRate", Sheet: SheetField, Group: "Limit", Label: "Oil rate at the limit", Symbol: "qo,lim", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Calendar-day average at surface.", at: func(s *Study) **Input { return &s.Field.OilRate }, when: limitedByOil},
 	{Path: "field.horizon", Sheet: SheetField, Group: "Limit", Label: "Forecast to", Symbol: "tmax", Quantity: units.Duration, Min: 0, OpenMin: true, Max: 1e11, Optional: true, Default: "a little past the limit", at: func(s *Study) **Input { return &s.Field.Horizon }},
 }

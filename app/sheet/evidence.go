@@ -120,19 +120,22 @@ func mark(c wire.Evidence) string {
 	return "✕ differs:"
 }
 
+// shownDigits is as many digits as any source prints.
+const shownDigits = 8
+
 func values(c wire.Evidence) app.UI {
 	rows := make([]app.UI, len(c.Items))
 	for i, item := range c.Items {
 		computed, said := "", ""
 		if c.Done {
-			computed, said = units.Format(item.Computed, 6), "✕ differs"
+			computed, said = units.Format(item.Computed, shownDigits), "✕ differs"
 			if item.Pass {
 				said = "● agrees"
 			}
 		}
 		rows[i] = app.Tr().Body(
 			app.Th().Scope("row").Text(item.Label),
-			app.Td().Class("number").Text(units.Exact(item.Published)),
+			app.Td().Class("number").Text(units.Format(item.Published, shownDigits)),
 			app.Td().Class("number").Text(computed),
 			app.Td().Class("number").Text("± "+units.Format(item.Tolerance, 3)),
 			app.Td().Class("words").Text(item.Why),

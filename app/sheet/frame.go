@@ -53,7 +53,7 @@ func top(d widget.Desk, m state.Model) app.UI {
 		app.A().Class("skip").Href("#inputs").Text("Skip to the inputs"),
 		app.P().Class("product").Text("Brinefront"),
 		widget.Words(d, m, "title", "Study", m.Study.Title, "Untitled study", ""),
-		app.P().Class("kept").ID("kept").Text(kept(m.Saved)),
+		app.P().Class("kept").ID("kept").Title("Whether this browser keeps the study until you come back").Text(kept(m.Saved)),
 		widget.Radios(d, "system", "Units", string(m.System), systems),
 		app.Div().Class("actions").Role("group").Aria("label", "Study").Body(
 			widget.Action(d, "undo", "Undo", state.Undone{}, m.CanUndo),
@@ -75,7 +75,7 @@ func kept(s state.Saving) string {
 	case s.Reason != "":
 		return "✕ Not kept in this browser: " + s.Reason
 	case s.Done:
-		return "✓ Kept in this browser"
+		return "✓ Kept"
 	}
 	return ""
 }

@@ -26,6 +26,7 @@ func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.
 	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
 		app.Div().Class("told").Body(
 			heading(string(sheet)),
+			app.A().Class("jump").Href("#inputs").Text("To the inputs"),
 			&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
 			widget.Wanting(d, part, m.Result.Problems),
 			widget.Notes(d, "Cautions", "caution", part.Notes),
@@ -43,8 +44,7 @@ func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.
 func heading(name string) app.UI {
 	for _, s := range sheets {
 		if s.name == name {
-			return app.Header().Class("heading").Body(app.H1().Text(s.title), app.P().Text(s.question),
-				app.A().Class("jump").Href("#inputs").Text("Inputs"))
+			return app.Header().Class("heading").Body(app.H1().Text(s.title), app.P().Text(s.question))
 		}
 	}
 	panic("sheet: no sheet is called " + name)

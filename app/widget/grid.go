@@ -6,6 +6,9 @@ import (
 	"brinefront/physics/report"
 )
 
+// shortTable is how many rows a printed page keeps together.
+const shortTable = 16
+
 // Grid is a printed table.
 func Grid(id string, t report.Table) app.UI {
 	head := make([]app.UI, len(t.Columns))
@@ -20,7 +23,11 @@ func Grid(id string, t report.Table) app.UI {
 		}
 		rows[r] = app.Tr().Body(cells...)
 	}
-	return app.Div().Class("scroll").ID(id).TabIndex(0).Role("group").Aria("label", t.Title).Body(
+	class := "scroll"
+	if len(rows) <= shortTable {
+		class += " short"
+	}
+	return app.Div().Class(class).ID(id).TabIndex(0).Role("group").Aria("label", t.Title).Body(
 		app.Table().Class("grid").Body(
 			app.Caption().Text(t.Title),
 			app.THead().Body(app.Tr().Body(head...)),

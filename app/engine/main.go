@@ -1,0 +1,14 @@
+// Command engine is the program of the worker: it answers requests and knows
+// nothing of pages. Native, it answers lines of the standard input.
+package main
+
+import (
+	"brinefront/app/browser/port"
+	"brinefront/app/engine/serve"
+)
+
+func main() {
+	port.Listen(func(text string, reply func(string)) {
+		serve.Serve([]byte(text), func(answer []byte) { reply(string(answer)) })
+	})
+}

@@ -1,0 +1,21 @@
+package serve
+
+import (
+	"brinefront/app/wire"
+	"brinefront/physics/study"
+)
+
+// kinds are the requests that are answered. A handler sends one reply or more.
+var kinds = map[string]func(asked wire.Request, send func(wire.Reply)){
+	wire.Run:    run,
+	wire.Checks: checks,
+	wire.Check:  check,
+}
+
+func run(asked wire.Request, send func(wire.Reply)) {
+	if asked.Study == nil {
+		panic("a request to run that holds no study")
+	}
+	result := study.Run(*asked.Study)
+	send(wire.Reply{Result: &result})
+}

@@ -66,10 +66,22 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 		changed = *in
 	}
 	low, high := p.rangeText(path+lowEnd, changed.Low), p.rangeText(path+highEnd, changed.High)
+	if number != changed.Value || unit.Symbol != changed.Unit {
+		changed.Source = own(changed.Source)
+	}
 	changed.Value, changed.Unit = number, unit.Symbol
 	spec.Set(&p.study, &changed)
 	p.keep(path, Draft{text, unit.Symbol}, units.Exact(number))
 	p.span(spec, low, high)
+}
+
+// own is the source note of a number that is the person's now: what the
+// demonstration says of its own numbers no longer holds.
+func own(source string) string {
+	if source == study.Invented {
+		return ""
+	}
+	return source
 }
 
 // keep holds a text as a draft while it is written otherwise than the study's own.

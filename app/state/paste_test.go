@@ -5,12 +5,13 @@ import (
 	"testing"
 
 	"brinefront/physics/paste"
+	"brinefront/physics/study"
 )
 
 const pastedTable = "Sw\tkrw\tkro\n0,2\t0\t0,9\n0,5\t0,1\t0,3\n0,7\t0,3\t0\n"
 
 func TestPaste(t *testing.T) {
-	before := after(New(), Edited{"rock.table.0.sw", "bad", ""}, Edited{oil, "thick", "cp"})
+	before := after(New(), Sourced{"rock.table", "report 7, page 12"}, Edited{"rock.table.0.sw", "bad", ""}, Edited{oil, "thick", "cp"})
 	m, effects := play(before, Pasted{pastedTable})
 	if m.Paste == nil || m.Paste.Text != pastedTable || m.Revision != before.Revision || len(effects) > 0 {
 		t.Fatalf("a paste shows %+v and asks for %v; want a preview and nothing more", m.Paste, effects)
@@ -22,7 +23,7 @@ func TestPaste(t *testing.T) {
 	if m.Paste != nil || len(m.Rows) != 3 || m.Rows[1].Text != [3]string{"0.5", "0.1", "0.3"} || m.Messages["rock.table"] != "" {
 		t.Errorf("after accepting: preview %v, rows %v, message %q", m.Paste, m.Rows, m.Messages["rock.table"])
 	}
-	if m.Study.Rock.Table.Source == "" || m.Drafts[oil].Text != "thick" {
+	if m.Study.Rock.Table.Source != "report 7, page 12" || m.Drafts[oil].Text != "thick" {
 		t.Error("accepting lost the source or what was typed elsewhere")
 	}
 	if len(of[Run](effects)) != 1 {
@@ -63,5 +64,20 @@ func TestPasteRefused(t *testing.T) {
 	}
 	if m := after(New(), PasteAccepted{}, PasteMapped{0, paste.Sw}, PasteDropped{}); m.Paste != nil || m.CanUndo {
 		t.Error("without a paste something is accepted")
+	}
+}
+
+// TestInventedSourceGoesWithTheNumber: what the demonstration says of its own
+// numbers is not said of a number that the person typed or pasted.
+func TestInventedSourceGoesWithTheNumber(t *testing.T) {
+	m := after(New(), Pasted{pastedTable}, PasteAccepted{}, Edited{oil, "4.1", "cp"})
+	if source := m.Study.Rock.Table.Source; source != "" {
+		t.Errorf("the pasted table's source is %q", source)
+	}
+	if in := m.Study.Fluids.OilViscosity; in.Value != 4.1 || in.Source != "" {
+		t.Errorf("the typed viscosity is %+v", in)
+	}
+	if in := m.Study.Fluids.WaterViscosity; in.Source != study.Invented {
+		t.Errorf("the untouched viscosity's source is %q", in.Source)
 	}
 }

@@ -186,6 +186,9 @@ func (p *page) tabulate() {
 func (p *page) use(table study.Table) {
 	if old := p.study.Rock.Table; old != nil {
 		table.Source = old.Source
+		if !sameTable(old, &table) {
+			table.Source = own(old.Source)
+		}
 	}
 	p.study.Rock.Table = &table
 	if len(table.Sw) == 0 && table.Source == "" {

@@ -38,7 +38,7 @@ var closedForms = []Check{
 			"S at M = 2", 0.5773503, "speed at M = 2", 1.3660254, "S at M = 5", 0.4082483, "speed at M = 5", 1.7247449,
 			"S at M = 10", 0.3015113, "speed at M = 10", 2.1583124),
 		compute: fronts(0.5, 1, 2, 5, 10)},
-	{ID: "leveque-front", Topic: "Front", Title: "Front of quadratic curves, water twice as mobile", Source: ref.LeVeque2002, Place: "a = 1/2", Provenance: Memory,
+	{ID: "leveque-front", Topic: "Front", Title: "Front of quadratic curves, water twice as mobile", Source: ref.LeVeque2002, Place: "Sec. 16.1, a = 1/2", Provenance: Memory,
 		Inputs: "krw = S², kro = (1−S)², µo/µw = 2", How: "the envelope solution",
 		Items: items(0.5e-5, lastDigit, "S at the front", 0.57735),
 		compute: func() ([]float64, error) {

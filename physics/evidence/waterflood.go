@@ -104,7 +104,7 @@ var waterfloods = []Check{
 			years := volume / si(units.Rate, 1000, "bbl/d") / si(units.Duration, 365, "d")
 			return []float64{years, 0.35 * years}, nil
 		}},
-	{ID: "ahmed-breakthrough", Topic: "Field", Title: "Water at the producer of a linear flood", Source: ref.Ahmed2001, Place: "Breakthrough examples", Provenance: Memory,
+	{ID: "ahmed-breakthrough", Topic: "Field", Title: "Water at the producer of a linear flood", Source: ref.Ahmed2001, Place: "Ch. 14, breakthrough examples", Provenance: Memory,
 		Inputs: "pore volume 775 779 bbl, 900 bbl/d, Swi 0.20, front at Sw 0.596, fw 0.78, slope 1.973, Bo 1.25, Bw 1.02", How: "volumes and time from the printed slope of the tangent; water cut at surface from the printed fw",
 		Items: []Item{
 			{"days to breakthrough", 436.88, 0.01, lastDigit},

@@ -239,11 +239,11 @@ func TestSpecsAreDescribed(t *testing.T) {
 
 func TestDemoSaysThatItIsInvented(t *testing.T) {
 	st := Demo()
-	if !strings.Contains(st.Title, "invented") || st.Rock.Table.Source != invented {
+	if !strings.Contains(st.Title, "invented") || st.Rock.Table.Source != Invented {
 		t.Error("title or table does not say so")
 	}
 	for _, spec := range Specs() {
-		if in := spec.Get(&st); in != nil && in.Source != invented {
+		if in := spec.Get(&st); in != nil && in.Source != Invented {
 			t.Errorf("%s does not say so", spec.Path)
 		}
 	}

@@ -10,7 +10,8 @@ func Empty() Study {
 	}
 }
 
-const invented = "invented for demonstration"
+// Invented is the source note of every number of the demonstration.
+const Invented = "invented for demonstration"
 
 // Demo is the study that is open on a first visit. Everything in it is invented
 // and says so: a water-wet sandstone plug with scattered points, a medium oil and
@@ -25,7 +26,7 @@ func Demo() Study {
 		Sw:     []float64{0.227, 0.256, 0.295, 0.339, 0.383, 0.427, 0.471, 0.516, 0.56, 0.604, 0.657, 0.716},
 		Krw:    []float64{0, 2.6e-05, 0.0004, 0.00219, 0.0066, 0.014, 0.0281, 0.0465, 0.0781, 0.113, 0.181, 0.274},
 		Kro:    []float64{1, 0.853, 0.71, 0.523, 0.408, 0.286, 0.184, 0.12, 0.0675, 0.0285, 0.00648, 0},
-		Source: invented,
+		Source: Invented,
 	}
 	st.Field.Start = "2027-03-01"
 	for _, given := range []struct {
@@ -74,7 +75,7 @@ func Demo() Study {
 		if !ok {
 			panic("study: the demonstration names no input " + given.path)
 		}
-		spec.Set(&st, &Input{Value: given.value, Unit: given.unit, Source: invented})
+		spec.Set(&st, &Input{Value: given.value, Unit: given.unit, Source: Invented})
 	}
 	return st
 }

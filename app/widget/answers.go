@@ -53,7 +53,7 @@ func (a *Answers) sentence() []app.UI {
 			words = append(words, app.Text(phrase.Text))
 		}
 		if f, ok := a.Part.Figure(phrase.Figure); ok {
-			words = append(words, button(report.Value(f, a.System)).Class("inline").Title("Show the working").
+			words = append(words, button(report.Spoken(f, a.System)).Class("inline").Title("Show the working").
 				Aria("expanded", strconv.FormatBool(a.open == f.ID)).OnClick(a.toggle(f.ID), f.ID))
 		}
 	}

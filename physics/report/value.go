@@ -7,15 +7,23 @@ import (
 	"brinefront/physics/units"
 )
 
-// digits is how many significant digits a figure is printed with. Four is more
-// than laboratory data carry, and enough to check a working by hand.
-const digits = 4
+// How many significant digits are printed. Four is more than laboratory data
+// carry, and enough to check a working by hand; a sentence makes do with three.
+const (
+	digits       = 4
+	spokenDigits = 3
+)
 
 // Value prints a figure as the screen, the page and the text do: durations in
 // the span that suits them, everything else in the unit of the system.
-func Value(f study.Figure, s units.System) string { return printed(f.Value, f.Quantity, s) }
+func Value(f study.Figure, s units.System) string { return printed(f.Value, f.Quantity, s, digits) }
 
-func printed(si float64, q units.Quantity, s units.System) string {
+// Spoken prints a figure as a sentence says it.
+func Spoken(f study.Figure, s units.System) string {
+	return printed(f.Value, f.Quantity, s, spokenDigits)
+}
+
+func printed(si float64, q units.Quantity, s units.System, digits int) string {
 	if q == units.Duration {
 		return units.Span(si)
 	}
@@ -28,7 +36,7 @@ func Sentence(p study.Part, s units.System) string {
 	for _, phrase := range p.Answer {
 		b.WriteString(phrase.Text)
 		if f, ok := p.Figure(phrase.Figure); ok {
-			b.WriteString(Value(f, s))
+			b.WriteString(Spoken(f, s))
 		}
 	}
 	return b.String()

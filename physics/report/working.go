@@ -21,7 +21,7 @@ import (
 func Working(w study.Working, s units.System) (symbolic, numeric string) {
 	values := make(map[string]string, len(w.Terms))
 	for _, t := range w.Terms {
-		values[t.Symbol] = printed(t.Value, t.Quantity, s)
+		values[t.Symbol] = printed(t.Value, t.Quantity, s, digits)
 	}
 	var symbols, numbers strings.Builder
 	left := true

@@ -2,6 +2,8 @@ module brinefront
 
 go 1.26.0
 
+ignore ./web/node_modules
+
 require (
 	github.com/chromedp/cdproto v0.160.1 // indirect
 	github.com/chromedp/chromedp v0.23.1 // indirect

@@ -6,7 +6,7 @@
 //	go run ./build usb           build/out/brinefront-usb.zip: unpack and double-click
 //	go run ./build check         what a site has to hold; fails when it does not
 //	go run ./build bench         timings, native beside WebAssembly, and in Chromium
-//	go run ./build chromium      prints the Chromium that tests use, or how to get one
+//	go run ./build chromium      finds the Chromium that tests use, or installs it
 package main
 
 import (
@@ -30,7 +30,7 @@ var commands = map[string]func(args []string) error{
 	"usb":      func([]string) error { return packUSB() },
 	"check":    func([]string) error { return checkSite() },
 	"bench":    func([]string) error { return bench() },
-	"chromium": func([]string) error { return printChromium() },
+	"chromium": func([]string) error { return ensureChromium() },
 }
 
 func main() {

@@ -106,7 +106,7 @@ func TestOldBrowserIsSaid(t *testing.T) {
 func TestBootKeepsToOldSyntax(t *testing.T) {
 	text, err := os.ReadFile("site/boot.js")
 	must(t, err)
-	newer := regexp.MustCompile("=>|`|\\b(const|let|class|async|await)\\b|\\?\\.|\\?\\?")
+	newer := regexp.MustCompile("=>|`|\\b(const|let|class|async function|await)\\b|\\?\\.|\\?\\?")
 	if found := newer.FindString(string(text)); found != "" {
 		t.Errorf("boot.js holds %q, which old browsers cannot read", found)
 	}

@@ -53,6 +53,7 @@ func (b *Bench) Send(msg state.Msg) {
 	b.model, effects = state.Update(b.model, msg)
 	b.runner.Do(effects)
 	b.announce()
+	b.ctx.Page().SetTitle(tabTitle(b.model.Study.Title))
 	b.Await()
 }
 
@@ -90,6 +91,14 @@ func (b *Bench) Find(path string) {
 			field.Call("focus")
 		}
 	})
+}
+
+// tabTitle names the browser's tab, and with it a printed file.
+func tabTitle(study string) string {
+	if study == "" {
+		return "Brinefront"
+	}
+	return study + ", Brinefront"
 }
 
 // Render draws the frame and the sheet the address names.

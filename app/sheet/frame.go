@@ -161,10 +161,12 @@ func demonstration(d widget.Desk, m state.Model) app.UI {
 	return app.Div().Class("openings").Body(
 		app.P().ID("demonstration").Hidden(m.Study.Note != invented).Body(
 			app.Text("This is an invented demonstration study. "),
-			widget.Link(d, "start-empty", "Start empty", state.StartedEmpty{}),
-			app.Text(" or "),
-			widget.Link(d, "start-open", "open a file", state.OpenAsked{}),
-			app.Text("."),
+			app.Span().Hidden(m.Route.Embed).Body(
+				widget.Link(d, "start-empty", "Start empty", state.StartedEmpty{}),
+				app.Text(" or "),
+				widget.Link(d, "start-open", "open a file", state.OpenAsked{}),
+				app.Text("."),
+			),
 		),
 		app.P().ID("damaged").Hidden(m.Damaged == "").Body(
 			app.Text("✕ What this browser had kept could not be read and was set aside unchanged. "),

@@ -1,6 +1,8 @@
 package widget
 
 import (
+	"strings"
+
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
 	"brinefront/physics/report"
@@ -27,7 +29,11 @@ func Grid(id string, t report.Table) app.UI {
 	if len(rows) <= shortTable {
 		class += " short"
 	}
-	return app.Div().Class(class).ID(id).TabIndex(0).Role("group").Aria("label", t.Title).Body(
+	name := t.Title
+	if name == "" {
+		name = "Table of " + strings.Join(t.Columns, ", ")
+	}
+	return app.Div().Class(class).ID(id).TabIndex(0).Role("group").Aria("label", name).Body(
 		app.Table().Class("grid").Body(
 			app.Caption().Text(t.Title),
 			app.THead().Body(app.Tr().Body(head...)),

@@ -84,5 +84,5 @@ func Notices(d Desk, notices []state.Notice) app.UI {
 			button("Dismiss").OnClick(dismiss, scope),
 		)
 	}
-	return app.Ul().ID("notices").Class("notices").Role("status").Aria("live", "polite").Body(list...)
+	return app.Div().ID("notices").Class("notices").Role("status").Aria("live", "polite").Body(app.Ul().Body(list...))
 }

@@ -6,6 +6,7 @@ import (
 	"io/fs"
 	"os"
 	"path/filepath"
+	"regexp"
 	"slices"
 	"strings"
 )
@@ -109,6 +110,9 @@ func (p program) checkLinks() error {
 	return errors.Join(faults...)
 }
 
+// setting tells the functions that set a package's variables, or lie in them.
+var setting = regexp.MustCompile(`^(map\.)?init(\.|$)`)
+
 // functionsOf lists the functions of a package and of those within it. The
 // linker writes an underscore for what is neither a letter, a digit nor a dot. A
 // package that is only imported still sets its variables: that is not counted.
@@ -122,7 +126,7 @@ func functionsOf(pack string, names []string) []string {
 	return slices.DeleteFunc(slices.Clone(names), func(name string) bool {
 		rest, within := strings.CutPrefix(name, spelled)
 		function, own := strings.CutPrefix(rest, ".")
-		sets := own && (function == "init" || strings.HasPrefix(function, "map.init"))
+		sets := own && setting.MatchString(function)
 		return !within || sets || !own && !strings.HasPrefix(rest, "_")
 	})
 }

@@ -117,6 +117,9 @@ func (p *Page) Go(fragment string) {
 // Reload loads the page anew, with what the browser has kept.
 func (p *Page) Reload() { p.t.Helper(); p.do(chromedp.Reload()) }
 
+// Close closes the tab before the test ends; otherwise that happens by itself.
+func (p *Page) Close() { p.t.Helper(); must(p.t, chromedp.Cancel(p.ctx)) }
+
 // Focus gives an element the keyboard.
 func (p *Page) Focus(selector string) { p.t.Helper(); p.do(chromedp.Focus(selector)) }
 

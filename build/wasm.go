@@ -10,8 +10,9 @@ import (
 
 // compileWasm compiles a program for the browser, without debugging data but
 // with the names of its functions.
-func compileWasm(pack, out string) error {
-	cmd := exec.Command("go", "build", "-trimpath", "-ldflags", "-w", "-o", out, pack)
+func compileWasm(pack, out string, flags ...string) error {
+	arguments := append([]string{"build", "-trimpath", "-ldflags=-w", "-o", out}, flags...)
+	cmd := exec.Command("go", append(arguments, pack)...)
 	cmd.Env = append(os.Environ(), "GOOS=js", "GOARCH=wasm")
 	cmd.Stderr = os.Stderr
 	return cmd.Run()

@@ -5,6 +5,7 @@ const (
 	AbramowitzStegun1964 ID = "abramowitz-stegun-1964"
 	Ahmed2001            ID = "ahmed-2001"
 	Bertsekas1982        ID = "bertsekas-1982"
+	BatzleWang1992       ID = "batzle-wang-1992"
 	BrooksCorey1964      ID = "brooks-corey-1964"
 	BuckleyLeverett1942  ID = "buckley-leverett-1942"
 	Chandrupatla1997     ID = "chandrupatla-1997"
@@ -12,16 +13,25 @@ const (
 	Corey1954            ID = "corey-1954"
 	Craig1971            ID = "craig-1971"
 	Dake1978             ID = "dake-1978"
+	Dietz1953            ID = "dietz-1953"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
+	IAPWSIF97            ID = "iapws-if97"
+	IAPWSR12             ID = "iapws-r12-08"
+	Lake1989             ID = "lake-1989"
+	Land1968             ID = "land-1968"
 	LeVeque2002          ID = "leveque-2002"
 	Levenberg1944        ID = "levenberg-1944"
 	Lomeland2005         ID = "lomeland-2005"
 	Marquardt1963        ID = "marquardt-1963"
+	McCain1991           ID = "mccain-1991"
+	McPhee2015           ID = "mcphee-2015"
 	More1978             ID = "more-1978"
 	NISTStRD             ID = "nist-strd"
 	Nielsen1999          ID = "nielsen-1999"
 	NISTSP811            ID = "nist-sp-811"
 	Oleinik1957          ID = "oleinik-1957"
+	Phillips1981         ID = "phillips-1981"
+	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SeberWild1989        ID = "seber-wild-1989"
 	Welge1952            ID = "welge-1952"
 )
@@ -30,23 +40,33 @@ var sources = map[ID]Source{
 	AbramowitzStegun1964: {Authors: "Abramowitz & Stegun", Year: 1964, Title: "Handbook of Mathematical Functions", Where: "National Bureau of Standards, table 25.4"},
 	Ahmed2001:            {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing"},
 	Bertsekas1982:        {Authors: "Bertsekas", Year: 1982, Title: "Projected Newton methods for optimization problems with simple constraints", Where: "SIAM J. Control Optim. 20(2), 221-246"},
+	BatzleWang1992:       {Authors: "Batzle & Wang", Year: 1992, Title: "Seismic properties of pore fluids", Where: "Geophysics 57(11), 1396-1408"},
 	BrooksCorey1964:      {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
 	Chandrupatla1997:     {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
 	Chaudhry2004:         {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
+	IAPWSIF97:            {Authors: "IAPWS", Year: 2012, Title: "Revised Release on the IAPWS Industrial Formulation 1997 for the Thermodynamic Properties of Water and Steam", Where: "IAPWS R7-97"},
+	IAPWSR12:             {Authors: "IAPWS", Year: 2008, Title: "Release on the IAPWS Formulation 2008 for the Viscosity of Ordinary Water Substance", Where: "IAPWS R12-08"},
+	Lake1989:             {Authors: "Lake", Year: 1989, Title: "Enhanced Oil Recovery", Where: "Prentice Hall"},
+	Land1968:             {Authors: "Land", Year: 1968, Title: "Calculation of imbibition relative permeability for two- and three-phase flow from rock properties", Where: "SPE J. 8(2), 149-156"},
 	LeVeque2002:          {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press"},
 	NISTSP811:            {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811"},
 	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
 	Corey1954:            {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
 	Craig1971:            {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
 	Dake1978:             {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier"},
+	Dietz1953:            {Authors: "Dietz", Year: 1953, Title: "A theoretical approach to the problem of encroaching and by-passing edge water", Where: "Proc. Koninkl. Ned. Akad. Wetensch. B 56, 83-92"},
 	FritschCarlson1980:   {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
 	Levenberg1944:        {Authors: "Levenberg", Year: 1944, Title: "A method for the solution of certain non-linear problems in least squares", Where: "Quart. Appl. Math. 2(2), 164-168"},
 	Marquardt1963:        {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
+	McCain1991:           {Authors: "McCain", Year: 1991, Title: "Reservoir-fluid property correlations: state of the art", Where: "SPE Reserv. Eng. 6(2), 266-272"},
+	McPhee2015:           {Authors: "McPhee, Reed & Zubizarreta", Year: 2015, Title: "Core Analysis: A Best Practice Guide", Where: "Elsevier"},
 	More1978:             {Authors: "Moré", Year: 1978, Title: "The Levenberg-Marquardt algorithm: implementation and theory", Where: "in Watson (ed.) Numerical Analysis, Springer, 105-116"},
 	NISTStRD:             {Authors: "National Institute of Standards and Technology", Year: 1998, Title: "Statistical Reference Datasets: nonlinear regression", Where: "NIST Standard Reference Database 140"},
 	Nielsen1999:          {Authors: "Nielsen", Year: 1999, Title: "Damping parameter in Marquardt's method", Where: "Report IMM-REP-1999-05, Technical University of Denmark"},
 	Lomeland2005:         {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
 	Oleinik1957:          {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
+	Phillips1981:         {Authors: "Phillips, Igbene, Fair, Ozbek & Tavana", Year: 1981, Title: "A technical databook for geothermal energy utilization", Where: "Report LBL-12810, Lawrence Berkeley Laboratory"},
+	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 }

@@ -31,7 +31,7 @@ var programs = []program{
 // spelled out in web/index.html and web/boot.js, and a test compares.
 var siteFiles = []string{
 	"index.html", "boot.js", "start.js", "engine.js", "plot.js", "interface-program.js", "engine-program.js",
-	"style.css", "print.css", "icons/brinefront.svg", "study.schema.json", "THIRD-PARTY.txt",
+	"style.css", "print.css", "study.schema.json", "THIRD-PARTY.txt",
 }
 
 // buildSite writes build/site anew. Every address in it is relative, so that the
@@ -48,14 +48,12 @@ func buildSite() error {
 	if err := bundle(); err != nil {
 		return err
 	}
-	for _, name := range []string{"index.html", "icons/brinefront.svg"} {
-		text, err := os.ReadFile(filepath.Join(webFolder, name))
-		if err != nil {
-			return err
-		}
-		if err := writeSite(name, text); err != nil {
-			return err
-		}
+	index, err := indexPage()
+	if err != nil {
+		return err
+	}
+	if err := writeSite("index.html", index); err != nil {
+		return err
 	}
 	if err := writeSite("study.schema.json", []byte(study.Schema())); err != nil {
 		return err
@@ -65,6 +63,25 @@ func buildSite() error {
 		return err
 	}
 	return writeSite("THIRD-PARTY.txt", notices)
+}
+
+// indexPage is index.html with its icon in it: browsers ask for an icon again
+// whenever the address changes, and after its start a page asks for nothing.
+func indexPage() ([]byte, error) {
+	page, err := os.ReadFile(filepath.Join(webFolder, "index.html"))
+	if err != nil {
+		return nil, err
+	}
+	const icon = "icons/brinefront.svg"
+	drawing, err := os.ReadFile(filepath.Join(webFolder, icon))
+	if err != nil {
+		return nil, err
+	}
+	if bytes.Count(page, []byte(icon)) != 1 {
+		return nil, fmt.Errorf("index.html has to name its icon once, as %s", icon)
+	}
+	inline := "data:image/svg+xml;base64," + base64.StdEncoding.EncodeToString(drawing)
+	return bytes.Replace(page, []byte(icon), []byte(inline), 1), nil
 }
 
 func writeSite(name string, content []byte) error {

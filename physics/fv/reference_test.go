@@ -82,7 +82,7 @@ func newLaw(t testing.TB, fn Function, a, b float64) *Law {
 
 func tabulated(t testing.TB, law *Law) *Law {
 	t.Helper()
-	table, _, err := law.Tabulated(4096)
+	table, err := law.Tabulated(1024)
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -5,59 +5,97 @@ import (
 	"math"
 )
 
-// tableError is how far, in parts of the reach of f, a tabulated law may be off.
-const tableError = 1e-13
+const (
+	tableError = 1e-13 // how far a tabulated law may be off, in parts of the reach of f
+	finer      = 8     // pieces that a piece is cut into where that is not met
+	deepest    = 8     // how often over
+)
 
 // Tabulated returns the law with f read from n equal pieces, a Hermite cubic in each,
 // which is many times faster than powers and logarithms. A piece in which the cubic misses
-// f by more than 1e-13 of its reach at any of seven places (a knot, or a power law at its
-// end) asks f itself; exact is the share of pieces that do. n must be from 1 to 1e6;
-// 4096 suits smooth curves.
-func (l *Law) Tabulated(n int) (law *Law, exact float64, err error) {
+// f by more than 1e-13 of its reach at any of seven places (a power law at its end, or a
+// knot) is cut into 8, up to eight times over; what is still amiss then asks f itself.
+// n must be from 1 to 1e6; 1024 suits smooth curves.
+func (l *Law) Tabulated(n int) (*Law, error) {
 	if n < 1 || n > 1e6 {
-		return nil, 0, fmt.Errorf("fv: a table of %d pieces; allowed: 1 to 1000000", n)
+		return nil, fmt.Errorf("fv: a table of %d pieces; allowed: 1 to 1000000", n)
 	}
-	width := (l.hi - l.lo) / float64(n)
-	place := func(k int, t float64) float64 { return math.Min(l.hi, l.lo+(float64(k)+t)*width) }
-	type piece struct{ c0, c1, c2, c3 float64 }
-	pieces := make([]piece, n)
 	low, high := math.Inf(1), math.Inf(-1)
-	for k := range pieces {
-		f0, v0 := l.fn.At(place(k, 0))
-		f1, _ := l.fn.At(place(k, 1))
-		_, v1 := l.fn.At(math.Nextafter(place(k, 1), l.lo))
-		v0, v1 = v0*width, v1*width
-		pieces[k] = piece{f0, v0, 3*(f1-f0) - 2*v0 - v1, 2*(f0-f1) + v0 + v1}
-		low, high = math.Min(low, math.Min(f0, f1)), math.Max(high, math.Max(f0, f1))
+	for i := range n + 1 {
+		f, _ := l.fn.At(l.lo + (l.hi-l.lo)*(float64(i)/float64(n)))
+		low, high = math.Min(low, f), math.Max(high, f)
 	}
-	asked := 0
-	for k := range pieces {
-		c := pieces[k]
+	copied := *l
+	copied.fill = newTable(l.fn, l.lo, l.hi, tableError*(high-low), n, 0).fill
+	return &copied, nil
+}
+
+type table struct {
+	fn        Function
+	lo, scale float64
+	pieces    []piece
+}
+
+// piece is c0 + c1 t + c2 t² + c3 t³, t from 0 to 1, unless it is cut finer or, with c0
+// not a number, has to ask f.
+type piece struct {
+	c0, c1, c2, c3 float64
+	cut            *table
+}
+
+func newTable(fn Function, lo, hi, allowed float64, n, depth int) *table {
+	t := &table{fn, lo, float64(n) / (hi - lo), make([]piece, n)}
+	place := func(k int, u float64) float64 { return math.Min(hi, lo+(hi-lo)*((float64(k)+u)/float64(n))) }
+	for k := range t.pieces {
+		a, b := place(k, 0), place(k, 1)
+		if !(b > a) { // too narrow for the digits of s
+			t.pieces[k].c0 = math.NaN()
+			continue
+		}
+		f0, v0 := fn.At(a)
+		f1, _ := fn.At(b)
+		_, v1 := fn.At(math.Nextafter(b, a)) // of this piece, should there be a knot
+		v0, v1 = v0*(b-a), v1*(b-a)
+		p := piece{c0: f0, c1: v0, c2: 3*(f1-f0) - 2*v0 - v1, c3: 2*(f0-f1) + v0 + v1}
 		for i := 1; i < 8; i++ {
-			t := float64(i) / 8
-			f, _ := l.fn.At(place(k, t))
-			if !(math.Abs(c.c0+t*(c.c1+t*(c.c2+t*c.c3))-f) <= tableError*(high-low)) {
-				pieces[k].c0 = math.NaN() // the mark of a piece that asks f itself
-				asked++
+			u := float64(i) / 8
+			if f, _ := fn.At(place(k, u)); !(math.Abs(p.at(u)-f) <= allowed) {
+				if p.c0 = math.NaN(); depth < deepest {
+					p.cut = newTable(fn, a, b, allowed, finer, depth+1)
+				}
 				break
 			}
 		}
+		t.pieces[k] = p
 	}
-	copied := *l
-	scale, lo, fn := 1/width, l.lo, l.fn
-	copied.fill = func(f, s []float64) {
-		f = f[:len(s)]
-		for i, x := range s {
-			t := (x - lo) * scale
-			k := min(max(int(t), 0), len(pieces)-1)
-			t -= float64(k)
-			c := &pieces[k]
-			y := c.c0 + t*(c.c1+t*(c.c2+t*c.c3))
-			if y != y {
-				y, _ = fn.At(x)
-			}
-			f[i] = y
+	return t
+}
+
+func (p *piece) at(t float64) float64 { return p.c0 + t*(p.c1+t*(p.c2+t*p.c3)) }
+
+func (t *table) fill(f, s []float64) {
+	f = f[:len(s)]
+	for i, x := range s {
+		u := (x - t.lo) * t.scale
+		k := min(max(int(u), 0), len(t.pieces)-1)
+		y := t.pieces[k].at(u - float64(k))
+		if y != y {
+			y = t.deep(x, k)
+		}
+		f[i] = y
+	}
+}
+
+// deep is f at x, which is in piece k, where the cubic of that piece will not do.
+func (t *table) deep(x float64, k int) float64 {
+	for t.pieces[k].cut != nil {
+		t = t.pieces[k].cut
+		u := (x - t.lo) * t.scale
+		k = min(max(int(u), 0), len(t.pieces)-1)
+		if y := t.pieces[k].at(u - float64(k)); y == y {
+			return y
 		}
 	}
-	return &copied, float64(asked) / float64(n), nil
+	y, _ := t.fn.At(x)
+	return y
 }

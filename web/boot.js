@@ -94,7 +94,9 @@
       step = next;
       show();
     },
-    stop: stop
+    stop: stop,
+    // stopped tells whether something is wrong: nothing may start any more.
+    stopped: function () { return fault !== ""; }
   };
 
   show();

@@ -17,7 +17,7 @@ const compiled = compile(self.brinefrontInterfaceProgram);
 delete self.brinefrontInterfaceProgram; // megabytes of text that nobody reads again
 
 // The program may ask for the engine and for pictures at once, so it starts when
-// every file has been run.
+// every file has been run or is known to be missing.
 const loaded = new Promise((resolve) => addEventListener("load", resolve));
 
 async function start() {
@@ -25,6 +25,7 @@ async function start() {
   boot.reached("Starting the engine");
   await loaded;
   await self.brinefrontEngine.ready;
+  if (boot.stopped()) return;
   boot.reached("Opening the bench");
   const go = new Go();
   const instance = await WebAssembly.instantiate(module, go.importObject);

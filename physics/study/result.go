@@ -101,6 +101,20 @@ type Chart struct {
 	Lines   []Line `json:"lines"`
 	Marks   []Mark `json:"marks"`
 	Summary string `json:"summary"` // the text alternative: what a reader should see in the picture
+
+	Slider *Slider `json:"slider,omitempty"` // present when some line is Moving
+}
+
+// Slider is a variable that the reader moves to move the chart's Moving lines. Such a
+// picture is self-similar: every state sits at a place in proportion to the variable.
+type Slider struct {
+	Label    string         `json:"label"`
+	Symbol   string         `json:"symbol"`
+	Quantity units.Quantity `json:"quantity"`
+	Min      float64        `json:"min"` // SI, all of them
+	Max      float64        `json:"max"`
+	Value    float64        `json:"value"` // where it stands at first, and in print
+	Marks    []Mark         `json:"marks"` // labelled values of the variable, in X; Y is 0
 }
 
 // Axis describes one axis of a chart.
@@ -123,6 +137,17 @@ type Line struct {
 	X     []float64 `json:"x"`
 	Y     []float64 `json:"y"`
 	Low   []float64 `json:"low,omitempty"` // band only: lower edge, Y is the upper
+
+	// Moving says that X is given for one unit (SI) of the chart's Slider: a point is
+	// drawn at X times the slider's value. Points beyond the X axis' Max are clipped,
+	// with the line cut where it crosses; beyond its last point the line is carried on
+	// to Max at its last Y.
+	Moving bool `json:"moving,omitempty"`
+	// Readings are further quantities at each point of the line, read out beside X and
+	// Y: each column has as many Values as the line has points; NaN never stands there.
+	// A point at which a reading does not exist has an entry in Words instead (then all
+	// points have one: "" where the value counts).
+	Readings []Column `json:"readings,omitempty"`
 }
 
 // Mark is a labelled point of a chart.

@@ -165,7 +165,7 @@ func (l *Law) Fastest(a, b float64) float64 {
 // right: the least f between them when a <= b, else the largest. For f that rises it
 // is f(a), for f that falls f(b): single-point upstream.
 //
-// Sources: Godunov (1959); Osher (1984), eq. 1.12.
+// Sources: Godunov (1959); Osher (1984).
 func (l *Law) godunov(a, b, fa, fb float64) float64 {
 	if a <= b {
 		f := math.Min(fa, fb)

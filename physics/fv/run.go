@@ -135,7 +135,7 @@ func (r *Run) Advance(to float64, each func(*Run) bool) {
 
 // step moves on by dq: forward Euler, or with a limiter the two-stage Runge-Kutta method
 // of second order that is a mean of Euler steps, so that what those never do (new
-// extrema) it never does either. Shu & Osher (1988), eq. 2.18.
+// extrema) it never does either. Shu & Osher (1988).
 func (r *Run) step(dq float64) {
 	r.steps++
 	ratio := dq * float64(r.cells)
@@ -197,7 +197,7 @@ func (r *Run) faces() []float64 {
 // cell. In the last cell the change to the state beyond only limits: that state may be
 // far away in saturation without a slope in the rock.
 //
-// Source: van Leer (1979), eq. 66 to 69.
+// Source: van Leer (1979).
 func (r *Run) reconstruct() {
 	n := r.cells
 	r.left[0], r.right[n] = r.u[0], r.u[n+1]

@@ -12,11 +12,14 @@ const (
 	Chaudhry2004         ID = "chaudhry-2004"
 	Corey1954            ID = "corey-1954"
 	Craig1971            ID = "craig-1971"
+	CrandallMajda1980    ID = "crandall-majda-1980"
 	Dake1978             ID = "dake-1978"
 	Dietz1953            ID = "dietz-1953"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
+	Godunov1959          ID = "godunov-1959"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
+	Kuznetsov1976        ID = "kuznetsov-1976"
 	Lake1989             ID = "lake-1989"
 	Land1968             ID = "land-1968"
 	LeVeque2002          ID = "leveque-2002"
@@ -26,13 +29,21 @@ const (
 	McCain1991           ID = "mccain-1991"
 	McPhee2015           ID = "mcphee-2015"
 	More1978             ID = "more-1978"
+	Neumaier1974         ID = "neumaier-1974"
 	NISTStRD             ID = "nist-strd"
 	Nielsen1999          ID = "nielsen-1999"
 	NISTSP811            ID = "nist-sp-811"
 	Oleinik1957          ID = "oleinik-1957"
+	Osher1984            ID = "osher-1984"
+	PerthameShu1996      ID = "perthame-shu-1996"
 	Phillips1981         ID = "phillips-1981"
+	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SeberWild1989        ID = "seber-wild-1989"
+	ShuOsher1988         ID = "shu-osher-1988"
+	Sweby1984            ID = "sweby-1984"
+	VanLeer1974          ID = "van-leer-1974"
+	VanLeer1979          ID = "van-leer-1979"
 	Welge1952            ID = "welge-1952"
 )
 
@@ -69,4 +80,15 @@ var sources = map[ID]Source{
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
+	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},
+	Godunov1959:          {Authors: "Godunov", Year: 1959, Title: "A difference method for numerical calculation of discontinuous solutions of the equations of hydrodynamics", Where: "Mat. Sbornik 47(89)(3), 271-306"},
+	Kuznetsov1976:        {Authors: "Kuznetsov", Year: 1976, Title: "Accuracy of some approximate methods for computing the weak solutions of a first-order quasi-linear equation", Where: "USSR Comput. Math. Math. Phys. 16(6), 105-119"},
+	Neumaier1974:         {Authors: "Neumaier", Year: 1974, Title: "Rundungsfehleranalyse einiger Verfahren zur Summation endlicher Summen", Where: "Z. Angew. Math. Mech. 54(1), 39-51"},
+	Osher1984:            {Authors: "Osher", Year: 1984, Title: "Riemann solvers, the entropy condition, and difference approximations", Where: "SIAM J. Numer. Anal. 21(2), 217-235"},
+	PerthameShu1996:      {Authors: "Perthame & Shu", Year: 1996, Title: "On positivity preserving finite volume schemes for Euler equations", Where: "Numer. Math. 73(1), 119-130"},
+	Roe1986:              {Authors: "Roe", Year: 1986, Title: "Characteristic-based schemes for the Euler equations", Where: "Ann. Rev. Fluid Mech. 18, 337-365"},
+	ShuOsher1988:         {Authors: "Shu & Osher", Year: 1988, Title: "Efficient implementation of essentially non-oscillatory shock-capturing schemes", Where: "J. Comput. Phys. 77(2), 439-471"},
+	Sweby1984:            {Authors: "Sweby", Year: 1984, Title: "High resolution schemes using flux limiters for hyperbolic conservation laws", Where: "SIAM J. Numer. Anal. 21(5), 995-1011"},
+	VanLeer1974:          {Authors: "van Leer", Year: 1974, Title: "Towards the ultimate conservative difference scheme. II. Monotonicity and conservation combined in a second-order scheme", Where: "J. Comput. Phys. 14(4), 361-370"},
+	VanLeer1979:          {Authors: "van Leer", Year: 1979, Title: "Towards the ultimate conservative difference scheme. V. A second-order sequel to Godunov's method", Where: "J. Comput. Phys. 32(1), 101-136"},
 }

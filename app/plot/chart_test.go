@@ -20,7 +20,14 @@ func invented() study.Chart {
 			{ID: "qw", Label: "water", Role: "water", Kind: "dashed", X: []float64{0, 86400, 172800}, Y: []float64{0, 0.005, 0.0075}},
 			{ID: "range", Label: "oil, likely", Role: "oil", Kind: "band", X: []float64{0, 172800}, Y: []float64{0.011, 0.003}, Low: []float64{0.009, 0.002}},
 			{ID: "test", Label: `well test, "A"`, Role: "oil", Kind: "points", X: []float64{43200}, Y: []float64{0.008}},
+			{ID: "bank", Label: "oil bank", Role: "time1", Kind: "line", X: []float64{0, 43200, 86400}, Y: []float64{0.002, 0.004, 0.006}, Moving: true,
+				Readings: []study.Column{
+					{Label: "speed", Symbol: "v", Quantity: units.Number, Values: []float64{2, 1, 0.5}},
+					{Label: "arrives after", Quantity: units.Duration, Values: []float64{3600, 0, 3 * 365.25 * 86400}, Words: []string{"", "never", ""}},
+				}},
 		},
+		Slider: &study.Slider{Label: "Water injected", Symbol: "Q", Quantity: units.PoreVolumes, Min: 0, Max: 2, Value: 1.5,
+			Marks: []study.Mark{{Label: "breakthrough", X: 0.5}}},
 		Marks: []study.Mark{{Label: "water arrives", X: 43200, Y: 0.01}},
 	}
 }

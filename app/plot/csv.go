@@ -9,7 +9,8 @@ import (
 
 // CSV is the picture's numbers for a spreadsheet (RFC 4180): one header row with
 // units, the series side by side at full precision, a decimal point. Series that
-// share their x share its column. A gap is an empty cell.
+// share their x share its column. A gap is an empty cell. A moving line stands where
+// its slider stands at first, with every point that it has; its readings follow it.
 func (p Picture) CSV() string {
 	columns := p.columns()
 	header := make([]string, len(columns))
@@ -51,16 +52,23 @@ func (p Picture) columns() []column {
 	var list []column
 	var last [][2]float64 // whose x column stands furthest to the right
 	for _, l := range p.Lines {
-		if len(list) == 0 || !sameX(last, l.Data) {
-			list = append(list, column{p.X.Title, cells(l.Data, 0)})
-			last = l.Data
+		data, place := l.Data, p.X.Title
+		if l.Moving {
+			data, place = moved(l.Data, p.Slider.Value), p.X.Title+" at "+p.Slider.Short+" = "+withUnit(p.Slider.Value, p.Slider.Unit)
+		}
+		if len(list) == 0 || l.Moving || !sameX(last, data) {
+			list = append(list, column{place, cells(data, 0)})
+			last = data
 		}
 		if l.Low != nil {
 			list = append(list, column{l.Label + ", lower edge: " + p.Y.Title, cells(l.Low, 1)})
-			list = append(list, column{l.Label + ", upper edge: " + p.Y.Title, cells(l.Data, 1)})
-			continue
+			list = append(list, column{l.Label + ", upper edge: " + p.Y.Title, cells(data, 1)})
+		} else {
+			list = append(list, column{l.Label + ": " + p.Y.Title, cells(data, 1)})
 		}
-		list = append(list, column{l.Label + ": " + p.Y.Title, cells(l.Data, 1)})
+		for _, r := range l.Readings {
+			list = append(list, column{l.Label + ": " + r.title(), r.cells()})
+		}
 	}
 	if len(p.Marks) == 0 {
 		return list
@@ -72,6 +80,39 @@ func (p Picture) columns() []column {
 		y.cells = append(y.cells, full(m.Y))
 	}
 	return append(list, mark, x, y)
+}
+
+// moved is a moving line's points at a value of the slider.
+func moved(data [][2]float64, value float64) [][2]float64 {
+	list := make([][2]float64, len(data))
+	for i, p := range data {
+		list[i] = [2]float64{p[0] * value, p[1]}
+	}
+	return list
+}
+
+func withUnit(v float64, unit string) string { return strings.TrimSpace(full(v) + " " + unit) }
+
+func (r Reading) title() string {
+	text := r.Label
+	if r.Short != r.Label {
+		text += ", " + r.Short
+	}
+	if r.Unit != "" {
+		text += " (" + r.Unit + ")"
+	}
+	return text
+}
+
+func (r Reading) cells() []string {
+	list := make([]string, len(r.Values))
+	for i, v := range r.Values {
+		list[i] = full(v)
+		if r.Words != nil && r.Words[i] != "" {
+			list[i] = r.Words[i]
+		}
+	}
+	return list
 }
 
 func sameX(a, b [][2]float64) bool {

@@ -26,6 +26,7 @@ func TestCSVNamesEveryColumnWithItsUnit(t *testing.T) {
 		x, "oil: " + y, "water: " + y, // share their x
 		x, "oil, likely, lower edge: " + y, "oil, likely, upper edge: " + y,
 		x, `well test, "A": ` + y,
+		x + " at Q = 1.5 PV", "oil bank: " + y, "oil bank: speed, v", "oil bank: arrives after (yr)",
 		"Marked point", x, y,
 	}
 	if got := rows(t, From(invented(), units.Field).CSV())[0]; !slices.Equal(got, want) {
@@ -62,13 +63,17 @@ func TestCSVIsExact(t *testing.T) {
 	for i, want := range map[int][]float64{
 		0: along(p.Lines[0].Data, 0), 1: along(p.Lines[0].Data, 1), 2: along(p.Lines[1].Data, 1),
 		3: along(p.Lines[2].Data, 0), 4: along(p.Lines[2].Low, 1), 5: along(p.Lines[2].Data, 1),
-		6: along(p.Lines[3].Data, 0), 7: along(p.Lines[3].Data, 1), 9: {p.Marks[0].X}, 10: {p.Marks[0].Y},
+		6: along(p.Lines[3].Data, 0), 7: along(p.Lines[3].Data, 1), 13: {p.Marks[0].X}, 14: {p.Marks[0].Y},
+		8: {0, 0.75, 1.5}, 9: along(p.Lines[4].Data, 1), 10: p.Lines[4].Readings[0].Values, // half a day and a day, times 1.5 PV
 	} {
 		if got := column(i); !slices.Equal(got, want) {
 			t.Errorf("column %d holds %v, want %v", i, got, want)
 		}
 	}
-	if got := records[1][8]; got != "water arrives" {
+	if got := records[2][11]; got != "never" {
+		t.Errorf("a point without an arrival reads %q", got)
+	}
+	if got := records[1][12]; got != "water arrives" {
 		t.Errorf("the mark is called %q", got)
 	}
 }

@@ -12,6 +12,8 @@ import (
 const (
 	errLengths = "plot: a line's coordinates differ in number"
 	errBand    = "plot: a band without a lower edge, or a lower edge without a band"
+	errSlider  = "plot: a moving line without a slider"
+	errReading = "plot: a reading that has not one value a point"
 )
 
 // From converts a chart in SI to the units in which a system shows its axes.
@@ -24,16 +26,34 @@ const (
 //	durations: the largest unit of which the axis shows at least two
 //	coordinates that differ in number: panic, a programmer's mistake
 func From(c study.Chart, s units.System) Picture {
-	x := scaleOf(c.X, s, func(l study.Line) []float64 { return l.X }, c.Lines)
-	y := scaleOf(c.Y, s, func(l study.Line) []float64 { return l.Y }, c.Lines)
+	x := axisUnit(c.X, s, c.Lines, func(l study.Line) float64 {
+		if l.Moving && c.Slider != nil {
+			return largest(l.X) * c.Slider.Max
+		}
+		return largest(l.X)
+	})
+	y := axisUnit(c.Y, s, c.Lines, func(l study.Line) float64 { return largest(l.Y) })
 	p := Picture{
 		ID: c.ID, Title: c.Title, Summary: c.Summary,
 		X: axisFrom(c.X, x), Y: axisFrom(c.Y, y),
 		Lines: make([]Line, len(c.Lines)),
 		Marks: []Mark{},
 	}
+	var variable units.Unit
+	if c.Slider != nil {
+		variable = suited(c.Slider.Quantity, s, c.Slider.Max)
+		p.Slider = sliderFrom(*c.Slider, variable)
+	}
 	for i, l := range c.Lines {
-		p.Lines[i] = lineFrom(l, x, y)
+		along := x
+		if l.Moving {
+			if c.Slider == nil {
+				panic(errSlider)
+			}
+			along.Factor /= variable.Factor // x for one unit of the slider as shown
+		}
+		p.Lines[i] = lineFrom(l, along, y)
+		p.Lines[i].Readings = readingsFrom(l, s)
 	}
 	for _, m := range c.Marks {
 		if at := (point{x.FromSI(m.X), y.FromSI(m.Y)}); at.finite() {
@@ -43,6 +63,34 @@ func From(c study.Chart, s units.System) Picture {
 	return p
 }
 
+func sliderFrom(c study.Slider, u units.Unit) *Slider {
+	out := &Slider{
+		Label: c.Label, Short: short(c.Label, c.Symbol), Unit: unitText(u),
+		Min: u.FromSI(c.Min), Max: u.FromSI(c.Max), Value: u.FromSI(c.Value),
+		Stops: make([]Stop, len(c.Marks)),
+	}
+	for i, m := range c.Marks {
+		out.Stops[i] = Stop{Label: m.Label, At: u.FromSI(m.X)}
+	}
+	return out
+}
+
+func readingsFrom(l study.Line, s units.System) []Reading {
+	var list []Reading
+	for _, c := range l.Readings {
+		if len(c.Values) != len(l.X) || (c.Words != nil && len(c.Words) != len(l.X)) {
+			panic(errReading)
+		}
+		u := suited(c.Quantity, s, largest(c.Values))
+		out := Reading{Label: c.Label, Short: short(c.Label, c.Symbol), Unit: unitText(u), Values: make([]float64, len(c.Values)), Words: c.Words}
+		for i, v := range c.Values {
+			out.Values[i] = u.FromSI(v)
+		}
+		list = append(list, out)
+	}
+	return list
+}
+
 // point is a place in a picture.
 type point [2]float64
 
@@ -50,22 +98,23 @@ func (p point) finite() bool { return finite(p[0]) && finite(p[1]) }
 
 func finite(v float64) bool { return !math.IsNaN(v) && !math.IsInf(v, 0) }
 
-// scaleOf is the unit an axis is shown in: the system's, but for a duration the
-// one that suits its length, as a person would say "7.9 years" and not 2,885 days.
-func scaleOf(a study.Axis, s units.System, along func(study.Line) []float64, lines []study.Line) units.Unit {
-	if a.Quantity != units.Duration {
-		return s.Unit(a.Quantity)
+// axisUnit is the unit an axis is shown in, suited to what it shows.
+func axisUnit(a study.Axis, s units.System, lines []study.Line, reach func(study.Line) float64) units.Unit {
+	if a.Max != nil {
+		return suited(a.Quantity, s, *a.Max)
 	}
 	longest := 0.0
 	for _, l := range lines {
-		for _, v := range along(l) {
-			if finite(v) {
-				longest = max(longest, math.Abs(v))
-			}
-		}
+		longest = max(longest, reach(l))
 	}
-	if a.Max != nil {
-		longest = *a.Max
+	return suited(a.Quantity, s, longest)
+}
+
+// suited is the system's unit of a quantity, but for a duration the one that suits
+// its length, as a person would say "7.9 years" and not 2,885 days.
+func suited(q units.Quantity, s units.System, longest float64) units.Unit {
+	if q != units.Duration {
+		return s.Unit(q)
 	}
 	spans := units.Of(units.Duration)
 	slices.SortFunc(spans, func(a, b units.Unit) int { return cmp.Compare(b.Factor, a.Factor) })
@@ -74,16 +123,31 @@ func scaleOf(a study.Axis, s units.System, along func(study.Line) []float64, lin
 			return u
 		}
 	}
-	return s.Unit(a.Quantity)
+	return s.Unit(q)
+}
+
+// largest is the greatest magnitude among numbers.
+func largest(values []float64) float64 {
+	most := 0.0
+	for _, v := range values {
+		if finite(v) {
+			most = max(most, math.Abs(v))
+		}
+	}
+	return most
+}
+
+// short is a symbol, or the label of what has none.
+func short(label, symbol string) string {
+	if symbol == "" {
+		return label
+	}
+	return symbol
 }
 
 func axisFrom(a study.Axis, u units.Unit) Axis {
-	short := a.Symbol
-	if short == "" {
-		short = a.Label
-	}
 	return Axis{
-		Title: title(a, u), Short: short, Unit: unitText(u),
+		Title: title(a, u), Short: short(a.Label, a.Symbol), Unit: unitText(u),
 		Log: a.Log, CanLog: a.CanLog,
 		Min: limit(a.Min, u), Max: limit(a.Max, u),
 	}
@@ -121,7 +185,7 @@ func lineFrom(l study.Line, x, y units.Unit) Line {
 	if (l.Kind == "band") != (l.Low != nil) {
 		panic(errBand)
 	}
-	out := Line{ID: l.ID, Label: l.Label, Role: l.Role, Kind: l.Kind, Data: pairs(l.X, l.Y, x, y)}
+	out := Line{ID: l.ID, Label: l.Label, Role: l.Role, Kind: l.Kind, Moving: l.Moving, Data: pairs(l.X, l.Y, x, y)}
 	if l.Low != nil {
 		out.Low = pairs(l.X, l.Low, x, y)
 	}

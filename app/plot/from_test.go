@@ -113,14 +113,17 @@ func TestALineBreaksWhereANumberIsMissing(t *testing.T) {
 }
 
 func TestProgrammersMistakesPanic(t *testing.T) {
-	short, noLow, strayLow := invented(), invented(), invented()
+	short, noLow, strayLow, noSlider, fewValues, fewWords := invented(), invented(), invented(), invented(), invented(), invented()
+	noSlider.Slider = nil
+	fewValues.Lines[4].Readings[0].Values = []float64{1}
+	fewWords.Lines[4].Readings[1].Words = []string{""}
 	short.Lines[0].Y = short.Lines[0].Y[:2]
 	noLow.Lines[2].Low = nil
 	strayLow.Lines[0].Low = []float64{0, 0, 0}
 	for _, c := range []struct {
 		chart study.Chart
 		want  string
-	}{{short, errLengths}, {noLow, errBand}, {strayLow, errBand}} {
+	}{{short, errLengths}, {noLow, errBand}, {strayLow, errBand}, {noSlider, errSlider}, {fewValues, errReading}, {fewWords, errReading}} {
 		func() {
 			defer func() {
 				if got := recover(); got != c.want {
@@ -129,5 +132,52 @@ func TestProgrammersMistakesPanic(t *testing.T) {
 			}()
 			From(c.chart, units.Field)
 		}()
+	}
+}
+
+// A point of a moving line stands at x times the slider, both as shown: whatever
+// the units, that is the place x times the slider in SI. A day has 86400 s, a year
+// 365.25 days (IAU, Julian year), a US barrel 0.158987294928 m3 (NIST SP 811).
+func TestMovingLinesMoveTheSameInEveryUnit(t *testing.T) {
+	const day, barrel = 86400.0, 0.158987294928
+	for _, c := range []struct {
+		name             string
+		x, variable      units.Quantity
+		system           units.System
+		max, at, perUnit float64 // SI
+		shown, place     float64 // of the slider and of the point, as shown
+	}{
+		{"years along feet", units.Length, units.Duration, units.Field, 10 * 365.25 * day, 2 * 365.25 * day, 0.3048 / (365.25 * day), 2, 2},
+		{"days along metres", units.Length, units.Duration, units.Metric, 10 * day, 5 * day, 3 / day, 5, 15},
+		{"barrels a day along years", units.Duration, units.Rate, units.Field, 100 * barrel / day, 50 * barrel / day, 365.25 * day / (10 * barrel / day), 50, 5},
+		{"pore volumes along a part", units.Number, units.PoreVolumes, units.Lab, 2, 0.5, 1.5, 0.5, 0.75},
+	} {
+		chart := study.Chart{
+			X: study.Axis{Label: "Place", Quantity: c.x}, Y: study.Axis{Label: "Sw", Quantity: units.Fraction},
+			Lines:  []study.Line{{Kind: "line", Moving: true, X: []float64{c.perUnit}, Y: []float64{0.5}}},
+			Slider: &study.Slider{Label: "Variable", Quantity: c.variable, Max: c.max, Value: c.at},
+		}
+		p := From(chart, c.system)
+		// A handful of roundings of conversions: 1e-14 of the number.
+		if got := p.Slider.Value; math.Abs(got-c.shown) > 1e-14*c.shown {
+			t.Errorf("%s: the slider shows %v, want %v", c.name, got, c.shown)
+		}
+		if got := p.Lines[0].Data[0][0] * p.Slider.Value; math.Abs(got-c.place) > 1e-14*c.place {
+			t.Errorf("%s: the point stands at %v, want %v", c.name, got, c.place)
+		}
+	}
+}
+
+func TestReadingsComeInUnitsThatSuit(t *testing.T) {
+	got := From(invented(), units.Field)
+	if s := got.Slider; s.Unit != "PV" || s.Short != "Q" || len(s.Stops) != 1 || s.Stops[0] != (Stop{"breakthrough", 0.5}) {
+		t.Errorf("the slider became %+v", s)
+	}
+	speed, arrival := got.Lines[4].Readings[0], got.Lines[4].Readings[1]
+	if speed.Unit != "" || speed.Short != "v" || speed.Values[1] != 1 {
+		t.Errorf("the speed became %+v", speed)
+	}
+	if arrival.Unit != "yr" || arrival.Short != "arrives after" || math.Abs(arrival.Values[2]-3) > 1e-15 || arrival.Words[1] != "never" {
+		t.Errorf("the arrival became %+v", arrival)
 	}
 }

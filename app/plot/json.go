@@ -32,13 +32,17 @@ func (p Picture) JSON() string {
 		b = number(append(b, `,"y":`...), m.Y)
 		b = append(b, '}')
 	}
-	return string(append(b, `]}`...))
+	b = append(b, ']')
+	if p.Slider != nil {
+		b = p.Slider.append(append(b, `,"slider":`...))
+	}
+	return string(append(b, '}'))
 }
 
 func (p Picture) points() int {
 	n := 0
 	for _, l := range p.Lines {
-		n += len(l.Data) + len(l.Low)
+		n += len(l.Data)*(1+len(l.Readings)) + len(l.Low)
 	}
 	return n
 }
@@ -67,7 +71,52 @@ func (l Line) append(b []byte) []byte {
 	if l.Low != nil {
 		b = appendPairs(append(b, `,"low":`...), l.Low)
 	}
+	if l.Moving {
+		b = append(b, `,"moving":true`...)
+	}
+	if len(l.Readings) > 0 {
+		b = append(b, `,"readings":[`...)
+		for i, r := range l.Readings {
+			b = r.append(comma(b, i))
+		}
+		b = append(b, ']')
+	}
 	return append(b, '}')
+}
+
+func (r Reading) append(b []byte) []byte {
+	b = field(b, '{', "label", r.Label)
+	b = field(b, ',', "short", r.Short)
+	b = field(b, ',', "unit", r.Unit)
+	b = append(b, `,"values":[`...)
+	for i, v := range r.Values {
+		b = number(comma(b, i), v)
+	}
+	b = append(b, ']')
+	if len(r.Words) > 0 {
+		b = append(b, `,"words":[`...)
+		for i, word := range r.Words {
+			b = text(comma(b, i), word)
+		}
+		b = append(b, ']')
+	}
+	return append(b, '}')
+}
+
+func (s *Slider) append(b []byte) []byte {
+	b = field(b, '{', "label", s.Label)
+	b = field(b, ',', "short", s.Short)
+	b = field(b, ',', "unit", s.Unit)
+	b = number(append(b, `,"min":`...), s.Min)
+	b = number(append(b, `,"max":`...), s.Max)
+	b = number(append(b, `,"value":`...), s.Value)
+	b = append(b, `,"stops":[`...)
+	for i, stop := range s.Stops {
+		b = field(comma(b, i), '{', "label", stop.Label)
+		b = number(append(b, `,"at":`...), stop.At)
+		b = append(b, '}')
+	}
+	return append(b, `]}`...)
 }
 
 func appendPairs(b []byte, data [][2]float64) []byte {
@@ -93,9 +142,12 @@ func comma(b []byte, i int) []byte {
 }
 
 // field writes a text under a name after the given mark.
-func field(b []byte, before byte, name, text string) []byte {
-	b = append(append(append(b, before, '"'), name...), `":`...)
-	quoted, err := json.Marshal(text)
+func field(b []byte, before byte, name, value string) []byte {
+	return text(append(append(append(b, before, '"'), name...), `":`...), value)
+}
+
+func text(b []byte, value string) []byte {
+	quoted, err := json.Marshal(value)
 	if err != nil {
 		panic("plot: " + err.Error()) // a string always marshals
 	}

@@ -71,7 +71,7 @@ func TestNothingButNumbersReachesJSON(t *testing.T) {
 		if n := strings.Count(text, "null"); n != 3 {
 			t.Errorf("%v: %d gaps, want one each in the line, the dashed line and the band's lower edge", bad, n)
 		}
-		if len(got.Lines) != 4 {
+		if len(got.Lines) != 5 {
 			t.Errorf("%v: %d lines", bad, len(got.Lines))
 		}
 		// Even a picture that did not come from From is still lawful JSON.

@@ -11,6 +11,25 @@ type Picture struct {
 	Lines   []Line `json:"lines"`
 	Marks   []Mark `json:"marks"`
 	Summary string `json:"summary"` // text alternative
+
+	Slider *Slider `json:"slider,omitempty"`
+}
+
+// Slider is the variable that moves the moving lines.
+type Slider struct {
+	Label string  `json:"label"`
+	Short string  `json:"short"` // symbol
+	Unit  string  `json:"unit"`
+	Min   float64 `json:"min"`
+	Max   float64 `json:"max"`
+	Value float64 `json:"value"` // where it stands at first
+	Stops []Stop  `json:"stops"`
+}
+
+// Stop is a labelled value of a slider.
+type Stop struct {
+	Label string  `json:"label"`
+	At    float64 `json:"at"`
 }
 
 // Axis is one axis of a picture.
@@ -32,6 +51,19 @@ type Line struct {
 	Kind  string       `json:"kind"` // "line", "dashed", "points", "band"
 	Data  [][2]float64 `json:"data"`
 	Low   [][2]float64 `json:"low,omitempty"` // band only
+
+	Moving   bool      `json:"moving,omitempty"`   // x is given for one unit of the slider; see study.Line
+	Readings []Reading `json:"readings,omitempty"` // further numbers of each point
+}
+
+// Reading is one further quantity along a line. A point has its value, or a word
+// where it has none.
+type Reading struct {
+	Label  string    `json:"label"`
+	Short  string    `json:"short"`
+	Unit   string    `json:"unit"`
+	Values []float64 `json:"values"`
+	Words  []string  `json:"words,omitempty"`
 }
 
 // Mark is a labelled point.

@@ -173,16 +173,26 @@ func (h *hull) chords(vertices []int) []chord {
 
 // refine moves both ends of a chord to where it is tangent. With the other end held
 // the slope of the chord is stationary in each end, so that the two equations are
-// uncoupled at the solution and taking turns converges quadratically.
+// uncoupled at the solution and taking turns converges quadratically. A chord so short or
+// so shallow that rounding of g hides its slope can close up, its ends in one place or in
+// neighbouring nodes with g above it; then it stays as it was.
 func (h *hull) refine(c chord) chord {
+	given := c
 	for range 20 {
 		right := h.tangent(c.right, c.left.node, c.left.k+1, len(h.nodes)-1)
 		left := h.tangent(c.left, right.node, 0, right.k-1)
 		moved := math.Abs(left.y - c.left.y)
 		c = chord{left, right}
+		if !(right.y > left.y) {
+			return given
+		}
 		if moved <= 4*ulp*math.Abs(left.y) {
 			break
 		}
+	}
+	bare := !c.left.inside && !c.right.inside && c.right.k == c.left.k+1
+	if m := c.slope(); bare && c.left.right > m && c.right.left < m {
+		return given
 	}
 	return c
 }

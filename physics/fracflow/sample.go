@@ -37,7 +37,8 @@ const boxing = 24
 // Samples returns the function at points between a and b (a first, b last, either
 // may be the larger): at every knot, graded towards the ends of every smooth
 // piece between knots, and added to until no step in f exceeds a small part of
-// its range and every inflection is boxed in. budget is the number of points
+// its range, every inflection is boxed in and pairs of them between two points are
+// looked for. budget is the number of points
 // wanted at the start; every piece gets at least one inside.
 func Samples(fn Function, a, b float64, budget int) []Sample {
 	lo, hi := math.Min(a, b), math.Max(a, b)
@@ -107,6 +108,7 @@ func Samples(fn Function, a, b float64, budget int) []Sample {
 		g.split(coarse[i-1], coarse[i], boxing)
 		g.out = append(g.out, coarse[i])
 	}
+	g.dips()
 	g.box()
 	if a > b {
 		for i, j := 0, len(g.out)-1; i < j; i, j = i+1, j-1 {
@@ -174,8 +176,7 @@ func (g *grid) box() {
 		}
 	}
 	if len(added) > 0 {
-		g.out = append(n, added...)
-		sort.Slice(g.out, func(i, j int) bool { return g.out[i].S < g.out[j].S })
+		g.merge(added)
 	}
 }
 
@@ -188,4 +189,69 @@ func turns(a, m, b Sample) bool {
 	}
 	return rises(a.Above, m.Below, alike) && falls(m.Above, b.Below) ||
 		falls(a.Above, m.Below) && rises(m.Above, b.Below, alike)
+}
+
+// dips looks for two inflections between neighbouring samples: where the second derivative
+// comes near zero and turns back, cells are halved until it is seen to cross zero, for
+// box to close in on, or to stay clear of it.
+func (g *grid) dips() {
+	var added []Sample
+	n := g.out
+	for i := 3; i < len(n); i++ {
+		row := [4]Sample(n[i-3 : i+1])
+		for range boxing / 3 {
+			if !nearlyLevel(row) || row[3].S-row[0].S <= 8*g.thin {
+				break
+			}
+			var halved [7]Sample
+			for k := range 3 {
+				a, b := row[k], row[k+1]
+				halved[2*k], halved[2*k+1], halved[2*k+2] = a, at(g.fn, a.S+(b.S-a.S)/2), b
+				added = append(added, halved[2*k+1])
+			}
+			best := 1
+			for k := 2; k <= 4; k++ {
+				if math.Abs(bend(halved[k], halved[k+1])) < math.Abs(bend(halved[best], halved[best+1])) {
+					best = k
+				}
+			}
+			row = [4]Sample(halved[best-1 : best+3])
+		}
+	}
+	if len(added) > 0 {
+		g.merge(added)
+	}
+}
+
+func (g *grid) merge(added []Sample) {
+	g.out = append(g.out, added...)
+	sort.Slice(g.out, func(i, j int) bool { return g.out[i].S < g.out[j].S })
+}
+
+// bend is the mean second derivative between two samples.
+func bend(a, b Sample) float64 { return (b.Below - a.Above) / (b.S - a.S) }
+
+// nearlyLevel tells whether the second derivative has one sign and a least size in the
+// middle one of three cells, where that of the quartic with the slopes at their four ends
+// comes below a tenth of the lesser of the means in the outer two.
+func nearlyLevel(n [4]Sample) bool {
+	for _, inner := range n[1:3] {
+		if inner.Below != inner.Above {
+			return false // a knot: the second derivative jumps
+		}
+	}
+	d0, d1, d2 := bend(n[0], n[1]), bend(n[1], n[2]), bend(n[2], n[3])
+	if d1 < 0 {
+		d0, d1, d2 = -d0, -d1, -d2
+	}
+	if !(d1 < d0 && d1 < d2) || math.Abs(n[2].Below-n[1].Above) <= alike*math.Abs(n[1].Above) {
+		return false
+	}
+	// Divided differences of the slope; the second derivative is least at x.
+	e0, e1 := (d1-d0)/(n[2].S-n[0].S), (d2-d1)/(n[3].S-n[1].S)
+	c := (e1 - e0) / (n[3].S - n[0].S)
+	w0, w2 := n[1].S-n[0].S, n[2].S-n[1].S
+	x := (w2 - w0 - e0/c) / 3 // from the second sample
+	least := d0 + e0*(2*x+w0) + c*(x*(x+w0)+(x-w2)*(2*x+w0))
+	return least < 0.1*math.Min(d0, d2)
 }

@@ -20,8 +20,9 @@ import (
 //
 //  1. Sampling (sample.go). Between knots f is smooth. It is sampled on a grid that is
 //     graded geometrically towards both ends of every smooth piece, and cells are
-//     halved where f climbs by more than a small part of its range or where the mean
-//     slope betrays an inflection.
+//     halved where f climbs by more than a small part of its range, where the mean
+//     slope betrays an inflection, or where the second derivative comes so near to zero
+//     that two inflections may lie between neighbours.
 //  2. The discrete envelope of the samples (hull.go). It is linear in their number, so
 //     a table of ten thousand rows stays cheap. Near an end f may round to 1 over a
 //     whole range while its slope still falls smoothly; there the slopes decide, so
@@ -44,6 +45,10 @@ import (
 //
 // Both saturations must lie in the range of fn, to within rounding, where fn must be
 // finite; otherwise the error says what was given and what is allowed.
+//
+// Speeds within a fan rise and shocks lie above f to 1e-10 of the fastest speed and 1e-13
+// of the reach of f. Where f is within 1e-6 of 1 its rounding may leave waves narrower
+// than 1e-6 of saturation out by a few times that: one in 280,000 random flows, by 2e-10.
 //
 // Sources: Buckley & Leverett (1942); Welge (1952); Oleinik (1957).
 func Solve(fn Function, injected, initial float64) ([]Wave, error) {

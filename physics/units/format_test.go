@@ -52,7 +52,7 @@ func TestPrint(t *testing.T) {
 		{Viscosity, 0.0042, "cp", "4.2~cp"}, {Viscosity, 0.0042, "mPa.s", "4.2~mPa·s"}, {Rate, 2, "m3/d", "172'800~m³/d"},
 		{Area, 10, "ft2", "107.6~ft²"}, {Permeability, 1e-12, "um2", "1~µm²"}, {Fraction, 0.342, "fraction", "0.342"}, {Fraction, 0.342, "%", "34.2~%"},
 		{Share, 0.95, "%", "95~%"}, {Number, 2.5, "", "2.5"}, {PoreVolumes, 0.34, "PV", "0.34~PV"}, {Angle, -math.Pi / 6, "deg", "−30°"},
-		{Density, 1000, "g/cm3", "1~g/cm³"},
+		{Density, 1000, "g/cm3", "1~g/cm³"}, {Temperature, 353.15, "degC", "80~°C"}, {Temperature, 353.15, "degF", "176~°F"}, {Salinity, 0.035, "wt%", "3.5~wt%"},
 	} {
 		u, ok := Find(c.quantity, c.symbol)
 		if !ok {

@@ -38,6 +38,12 @@ var names = map[string][]string{
 	"g/cm3":    {"g/cc", "g/ml"},
 	"deg":      {"degree", "degrees"},
 	"rad":      {"radian", "radians"},
+	"degC":     {"C", "celsius"},
+	"degF":     {"F", "fahrenheit"},
+	"K":        {"kelvin", "degK"},
+	"wt%":      {"%", "wtpercent", "percent", "pct"},
+	"ppm":      {"mg/kg"},
+	"dyn/cm":   {"dyne/cm", "dynes/cm"},
 }
 
 // spelled writes a unit in one plain way: no spaces, no superscripts, and the time

@@ -98,6 +98,19 @@ func TestParse(t *testing.T) {
 		{Pressure, "2 MPa", "psi", 2, "MPa"},
 		{Pressure, "2e3 PSI", "bar", 2000, "psi"},
 		{Angle, "\u221212°", "rad", -12, "deg"},
+		{Temperature, "83 °C", "degF", 83, "degC"},
+		{Temperature, "83°c", "degF", 83, "degC"},
+		{Temperature, "83 C", "degF", 83, "degC"},
+		{Temperature, "181 degF", "degC", 181, "degF"},
+		{Temperature, "181 °F", "degC", 181, "degF"},
+		{Temperature, "356 K", "degC", 356, "K"},
+		{Temperature, "\u22124", "degC", -4, "degC"},
+		{Salinity, "3.5%", "ppm", 3.5, "wt%"},
+		{Salinity, "3.5 wt %", "ppm", 3.5, "wt%"},
+		{Salinity, "35 000 ppm", "wt%", 35000, "ppm"},
+		{Salinity, "35 g/kg", "wt%", 35, "g/kg"},
+		{InterfacialTension, "30 dyne/cm", "mN/m", 30, "dyn/cm"},
+		{InterfacialTension, "30 mN/m", "dyn/cm", 30, "mN/m"},
 		{Number, "2.5", "", 2.5, ""},
 	} {
 		unit, ok := Find(c.quantity, c.unit)
@@ -124,6 +137,9 @@ func TestParseRefuses(t *testing.T) {
 		{Permeability, "2 MD", "md, D, µm² or m²"},
 		{Duration, "5 fortnights", "read the unit “fortnights”"},
 		{Number, "3 cp", "allowed: a number without a unit"},
+		{Temperature, "80 R", "°C, °F or K, or the number alone"},
+		{Salinity, "35 g/l", "wt%, g/kg or ppm, or the number alone"}, // needs a density
+		{InterfacialTension, "30 MN/m", "mN/m, dyn/cm or N/m"},
 		{Fraction, "1,234 %", "which can mean 1.234 or 1234"},
 		{Fraction, "1e999 %", "larger than a number can hold"},
 		{Fraction, "five %", "a number such as"},
@@ -184,7 +200,7 @@ func FuzzParse(f *testing.F) {
 	}
 	f.Fuzz(func(t *testing.T, text string) {
 		for _, s := range Systems {
-			for _, q := range []Quantity{Number, Share, Viscosity, Permeability, Pressure, Rate, Angle} {
+			for _, q := range []Quantity{Number, Share, Viscosity, Permeability, Pressure, Rate, Angle, Temperature, Salinity} {
 				number, u, err := Parse(q, text, s.Unit(q))
 				if u.Quantity != q || math.IsNaN(number) || math.IsInf(number, 0) || err != nil && number != 0 {
 					t.Fatalf("%s %q: %v %q, %v", q, text, number, u.Symbol, err)

@@ -27,23 +27,29 @@ const (
 	Duration        Quantity = "duration"
 	Density         Quantity = "density"
 	Angle           Quantity = "angle"
+
+	Temperature        Quantity = "temperature"        // a level, never a difference
+	Salinity           Quantity = "salinity"           // mass of salt in the mass of brine
+	InterfacialTension Quantity = "interfacialTension" // force per length between two phases
 )
 
-// Unit is one way to write a quantity: SI = number * Factor.
+// Unit is one way to write a quantity: SI = (number + Zero) Factor.
 type Unit struct {
 	Symbol   string // as written in a study and on screen, e.g. "md", "m3/d"
 	Quantity Quantity
 	Factor   float64 // SI value of one of this unit
+	Zero     float64 // where the scale's zero lies above the SI one, in this unit; 0 but for temperatures
 }
 
 // ToSI converts a number written in this unit.
-func (u Unit) ToSI(number float64) float64 { return number * u.Factor }
+func (u Unit) ToSI(number float64) float64 { return (number + u.Zero) * u.Factor }
 
 // FromSI converts an SI value to a number in this unit.
-func (u Unit) FromSI(si float64) float64 { return si / u.Factor }
+func (u Unit) FromSI(si float64) float64 { return si/u.Factor - u.Zero }
 
 // Exact definitions: foot and pound, NIST SP 811 app. B; barrel, 42 US gallons of
-// 231 in3; millidarcy, from the darcy's own definition (1 cp cm2/(s atm)).
+// 231 in3; millidarcy, from the darcy's own definition (1 cp cm2/(s atm)); the zeros of the
+// Celsius and Fahrenheit scales, NIST SP 811 app. B.
 const (
 	foot   = 0.3048
 	inch   = 0.0254
@@ -63,24 +69,27 @@ const StandardGravity = gravSI
 
 // units lists every unit, by quantity, the most used first.
 var catalogue = []Unit{
-	{"", Number, 1},
-	{"fraction", Fraction, 1}, {"%", Fraction, 0.01},
-	{"%", Share, 0.01}, {"fraction", Share, 1},
-	{"PV", PoreVolumes, 1}, {"%PV", PoreVolumes, 0.01},
-	{"", MobilityRatio, 1},
-	{"rb/stb", FormationFactor, 1}, {"m3/m3", FormationFactor, 1},
-	{"bbl/bbl", WaterOilRatio, 1}, {"m3/m3", WaterOilRatio, 1},
-	{"cp", Viscosity, 1e-3}, {"mPa.s", Viscosity, 1e-3}, {"Pa.s", Viscosity, 1},
-	{"md", Permeability, darcy / 1000}, {"D", Permeability, darcy}, {"um2", Permeability, 1e-12}, {"m2", Permeability, 1},
-	{"ft", Length, foot}, {"m", Length, 1}, {"cm", Length, 0.01}, {"mm", Length, 0.001}, {"in", Length, inch}, {"km", Length, 1000},
-	{"ft2", Area, foot * foot}, {"acre", Area, acre}, {"m2", Area, 1}, {"ha", Area, 1e4}, {"cm2", Area, 1e-4},
-	{"bbl", Volume, barrel}, {"Mbbl", Volume, 1e3 * barrel}, {"ft3", Volume, foot * foot * foot}, {"m3", Volume, 1}, {"cm3", Volume, 1e-6},
-	{"psi", Pressure, psi}, {"kPa", Pressure, 1e3}, {"bar", Pressure, 1e5}, {"MPa", Pressure, 1e6}, {"atm", Pressure, 101325}, {"Pa", Pressure, 1},
-	{"bbl/d", Rate, barrel / day}, {"m3/d", Rate, 1 / day}, {"cm3/min", Rate, 1e-6 / 60}, {"cm3/h", Rate, 1e-6 / 3600}, {"ft3/d", Rate, foot * foot * foot / day}, {"m3/s", Rate, 1},
-	{"ft/d", Velocity, foot / day}, {"m/d", Velocity, 1 / day}, {"cm/min", Velocity, 0.01 / 60}, {"cm/h", Velocity, 0.01 / 3600}, {"m/s", Velocity, 1},
-	{"d", Duration, day}, {"yr", Duration, year}, {"h", Duration, 3600}, {"min", Duration, 60}, {"s", Duration, 1},
-	{"lb/ft3", Density, pound / (foot * foot * foot)}, {"kg/m3", Density, 1}, {"g/cm3", Density, 1000},
-	{"deg", Angle, degree}, {"rad", Angle, 1},
+	{"", Number, 1, 0},
+	{"fraction", Fraction, 1, 0}, {"%", Fraction, 0.01, 0},
+	{"%", Share, 0.01, 0}, {"fraction", Share, 1, 0},
+	{"PV", PoreVolumes, 1, 0}, {"%PV", PoreVolumes, 0.01, 0},
+	{"", MobilityRatio, 1, 0},
+	{"rb/stb", FormationFactor, 1, 0}, {"m3/m3", FormationFactor, 1, 0},
+	{"bbl/bbl", WaterOilRatio, 1, 0}, {"m3/m3", WaterOilRatio, 1, 0},
+	{"cp", Viscosity, 1e-3, 0}, {"mPa.s", Viscosity, 1e-3, 0}, {"Pa.s", Viscosity, 1, 0},
+	{"md", Permeability, darcy / 1000, 0}, {"D", Permeability, darcy, 0}, {"um2", Permeability, 1e-12, 0}, {"m2", Permeability, 1, 0},
+	{"ft", Length, foot, 0}, {"m", Length, 1, 0}, {"cm", Length, 0.01, 0}, {"mm", Length, 0.001, 0}, {"in", Length, inch, 0}, {"km", Length, 1000, 0},
+	{"ft2", Area, foot * foot, 0}, {"acre", Area, acre, 0}, {"m2", Area, 1, 0}, {"ha", Area, 1e4, 0}, {"cm2", Area, 1e-4, 0},
+	{"bbl", Volume, barrel, 0}, {"Mbbl", Volume, 1e3 * barrel, 0}, {"ft3", Volume, foot * foot * foot, 0}, {"m3", Volume, 1, 0}, {"cm3", Volume, 1e-6, 0},
+	{"psi", Pressure, psi, 0}, {"kPa", Pressure, 1e3, 0}, {"bar", Pressure, 1e5, 0}, {"MPa", Pressure, 1e6, 0}, {"atm", Pressure, 101325, 0}, {"Pa", Pressure, 1, 0},
+	{"bbl/d", Rate, barrel / day, 0}, {"m3/d", Rate, 1 / day, 0}, {"cm3/min", Rate, 1e-6 / 60, 0}, {"cm3/h", Rate, 1e-6 / 3600, 0}, {"ft3/d", Rate, foot * foot * foot / day, 0}, {"m3/s", Rate, 1, 0},
+	{"ft/d", Velocity, foot / day, 0}, {"m/d", Velocity, 1 / day, 0}, {"cm/min", Velocity, 0.01 / 60, 0}, {"cm/h", Velocity, 0.01 / 3600, 0}, {"m/s", Velocity, 1, 0},
+	{"d", Duration, day, 0}, {"yr", Duration, year, 0}, {"h", Duration, 3600, 0}, {"min", Duration, 60, 0}, {"s", Duration, 1, 0},
+	{"lb/ft3", Density, pound / (foot * foot * foot), 0}, {"kg/m3", Density, 1, 0}, {"g/cm3", Density, 1000, 0},
+	{"deg", Angle, degree, 0}, {"rad", Angle, 1, 0},
+	{"degC", Temperature, 1, 273.15}, {"degF", Temperature, 5.0 / 9, 459.67}, {"K", Temperature, 1, 0},
+	{"wt%", Salinity, 0.01, 0}, {"g/kg", Salinity, 1e-3, 0}, {"ppm", Salinity, 1e-6, 0},
+	{"mN/m", InterfacialTension, 1e-3, 0}, {"dyn/cm", InterfacialTension, 1e-3, 0}, {"N/m", InterfacialTension, 1, 0},
 }
 
 // Of lists the units a quantity may be written in, the most used first.

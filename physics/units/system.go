@@ -17,6 +17,7 @@ var defaults = map[System]map[Quantity]string{
 	Field: {
 		FormationFactor: "rb/stb", WaterOilRatio: "bbl/bbl", Viscosity: "cp", Permeability: "md", Length: "ft", Area: "acre",
 		Volume: "bbl", Pressure: "psi", Rate: "bbl/d", Velocity: "ft/d", Duration: "d", Density: "lb/ft3",
+		Temperature: "degF", InterfacialTension: "dyn/cm",
 	},
 	Metric: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "m", Area: "ha",
@@ -29,7 +30,7 @@ var defaults = map[System]map[Quantity]string{
 }
 
 // Unit returns the system's unit for a quantity. Quantities that no system
-// distinguishes (fractions, angles, ratios) have the same unit in all three.
+// distinguishes (fractions, angles, ratios, salinity) have the same unit in all three.
 func (s System) Unit(q Quantity) Unit {
 	symbol, ok := defaults[s][q]
 	if !ok {

@@ -77,6 +77,9 @@ func TextLimit(path string) int {
 	if path == "note" {
 		return MaxNote
 	}
+	if _, inner, ok := AtCase(path); ok && inner == "name" {
+		return MaxCaseName
+	}
 	return MaxText
 }
 

@@ -27,6 +27,8 @@ type Study struct {
 	Fluids Fluids `json:"fluids"`
 	Front  Front  `json:"front"`
 	Field  Field  `json:"field"`
+
+	Cases []Case `json:"cases,omitempty"` // named changes on the study; at most MaxCases
 }
 
 // Input is a number with its unit and where it comes from.

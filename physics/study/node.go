@@ -5,6 +5,7 @@ import (
 	"encoding/json"
 	"errors"
 	"io"
+	"strconv"
 	"strings"
 	"unicode/utf8"
 )
@@ -136,7 +137,7 @@ func parseObject(d *json.Decoder, path string, depth int) (node, error) {
 func parseArray(d *json.Decoder, path string, depth int) (node, error) {
 	n := node{kind: isArray}
 	for d.More() {
-		value, err := parseValue(d, path, depth+1)
+		value, err := parseValue(d, join(path, strconv.Itoa(len(n.items))), depth+1)
 		if err != nil {
 			return node{}, err
 		}

@@ -46,6 +46,9 @@ func Read(text string) (Study, error) {
 	if err := lawful(&st); err != nil {
 		return Study{}, err
 	}
+	if len(st.Cases) == 0 {
+		st.Cases = nil // an empty list says no more than none
+	}
 	st.Version, st.Program = Version, Program
 	return st, nil
 }
@@ -89,6 +92,8 @@ func lay(n node, field reflect.Value, path string) error {
 		return layObject(n, field, path)
 	case reflect.Slice:
 		return layList(n, field, path)
+	case reflect.Map:
+		return layMap(n, field, path)
 	case reflect.String:
 		if n.kind != isString {
 			return wrongKind(n, isString, path)
@@ -163,6 +168,26 @@ func layList(n node, field reflect.Value, path string) error {
 	return nil
 }
 
+// layMap puts an object whose names are the person's paths into a map; which
+// paths there may be is for lawful to say. An object without names is none.
+func layMap(n node, field reflect.Value, path string) error {
+	if n.kind != isObject {
+		return wrongKind(n, isObject, path)
+	}
+	if len(n.members) == 0 {
+		return nil
+	}
+	field.Set(reflect.MakeMap(field.Type()))
+	for _, m := range n.members {
+		value := reflect.New(field.Type().Elem()).Elem()
+		if err := lay(m.value, value, join(path, m.name)); err != nil {
+			return err
+		}
+		field.SetMapIndex(reflect.ValueOf(m.name), value)
+	}
+	return nil
+}
+
 func wrongKind(n node, want kind, path string) error {
 	return refuse(path, "read "+string(n.kind)+", allowed: "+string(want))
 }
@@ -197,6 +222,9 @@ func lawful(st *Study) error {
 	}
 	if p := CheckStart(st.Field.Start); p != nil {
 		return asFileError(p)
+	}
+	if err := lawfulCases(st); err != nil {
+		return err
 	}
 	if t := st.Rock.Table; t != nil && (len(t.Krw) != len(t.Sw) || len(t.Kro) != len(t.Sw)) {
 		return refuse("rock.table", "read "+strconv.Itoa(len(t.Sw))+" values of sw, "+strconv.Itoa(len(t.Krw))+" of krw and "+strconv.Itoa(len(t.Kro))+" of kro, allowed: columns of equal length")

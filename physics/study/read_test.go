@@ -32,7 +32,7 @@ func full() Study {
 }
 
 func TestReadGivesBackWhatWasWritten(t *testing.T) {
-	for name, st := range map[string]Study{"empty": Empty(), "demo": Demo(), "full": full()} {
+	for name, st := range map[string]Study{"empty": Empty(), "demo": Demo(), "full": full(), "cases": withCases()} {
 		got, err := Read(Write(st))
 		if err != nil {
 			t.Errorf("%s: %v", name, err)
@@ -152,7 +152,7 @@ func TestReadRefuses(t *testing.T) {
 		{"a range upside down", swap(porosity, porosity+` "low": 0.3, "high": 0.2,`), "field.porosity", "from 0.3 to 0.2"},
 		{"a range out of range", swap(porosity, porosity+` "low": -1, "high": 0.2,`), "field.porosity", "-1"},
 		{"too long a text", swap(`"author": ""`, `"author": "`+strings.Repeat("x", MaxText+1)+`"`), "author", "longer than 1000"},
-		{"nested deep", swap(`"author": ""`, `"author": `+strings.Repeat("[", 5000)+strings.Repeat("]", 5000)), "author", "deeper"},
+		{"nested deep", swap(`"author": ""`, `"author": `+strings.Repeat("[", 5000)+strings.Repeat("]", 5000)), "author.0.0.0.0.0.0.0.0", "deeper"},
 		{"too many rows", swap(`"krw": [`, `"krw": [`+strings.Repeat("0,", MaxRows)), "rock.table.krw", "rows"},
 	}
 	for _, c := range cases {
@@ -273,6 +273,7 @@ func FuzzRead(f *testing.F) {
 	f.Add(Write(Demo()))
 	f.Add(Write(Empty()))
 	f.Add(Write(full()))
+	f.Add(Write(withCases()))
 	f.Add(`{"type": "brinefront/study", "version": 2}`)
 	f.Add(`{"type": "brinefront/study", "version": 1, "rock": {"table": {"sw": [1e999]}}}`)
 	f.Fuzz(func(t *testing.T, text string) {

@@ -39,7 +39,13 @@ func schemaOf(t reflect.Type, path string) schema {
 	case reflect.Struct:
 		return objectSchema(t, path)
 	case reflect.Slice:
-		return schema{"type": "array", "maxItems": MaxRows, "items": schemaOf(t.Elem(), path)}
+		most := MaxRows
+		if path == "cases" {
+			most = MaxCases
+		}
+		return schema{"type": "array", "maxItems": most, "items": schemaOf(t.Elem(), path)}
+	case reflect.Map:
+		return changesSchema(t)
 	case reflect.Int:
 		return schema{"const": Version}
 	case reflect.Float64:
@@ -59,6 +65,22 @@ func objectSchema(t reflect.Type, path string) schema {
 	return schema{"type": "object", "additionalProperties": false, "properties": properties, "required": required}
 }
 
+// changesSchema is that of a case's changes: each as the study itself has it.
+func changesSchema(t reflect.Type) schema {
+	paths := CaseChoices()
+	if t.Elem() == reflect.TypeFor[Input]() {
+		paths = nil
+		for _, spec := range specs {
+			paths = append(paths, spec.Path)
+		}
+	}
+	properties := schema{}
+	for _, path := range paths {
+		properties[path] = schema{"$ref": "#/properties/" + strings.ReplaceAll(path, ".", "/properties/")}
+	}
+	return schema{"type": "object", "additionalProperties": false, "properties": properties}
+}
+
 func textSchema(path string) schema {
 	if path == "type" {
 		return schema{"const": Type}
@@ -69,6 +91,9 @@ func textSchema(path string) schema {
 			values[i] = c.Value
 		}
 		return schema{"enum": values}
+	}
+	if path == "cases.name" {
+		return schema{"type": "string", "maxLength": MaxCaseName, "pattern": `\S`}
 	}
 	if path == "field.start" {
 		return schema{"type": "string", "pattern": `^(\d{4}-\d{2}-\d{2})?$`}

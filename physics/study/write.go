@@ -24,6 +24,7 @@ func (s Study) Clone() Study {
 		t.Sw, t.Krw, t.Kro = column(t.Sw), column(t.Krw), column(t.Kro)
 		c.Rock.Table = &t
 	}
+	c.Cases = cloneCases(s.Cases)
 	for _, spec := range specs {
 		if in := spec.Get(&s); in != nil {
 			copied := *in

@@ -23,7 +23,8 @@ var arrows = map[string][]string{
 	"physics/paste":   {"physics/units"},
 
 	"physics/relperm":   {"physics/units", "physics/numeric"},
-	"physics/capillary": {"physics/units", "physics/numeric", "physics/relperm"},
+	"physics/capillary": {"physics/units", "physics/numeric"},
+	"physics/regime":    {"physics/ref", "physics/units"},
 	"physics/fluid":     {"physics/units", "physics/numeric"},
 	"physics/fv":        {"physics/numeric"},
 	"physics/spread":    {"physics/numeric"},
@@ -31,15 +32,18 @@ var arrows = map[string][]string{
 	"physics/fit":       {"physics/units", "physics/numeric", "physics/relperm"},
 	"physics/fracflow":  {"physics/numeric", "physics/relperm"},
 	"physics/displace":  {"physics/numeric", "physics/relperm", "physics/fracflow"},
+	"physics/ride":      {"physics/units", "physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
 	"physics/reservoir": {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
 
 	"physics/evidence": {
-		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/fit",
-		"physics/fracflow", "physics/displace", "physics/reservoir",
+		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
+		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
+		"physics/ride", "physics/regime", "physics/spread",
 	},
 	"physics/study": {
-		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/fit",
-		"physics/fracflow", "physics/displace", "physics/reservoir",
+		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
+		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
+		"physics/ride", "physics/regime", "physics/spread",
 	},
 	"physics/report": {"physics/ref", "physics/units", "physics/study"},
 

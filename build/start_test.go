@@ -1,11 +1,15 @@
 package main
 
 import (
+	"math"
 	"os"
+	"path/filepath"
 	"regexp"
 	"slices"
 	"strings"
 	"testing"
+
+	"brinefront/physics/study"
 )
 
 // policy is what the page may do: run its own files and compute. Nothing leaves.
@@ -45,6 +49,33 @@ func TestSiteOpensAndComputesWithoutAnyRequestFromOutside(t *testing.T) {
 			}
 		})
 	}
+}
+
+// A page of somebody else's computes with engine.js alone, and gets what the
+// native program gets.
+func TestAnotherPageCanCompute(t *testing.T) {
+	folder := t.TempDir()
+	must(t, os.CopyFS(filepath.Join(folder, "brinefront"), os.DirFS(built(t))))
+	page := `<!doctype html><title>Another page</title><body><p>Nothing yet</p><script src="brinefront/engine.js"></script>`
+	must(t, os.WriteFile(filepath.Join(folder, "index.html"), []byte(page), 0o644))
+	p := OpenFile(t, func(s *settings) { s.site = folder })
+	demo := study.Demo()
+	got := Eval[study.Result](p, `brinefront.run(`+study.Write(demo)+`)`)
+	want := study.Run(demo).Parts[study.SheetField].Figures
+	if len(want) == 0 || len(got.Parts[study.SheetField].Figures) != len(want) {
+		t.Fatalf("%d figures, natively %d", len(got.Parts[study.SheetField].Figures), len(want))
+	}
+	for i, figure := range want {
+		value := got.Parts[study.SheetField].Figures[i].Value
+		if math.Abs(value-figure.Value) > 1e-9*math.Abs(figure.Value) {
+			t.Errorf("%s is %v, natively %v", figure.ID, value, figure.Value)
+		}
+	}
+	failed := Eval[string](p, `brinefront.run({}, {kind: "guess"}).then(() => "answered", (fault) => fault.message)`)
+	if !strings.Contains(failed, "unknown kind") {
+		t.Errorf("an unknown request: %q", failed)
+	}
+	p.NoTrouble()
 }
 
 func TestPolicyIsAsStrictAsDesigned(t *testing.T) {

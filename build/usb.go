@@ -6,6 +6,7 @@ import (
 	"fmt"
 	"os"
 	"path/filepath"
+	"time"
 )
 
 // packUSB writes one zip that unpacks to one folder.
@@ -25,7 +26,7 @@ func packUSB() (err error) {
 		if err != nil {
 			return err
 		}
-		w, err := pack.Create("brinefront/" + name)
+		w, err := pack.CreateHeader(&zip.FileHeader{Name: "brinefront/" + name, Method: zip.Deflate, Modified: time.Now()})
 		if err != nil {
 			return err
 		}

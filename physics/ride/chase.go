@@ -1,0 +1,89 @@
+package ride
+
+import "brinefront/physics/numeric"
+
+// launch is where a state of the chase water left the rear of the slug (the inlet, for
+// states that never were beside it): PVI, place, and water that has passed it so far less
+// water that lies between it and the inlet,
+//
+//	psi = integral of f dQ - S dx = Q (f2 - xi S2)
+func (s *Slug) launch(sw float64) (q, x, psi float64) {
+	v := s.chase.at(sw).speed
+	n := s.along(func(n Node) float64 { return s.speed(n) - v })
+	q, x = s.when(n)
+	return q, x, q * (n.F - n.Xi*n.S)
+}
+
+// behindRear returns the state of the chase water at the place x after q pore volumes,
+// and psi there. Each state keeps to a straight line of the speed df/ds from where it
+// left the rear; low is the state beside the rear now.
+func (s *Slug) behindRear(x, q float64, low spot) (n spot, psi float64) {
+	short := func(sw float64) float64 { // how far the state still is from x
+		from, place, _ := s.launch(sw)
+		_, slope := s.chase.fn.At(sw)
+		return x - place - slope*(q-from)
+	}
+	sw := s.top
+	if far := short(s.top); far > 0 && low.s < s.top {
+		if near := short(low.s); near < 0 {
+			sw = numeric.Zero(short, low.s, s.top, near, far)
+		} else {
+			sw = low.s
+		}
+	}
+	n = s.chase.at(sw)
+	from, place, psi := s.launch(sw)
+	return n, psi + n.f*(q-from) - n.s*(x-place)
+}
+
+// beside is the chase water's state next to the slug's state n at the rear.
+func (s *Slug) beside(n Node) spot { return s.chase.behind(s.from, s.speed(n)) }
+
+// At returns the state at the place x after q pore volumes, Xi = x/q. ok is false once the
+// slug is spent, and in chase water whose states would overtake each other.
+func (s *Slug) At(x, q float64) (n Node, ok bool) {
+	rear, ok := s.Rear(q)
+	switch {
+	case !ok:
+		return Node{}, false
+	case q <= s.size || x >= rear:
+		return s.flood.At(x / q), true
+	case x <= 0:
+		return Node{s.face.s, 0, s.face.f, Chase}, true
+	case !s.clear:
+		return Node{}, false
+	}
+	slug, _ := s.at(q)
+	p, _ := s.behindRear(x, q, s.beside(slug))
+	return Node{p.s, x / q, p.f, Chase}, true
+}
+
+// After returns the state when q pore volumes have been injected, slug and chase water
+// together; ok as for At. Until the rear arrives it is that of continuous injection, but
+// for what has been injected. Then, with psi of the outlet,
+//
+//	water produced = psi + Si,  savg = Si + water injected - water produced
+func (s *Slug) After(q float64) (State, bool) {
+	if q <= s.size {
+		return s.flood.After(q), true
+	}
+	slug, rear := s.at(q)
+	if spent, _ := s.Spent(); q > spent || rear > 1 && !s.clear {
+		return State{}, false
+	}
+	var state State
+	if rear <= 1 {
+		state = s.flood.After(q)
+	} else {
+		n, psi := s.behindRear(1, q, s.beside(slug))
+		state = State{Sw: n.s, Cut: n.f, Zone: Chase, Water: psi + s.flood.initial}
+		state.Carried.Produced = s.phi - (s.flood.pivot.B - s.rear.B) // the rest is kept for good
+	}
+	water := s.size*s.flood.face.F + (q-s.size)*s.face.f
+	state.Oil = q - state.Water
+	state.Recovery = water - state.Water
+	state.Average = s.flood.initial + state.Recovery
+	state.Carried.Injected = s.phi
+	state.Carried.Stored = s.phi - state.Carried.Produced
+	return state, true
+}

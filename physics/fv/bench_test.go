@@ -16,20 +16,16 @@ func BenchmarkRun(b *testing.B) {
 		for _, limiter := range []Limiter{None, VanLeer} {
 			for _, n := range []int{100, 1000, 10000} {
 				b.Run(fmt.Sprintf("%s-%s-%d", kind.name, limiter, n), func(b *testing.B) {
-					run := newRun(b, kind.law, Settings{Cells: n, Limiter: limiter, Injected: c.Inputs.Injected, Initial: c.Inputs.Initial})
-					step, q := 0.1/float64(n), 0.0
-					run.Advance(0.1, nil)
-					start := run.Steps()
-					for q = 0.1 + step; b.Loop(); q += step {
-						if run.Advance(q, nil); q > 2 {
-							b.StopTimer()
-							taken := run.Steps() - start
-							run = newRun(b, kind.law, Settings{Cells: n, Limiter: limiter, Injected: c.Inputs.Injected, Initial: c.Inputs.Initial})
-							start, q = -taken, 0
-							b.StartTimer()
+					settings := Settings{Cells: n, Limiter: limiter, Injected: c.Inputs.Injected, Initial: c.Inputs.Initial}
+					run, taken := newRun(b, kind.law, settings), 0
+					for b.Loop() {
+						if run.Q() > 2 {
+							taken += run.Steps()
+							run = newRun(b, kind.law, settings)
 						}
+						run.Advance(run.Q()+10/float64(n), nil) // about a hundred steps
 					}
-					b.ReportMetric(float64(run.Steps()-start)*float64(n)/b.Elapsed().Seconds()/1e6, "Mcell-steps/s")
+					b.ReportMetric(float64(taken+run.Steps())*float64(n)/b.Elapsed().Seconds()/1e6, "Mcell-steps/s")
 				})
 			}
 		}

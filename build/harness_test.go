@@ -2,6 +2,7 @@ package main
 
 import (
 	"context"
+	"errors"
 	"fmt"
 	"net/http"
 	"net/http/httptest"
@@ -143,11 +144,11 @@ var chromiumContext = sync.OnceValues(func() (context.Context, error) {
 		chromedp.Flag("disable-quic", true), chromedp.Flag("disable-component-update", true),
 	)
 	allocator, stop := chromedp.NewExecAllocator(context.Background(), options...)
-	ctx, cancel := chromedp.NewContext(allocator)
+	ctx, _ := chromedp.NewContext(allocator)
 	stopChromium = func() error {
-		cancel()
+		closed := chromedp.Cancel(ctx) // waits until the browser has ended
 		stop()
-		return os.RemoveAll(profile)
+		return errors.Join(closed, os.RemoveAll(profile))
 	}
 	return ctx, chromedp.Do(ctx)
 })

@@ -99,7 +99,8 @@ func (r *Run) Steps() int { return r.steps }
 func (r *Run) Inflow() float64  { return r.entering }
 func (r *Run) Outflow() float64 { return r.leaving }
 
-// Advance steps on until Q is to, which must be finite. The steps are equal and as few as the CFL number allows,
+// Advance steps on until Q is to, which must be finite. The steps are equal and as few as
+// the CFL number allows,
 //
 //	n = ceil((to - Q) N max|df/ds|/CFL - 1e-9)
 //

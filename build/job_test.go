@@ -239,7 +239,10 @@ func (p *Page) choose(content []byte) {
 	asked := make(chan *page.EventFileChooserOpened, 1)
 	must(p.t, chromedp.Listen(p.ctx, func(event any) {
 		if e, ok := event.(*page.EventFileChooserOpened); ok {
-			asked <- e
+			select {
+			case asked <- e:
+			default: // an earlier choice's listener
+			}
 		}
 	}))
 	ask(p, func(ctx context.Context, _ *chromedp.Target) (chromedp.Void, error) {

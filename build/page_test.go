@@ -159,7 +159,7 @@ func (p *Page) Paste(text string) {
 	Eval[bool](p, fmt.Sprintf(`(text => {
 		const had = document.activeElement;
 		const carrier = document.body.appendChild(document.createElement("textarea"));
-		carrier.value = text;
+		carrier.value = "to be copied"; // a long text would be laid out
 		carrier.addEventListener("copy", (e) => { e.clipboardData.setData("text/plain", text); e.preventDefault(); e.stopPropagation(); });
 		carrier.select();
 		self.pasteReturn = () => { carrier.remove(); had.focus(); return true; };

@@ -34,8 +34,9 @@ func (m Model) edited(msg Edited) (Model, []Effect) {
 	return m.amend(key, func(p *page) { p.input(spec, clean(msg.Text), unit, former) })
 }
 
-// input takes a text for an input. former is what it held before it was emptied
-// by keystrokes of the same step: a number typed over another keeps its source.
+// input takes a text for an input. former is what it held before the keystrokes of
+// the same step: a number typed over another keeps its source, and a text that
+// turns out bad leaves in use what was there, not what its first letters spelled.
 func (p *page) input(spec study.Spec, text string, unit units.Unit, former *study.Input) {
 	path := spec.Path
 	in := spec.Get(&p.study)
@@ -49,12 +50,12 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 		}
 		return
 	}
-	number, unit, err := units.Parse(spec.Quantity, text, unit)
-	if err != nil {
-		p.refuse(path, Draft{text, unit.Symbol}, asRead(err), inUse(spec, in))
-		return
-	}
-	if problem := study.Check(spec, number, unit); problem != nil {
+	number, unit, problem := asNumber(spec, text, unit)
+	if problem != nil {
+		if former != nil {
+			in = former
+			spec.Set(&p.study, in)
+		}
 		p.refuse(path, Draft{text, unit.Symbol}, problem, inUse(spec, in))
 		return
 	}
@@ -73,6 +74,15 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 	spec.Set(&p.study, &changed)
 	p.keep(path, Draft{text, unit.Symbol}, units.Exact(number))
 	p.span(spec, low, high)
+}
+
+// asNumber reads a text as a lawful number of an input, or says why it is none.
+func asNumber(spec study.Spec, text string, unit units.Unit) (float64, units.Unit, *study.Problem) {
+	number, unit, err := units.Parse(spec.Quantity, text, unit)
+	if err != nil {
+		return 0, unit, asRead(err)
+	}
+	return number, unit, study.Check(spec, number, unit)
 }
 
 // own is the source note of a number that is the person's now: what the

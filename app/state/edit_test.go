@@ -212,3 +212,19 @@ func TestChosen(t *testing.T) {
 		t.Error("a choice that does not exist was taken")
 	}
 }
+
+// TestFirstLettersOfABadText: 1e999 begins with 1 and 1e99, which are numbers. What
+// stays in use is what was there before the field was typed in.
+func TestFirstLettersOfABadText(t *testing.T) {
+	m := after(New(), Edited{oil, "4", "cp"}, Left{})
+	for _, text := range []string{"1", "1e", "1e9", "1e99", "1e999"} {
+		m = after(m, Edited{oil, text, "cp"})
+	}
+	if in := m.Study.Fluids.OilViscosity; in == nil || in.Value != 4 || m.Drafts[oil].Text != "1e999" {
+		t.Errorf("in use is %+v, shown is %+v", in, m.Drafts[oil])
+	}
+	holds(t, "message", m.Messages[oil], "1e999", "In use: 4")
+	if m = after(m, Undone{}); m.Messages[oil] != "" || m.Study.Fluids.OilViscosity.Value != 4 {
+		t.Errorf("one undo leads to %+v, message %q", m.Study.Fluids.OilViscosity, m.Messages[oil])
+	}
+}

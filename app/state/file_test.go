@@ -197,7 +197,7 @@ func TestAnswered(t *testing.T) {
 	if n.Computing || n.ResultRevision != m.Revision || n.Result.Parts[study.SheetFront].Status != study.Ready {
 		t.Errorf("after the answer: computing %t, revision %d", n.Computing, n.ResultRevision)
 	}
-	bad := after(n, Edited{oil, "thick", "cp"})
+	bad := after(n, Left{}, Edited{oil, "thick", "cp"})
 	if bad.Computing || bad.ResultRevision != bad.Revision {
 		t.Error("a bad text takes the answers away")
 	}

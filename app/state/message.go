@@ -12,6 +12,9 @@ type (
 	// Edited: a numeric input's text or unit changed. Cells of the table have
 	// paths too: "rock.table.<row>.<sw|krw|kro>".
 	Edited struct{ Path, Text, Unit string }
+	// Left: a field that was typed in lost the keyboard. What is typed next is a
+	// step of its own, and what is in use then is the last good value.
+	Left struct{}
 	// Sourced: the source note of an input changed ("rock.table" included).
 	Sourced struct{ Path, Text string }
 	// Ranged: the optional range of an input changed.
@@ -74,6 +77,7 @@ type (
 )
 
 func (Edited) message()         {}
+func (Left) message()           {}
 func (Sourced) message()        {}
 func (Ranged) message()         {}
 func (Chosen) message()         {}

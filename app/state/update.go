@@ -17,6 +17,9 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 	switch msg := msg.(type) {
 	case Edited:
 		return m.edited(msg)
+	case Left:
+		m.history.key = ""
+		return m, nil
 	case Sourced:
 		return m.sourced(msg)
 	case Ranged:

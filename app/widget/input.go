@@ -68,6 +68,9 @@ func (i *Input) edited(ctx app.Context, _ app.Event) {
 	i.Desk.Send(i.message(i.typed))
 }
 
+// left is when the element loses the keyboard after an edit.
+func (i *Input) left(app.Context, app.Event) { i.Desk.Send(state.Left{}) }
+
 // OnUpdate writes the model's text where it differs from what was typed.
 func (i *Input) OnUpdate(app.Context) {
 	if i.Text != i.typed {
@@ -88,7 +91,7 @@ func (i *Input) Render() app.UI {
 }
 
 func (i *Input) line() app.UI {
-	in := app.Input().ID(i.ID).Type("text").Class(string(i.Sort)).AutoComplete(false).OnInput(i.edited)
+	in := app.Input().ID(i.ID).Type("text").Class(string(i.Sort)).AutoComplete(false).OnInput(i.edited).OnChange(i.left)
 	if i.first != "" {
 		in = in.Attr("value", i.first)
 	}
@@ -105,7 +108,7 @@ func (i *Input) line() app.UI {
 }
 
 func (i *Input) block() app.UI {
-	area := app.Textarea().ID(i.ID).Class(string(i.Sort)).Rows(3).OnInput(i.edited)
+	area := app.Textarea().ID(i.ID).Class(string(i.Sort)).Rows(3).OnInput(i.edited).OnChange(i.left)
 	if i.first != "" {
 		area = area.Attr("value", i.first)
 	}

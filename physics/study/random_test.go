@@ -60,7 +60,32 @@ func randomStudy(r *rand.Rand) Study {
 		}
 	}
 	st.Rock.Table = randomTable(r)
+	randomCases(r, &st)
 	return st
+}
+
+// randomCases gives one study in three some cases, which change a few inputs and
+// choices to anything they may be.
+func randomCases(r *rand.Rand, st *Study) {
+	if r.IntN(3) > 0 {
+		return
+	}
+	for i := range r.IntN(MaxCases + 1) {
+		c := Case{Name: "case " + string(rune('A'+i)), Set: map[string]Input{}, Choose: map[string]string{}}
+		for range r.IntN(4) {
+			spec := specs[r.IntN(len(specs))]
+			unit := units.Of(spec.Quantity)[0]
+			value := unit.FromSI(spec.Min + math.Pow(r.Float64(), 3)*(spec.Max-spec.Min))
+			if Check(spec, value, unit) == nil {
+				c.Set[spec.Path] = Input{Value: value, Unit: unit.Symbol}
+			}
+			f := choiceFields[r.IntN(len(choiceFields))]
+			if f.path != "system" {
+				c.Choose[f.path] = f.list[r.IntN(len(f.list))].Value
+			}
+		}
+		st.Cases = append(st.Cases, c)
+	}
 }
 
 // randomTable is a table of a few to some dozens of rows: most rise and fall as

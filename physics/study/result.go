@@ -12,6 +12,10 @@ const (
 	SheetRock  Sheet = "rock"
 	SheetFront Sheet = "front"
 	SheetField Sheet = "field"
+
+	// SheetCompare sets the cases of a study beside it; a result has it only when
+	// the study has cases.
+	SheetCompare Sheet = "compare"
 )
 
 // Result is everything that one evaluation of a study yields, in SI.

@@ -15,7 +15,7 @@ import (
 
 // variants are studies of every kind that Run meets, by name.
 func variants() map[string]Study {
-	all := map[string]Study{"empty": Empty(), "demo": Demo(), "full": full()}
+	all := map[string]Study{"empty": Empty(), "demo": Demo(), "full": full(), "cases": withCases()}
 	add := func(name string, change func(*Study)) {
 		st := Demo()
 		change(&st)
@@ -109,7 +109,11 @@ func faults(r Result) []string {
 			blame("problem %+v", p)
 		}
 	}
-	for _, sheet := range []Sheet{SheetRock, SheetFront, SheetField} {
+	sheets := []Sheet{SheetRock, SheetFront, SheetField}
+	if _, compared := r.Parts[SheetCompare]; compared {
+		sheets = append(sheets, SheetCompare)
+	}
+	for _, sheet := range sheets {
 		part, ok := r.Parts[sheet]
 		if !ok {
 			blame("no part %s", sheet)
@@ -140,7 +144,7 @@ func faults(r Result) []string {
 				}
 			}
 		}
-		if part.Status == Ready && (strip < 4 || strip > 7) {
+		if sheet != SheetCompare && part.Status == Ready && (strip < 4 || strip > 7) {
 			blame("the strip of %s has %d figures, want 4 to 7", sheet, strip)
 		}
 		for _, phrase := range part.Answer {
@@ -165,7 +169,7 @@ func faults(r Result) []string {
 		}
 		switch part.Status {
 		case Ready:
-			if len(part.Answer) == 0 || len(part.Figures) == 0 || len(part.Charts) == 0 || len(part.Missing) > 0 {
+			if len(part.Answer) == 0 || len(part.Figures) == 0 && sheet != SheetCompare || len(part.Charts) == 0 || len(part.Missing) > 0 {
 				blame("%s is ready without an answer", sheet)
 			}
 		case Waiting:
@@ -264,7 +268,10 @@ func numbers(v reflect.Value, at string, blame func(string, ...any)) {
 
 // knownPath reports whether a path names something of the document.
 func knownPath(path string) bool {
-	if _, ok := Find(path); ok {
+	if _, inner, ok := AtCase(path); ok {
+		path = inner
+	}
+	if _, ok := Find(path); ok || path == "name" {
 		return true
 	}
 	return Choices(path) != nil || path == "rock.table" || path == "field.start" || strings.HasPrefix(path, "rock.table.")

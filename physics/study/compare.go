@@ -1,0 +1,145 @@
+package study
+
+import (
+	"slices"
+	"strconv"
+	"strings"
+)
+
+// outcome is the base, or one case, with what became of it.
+type outcome struct {
+	evaluation
+	id      string // "base", "case1", ...
+	name    string
+	index   int      // of the case; -1 for the base
+	changed []string // the paths that the case changes
+}
+
+// runCompare sets the cases of a study beside it. Every case is a study of its
+// own that goes through the same sheets as the base; only a rock that no change
+// touches is not computed twice. A case that cannot answer says why, and the
+// others are shown.
+func runCompare(st *Study, base evaluation) Part {
+	s := newSheet(st)
+	s.await(base.frontPart)
+	if base.front == nil {
+		return s.close(base.frontPart.Status)
+	}
+	all := []outcome{{evaluation: base, id: "base", name: BaseCase, index: -1}}
+	for i, c := range st.Cases {
+		o := outcome{id: "case" + strconv.Itoa(i+1), name: c.Name, index: i, changed: c.Changes()}
+		o.evaluation = base.with(c)
+		s.cautions(o, base)
+		if o.front != nil {
+			all = append(all, o)
+		}
+	}
+	compareFigures(s, all)
+	compareCharts(s, all)
+	compareTables(s, all)
+	compareAnswer(s, all)
+	return s.close(base.frontPart.Status)
+}
+
+// with evaluates a case of the study that was evaluated.
+func (e evaluation) with(c Case) evaluation {
+	st := c.On(*e.st)
+	if slices.ContainsFunc(c.Changes(), func(path string) bool { return strings.HasPrefix(path, "rock.") }) {
+		return evaluate(&st)
+	}
+	of := evaluation{st: &st, rockPart: e.rockPart, rock: e.rock}
+	of.answer()
+	return of
+}
+
+// cautions says why a case has no answer, or what it brings up that the base
+// does not.
+func (s *sheet) cautions(o outcome, base evaluation) {
+	id, says := "compare."+o.id+".", "“"+o.name+"”: "
+	if len(o.changed) == 0 {
+		s.note(Note{ID: id + "unchanged", Level: "remark", Text: says + "nothing is changed yet, so it is the base case once more.", Do: "Change an input of the case.", Paths: []string{CasePath(o.index, "name")}})
+	}
+	if o.front == nil {
+		s.note(o.unanswered(id, says))
+		return
+	}
+	if base.fieldPart.ends() && !o.fieldPart.ends() {
+		why := o.unanswered(id, says)
+		why.ID, why.Text = id+"noField", says+"no forecast to set beside that of the base. "+strings.TrimPrefix(why.Text, says)
+		s.note(why)
+	}
+	known := func(n Note) bool {
+		return slices.ContainsFunc([]Part{base.rockPart, base.frontPart, base.fieldPart}, func(p Part) bool {
+			return slices.ContainsFunc(p.Notes, func(m Note) bool { return m.ID == n.ID })
+		})
+	}
+	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
+		for _, n := range p.Notes {
+			if n.Level == "caution" && !known(n) {
+				n.ID, n.Text, n.Paths = id+n.ID, says+n.Text, o.places(n.Paths)
+				s.note(n)
+			}
+		}
+	}
+}
+
+// ends reports whether a forecast could be made.
+func (p Part) ends() bool { return p.Status == Ready || p.Status == Stopped && len(p.Figures) > 0 }
+
+// unanswered is a note of what keeps a case from answering.
+func (o outcome) unanswered(id, says string) Note {
+	n := Note{ID: id + "unanswered", Level: "caution", Cause: "Its changes do not go together with the rest of the study.", Do: "Change the case, or what it shares with the study."}
+	var reasons, paths []string
+	for _, p := range o.problems {
+		reasons, paths = append(reasons, named(p.Path)+" cannot be used: read "+p.Read+"; allowed: "+p.Allowed), append(paths, p.Path)
+	}
+	for _, path := range o.fieldPart.Missing {
+		reasons, paths = append(reasons, named(path)+" is not given"), append(paths, path)
+	}
+	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
+		for _, stop := range p.Notes {
+			if len(reasons) == 0 && strings.HasSuffix(stop.ID, ".numerics") {
+				reasons, paths = append(reasons, strings.TrimSuffix(stop.Text, ".")), append(paths, stop.Paths...)
+			}
+		}
+	}
+	n.Text = says + strings.Join(reasons, ". ") + "."
+	n.Paths = o.places(paths)
+	return n
+}
+
+// named is an input by its label.
+func named(path string) string {
+	if spec, ok := Find(path); ok {
+		return spec.Label
+	}
+	if strings.HasPrefix(path, "rock.table") {
+		return "The laboratory table"
+	}
+	return path
+}
+
+// places are where the inputs at some paths are given: in the case when it
+// changes them.
+func (o outcome) places(paths []string) []string {
+	places := []string{}
+	for _, path := range paths {
+		if slices.Contains(o.changed, path) {
+			path = CasePath(o.index, path)
+		}
+		if !slices.Contains(places, path) {
+			places = append(places, path)
+		}
+	}
+	return places
+}
+
+// figure is a figure of an outcome, found on the sheet its ID names.
+func (o outcome) figure(id string) (Figure, bool) {
+	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
+		if f, ok := p.Figure(id); ok {
+			return f, true
+		}
+	}
+	return Figure{}, false
+}

@@ -5,35 +5,39 @@ import { CustomChart, LineChart, ScatterChart } from "echarts/charts";
 import { GridComponent } from "echarts/components";
 import { SVGRenderer } from "echarts/renderers";
 import { controls } from "./plot/controls.js";
-import { drawing } from "./plot/drawing.js";
+import { drawing, slid } from "./plot/drawing.js";
 import { colours, darkScheme, light } from "./plot/palette.js";
+import { pinList } from "./plot/pinlist.js";
+import { found, pinned } from "./plot/pins.js";
 import { attach } from "./plot/pointer.js";
 import { savePNG, saveSVG } from "./plot/save.js";
+import { slide } from "./plot/slide.js";
 import { style } from "./plot/style.js";
 
 use([LineChart, ScatterChart, CustomChart, GridComponent, SVGRenderer]);
 
 const printedWidth = 640; // dots: the text area of A4 and of Letter, near enough; the page scales the rest
 const plots = new Map(); // by holder
+const kept = new Map(); // by holder: where the slider stands and what is pinned, while another sheet is looked at
 let printing = false;
 
 class Plot {
   constructor(holder) {
     style();
     this.holder = holder;
-    this.state = { logX: false, logY: false, view: null, hidden: new Set() };
+    this.state = { logX: false, logY: false, view: null, hidden: new Set(), at: null, pins: [], ...kept.get(holder.id) };
     this.figure = element("div", "plot-figure", { role: "img", tabindex: "0" });
     this.canvas = element("div", "plot-canvas", {});
     this.row = element("div", "plot-row", {});
     this.said = element("div", "plot-said plot-unseen", { "aria-live": "polite" });
-    const hint = element("div", "plot-hint", { "aria-hidden": "true" });
-    hint.textContent = "← → read   + − zoom   Esc all";
-    const keys = element("div", "plot-unseen", { id: `${holder.id}-keys` });
-    keys.textContent = "Arrow keys read values, plus and minus zoom, Escape shows the whole picture.";
-    this.figure.setAttribute("aria-describedby", keys.id);
-    this.figure.append(this.canvas, hint);
+    this.slideRow = element("div", "plot-slide", { role: "group", "aria-label": "Slider of the picture" });
+    this.pinRows = element("ul", "plot-pins", { id: `${holder.id}-pins`, "aria-live": "polite", "aria-label": "Pinned readings" });
+    this.hint = element("div", "plot-hint", { "aria-hidden": "true" });
+    this.keys = element("div", "plot-unseen", { id: `${holder.id}-keys` });
+    this.figure.setAttribute("aria-describedby", this.keys.id);
+    this.figure.append(this.canvas, this.hint);
     const root = element("div", "plot", {});
-    root.append(this.figure, keys, this.row, this.said);
+    root.append(this.figure, this.keys, this.slideRow, this.pinRows, this.row, this.said);
     holder.replaceChildren(root);
 
     const act = {
@@ -44,10 +48,13 @@ class Plot {
       whole: () => this.change({ view: null }),
     };
     this.updateRow = controls(this.row, act);
+    this.slider = slide(this.slideRow, holder.id, { to: (value) => this.slideTo(value), rest: () => this.redraw() });
+    this.updatePins = pinList(this.pinRows, (pin) => this.keepPins(this.state.pins.filter((p) => p !== pin)));
     this.pointer = attach({
       figure: this.figure,
       lay: () => this.drawn.lay, labels: () => this.drawn.labels, picture: () => this.picture, palette: () => this.palette,
       setView: (view) => this.change({ view }), toggle: act.toggle, say: (text) => { this.said.textContent = text; },
+      pin: (line, index) => this.pin(line, index), pins: () => this.state.pins.length, unpin: () => this.keepPins([]),
     });
     // Size and style are asked for only when they may have changed: each question
     // makes the browser lay out the page, and a picture is redrawn at every keystroke.
@@ -68,8 +75,15 @@ class Plot {
     if (picture.id !== this.picture?.id) {
       Object.assign(this.state, { logX: picture.x.log, logY: picture.y.log, view: null, hidden: new Set() });
     }
+    const { slider } = this.picture ?? {};
+    if (slider && picture.slider && slider.unit !== picture.slider.unit && this.state.at !== null) {
+      // The same value told in another unit stands at the same part of the way.
+      this.state.at = picture.slider.min + ((this.state.at - slider.min) / (slider.max - slider.min)) * (picture.slider.max - picture.slider.min);
+    }
+    this.state.pins = this.state.pins.map((pin) => found(pin, picture));
     this.json = json;
     this.picture = picture;
+    this.instruct(picture.lines.some((l) => l.readings));
     this.figure.setAttribute("aria-label", `${picture.title}. ${picture.summary}`);
     this.pointer.leave();
     this.redraw();
@@ -83,6 +97,43 @@ class Plot {
   change(part) {
     Object.assign(this.state, part);
     this.redraw();
+  }
+
+  // instruct says which keys there are.
+  instruct(readable) {
+    this.hint.textContent = `← → read   ${readable ? "Enter pin   " : ""}+ − zoom   Esc ${readable ? "clear" : "all"}`;
+    this.keys.textContent = "Arrow keys read values, plus and minus zoom, Escape shows the whole picture." +
+      (readable ? " Enter pins the point that is read, and takes a pin away; Escape takes all pins away first." : "");
+  }
+
+  // slideTo moves what moves, at most once a frame.
+  slideTo(value) {
+    this.state.at = value;
+    this.keep();
+    this.frame ??= requestAnimationFrame(() => {
+      this.frame = null;
+      if (!this.chart) return;
+      this.drawn = slid(this.drawn, this.picture, this.state, this.palette);
+      this.chart.setOption(this.drawn.option);
+    });
+  }
+
+  // pin keeps the readings of a point in sight, or lets go of them.
+  pin(id, index) {
+    const line = this.picture.lines.find((l) => l.id === id);
+    const others = this.state.pins.filter((p) => p.line !== id || p.index !== index);
+    const fresh = others.length === this.state.pins.length;
+    this.keepPins(fresh ? [...others, pinned(line, index, this.picture)] : others);
+  }
+
+  keepPins(pins) {
+    this.state.pins = pins;
+    this.keep();
+    this.redraw();
+  }
+
+  keep() {
+    kept.set(this.holder.id, { at: this.state.at, pins: this.state.pins });
   }
 
   toggle(id) {
@@ -109,6 +160,8 @@ class Plot {
     this.chart.setOption(this.drawn.option, structure === this.structure ? {} : { notMerge: true });
     this.structure = structure;
     this.updateRow(this.picture, this.state, this.palette);
+    this.slider.update(this.picture, this.state.at);
+    this.updatePins(this.state.pins, this.drawn.lay, this.picture);
   }
 
   async save(format, name) {
@@ -119,6 +172,8 @@ class Plot {
 
   forget() {
     this.watcher.disconnect();
+    this.slider.stop();
+    cancelAnimationFrame(this.frame);
     this.chart?.dispose();
   }
 }

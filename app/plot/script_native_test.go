@@ -107,7 +107,7 @@ func TestAxesReachRoundTheirData(t *testing.T) {
 
 func TestReadingsHaveFourDigits(t *testing.T) {
 	expect(t, []string{"scale.js"}, []expectation{
-		{`[0, 0.0544321, 0.5, -0.5, 12.3456, 1234.56, 12345.6, 1.5e-7, -2e12].map(reading)`,
+		{`[0, 0.0544321, 0.5, -0.5, 12.3456, 1234.56, 12345.6, 1.5e-7, -2e12].map((v) => reading(v))`,
 			`["0","0.05443","0.5000","−0.5000","12.35","1235","12` + "\u202f" + `346","1.500×10⁻⁷","−2.000×10¹²"]`},
 	})
 }
@@ -143,5 +143,73 @@ func TestReadingsTellEveryLineAtOnePlace(t *testing.T) {
 		{`readings(` + lay + `, 50, ` + picture + `).map((r) => r.line.label + ": " + r.text)`,
 			`["straight: 15.00` + hard + `bbl/d","drop: 70.00 and 20.00` + hard + `bbl/d","near: 4.000` + hard + `bbl/d","band: 7.000 to 9.000` + hard + `bbl/d"]`},
 		{`heading(` + lay + `, 25, ` + picture + `)`, `"Sw = 0.2500"`},
+	})
+}
+
+// A moving line stands at x times the slider: cut where it leaves the axis, carried on
+// at its last height where it ends before (study.Line).
+func TestMovingLinesStandWhereTheSliderSays(t *testing.T) {
+	const line = `{ moving: true, kind: "line", data: [[0, 0.8], [0.5, 0.6], [1, 0.5], [1, 0.2]] }`
+	const slider = `{ min: 0, max: 4, value: 1, stops: [] }`
+	const picture = `{ x: {}, slider: ` + slider + `, lines: [` + line + `, { data: [[2, 1]] }] }`
+	expect(t, []string{"still.js"}, []expectation{
+		{`stillLine(` + line + `, 0.5, 1).data`, `[[0,0.8],[0.25,0.6],[0.5,0.5],[0.5,0.2],[1,0.2]]`},
+		{`stillLine(` + line + `, 0.5, 1).own`, `4`},
+		{`stillLine(` + line + `, 1.25, 1).data.map(([x, y]) => [x, y.toFixed(6)])`, `[[0,"0.800000"],[0.625,"0.600000"],[1,"0.540000"]]`}, // a step of 0.375 of 0.625 down
+		{`stillLine(` + line + `, 1.25, 1).own`, `2`},
+		{`stillLine(` + line + `, 0, 1).data`, `[[0,0.8],[0,0.6],[0,0.5],[0,0.2],[1,0.2]]`},
+		{`stillLine({ ...` + line + `, kind: "points" }, 1.25, 1).data`, `[[0,0.8],[0.625,0.6]]`},
+		{`stillLine({ data: [[0, 1]], kind: "line" }, 3, 1)`, `{"data":[[0,1]],"kind":"line","own":1}`},
+		{`still(` + picture + `, null).x.max`, `4`}, // nothing limits the axis: as far as the slider brings a line
+		{`still(` + picture + `, 3).lines.map((l) => l.data.at(-1))`, `[[4,0.2],[2,1]]`},
+		{`[null, -1, 2, 9].map((at) => sliderAt(` + slider + `, at))`, `[1,0,2,4]`},
+	})
+}
+
+// A pin is the same point after an edit, after a step of the slider, in other units.
+func TestPinsComeBack(t *testing.T) {
+	const readings = `readings: [{ label: "speed", unit: "", values: [0, 1, 2] }, { label: "arrives after", unit: "PV", values: [0, 1, 0.5], words: ["never", "", ""] }]`
+	const curve = `{ id: "f", label: "flow", data: [[0.2, 0], [0.4, 50], [0.6, 100]], ` + readings + ` }`
+	const edited = `{ id: "f", label: "flow", data: [[0.2, 0], [0.3, 9], [0.41, 70], [0.6, 100]], ` + readings + ` }`
+	const profile = `{ id: "p", label: "profile", moving: true, data: [[0, 0.6], [1, 0.4], [2, 0.2]], ` + readings + ` }`
+	picture := func(line string) string {
+		return `{ x: { short: "Sw", unit: "" }, y: { short: "fw", unit: "%" }, lines: [` + line + `] }`
+	}
+	moving := `{ x: { short: "x/L", unit: "", max: 1 }, y: { short: "Sw", unit: "" }, slider: { min: 0, max: 4, value: 1, stops: [] }, lines: [` + profile + `] }`
+	lay := func(lines string) string {
+		return `{ courses: ` + lines + `.map((line) => ({ line, shown: true })) }`
+	}
+	const hard = "\u00a0"
+	expect(t, []string{"scale.js", "still.js", "pins.js"}, []expectation{
+		{`pinned(` + curve + `, 1, ` + picture(curve) + `)`, `{"line":"f","index":1,"along":0.4,"unit":""}`},
+		{`found(pinned(` + curve + `, 1, ` + picture(curve) + `), ` + picture(edited) + `).index`, `2`}, // nearest in x, whatever y
+		{`found(pinned(` + profile + `, 1, ` + moving + `), ` + moving + `).along`, `0.4`},              // known by its height
+		{`found({ line: "f", index: 2, along: 9, unit: "ft" }, ` + picture(curve) + `)`, `{"line":"f","index":2,"along":0.6,"unit":""}`},
+		{`found({ line: "gone", index: 2, along: 9, unit: "" }, ` + picture(curve) + `)`, `{"line":"gone","index":2,"along":9,"unit":""}`},
+		{`pinText(pinned(` + curve + `, 2, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
+			`"Sw 0.600, fw 100` + hard + `%: speed 2.00, arrives after 0.500` + hard + `PV"`},
+		{`pinText(pinned(` + curve + `, 0, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
+			`"Sw 0.200, fw 0` + hard + `%: speed 0, arrives after never"`},
+		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 0.5).lines`) + `, ` + moving + `)`,
+			`"Sw 0.400, x/L 0.500: speed 1.00, arrives after 1.00` + hard + `PV"`},
+		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 2).lines`) + `, ` + moving + `)`, // it has left the picture
+			`"Sw 0.400: speed 1.00, arrives after 1.00` + hard + `PV"`},
+		{`[0.5, 2].map((at) => pinMarks([pinned(` + profile + `, 1, ` + moving + `)], ` + lay(`still(`+moving+`, at).lines`) + `, ` + moving + `).map((m) => [m.label, m.x, m.y]))`,
+			`[[["Sw 0.400",0.5,0.4]],[]]`},
+	})
+}
+
+// The point that is read is the nearest across, then the nearest upwards; the arrow
+// keys follow the line, also where it falls straight.
+func TestSpotsFollowTheirLine(t *testing.T) {
+	const lay = `{ courses: [
+		{ line: { id: "plain", own: 1 }, shown: true, dots: [[50, 50]] },
+		{ line: { id: "fall", own: 4, readings: [] }, shown: true, dots: [[0, 70], [50, 70], [50, 20], [100, 20], [130, 20]] },
+	] }`
+	expect(t, []string{"scale.js", "read.js"}, []expectation{
+		{`[[48, 60], [48, 30], [3, 0], [99, 99]].map(([x, y]) => spotAt(` + lay + `, x, y).index)`, `[1,2,0,3]`},
+		{`spotAt({ courses: [] }, 1, 1)`, `null`},
+		{`[1, 60, 500].map((d) => stepped(` + lay + `, { line: { id: "fall" }, index: 1 }, 1, d).index)`, `[2,3,3]`},
+		{`[1, 60].map((d) => stepped(` + lay + `, { line: { id: "fall" }, index: 1 }, -1, d).index)`, `[0,0]`},
 	})
 }

@@ -13,8 +13,9 @@ export function textWidth(text, family) {
 
 export const lineHeight = 16;
 
-// layout finds the frame, both axes and each line's course. state: {logX, logY,
-// view, hidden}; view is null or {x: [lo, hi], y: [lo, hi]} in scale coordinates.
+// layout finds the frame, both axes and each line's course in a picture that stands
+// still. state: {logX, logY, view, hidden}; view is null or {x: [lo, hi], y: [lo,
+// hi]} in scale coordinates.
 export function layout(picture, state, width, height, family) {
   const shown = picture.lines.filter((l) => !state.hidden.has(l.id));
   const scaleX = state.logX ? log : linear, scaleY = state.logY ? log : linear;
@@ -37,20 +38,22 @@ export function layout(picture, state, width, height, family) {
 
   const x = axis(view.x, scaleX, rect.left, rect.right, xTicks);
   const y = upright;
-  const courses = picture.lines.map((l) => ({
-    line: l, shown: !state.hidden.has(l.id),
-    dots: l.data.map((p) => p && [x.dot(p[0]), y.dot(p[1])]),
-    low: l.low?.map((p) => p && [x.dot(p[0]), y.dot(p[1])]),
-  }));
+  const courses = picture.lines.map((l) => course(l, !state.hidden.has(l.id), x, y));
   return {
     width, height, rect, x, y, whole, view, courses, yTitle, lead, measure, size, family,
     endLabels: new Set(margin > 0 ? ends.map((l) => l.id) : []),
   };
 }
 
+// course is where a line runs, in dots.
+export function course(line, shown, x, y) {
+  const dots = (points) => points.map((p) => p && [x.dot(p[0]), y.dot(p[1])]);
+  return { line, shown, dots: dots(line.data), low: line.low && dots(line.low) };
+}
+
 function wholeView(picture, scaleX, scaleY) {
   const all = (i) => [
-    ...picture.lines.flatMap((l) => [...l.data, ...(l.low ?? [])].filter(Boolean).map((p) => p[i])),
+    ...picture.lines.flatMap((l) => [...l.data, ...(i === 1 && l.origin ? l.origin.data : []), ...(l.low ?? [])].filter(Boolean).map((p) => p[i])),
     ...picture.marks.map((m) => (i === 0 ? m.x : m.y)),
   ];
   return { x: extent(picture.x, all(0), scaleX), y: extent(picture.y, all(1), scaleY) };
@@ -72,11 +75,12 @@ function fitting(view, scale, width, measure) {
   }
 }
 
-// freeEnds are the lines that reach the right edge where no other line ends.
+// freeEnds are the lines that reach the right edge where no other line ends. A moving
+// line's end would come and go, and the frame with it.
 function freeEnds(lines, [lo, hi], scale, y) {
   const ends = [];
   for (const line of lines) {
-    if (line.kind === "band" || line.kind === "points") continue;
+    if (line.kind === "band" || line.kind === "points" || line.moving) continue;
     const last = line.data.findLast(Boolean);
     if (!last || Math.abs(scale.to(last[0]) - hi) > 0.02 * (hi - lo)) continue;
     const place = y.scale.to(last[1]);

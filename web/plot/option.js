@@ -17,6 +17,12 @@ export function option(lay, labels, marks, palette, title) {
   };
 }
 
+// slidOption is the part of option that changes while lines move.
+export function slidOption(lay, labels, marks, palette, title) {
+  const moving = lay.courses.filter((c) => c.line.moving).flatMap((c) => seriesOf(c, lay, palette));
+  return { series: [...moving, words("words", () => annotations(lay, labels, marks, palette, title), 6)] };
+}
+
 function axisOption(axis, lay, palette, ruled) {
   const values = axis.ticks.map((t) => t.at);
   const texts = new Map(axis.ticks.map((t) => [t.at, t.text]));
@@ -110,7 +116,8 @@ function annotations(lay, labels, marks, palette, title) {
   for (const m of marks) {
     const cx = lay.x.dot(m.x), cy = lay.y.dot(m.y);
     if (cx < rect.left || cx > rect.right || !(cy >= rect.top && cy <= rect.bottom)) continue;
-    list.push({ type: "circle", shape: { cx, cy, r: 3.5 }, style: { fill: palette.ink, stroke: palette.paper, lineWidth: 1.5 } });
+    const style = m.pin ? { fill: palette.paper, stroke: palette.ink, lineWidth: 2 } : { fill: palette.ink, stroke: palette.paper, lineWidth: 1.5 };
+    list.push({ type: "circle", shape: { cx, cy, r: m.pin ? 4.5 : 3.5 }, style });
   }
   return list;
 }

@@ -1,20 +1,24 @@
 // What mouse, finger and keyboard do on a picture. The page keeps its wheel until
 // a picture has the focus.
-import { heading, readings } from "./read.js";
 import { look } from "./palette.js";
+import { details } from "./pins.js";
+import { heading, readings, spotAt, stepped } from "./read.js";
 import { boxed, moved, zoomed } from "./zoom.js";
 
 const least = 8; // dots: a shorter drag is a click
-const stride = 8; // dots that an arrow key moves the reading line
+const stride = 8; // dots that an arrow key moves the reading line; with Shift one
 const closer = 0.8; // one notch of the wheel
 
 // attach gives a plot its pointer and keys. plot: {figure, lay(), picture(),
-// labels(), palette(), setView(view), toggle(id), say(text)}.
+// labels(), palette(), setView(view), toggle(id), say(text), pin(line, index),
+// pins(), unpin()}.
 export function attach(plot) {
   const { figure } = plot;
-  const hair = part("plot-hair"), box = part("plot-box"), slip = part("plot-slip");
+  const hair = part("plot-hair"), box = part("plot-box"), slip = part("plot-slip"), dot = part("plot-dot");
   let from = null; // where a drag began
+  let dragged = false; // the click that comes next ends a drag
   let readAt = null; // the reading line, dots
+  let spot = null; // the point whose further readings are shown
 
   function part(name) {
     const element = document.createElement("div");
@@ -31,12 +35,15 @@ export function attach(plot) {
     return { x: clamp(x, rect.left, rect.right), y: clamp(y, rect.top, rect.bottom), rawX: x, rawY: y };
   };
 
-  function read(dotX, dotY) {
+  function read(dotX, dotY, at = spotAt(plot.lay(), dotX, dotY)) {
     const lay = plot.lay(), { rect } = lay;
     const rows = readings(lay, dotX, plot.picture());
     readAt = dotX;
+    spot = at;
     place(hair, dotX, rect.top, 0, rect.bottom - rect.top);
-    slip.replaceChildren(row("plot-at", heading(lay, dotX, plot.picture())), ...rows.map((r) => entry(r)));
+    if (spot) place(dot, spot.x, spot.y, 0, 0);
+    dot.hidden = !spot || spot.x < rect.left || spot.x > rect.right || spot.y < rect.top || spot.y > rect.bottom;
+    slip.replaceChildren(row("plot-at", heading(lay, dotX, plot.picture())), ...rows.flatMap((r) => [entry(r), ...further(r.line)]));
     slip.hidden = false;
     const right = dotX + 14 + slip.offsetWidth <= lay.width;
     slip.style.left = `${right ? dotX + 14 : Math.max(0, dotX - 14 - slip.offsetWidth)}px`;
@@ -59,14 +66,24 @@ export function attach(plot) {
     return element;
   }
 
+  // further are the spot's readings, under its line.
+  function further(line) {
+    if (dot.hidden || line.id !== spot.line.id) return [];
+    return details(spot.line, spot.index, 4).map(({ label, text }) => {
+      const element = row("plot-entry plot-more", "");
+      element.append(row("plot-name", label), row("plot-value", text));
+      return element;
+    });
+  }
+
   function place(element, x, y, w, h) {
     Object.assign(element.style, { left: `${x}px`, top: `${y}px`, width: `${w}px`, height: `${h}px` });
     element.hidden = false;
   }
 
   function leave() {
-    hair.hidden = slip.hidden = box.hidden = true;
-    from = readAt = null;
+    hair.hidden = slip.hidden = box.hidden = dot.hidden = true;
+    from = readAt = spot = null;
   }
 
   const labelAt = ({ rawX, rawY }) =>
@@ -76,7 +93,7 @@ export function attach(plot) {
     const at = within(event);
     figure.style.cursor = labelAt(at) ? "pointer" : "crosshair";
     if (from) {
-      hair.hidden = slip.hidden = true;
+      hair.hidden = slip.hidden = dot.hidden = true;
       return place(box, ...corner(from, at));
     }
     read(at.x, at.y);
@@ -88,6 +105,7 @@ export function attach(plot) {
     if (event.pointerType === "touch") return void read(at.x, at.y); // a finger's drag scrolls the page
     if (event.button !== 0 || labelAt(at)) return;
     from = at;
+    dragged = false;
     figure.setPointerCapture(event.pointerId);
   });
   figure.addEventListener("pointerup", (event) => {
@@ -96,15 +114,24 @@ export function attach(plot) {
     leave();
     const wide = Math.abs(a.x - b.x) >= least, high = Math.abs(a.y - b.y) >= least;
     if (!wide && !high) return read(b.x, b.y);
+    dragged = true;
     const x = wide ? [a.x, b.x] : [rect.left, rect.right], y = high ? [a.y, b.y] : [rect.bottom, rect.top];
     plot.setView(boxed(x.map(lay.x.place), y.map(lay.y.place), lay.whole));
   });
   figure.addEventListener("pointercancel", leave);
   figure.addEventListener("pointerleave", (event) => from || event.pointerType === "touch" || leave());
   figure.addEventListener("click", (event) => {
-    const label = labelAt(within(event));
-    if (label) plot.toggle(label.line);
+    if (dragged) return void (dragged = false);
+    const at = within(event), label = labelAt(at);
+    if (label) return plot.toggle(label.line);
+    read(at.x, at.y);
+    pin();
   });
+
+  function pin() {
+    if (spot && !dot.hidden) plot.pin(spot.line.id, spot.index);
+  }
+
   figure.addEventListener("dblclick", () => plot.setView(null));
   figure.addEventListener("blur", leave);
 
@@ -128,16 +155,22 @@ export function attach(plot) {
     if (readAt !== null) read(readAt, (rect.top + rect.bottom) / 2);
   }
 
-  // The arrows move the reading line; at the edge of a part they move the part.
-  function step(direction) {
-    const lay = plot.lay(), { rect } = lay;
-    let next = readAt === null ? (rect.left + rect.right) / 2 : readAt + direction * stride;
-    if (next < rect.left || next > rect.right) {
-      plot.setView(moved(lay.view, lay.whole, direction * 0.1, 0));
-      next = clamp(next, rect.left, rect.right);
+  // The arrows move the reading line, along a line with further readings where there
+  // is one; at the edge of a part they move the part.
+  function step(direction, dotsOn) {
+    const { rect } = plot.lay(), middle = { x: (rect.left + rect.right) / 2, y: (rect.top + rect.bottom) / 2 };
+    const near = spot ?? spotAt(plot.lay(), middle.x, middle.y);
+    const next = () => (near && spot ? stepped(plot.lay(), near, direction, dotsOn) : near);
+    let at = near ? next() : { x: readAt === null ? middle.x : readAt + direction * dotsOn };
+    if (at.x < rect.left || at.x > rect.right) {
+      const lay = plot.lay();
+      plot.setView(moved(lay.view, lay.whole, Math.sign(at.x - middle.x) * 0.1, 0));
+      at = near ? { ...at, x: plot.lay().courses.find((c) => c.line.id === at.line.id).dots[at.index][0] } : at;
     }
-    const rows = read(next, (rect.top + rect.bottom) / 2);
-    plot.say([heading(plot.lay(), next, plot.picture()), ...rows.map((r) => `${r.line.label} ${r.text}`)].join("; "));
+    const x = clamp(at.x, rect.left, rect.right);
+    const rows = read(x, at.y ?? middle.y, near ? at : null);
+    const also = near ? details(at.line, at.index, 4).map((d) => `${d.label} ${d.text}`) : [];
+    plot.say([heading(plot.lay(), x, plot.picture()), ...rows.map((r) => `${r.line.label} ${r.text}`), ...also].join("; "));
   }
 
   const shift = (dy) => {
@@ -146,8 +179,10 @@ export function attach(plot) {
   };
   const keys = {
     "+": () => zoomHere(closer), "=": () => zoomHere(closer), "-": () => zoomHere(1 / closer),
-    Escape: () => (plot.setView(null), leave()),
-    ArrowLeft: () => step(-1), ArrowRight: () => step(1), ArrowUp: () => shift(0.1), ArrowDown: () => shift(-0.1),
+    Escape: () => (plot.pins() ? plot.unpin() : plot.setView(null), leave()),
+    Enter: pin, " ": pin,
+    ArrowLeft: (event) => step(-1, event.shiftKey ? 1 : stride), ArrowRight: (event) => step(1, event.shiftKey ? 1 : stride),
+    ArrowUp: () => shift(0.1), ArrowDown: () => shift(-0.1),
   };
   figure.addEventListener("keydown", (event) => {
     const act = keys[event.key];
@@ -155,7 +190,7 @@ export function attach(plot) {
     const lay = plot.lay(), upright = event.key === "ArrowUp" || event.key === "ArrowDown";
     if (upright && lay.view === lay.whole) return; // the page scrolls
     event.preventDefault();
-    act();
+    act(event);
   });
   return { leave, zoomIn: () => zoomHere(0.5) };
 }

@@ -1,5 +1,5 @@
 // Reading values off a picture: every shown series at one x.
-import { reading } from "./scale.js";
+import { reading, withUnit } from "./scale.js";
 
 const reach = 7; // dots within which a marker counts as read
 const most = 3; // crossings of one line that are told
@@ -23,8 +23,6 @@ export function heading(lay, dotX, picture) {
   return withUnit(`${picture.x.short} = ${reading(lay.x.value(dotX))}`, picture.x.unit);
 }
 
-const withUnit = (text, unit) => (unit ? `${text}\u00a0${unit}` : text);
-
 // crossings are the heights at which a course passes a place; a straight drop
 // at that very place counts with both its ends.
 function crossings(dots, x) {
@@ -43,4 +41,34 @@ function nearest(dots, x) {
   const seen = dots.filter((d) => d && Number.isFinite(d[1]) && Math.abs(d[0] - x) <= reach);
   seen.sort((a, b) => Math.abs(a[0] - x) - Math.abs(b[0] - x));
   return seen.slice(0, 1).map((d) => d[1]);
+}
+
+// spotAt is the point nearest to a dot among the lines that have further readings:
+// {line, index, x, y}, null where there is none. The place across counts first.
+export function spotAt(lay, x, y) {
+  let best = null;
+  for (const { line, shown, dots } of lay.courses) {
+    if (!shown || !line.readings) continue;
+    const own = dots.slice(0, line.own).map((d, index) => ({ line, index, d })).filter(({ d }) => d && Number.isFinite(d[0] + d[1]));
+    const across = own.reduce((least, { d }) => Math.min(least, Math.abs(d[0] - x)), Infinity);
+    for (const { index, d } of own) {
+      if (Math.abs(d[0] - x) > across + 1) continue;
+      const off = Math.hypot(d[0] - x, d[1] - y);
+      if (best === null || off < best.off) best = { line, index, x: d[0], y: d[1], off };
+    }
+  }
+  return best;
+}
+
+// stepped is the point some dots further along a spot's line, at least the next one.
+export function stepped(lay, spot, direction, dotsOn) {
+  const { line, dots } = lay.courses.find((c) => c.line.id === spot.line.id);
+  let index = spot.index, gone = 0, last = dots[index];
+  for (let i = index + direction; i >= 0 && i < line.own && gone < dotsOn; i += direction) {
+    if (!dots[i] || !Number.isFinite(dots[i][0] + dots[i][1])) continue;
+    gone += Math.hypot(dots[i][0] - last[0], dots[i][1] - last[1]);
+    last = dots[i];
+    index = i;
+  }
+  return { line, index, x: last[0], y: last[1] };
 }

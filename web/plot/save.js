@@ -3,6 +3,8 @@ import { init } from "echarts/core";
 import { drawing } from "./drawing.js";
 import { light } from "./palette.js";
 import { lineHeight } from "./layout.js";
+import { sliderText } from "./slide.js";
+import { sliderAt } from "./still.js";
 
 const width = 800, height = 480; // dots of a saved picture
 const band = 2 * lineHeight; // for the title
@@ -29,12 +31,14 @@ function standalone(picture, state, family) {
   const inner = chart.renderToSVGString();
   chart.dispose();
   const text = (value) => value.replace(/[&<>"]/g, (c) => ({ "&": "&amp;", "<": "&lt;", ">": "&gt;", '"': "&quot;" })[c]);
+  const { slider } = picture;
+  const title = slider ? `${picture.title}, ${slider.short} = ${sliderText(slider, sliderAt(slider, state.at))}` : picture.title;
   const font = `font-family="${text(family)}" font-size="14" fill="${light.ink}"`;
   return `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height + band}" viewBox="0 0 ${width} ${height + band}">
-<title>${text(picture.title)}</title>
+<title>${text(title)}</title>
 <desc>${text(picture.summary)}</desc>
 <rect width="100%" height="100%" fill="#ffffff"/>
-<text x="2" y="20" font-weight="600" ${font}>${text(picture.title)}</text>
+<text x="2" y="20" font-weight="600" ${font}>${text(title)}</text>
 <g transform="translate(0 ${band})">${inner}</g>
 </svg>
 `;

@@ -102,13 +102,17 @@ function apart(text) {
   return minus(rest === undefined ? spaced : `${spaced}.${rest}`);
 }
 
-// reading writes a number read off a picture: four significant digits.
-export function reading(v) {
+// reading writes a number read off a picture: four significant digits, or as many as
+// are asked for.
+export function reading(v, digits = 4) {
   if (v === 0) return "0";
   const e = Math.floor(Math.log10(Math.abs(v)));
   if (e < -4 || e >= 9) {
-    const [m, p] = v.toExponential(3).split("e");
+    const [m, p] = v.toExponential(digits - 1).split("e");
     return `${minus(m)}×10${raised(Number(p))}`;
   }
-  return apart(v.toFixed(Math.max(0, 3 - e)));
+  return apart(v.toFixed(Math.max(0, digits - 1 - e)));
 }
+
+// withUnit keeps a number and its unit on one line.
+export const withUnit = (text, unit) => (unit ? `${text}\u00a0${unit}` : text);

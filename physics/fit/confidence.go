@@ -3,8 +3,7 @@ package fit
 import (
 	"math"
 
-	"gonum.org/v1/gonum/mat"
-	"gonum.org/v1/gonum/stat/distuv"
+	"gonum.org/v1/gonum/mathext"
 
 	"brinefront/physics/relperm"
 )
@@ -26,11 +25,11 @@ const (
 type confidence struct {
 	family     family
 	values     []float64
-	active     []int         // parameters fitted and not at a bound
-	covariance *mat.SymDense // of the active ones, as the minimiser moves them
-	blind      []bool        // active ones in a direction that the points do not see
-	variance   float64       // s²
-	student    float64       // two-sided quantile of Student's t
+	active     []int     // parameters fitted and not at a bound
+	covariance symmetric // of the active ones, as the minimiser moves them
+	blind      []bool    // active ones in a direction that the points do not see
+	variance   float64   // s²
+	student    float64   // two-sided quantile of Student's t
 }
 
 // conclude reports the fit.
@@ -44,7 +43,7 @@ func (t *task) conclude() Fit {
 	f := Fit{Curves: t.family.curves(t.values), Status: t.status, Iterations: t.iterations,
 		DegreesOfFreedom: t.used([]int{0, 1}) - len(c.active)}
 	rows := t.linearise(f.Curves, c.active)
-	normal := mat.NewSymDense(max(len(c.active), 1), nil)
+	normal := newSymmetric(len(c.active))
 	sum, squares := 0.0, [2]float64{}
 	for _, row := range rows {
 		squares[row.phase] += row.deviation * row.deviation
@@ -52,7 +51,7 @@ func (t *task) conclude() Fit {
 			sum += row.deviation * row.deviation / (row.sigma * row.sigma)
 			for p, a := range row.slopes {
 				for q := p; q < len(row.slopes); q++ {
-					normal.SetSym(p, q, normal.At(p, q)+a*row.slopes[q])
+					normal.set(p, q, normal.at(p, q)+a*row.slopes[q])
 				}
 			}
 		}
@@ -60,14 +59,24 @@ func (t *task) conclude() Fit {
 	n := float64(len(t.points.Sw))
 	f.RMSKrw, f.RMSKro = math.Sqrt(squares[0]/n), math.Sqrt(squares[1]/n)
 	c.variance = sum / float64(f.DegreesOfFreedom)
-	c.student = distuv.StudentsT{Mu: 0, Sigma: 1, Nu: float64(f.DegreesOfFreedom)}.Quantile((1 + level) / 2)
+	c.student = student(float64(f.DegreesOfFreedom))
 	c.covariance, c.blind = invert(normal)
-	c.covariance.ScaleSym(c.variance, c.covariance)
+	for i := range c.covariance.v {
+		c.covariance.v[i] *= c.variance
+	}
 	f.state = c
 	f.Covariance, f.Correlation = c.matrices(len(t.values))
 	f.Parameters = c.parameters(t, f.Correlation)
 	f.Verdict = t.verdict(f, c.off(rows, t.options.Floor))
 	return f
+}
+
+// student is the two-sided quantile t of Student's distribution with ν degrees of
+// freedom: with x = ν/(ν + t²), the regularised incomplete beta function
+// I_x(ν/2, 1/2) is 1 - level (Abramowitz & Stegun 1964, 26.7.1).
+func student(nu float64) float64 {
+	x := mathext.InvRegIncBeta(nu/2, 0.5, 1-level)
+	return math.Sqrt(nu * (1 - x) / x)
 }
 
 // row is a point beside its curve.
@@ -105,41 +114,42 @@ func (t *task) linearise(curves relperm.Curves, active []int) []row {
 // direction in which the points do not tell the parameters; it is raised to the
 // threshold, so that the covariance there is large but finite, and the parameters
 // that take part are blind.
-func invert(normal *mat.SymDense) (inverse *mat.SymDense, blind []bool) {
-	n := normal.SymmetricDim()
+func invert(normal symmetric) (inverse symmetric, blind []bool) {
+	n := normal.n
 	scale := make([]float64, n)
 	for j := range scale {
-		scale[j] = math.Sqrt(normal.At(j, j))
+		scale[j] = math.Sqrt(normal.at(j, j))
 		if scale[j] == 0 {
 			scale[j] = 1
 		}
 	}
-	scaled := mat.NewSymDense(n, nil)
+	scaled := newSymmetric(n)
 	for j := range n {
-		for k := j; k < n; k++ {
-			scaled.SetSym(j, k, normal.At(j, k)/(scale[j]*scale[k]))
+		for k := range j + 1 {
+			scaled.set(j, k, normal.at(j, k)/(scale[j]*scale[k]))
 		}
 	}
-	inverse, blind = mat.NewSymDense(n, nil), make([]bool, n)
-	var eigen mat.EigenSym
-	if !eigen.Factorize(scaled, true) {
+	inverse, blind = newSymmetric(n), make([]bool, n)
+	values, vectors, ok := scaled.eigen()
+	if !ok {
 		for j := range blind {
 			blind[j] = true
 		}
 		return inverse, blind
 	}
-	values := eigen.Values(nil)
-	var vectors mat.Dense
-	eigen.VectorsTo(&vectors)
-	threshold := singular * max(values[n-1], 1)
+	largest := 1.0
+	for _, value := range values {
+		largest = max(largest, value)
+	}
+	threshold := singular * largest
 	for e, value := range values {
 		for j := range n {
-			if value < threshold && math.Abs(vectors.At(j, e)) > participates {
+			if value < threshold && math.Abs(vectors[j][e]) > participates {
 				blind[j] = true
 			}
-			for k := j; k < n; k++ {
-				part := vectors.At(j, e) * vectors.At(k, e) / max(value, threshold)
-				inverse.SetSym(j, k, inverse.At(j, k)+part/(scale[j]*scale[k]))
+			for k := range j + 1 {
+				part := vectors[j][e] * vectors[k][e] / max(value, threshold)
+				inverse.set(j, k, inverse.at(j, k)+part/(scale[j]*scale[k]))
 			}
 		}
 	}
@@ -162,9 +172,9 @@ func (c confidence) matrices(n int) (covariance, correlation [][]float64) {
 	}
 	for p, j := range c.active {
 		for q, k := range c.active {
-			v := c.covariance.At(p, q)
+			v := c.covariance.at(p, q)
 			covariance[j][k] = v * (c.outward(j) * c.outward(k)) // the same both ways round
-			if scale := math.Sqrt(c.covariance.At(p, p) * c.covariance.At(q, q)); p != q && scale > 0 {
+			if scale := math.Sqrt(c.covariance.at(p, p) * c.covariance.at(q, q)); p != q && scale > 0 {
 				correlation[j][k] = min(max(v/scale, -1), 1)
 			}
 		}
@@ -190,7 +200,7 @@ func (c confidence) parameters(t *task, correlation [][]float64) []Parameter {
 	}
 	for p, j := range c.active {
 		q, s := &list[j], c.family.specs[j]
-		stdErr := math.Sqrt(c.covariance.At(p, p))
+		stdErr := math.Sqrt(c.covariance.at(p, p))
 		q.StdErr = stdErr * c.outward(j)
 		if c.blind[p] {
 			q.Low, q.High, q.Determined = q.Min, q.Max, false
@@ -245,7 +255,7 @@ func (c confidence) spread(g []float64) float64 {
 	sum := 0.0
 	for p, a := range g {
 		for q, b := range g {
-			sum += a * b * c.covariance.At(p, q)
+			sum += a * b * c.covariance.at(p, q)
 		}
 	}
 	return max(sum, 0)

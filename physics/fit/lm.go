@@ -3,8 +3,6 @@ package fit
 import (
 	"math"
 	"slices"
-
-	"gonum.org/v1/gonum/mat"
 )
 
 // Bounded least squares by Levenberg (1944) and Marquardt (1963).
@@ -49,7 +47,7 @@ type minimum struct {
 	x          []float64
 	atBound    []bool // at a bound and pushing outward
 	sum        float64
-	normal     *mat.SymDense // JᵀJ
+	normal     symmetric // JᵀJ
 	iterations int
 	converged  bool
 }
@@ -58,8 +56,8 @@ type minimum struct {
 func minimise(eval residuals, m int, x, low, high []float64, limit int) minimum {
 	n := len(x)
 	s := search{n: n, r: make([]float64, m), jacobian: make([]float64, m*n), gradient: make([]float64, n),
-		scale: make([]float64, n), step: make([]float64, n), low: low, high: high,
-		minimum: minimum{x: make([]float64, n), atBound: make([]bool, n), normal: mat.NewSymDense(n, nil)}}
+		scale: make([]float64, n), step: make([]float64, n), rhs: make([]float64, n), damped: newSymmetric(n), low: low, high: high,
+		minimum: minimum{x: make([]float64, n), atBound: make([]bool, n), normal: newSymmetric(n)}}
 	x = slices.Clone(x)
 	for j := range x {
 		x[j] = min(max(x[j], low[j]), high[j])
@@ -119,14 +117,16 @@ type search struct {
 	minimum
 	n                     int
 	r, jacobian, gradient []float64
-	scale, step           []float64
+	scale, step, rhs      []float64
 	low, high             []float64
+	free                  []int     // what the step moves
+	damped                symmetric // the damped curvature of these
 }
 
 // linearise forms gradient, curvature, scale and the held set at x.
 func (s *search) linearise() {
 	n := s.n
-	normal := s.normal.RawSymmetric().Data
+	normal := s.normal.v
 	clear(normal)
 	clear(s.gradient)
 	for i, r := range s.r {
@@ -139,6 +139,9 @@ func (s *search) linearise() {
 		}
 	}
 	for j := range s.x {
+		for k := range j {
+			normal[j*n+k] = normal[k*n+j]
+		}
 		s.scale[j] = max(s.scale[j], math.Sqrt(normal[j*n+j]))
 		s.atBound[j] = s.x[j] <= s.low[j] && s.gradient[j] > 0 || s.x[j] >= s.high[j] && s.gradient[j] < 0
 	}
@@ -161,7 +164,7 @@ func (s *search) stationary() bool {
 func (s *search) slope() float64 {
 	largest := 0.0
 	for j, g := range s.gradient {
-		if length := math.Sqrt(s.normal.At(j, j)); !s.atBound[j] && length > 0 {
+		if length := math.Sqrt(s.normal.at(j, j)); !s.atBound[j] && length > 0 {
 			largest = max(largest, math.Abs(g)/length)
 		}
 	}
@@ -171,39 +174,27 @@ func (s *search) slope() float64 {
 // solve finds the damped step of the parameters that are not held; it fails when
 // the damped curvature is not positive definite to rounding.
 func (s *search) solve(damping float64) bool {
-	var free []int
+	s.free = s.free[:0]
 	for j := range s.x {
 		s.step[j] = 0
 		if !s.atBound[j] && s.scale[j] > 0 {
-			free = append(free, j)
+			s.free = append(s.free, j)
 		}
 	}
-	if len(free) == 0 {
-		return true
-	}
-	a := mat.NewSymDense(len(free), nil)
-	b := mat.NewVecDense(len(free), nil)
-	for p, j := range free {
-		b.SetVec(p, -s.gradient[j]/s.scale[j])
-		for q, k := range free[p:] {
-			v := s.normal.At(j, k) / (s.scale[j] * s.scale[k])
-			if q == 0 {
-				v += damping
-			}
-			a.SetSym(p, p+q, v)
+	n := len(s.free)
+	a, b := symmetric{n, s.damped.v[:n*n]}, s.rhs[:n]
+	for p, j := range s.free {
+		b[p] = -s.gradient[j] / s.scale[j]
+		for q, k := range s.free[:p+1] {
+			a.set(p, q, s.normal.at(j, k)/(s.scale[j]*s.scale[k]))
 		}
+		a.set(p, p, a.at(p, p)+damping)
 	}
-	var cholesky mat.Cholesky
-	if !cholesky.Factorize(a) {
+	if !a.solve(b) {
 		return false
 	}
-	if err := cholesky.SolveVecTo(b, b); err != nil {
-		if _, illConditioned := err.(mat.Condition); !illConditioned {
-			return false
-		}
-	}
-	for p, j := range free {
-		s.step[j] = b.AtVec(p) / s.scale[j]
+	for p, j := range s.free {
+		s.step[j] = b[p] / s.scale[j]
 	}
 	return true
 }
@@ -222,7 +213,7 @@ func (s *search) predict(trial []float64, moved *bool) float64 {
 	for j, h := range s.step {
 		fall -= s.gradient[j] * h
 		for k, hk := range s.step {
-			fall -= h * s.normal.At(j, k) * hk / 2
+			fall -= h * s.normal.at(j, k) * hk / 2
 		}
 	}
 	return fall

@@ -17,6 +17,7 @@ const (
 	Dietz1953            ID = "dietz-1953"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
 	Godunov1959          ID = "godunov-1959"
+	GolubVanLoan2013     ID = "golub-van-loan-2013"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
 	Kuznetsov1976        ID = "kuznetsov-1976"
@@ -82,6 +83,7 @@ var sources = map[ID]Source{
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},
 	Godunov1959:          {Authors: "Godunov", Year: 1959, Title: "A difference method for numerical calculation of discontinuous solutions of the equations of hydrodynamics", Where: "Mat. Sbornik 47(89)(3), 271-306"},
+	GolubVanLoan2013:     {Authors: "Golub & Van Loan", Year: 2013, Title: "Matrix Computations", Where: "4th ed., Johns Hopkins University Press, secs. 4.2, 8.5"},
 	Kuznetsov1976:        {Authors: "Kuznetsov", Year: 1976, Title: "Accuracy of some approximate methods for computing the weak solutions of a first-order quasi-linear equation", Where: "USSR Comput. Math. Math. Phys. 16(6), 105-119"},
 	Neumaier1974:         {Authors: "Neumaier", Year: 1974, Title: "Rundungsfehleranalyse einiger Verfahren zur Summation endlicher Summen", Where: "Z. Angew. Math. Mech. 54(1), 39-51"},
 	Osher1984:            {Authors: "Osher", Year: 1984, Title: "Riemann solvers, the entropy condition, and difference approximations", Where: "SIAM J. Numer. Anal. 21(2), 217-235"},

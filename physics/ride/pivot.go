@@ -9,9 +9,9 @@ import (
 // goes; see the package comment. Both are in units of water saturation and flow: what
 // one pore volume of water carries is 1.
 //
-// Valid for finite A >= 0 and B with B + S > 0 for every saturation S of both curves,
-// so that B may be a little negative (inaccessible pore volume). B + S = 0 at the lower end is
-// allowed when A = 0.
+// Valid for A = 0 and B + S >= 0 at every saturation S of both curves, so that B may be a
+// little negative (inaccessible pore volume), or for 0 < A <= B: what the oil carries it
+// holds as well. Both finite.
 type Pivot struct {
 	A float64 // carried by the oil: 0 for all but heat
 	B float64 // held by what stands still, less the water out of reach
@@ -24,8 +24,10 @@ func (p Pivot) check(lo float64) error {
 		return fmt.Errorf("ride: the part carried by the oil is %.6g; it must be finite and not negative", p.A)
 	case math.IsNaN(p.B) || math.IsInf(p.B, 0):
 		return fmt.Errorf("ride: the retardation is %.6g; it must be finite", p.B)
-	case p.B+lo < 0 || p.B+lo == 0 && p.A > 0:
-		return fmt.Errorf("ride: the retardation is %.6g; with water saturations from %.6g up it must be above %.6g: no more pore volume can be out of reach than holds water at rest", p.B, lo, -lo)
+	case p.A > 0 && p.B < p.A:
+		return fmt.Errorf("ride: the retardation is %.6g; it must be at least the part carried by the oil, %.6g, which the oil holds as well", p.B, p.A)
+	case p.B+lo < 0:
+		return fmt.Errorf("ride: the retardation is %.6g; with water saturations from %.6g up it must be at least %.6g: no more pore volume can be out of reach than holds water at rest", p.B, lo, -lo)
 	}
 	return nil
 }

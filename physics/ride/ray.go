@@ -92,12 +92,15 @@ func (r rays) meet(start, v float64, upwards bool) spot {
 		step, i, end = -1, sort.Search(len(r.spots), func(i int) bool { return r.spots[i].s >= start })-1, -1
 	}
 	before := off(last)
-	if before == 0 {
+	if math.Abs(last.speed-v) <= alike*v {
 		return last
 	}
 	for ; i != end; i += step {
 		next := r.spots[i]
-		if after := off(next); after == 0 || (after > 0) != (before > 0) {
+		if math.Abs(next.speed-v) <= alike*v { // perhaps a tangent, which touches and does not cross
+			return next
+		}
+		if after := off(next); (after > 0) != (before > 0) {
 			return r.at(numeric.Zero(func(s float64) float64 { return off(r.at(s)) }, last.s, next.s, before, after))
 		}
 		last = next

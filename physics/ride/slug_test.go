@@ -249,8 +249,8 @@ func TestSlugRefusals(t *testing.T) {
 		{c, 0.77, c.pivot, math.Inf(1), "finite"},
 		{c, 0.9, c.pivot, 0.1, "between 0.2 and 0.77"},
 		{c, 0.77, Pivot{B: c.pivot.B + 0.01}, 0.1, "at most that of the front"},
-		{c, 0.77, Pivot{A: 0.1, B: 0}, 0.1, "as at its front"},
-		{c, 0.77, Pivot{B: -0.3}, 0.1, "above -0.2"},
+		{c, 0.77, Pivot{A: 0.1, B: 0.12}, 0.1, "as at its front"},
+		{c, 0.77, Pivot{B: -0.3}, 0.1, "at least -0.2"},
 	} {
 		_, err := NewSlug(f, r.chase.ahead, r.injected, r.rear, r.size)
 		if err == nil || !strings.Contains(err.Error(), r.says) {

@@ -25,7 +25,7 @@ var links = map[string]struct{ needed, foreign []string }{
 		needed: []string{"github.com/maxence-charriere/go-app/v9/pkg/app"},
 		foreign: []string{
 			"brinefront/physics/displace", "brinefront/physics/fracflow", "brinefront/physics/reservoir",
-			"brinefront/physics/relperm", "brinefront/physics/numeric", "gonum.org/v1/gonum",
+			"brinefront/physics/relperm", "brinefront/physics/numeric", "gonum.org/v1/gonum/mathext/internal/cephes",
 		},
 	},
 	"./app/engine": {

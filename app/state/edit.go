@@ -18,7 +18,7 @@ func (m Model) edited(msg Edited) (Model, []Effect) {
 		return m.cellEdited(row, column, msg)
 	}
 	spec, ok := study.Find(msg.Path)
-	if !ok {
+	if !ok || !m.has(msg.Path) {
 		return m, nil
 	}
 	unit, ok := units.Find(spec.Quantity, msg.Unit)
@@ -45,6 +45,9 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 		spec.Set(&p.study, nil)
 		p.forgetRange(path)
 		delete(p.drafts, path)
+		if _, _, ok := study.AtCase(path); ok {
+			p.drafts[path] = Draft{"", unit.Symbol} // the field stays until it is removed
+		}
 		if unit != units.System(p.study.System).Unit(spec.Quantity) {
 			p.drafts[path] = Draft{"", unit.Symbol} // the next number typed is in this unit too
 		}

@@ -30,6 +30,32 @@ type (
 	// RowRemoved removes a row of the table.
 	RowRemoved struct{ Row int }
 
+	// CaseAdded adds a case at the end; without a name it gets a number.
+	CaseAdded struct{ Name string }
+	// CaseRemoved takes a case away.
+	CaseRemoved struct{ Index int }
+	// CaseNamed: the text in a case's name field changed.
+	CaseNamed struct {
+		Index int
+		Text  string
+	}
+	// CaseInputSet: the text or unit of an input that a case changes; for an input
+	// that it does not change yet, it begins to.
+	CaseInputSet struct {
+		Index            int
+		Path, Text, Unit string
+	}
+	// CaseChosen: a choice that a case makes, of study.CaseChoices.
+	CaseChosen struct {
+		Index       int
+		Path, Value string
+	}
+	// CaseInputRemoved leaves an input or a choice to the base again.
+	CaseInputRemoved struct {
+		Index int
+		Path  string
+	}
+
 	// Pasted: a text was pasted where a table is expected.
 	Pasted struct{ Text string }
 	// PasteMapped: the person says what a column of the pasted table is:
@@ -76,37 +102,43 @@ type (
 	Dismissed struct{ Notice int }
 )
 
-func (Edited) message()         {}
-func (Left) message()           {}
-func (Sourced) message()        {}
-func (Ranged) message()         {}
-func (Chosen) message()         {}
-func (Written) message()        {}
-func (RowAdded) message()       {}
-func (RowRemoved) message()     {}
-func (Pasted) message()         {}
-func (PasteMapped) message()    {}
-func (PasteAccepted) message()  {}
-func (PasteDropped) message()   {}
-func (Undone) message()         {}
-func (Redone) message()         {}
-func (StartedEmpty) message()   {}
-func (DemoOpened) message()     {}
-func (FileChosen) message()     {}
-func (FileRefused) message()    {}
-func (OpenAsked) message()      {}
-func (SaveAsked) message()      {}
-func (ShareAsked) message()     {}
-func (PrintAsked) message()     {}
-func (ExportAsked) message()    {}
-func (Routed) message()         {}
-func (Restored) message()       {}
-func (Kept) message()           {}
-func (NotKept) message()        {}
-func (Answered) message()       {}
-func (EngineFailed) message()   {}
-func (EvidenceAsked) message()  {}
-func (EvidenceListed) message() {}
-func (EvidenceDone) message()   {}
-func (Told) message()           {}
-func (Dismissed) message()      {}
+func (Edited) message()           {}
+func (Left) message()             {}
+func (Sourced) message()          {}
+func (Ranged) message()           {}
+func (Chosen) message()           {}
+func (Written) message()          {}
+func (RowAdded) message()         {}
+func (RowRemoved) message()       {}
+func (CaseAdded) message()        {}
+func (CaseRemoved) message()      {}
+func (CaseNamed) message()        {}
+func (CaseInputSet) message()     {}
+func (CaseChosen) message()       {}
+func (CaseInputRemoved) message() {}
+func (Pasted) message()           {}
+func (PasteMapped) message()      {}
+func (PasteAccepted) message()    {}
+func (PasteDropped) message()     {}
+func (Undone) message()           {}
+func (Redone) message()           {}
+func (StartedEmpty) message()     {}
+func (DemoOpened) message()       {}
+func (FileChosen) message()       {}
+func (FileRefused) message()      {}
+func (OpenAsked) message()        {}
+func (SaveAsked) message()        {}
+func (ShareAsked) message()       {}
+func (PrintAsked) message()       {}
+func (ExportAsked) message()      {}
+func (Routed) message()           {}
+func (Restored) message()         {}
+func (Kept) message()             {}
+func (NotKept) message()          {}
+func (Answered) message()         {}
+func (EngineFailed) message()     {}
+func (EvidenceAsked) message()    {}
+func (EvidenceListed) message()   {}
+func (EvidenceDone) message()     {}
+func (Told) message()             {}
+func (Dismissed) message()        {}

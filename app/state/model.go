@@ -47,7 +47,7 @@ type Draft struct{ Text, Unit string }
 
 // Route is where the person is.
 type Route struct {
-	Sheet string // "rock", "front", "field", "report", "evidence"
+	Sheet string // "rock", "front", "field", "compare", "report", "evidence"
 	Embed bool   // one sheet without the frame
 }
 

@@ -20,7 +20,7 @@ func random(r *rand.Rand, m Model) Msg {
 	text := texts[r.IntN(len(texts))]
 	symbols := []string{"", "cp", "Pa.s", "fraction", "%", "ft", "m", "md", "stone"}
 	row := r.IntN(len(m.Rows)+3) - 1
-	switch r.IntN(24) {
+	switch r.IntN(27) {
 	case 0, 1, 2, 3:
 		return Edited{path, text, symbols[r.IntN(len(symbols))]}
 	case 4, 5, 6:
@@ -57,6 +57,12 @@ func random(r *rand.Rand, m Model) Msg {
 		return []Msg{Routed{"/rock"}, Routed{"/front?embed"}, Routed{"/field?study=" + text}, Kept{}, NotKept{text}}[r.IntN(5)]
 	case 22:
 		return []Msg{Answered{m.Revision - r.IntN(2), study.Result{}}, EngineFailed{m.Revision, text}, EngineFailed{0, text}}[r.IntN(3)]
+	case 23, 24:
+		return []Msg{CaseAdded{}, CaseAdded{text}, CaseRemoved{r.IntN(7) - 1}, CaseNamed{r.IntN(3), text}, CaseInputRemoved{r.IntN(3), path}}[r.IntN(5)]
+	case 25:
+		return Edited{study.CasePath(r.IntN(4), path), text, symbols[r.IntN(len(symbols))]}
+	case 26:
+		return []Msg{CaseInputSet{r.IntN(7) - 1, path, text, symbols[r.IntN(len(symbols))]}, CaseChosen{r.IntN(7) - 1, "rock.curve", []string{"let", "corey", text}[r.IntN(3)]}}[r.IntN(2)]
 	}
 	return []Msg{EvidenceAsked{}, EvidenceListed{[]wire.Evidence{{ID: "a"}}}, EvidenceDone{wire.Evidence{ID: "a"}}, Told{"done", text}, Dismissed{r.IntN(5)}}[r.IntN(5)]
 }
@@ -82,7 +88,10 @@ func TestAnySequence(t *testing.T) {
 				t.Fatalf("%s: the revision went from %d to %d", at, before.Revision, m.Revision)
 			}
 			for path := range m.Messages {
-				if _, _, cell := cellAt(path); path != tablePath && !cell && m.Drafts[path].Text == "" {
+				_, _, cell := cellAt(path)
+				draft, kept := m.Drafts[path]
+				_, inner, _ := study.AtCase(path) // an empty name is as wrong as any
+				if path != tablePath && !cell && (!kept || draft.Text == "" && inner != caseName) {
 					t.Fatalf("%s: %s says %q about a text that is lost", at, path, m.Messages[path])
 				}
 			}

@@ -7,7 +7,7 @@ import (
 
 const firstSheet = "front"
 
-var sheets = []string{"rock", firstSheet, "field", "report", "evidence"}
+var sheets = []string{"rock", firstSheet, "field", "compare", "report", "evidence"}
 
 // readFragment reads an address: "/field", "/front?embed&study=...". A sheet that
 // does not exist is the first one; names that mean nothing here are passed over.

@@ -32,6 +32,18 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 		return m.rowAdded(msg)
 	case RowRemoved:
 		return m.rowRemoved(msg)
+	case CaseAdded:
+		return m.caseAdded(msg)
+	case CaseRemoved:
+		return m.caseRemoved(msg)
+	case CaseNamed:
+		return m.caseNamed(msg)
+	case CaseInputSet:
+		return m.caseInputSet(msg)
+	case CaseChosen:
+		return m.caseChosen(msg)
+	case CaseInputRemoved:
+		return m.caseInputRemoved(msg)
 	case Pasted:
 		return m.pasted(msg), nil
 	case PasteMapped:

@@ -118,6 +118,77 @@ func CheckCaseName(st *Study, i int, name string) *Problem {
 	return nil
 }
 
+// caseSpec describes an input that a case may change: as the study's own, but
+// that empty means as in the base case.
+func caseSpec(i int, path string) (Spec, bool) {
+	for _, s := range specs {
+		if s.Path == path {
+			s.Path, s.Sheet, s.of = CasePath(i, path), SheetCompare, i+1
+			s.Optional, s.Default = true, "as in the base case"
+			return s, true
+		}
+	}
+	return Spec{}, false
+}
+
+// inCase is what a case sets the input to; nil when it leaves it to the base.
+func (s Spec) inCase(st *Study) *Input {
+	i, path, _ := AtCase(s.Path)
+	if i >= len(st.Cases) {
+		return nil
+	}
+	in, ok := st.Cases[i].Set[path]
+	if !ok {
+		return nil
+	}
+	return &in
+}
+
+// setInCase changes what a case sets the input to; nil leaves it to the base. The
+// lists of the study are replaced, never written to.
+func (s Spec) setInCase(st *Study, in *Input) {
+	i, path, _ := AtCase(s.Path)
+	if i >= len(st.Cases) {
+		return
+	}
+	set := maps.Clone(st.Cases[i].Set)
+	delete(set, path)
+	if in != nil {
+		if set == nil {
+			set = map[string]Input{}
+		}
+		set[path] = *in
+	}
+	if len(set) == 0 {
+		set = nil
+	}
+	st.Cases = slices.Clone(st.Cases)
+	st.Cases[i].Set = set
+}
+
+// ChooseInCase sets a choice of a case, or with an empty value leaves it to the
+// base; false when the case may not make it, and then nothing is changed.
+func ChooseInCase(st *Study, i int, path, value string) bool {
+	lawful := slices.Contains(CaseChoices(), path) && (value == "" || holds(Choices(path), value))
+	if !lawful || i < 0 || i >= len(st.Cases) {
+		return false
+	}
+	choose := maps.Clone(st.Cases[i].Choose)
+	delete(choose, path)
+	if value != "" {
+		if choose == nil {
+			choose = map[string]string{}
+		}
+		choose[path] = value
+	}
+	if len(choose) == 0 {
+		choose = nil
+	}
+	st.Cases = slices.Clone(st.Cases)
+	st.Cases[i].Choose = choose
+	return true
+}
+
 // lawfulCases checks the cases of a study that was read from a file.
 func lawfulCases(st *Study) error {
 	if len(st.Cases) > MaxCases {

@@ -20,14 +20,19 @@ type Spec struct {
 	Help     string // one sentence
 
 	at   func(*Study) **Input
+	of   int               // the case it belongs to, counted from 1; 0: the study itself
 	when func(*Study) bool // the choices under which the study asks for it; nil: under all
 }
 
 // Specs lists every numeric input in the order of the forms.
 func Specs() []Spec { return specs }
 
-// Find returns the description of the input at a path.
+// Find returns the description of the input at a path: of the study, or of what a
+// case changes (CasePath).
 func Find(path string) (Spec, bool) {
+	if i, inner, ok := AtCase(path); ok {
+		return caseSpec(i, inner)
+	}
 	for _, s := range specs {
 		if s.Path == path {
 			return s, true
@@ -40,10 +45,21 @@ func Find(path string) (Spec, bool) {
 func (s Spec) Applies(st *Study) bool { return s.when == nil || s.when(st) }
 
 // Get returns the input of a study, nil when nothing is given.
-func (s Spec) Get(st *Study) *Input { return *s.at(st) }
+func (s Spec) Get(st *Study) *Input {
+	if s.of > 0 {
+		return s.inCase(st)
+	}
+	return *s.at(st)
+}
 
 // Set changes the input of a study; nil empties it.
-func (s Spec) Set(st *Study, in *Input) { *s.at(st) = in }
+func (s Spec) Set(st *Study, in *Input) {
+	if s.of > 0 {
+		s.setInCase(st, in)
+		return
+	}
+	*s.at(st) = in
+}
 
 // The choices under which an input is asked for.
 func typedCorey(s *Study) bool    { return s.Rock.Curve == "corey" }

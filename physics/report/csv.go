@@ -25,10 +25,10 @@ func CSV(g study.Grid, s units.System) string {
 		record := make([]string, len(g.Columns))
 		for i, c := range g.Columns {
 			switch {
+			case r < len(c.Words) && c.Words[r] != "":
+				record[i] = c.Words[r]
 			case r < len(c.Values):
 				record[i] = strconv.FormatFloat(s.Unit(c.Quantity).FromSI(c.Values[r]), 'g', -1, 64)
-			case r < len(c.Words):
-				record[i] = c.Words[r]
 			}
 		}
 		write(w, record)

@@ -31,6 +31,7 @@ func Label(path string) string {
 
 var choiceLabels = map[string]string{
 	"rock.reference": "Permeability that kr refers to", "rock.curve": "Curve used", "rock.weights": "Weights of the fit",
+	"fluids.pair": "Pair of fluids",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -74,6 +75,7 @@ func choices(st study.Study) *Table {
 	if strings.HasSuffix(st.Rock.Curve, "-fit") {
 		add("rock.weights", st.Rock.Weights, study.Weightings)
 	}
+	add("fluids.pair", st.Fluids.Pair, study.Pairs)
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Start != "" {
@@ -102,17 +104,17 @@ func Print(g study.Grid, s units.System) Table {
 	rows := 0
 	for _, c := range g.Columns {
 		t.Columns = append(t.Columns, Heading(c.Label, c.Symbol, c.Quantity, s))
-		t.Numeric = append(t.Numeric, c.Words == nil)
+		t.Numeric = append(t.Numeric, c.Values != nil)
 		rows = max(rows, len(c.Values), len(c.Words))
 	}
 	for r := range rows {
 		row := make([]string, len(g.Columns))
 		for i, c := range g.Columns {
 			switch {
+			case r < len(c.Words) && c.Words[r] != "":
+				row[i] = c.Words[r]
 			case r < len(c.Values):
 				row[i] = units.Format(s.Unit(c.Quantity).FromSI(c.Values[r]), digits)
-			case r < len(c.Words):
-				row[i] = c.Words[r]
 			}
 		}
 		t.Rows = append(t.Rows, row)

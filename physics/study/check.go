@@ -29,10 +29,10 @@ func Check(spec Spec, number float64, unit units.Unit) *Problem {
 	if unit.Quantity != spec.Quantity {
 		return &Problem{Path: spec.Path, Read: "the unit " + quoted(unit.Symbol), Allowed: knownUnits(spec.Quantity)}
 	}
-	si := unit.ToSI(number)
-	low := si > spec.Min || (si == spec.Min && !spec.OpenMin)
-	high := si < spec.Max || (si == spec.Max && !spec.OpenMax)
-	if low && high && !math.IsInf(si, 0) {
+	least, most := unit.FromSI(spec.Min), unit.FromSI(spec.Max) // as the schema and messages tell them
+	low := number > least || (number == least && !spec.OpenMin)
+	high := number < most || (number == most && !spec.OpenMax)
+	if low && high && !math.IsInf(number, 0) {
 		return nil
 	}
 	return &Problem{Path: spec.Path, Read: withUnit(units.Exact(number), unit), Allowed: allowed(spec, unit)}

@@ -1,6 +1,10 @@
 package study
 
-import "slices"
+import (
+	"slices"
+
+	"brinefront/physics/fluid"
+)
 
 // Choice is one value an enumerated field may take, and how it is called on screen.
 type Choice struct{ Value, Label string }
@@ -26,6 +30,15 @@ var Weightings = []Choice{
 	{"relative", "relative: small values count as much as large ones"},
 	{"absolute", "absolute: large values dominate"},
 }
+
+// Pairs are the pairs of phases of which one displaces the other.
+var Pairs = func() []Choice {
+	var list []Choice
+	for _, p := range fluid.Pairs() {
+		list = append(list, Choice{string(p.ID), p.Name})
+	}
+	return list
+}()
 
 // Drives are the ways the flood is driven.
 var Drives = []Choice{
@@ -58,6 +71,7 @@ var choiceFields = []choiceField{
 	{"rock.reference", References, func(s *Study) *string { return &s.Rock.Reference }},
 	{"rock.curve", CurveKinds, func(s *Study) *string { return &s.Rock.Curve }},
 	{"rock.weights", Weightings, func(s *Study) *string { return &s.Rock.Weights }},
+	{"fluids.pair", Pairs, func(s *Study) *string { return &s.Fluids.Pair }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 }

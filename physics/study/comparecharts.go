@@ -43,9 +43,10 @@ func compareCharts(s *sheet, all []outcome) {
 	for _, o := range all {
 		flow.Lines = append(flow.Lines, o.flowLine())
 		recovery.Lines = append(recovery.Lines, o.recoveryLine(end))
-		x, sw := o.front.profile(o.front.displacement.Breakthrough())
+		x, sw := o.front.profileAtBreakthrough()
 		profile.Lines = append(profile.Lines, o.over("", "line", x, sw))
 	}
+	flow.Y = flow.Y.holding(flow.Lines)
 	charts := []Chart{recovery, flow, profile}
 	if c, ok := rockOverlay(all, of); ok {
 		charts = append(charts, c)

@@ -52,6 +52,8 @@ type Rock struct {
 	Corey   Corey  `json:"corey,omitzero"`  // typed parameters, used when Curve is "corey"
 	LET     LET    `json:"let,omitzero"`    // typed parameters, used when Curve is "let"
 	Weights string `json:"weights"`         // how a fit weighs the points: see Weightings
+
+	Land *Input `json:"land,omitempty"` // Land's trapping coefficient C; used by pairs whose resident phase is trapped
 }
 
 // Table is the plug's relative permeability table, one row a point, as fractions.
@@ -86,18 +88,31 @@ type LET struct {
 	To   *Input `json:"to,omitempty"`
 }
 
-// Fluids are the two phases at reservoir conditions.
+// Fluids are the two phases at reservoir conditions. "Water" is the displacing phase
+// and "oil" the resident one, whatever the pair is made of: see fluid.Pair.
 type Fluids struct {
+	Pair string `json:"pair,omitempty"` // see Pairs; empty: brine displaces oil
+
 	WaterViscosity       *Input `json:"waterViscosity,omitempty"`
 	OilViscosity         *Input `json:"oilViscosity,omitempty"`
 	WaterFormationFactor *Input `json:"waterFormationFactor,omitempty"` // Bw
 	OilFormationFactor   *Input `json:"oilFormationFactor,omitempty"`   // Bo
+
+	WaterDensity *Input `json:"waterDensity,omitempty"` // with the next: needed when the layer dips
+	OilDensity   *Input `json:"oilDensity,omitempty"`
+	Tension      *Input `json:"tension,omitempty"`     // between the two
+	Temperature  *Input `json:"temperature,omitempty"` // with the next two: gives brine's viscosity and density where none is typed
+	Pressure     *Input `json:"pressure,omitempty"`    // nil: 20 MPa
+	Salinity     *Input `json:"salinity,omitempty"`    // nil: fresh
 }
 
 // Front is the state the displacement starts from and what is injected.
 type Front struct {
 	InitialWater  *Input `json:"initialWater,omitempty"`  // nil: swc of the curve
 	InjectedWater *Input `json:"injectedWater,omitempty"` // nil: 1-sor of the curve
+
+	Dip      *Input `json:"dip,omitempty"`      // of the layer along the flow, positive when water moves up-dip; nil: 0
+	Velocity *Input `json:"velocity,omitempty"` // total Darcy velocity; nil: rate over width and thickness of the field
 }
 
 // Field is the linear, single-layer flood in the ground.

@@ -19,13 +19,13 @@ type field struct {
 func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part {
 	s := newSheet(st, frontPart)
 	s.await(frontPart)
-	layer := s.layer(front)
+	s.layer(front)
 	limit := s.limit()
 	horizon, bounded := s.input("field.horizon")
 	if p := CheckStart(st.Field.Start); p != nil {
 		s.problems = append(s.problems, *p)
 	}
-	*problems = append(*problems, s.problems...)
+	s.hand(problems)
 	standing := s.standing()
 	if frontPart.Status == Refused {
 		standing = Refused
@@ -36,20 +36,19 @@ func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part
 		}
 		return s.close(standing)
 	}
-	linear, err := reservoir.NewLinear(layer, front.flow, front.displacement)
-	if err != nil {
-		s.note(Note{ID: "field.numerics", Level: "caution", Text: "The flood could not be computed: " + err.Error() + ".", Cause: "An input leaves no flow.", Do: "Look at the block and at the drive."})
+	if front.unflooded != nil {
+		s.note(Note{ID: "field.numerics", Level: "caution", Text: "The flood could not be computed: " + front.unflooded.Error() + ".", Cause: "An input leaves no flow.", Do: "Look at the block and at the drive."})
 		return s.close(Stopped)
 	}
-	f := &field{linear: linear, front: front}
-	f.limit = limit(linear)
+	f := &field{linear: front.linear, front: front}
+	f.limit = limit(f.linear)
 	f.end = f.reach(horizon, bounded)
 	extra := []float64{1}
 	if f.limit.Outcome == reservoir.Reached {
 		extra = append(extra, f.limit.PVI*(1-aside), f.limit.PVI*(1+aside))
 	}
 	for _, q := range injections(front.displacement, f.end, extra...) {
-		f.history = append(f.history, linear.AtPVI(q))
+		f.history = append(f.history, f.state(q))
 	}
 	f.figures(s)
 	f.charts(s)
@@ -57,6 +56,15 @@ func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part
 	f.notes(s)
 	f.answer(s)
 	return s.close(frontPart.Status)
+}
+
+// state is the flood after q pore volumes. Where a phase flows back at the producer the
+// water cut is that of a stream of one phase.
+func (f *field) state(q float64) reservoir.State { return f.told(f.linear.AtPVI(q)) }
+
+func (f *field) told(state reservoir.State) reservoir.State {
+	state.WaterCut = f.front.surfaceCut(state.ReservoirCut)
+	return state
 }
 
 // layer reads the block and the drive.

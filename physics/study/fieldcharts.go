@@ -28,7 +28,7 @@ func (f *field) events(pick func(reservoir.State) float64) []Mark {
 	marks := []Mark{}
 	add := func(label string, q float64) {
 		if q > 0 && q <= f.end {
-			state := f.linear.AtPVI(q * (1 + aside))
+			state := f.state(q * (1 + aside))
 			marks = append(marks, Mark{label, state.Time, pick(state)})
 		}
 	}

@@ -74,7 +74,7 @@ func (f *field) timeFigure(s *sheet, figure Figure, volume string) {
 
 // startFigures are the rates on the first day, and the pressure it takes.
 func (f *field) startFigures(s *sheet) {
-	first := f.linear.AtPVI(0)
+	first := f.state(0)
 	resistance := f.linear.Resistance(0)
 	rate := Figure{ID: "field.startRate", Label: "Injection rate at the start, calendar", Symbol: "qi", Value: first.InjectionRate, Quantity: units.Rate}
 	if f.rateHeld() {
@@ -97,7 +97,7 @@ func (f *field) startFigures(s *sheet) {
 		s.by("", "The largest of the forecast, after "+units.Format(peak.PVI, 3)+" PV.").on("field.startOilRate", "field.timePerPoreVolume"))
 	if f.rateHeld() && s.st.Field.Permeability != nil {
 		s.figure(Figure{ID: "field.startPressure", Label: "Pressure difference at the start, while on", Symbol: "Δp0", Value: first.PressureDrop, Quantity: units.Pressure},
-			s.by("{Δp0} = {q} {L} {R0} / ({k} {W} {h})", "Darcy's law in a straight block; R0 is the inverse of the total mobility at the initial saturation. The pressure that converging flow near the wells takes comes on top.", ref.Dake1978).
+			s.by("{Δp0} = {q} {L} {R0} / ({k} {W} {h})", "Darcy's law in a straight block, without the weight of the fluids; R0 is the inverse of the total mobility at the initial saturation. The pressure that converging flow near the wells takes comes on top.", ref.Dake1978).
 				input("field.rate").input("field.length").value("R0", "resistance at the start", resistance, units.Viscosity).
 				input("field.permeability").input("field.width").input("field.thickness").on("front.breakthrough"))
 	}
@@ -130,6 +130,9 @@ func (f *field) limitFigures(s *sheet) {
 			term("field.limitCut").term("field.limitInjected").term("front.initialWater"))
 	s.inPlace("field.recoveryAtLimit", "Rlim,o", false)
 	f.cumulativeFigures(s, "AtLimit", "at the limit", "lim", "field.limitInjected", "field.recoveryAtLimit")
+	if cut < 0 || cut > 1 {
+		return // one phase flows back: there is no ratio
+	}
 	s.figure(Figure{ID: "field.waterOilRatioAtLimit", Label: "Water-oil ratio at the limit, at surface", Symbol: "WOR", Value: cut * f.front.bo / ((1 - cut) * f.front.bw), Quantity: units.WaterOilRatio},
 		s.by("{WOR} = {fw2} {Bo} / ((1 - {fw2}) {Bw})", "").term("field.limitCut").input("fluids.oilFormationFactor").input("fluids.waterFormationFactor"))
 }
@@ -141,7 +144,7 @@ func (f *field) cumulativeFigures(s *sheet, suffix, when, mark, volume, recovery
 	if !ok || !known {
 		return
 	}
-	state := f.linear.AtPVI(v.Value)
+	state := f.state(v.Value)
 	_, inlet := f.front.displacement.InletFace()
 	oil, water := "Np"+mark, "Wp"+mark
 	s.figure(Figure{ID: "field.oil" + suffix, Label: "Oil produced " + when + ", at surface", Symbol: oil, Value: state.CumOil, Quantity: units.Volume, Strip: suffix == "AtLimit"},

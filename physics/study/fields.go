@@ -1,6 +1,11 @@
 package study
 
-import "brinefront/physics/units"
+import (
+	"math"
+
+	"brinefront/physics/fluid"
+	"brinefront/physics/units"
+)
 
 // Spec describes one numeric input: everything that the form, the validation,
 // the schema and the report need to know about it. The list below is the only
@@ -69,6 +74,20 @@ func heldRate(s *Study) bool      { return s.Field.Drive == "rate" }
 func heldPressure(s *Study) bool  { return s.Field.Drive == "pressure" }
 func limitedByCut(s *Study) bool  { return s.Field.Limit == "waterCut" }
 func limitedByOil(s *Study) bool  { return s.Field.Limit == "oilRate" }
+func trapping(s *Study) bool      { return pairOf(s).Land }
+func withBrine(s *Study) bool {
+	p := pairOf(s)
+	return p.Displacing.Brine || p.Resident.Brine
+}
+func computedBrine(s *Study) bool { return withBrine(s) && s.Fluids.Temperature != nil }
+func dipping(s *Study) bool       { return s.Front.Dip != nil && s.Front.Dip.Value != 0 }
+
+// mayDip: at a constant pressure difference a dip is refused, but shown once it is typed.
+func mayDip(s *Study) bool { return heldRate(s) || s.Front.Dip != nil }
+
+func velocityCounts(s *Study) bool {
+	return dipping(s) || s.Fluids.Tension != nil
+}
 
 var specs = []Spec{
 	{Path: "rock.permeability", Sheet: SheetRock, Group: "Plug", Label: "Permeability, absolute", Symbol: "k", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Optional: true, Default: "not needed unless kr refers to another permeability",
@@ -94,13 +113,23 @@ var specs = []Spec{
 	{Path: "rock.let.eo", Sheet: SheetRock, Group: "LET", Label: "Oil, elevation", Symbol: "Eo", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Eo }, when: typedLET},
 	{Path: "rock.let.to", Sheet: SheetRock, Group: "LET", Label: "Oil, top part", Symbol: "To", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.To }, when: typedLET},
 
-	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Help: "At reservoir temperature.", at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
-	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Help: "Live oil, at reservoir temperature and pressure.", at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
-	{Path: "fluids.waterFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Water formation volume factor", Symbol: "Bw", Quantity: units.FormationFactor, Min: 0.5, Max: 3, Help: "Reservoir volume of one surface volume of water.", at: func(s *Study) **Input { return &s.Fluids.WaterFormationFactor }},
-	{Path: "fluids.oilFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Oil formation volume factor", Symbol: "Bo", Quantity: units.FormationFactor, Min: 0.5, Max: 10, Help: "Reservoir volume of one surface volume of oil.", at: func(s *Study) **Input { return &s.Fluids.OilFormationFactor }},
+	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature.", at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
+	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature and pressure, oil with its gas in solution.", at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
+	{Path: "fluids.waterFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Water formation volume factor", Symbol: "Bw", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of water.", at: func(s *Study) **Input { return &s.Fluids.WaterFormationFactor }},
+	{Path: "fluids.oilFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Oil formation volume factor", Symbol: "Bo", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of oil.", at: func(s *Study) **Input { return &s.Fluids.OilFormationFactor }},
+	{Path: "fluids.temperature", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir temperature", Symbol: "T", Quantity: units.Temperature, Min: 273.15, Max: 623.15, Optional: true, Default: "viscosity and density of brine must be typed", Help: "Gives the viscosity and density of brine where none is typed.", at: func(s *Study) **Input { return &s.Fluids.Temperature }, when: withBrine},
+	{Path: "fluids.pressure", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir pressure", Symbol: "p", Quantity: units.Pressure, Min: 611, Max: 1e8, Optional: true, Default: "20 MPa; 10 MPa more or less changes brine by about half a percent", at: func(s *Study) **Input { return &s.Fluids.Pressure }, when: computedBrine},
+	{Path: "fluids.salinity", Sheet: SheetFront, Group: "Fluids", Label: "Salinity", Symbol: "s", Quantity: units.Salinity, Min: 0, Max: fluid.MaxSalinity, Optional: true, Default: "0, fresh water", Help: "Mass of all salts in the mass of brine.", at: func(s *Study) **Input { return &s.Fluids.Salinity }, when: computedBrine},
+	{Path: "fluids.waterDensity", Sheet: SheetFront, Group: "Fluids", Label: "Water density", Symbol: "ρw", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", at: func(s *Study) **Input { return &s.Fluids.WaterDensity }, when: dipping},
+	{Path: "fluids.oilDensity", Sheet: SheetFront, Group: "Fluids", Label: "Oil density", Symbol: "ρo", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", Help: "At reservoir conditions.", at: func(s *Study) **Input { return &s.Fluids.OilDensity }, when: dipping},
+	{Path: "fluids.tension", Sheet: SheetFront, Group: "Fluids", Label: "Interfacial tension", Symbol: "σ", Quantity: units.InterfacialTension, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "the capillary number is not told", Help: "Between the two phases, at reservoir conditions.", at: func(s *Study) **Input { return &s.Fluids.Tension }},
 
 	{Path: "front.initialWater", Sheet: SheetFront, Group: "States", Label: "Initial water saturation", Symbol: "Swi", Quantity: units.Fraction, Min: 0, Max: 1, Optional: true, Default: "Swc of the curve", at: func(s *Study) **Input { return &s.Front.InitialWater }},
 	{Path: "front.injectedWater", Sheet: SheetFront, Group: "States", Label: "Saturation held at the inlet", Symbol: "Swj", Quantity: units.Fraction, Min: 0, Max: 1, Optional: true, Default: "1 − Sor of the curve", at: func(s *Study) **Input { return &s.Front.InjectedWater }},
+	{Path: "rock.land", Sheet: SheetFront, Group: "States", Label: "Land's trapping coefficient", Symbol: "C", Quantity: units.Number, Min: 0, Max: 1e3, Optional: true, Default: "what stays trapped is not judged", Help: "From a measured pair of initial and trapped gas, saturations over 1 − Swc.", at: func(s *Study) **Input { return &s.Rock.Land }, when: trapping},
+
+	{Path: "front.dip", Sheet: SheetFront, Group: "Dip", Label: "Dip of the layer along the flow", Symbol: "θ", Quantity: units.Angle, Min: -math.Pi / 2, Max: math.Pi / 2, Optional: true, Default: "0, a level layer", Help: "Positive when water moves up-dip, negative when it moves down-dip.", at: func(s *Study) **Input { return &s.Front.Dip }, when: mayDip},
+	{Path: "front.velocity", Sheet: SheetFront, Group: "Dip", Label: "Total Darcy velocity", Symbol: "u", Quantity: units.Velocity, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "rate over width and thickness of the field", Help: "Volume through a unit of cross-section while on; not divided by porosity.", at: func(s *Study) **Input { return &s.Front.Velocity }, when: velocityCounts},
 
 	{Path: "field.length", Sheet: SheetField, Group: "Block", Label: "Length, injector to producer", Symbol: "L", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Length }},
 	{Path: "field.width", Sheet: SheetField, Group: "Block", Label: "Width across the flow", Symbol: "W", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Width }},

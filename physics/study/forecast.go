@@ -42,7 +42,7 @@ func (f *field) forecast(start string) Grid {
 	dates := Column{Label: "Date", Quantity: units.Number}
 	for i := 0; i <= forecastRows && float64(i)*step <= last*(1+aside); i++ {
 		t := float64(i) * step
-		state := f.linear.At(t)
+		state := f.told(f.linear.At(t))
 		for c, value := range []float64{t, state.PVI, state.OilRate, state.WaterRate, state.WaterCut, state.CumOil, max(0, state.CumWater), state.Recovery} {
 			columns[c].Values = append(columns[c].Values, value)
 		}

@@ -3,14 +3,19 @@ package study
 import "brinefront/physics/units"
 
 func (f *front) notes(s *sheet) {
-	s.note(Note{ID: "front.screening", Level: "remark", Text: "This is a screening answer: one dimension, uniform rock, no capillary pressure, no gravity, no compressibility, constant temperature.",
+	gravity := "no gravity"
+	if f.dip != nil {
+		gravity = "both phases spread over the height of the layer"
+	}
+	s.note(Note{ID: "front.screening", Level: "remark", Text: "This is a screening answer: one dimension, uniform rock, no capillary pressure, " + gravity + ", no compressibility, constant temperature.",
 		Cause: "Each of these can move the front and the recovery.", Do: "Use it to decide what to look at next, not to sanction a project."})
-	f.stability(s)
+	f.judgements(s)
+	f.brineNotes(s)
 	if _, cut := f.displacement.InletFace(); cut < 1 {
 		s.note(Note{ID: "front.inlet", Level: "caution", Text: "The saturation held at the inlet lets oil flow there: the injected stream is " + units.Format(100*(1-cut), 3) + " % oil.",
 			Cause: "Water alone would bring the inlet to 1 − Sor.", Do: "Leave the inlet saturation empty unless oil is injected too. Recovery counts the oil displaced, net of the oil injected.", Paths: []string{"front.injectedWater"}})
 	}
-	if cut, _ := f.flow.At(f.swi); cut > 0 {
+	if cut := f.cutAhead(); cut > 0 {
 		s.note(Note{ID: "front.mobileWater", Level: "remark", Text: "Water flows from the first day: at the initial saturation the water cut is " + units.Format(100*cut, 3) + " % at reservoir conditions.",
 			Cause: "The initial water saturation lies above the connate water of the curve.", Do: "Breakthrough here means the arrival of the injected front, not of the first water.", Paths: []string{"front.initialWater"}})
 	}
@@ -22,30 +27,12 @@ func (f *front) notes(s *sheet) {
 	f.frontPlace(s)
 }
 
-// stability tells the front mobility ratio in words.
-func (f *front) stability(s *sheet) {
-	ratio, ok := s.part.Figure("front.frontMobility")
-	if !ok {
-		s.note(Note{ID: "front.noShock", Level: "remark", Text: "No step runs ahead: the water spreads out from the start.",
-			Cause: "The fractional flow curve bends down from the initial saturation on.", Do: "Look whether curves and viscosities are as meant.", Paths: []string{"rock.curve"}})
-		return
-	}
-	number := units.Format(ratio.Value, 3)
-	if ratio.Value > 1 {
-		s.note(Note{ID: "front.unstable", Level: "caution", Text: "The front is unstable: the mobility ratio across it is " + number + ", above 1 (Dake 1978).",
-			Cause: "Water fingers ahead of the front in real rock, so it arrives earlier and sweeps less than computed here.", Do: "Take breakthrough and early recovery as upper bounds; consider a more viscous injected water.", Paths: []string{"fluids.waterViscosity", "fluids.oilViscosity"}})
-		return
-	}
-	s.note(Note{ID: "front.stable", Level: "remark", Text: "The front is stable without gravity: the mobility ratio across it is " + number + ", not above 1 (Dake 1978).",
-		Cause: "Fingers do not grow from the front itself.", Do: "Uneven rock can still bring water early."})
-}
-
 func (f *front) volumeFactors(s *sheet) {
-	if f.bo < 1 {
+	if f.pair.Resident.Name == "oil" && f.bo < 1 {
 		s.note(Note{ID: "front.oilFactor", Level: "caution", Text: "Bo is below 1: oil would swell on its way to surface.",
 			Cause: "Oil loses gas and cools on its way up, so that Bo is above 1 nearly always.", Do: "Look whether Bo was typed as its inverse.", Paths: []string{"fluids.oilFormationFactor"}})
 	}
-	if f.bw < 0.95 || f.bw > 1.1 {
+	if f.pair.Displacing.Brine && (f.bw < 0.95 || f.bw > 1.1) {
 		s.note(Note{ID: "front.waterFactor", Level: "caution", Text: "Bw is " + units.Format(f.bw, 4) + ", far from 1.",
 			Cause: "Brine hardly shrinks; common practice, no source: 1.00 to 1.07.", Do: "Look whether Bw and Bo were exchanged.", Paths: []string{"fluids.waterFormationFactor"}})
 	}

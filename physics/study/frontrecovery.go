@@ -63,7 +63,7 @@ func (f *front) mobilityFigures(s *sheet, behind, ahead float64, shock bool) {
 	s.figure(Figure{ID: "front.endPointMobility", Label: "End-point mobility ratio", Symbol: "M", Value: f.flow.EndPointMobilityRatio(f.swi, f.swj), Quantity: units.MobilityRatio, Strip: true},
 		s.by("{M} = ({krw} / {µw}) / ({kro} / {µo})", "Water where only water flows over oil where only oil flows.", ref.Dake1978).
 			value("krw", "krw at Swj", injected.Krw, units.Fraction).value("kro", "kro at Swi", initial.Kro, units.Fraction).
-			input("fluids.waterViscosity").input("fluids.oilViscosity").on("front.initialWater", "front.injectedWater"))
+			viscosities().on("front.initialWater", "front.injectedWater"))
 	if !shock {
 		return
 	}
@@ -72,7 +72,7 @@ func (f *front) mobilityFigures(s *sheet, behind, ahead float64, shock bool) {
 		s.by("{Ms} = ({krw} / {µw} + {kro} / {µo}) / ({krwa} / {µw} + {kroa} / {µo})", "Total mobility just behind the front over that ahead of it; below 1 the front is stable.", ref.Dake1978).
 			value("krw", "krw behind the front", b.Krw, units.Fraction).value("kro", "kro behind the front", b.Kro, units.Fraction).
 			value("krwa", "krw ahead of the front", a.Krw, units.Fraction).value("kroa", "kro ahead of the front", a.Kro, units.Fraction).
-			input("fluids.waterViscosity").input("fluids.oilViscosity").on("front.shockSaturation"))
+			viscosities().on("front.shockSaturation"))
 }
 
 // trimmed is a label up to its first comma: "Recovery after 1 PV".

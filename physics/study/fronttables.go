@@ -22,19 +22,37 @@ func (f *front) waveTable() Grid {
 		waves = waves[len(waves)-shownWaves:]
 		g.Title = "Waves, the foremost " + units.Format(shownWaves, 3) + " of them, the front last"
 	}
-	names := map[fracflow.Kind]string{fracflow.Fan: "spreading", fracflow.Shock: "step"}
 	kind := Column{Label: "Wave", Quantity: units.Number}
 	behind := Column{Label: "Sw behind", Quantity: units.Fraction}
 	ahead := Column{Label: "Sw ahead", Quantity: units.Fraction}
 	slow := Column{Label: "Speed, slowest", Quantity: units.Number}
 	fast := Column{Label: "Speed, fastest", Quantity: units.Number}
 	for _, w := range waves {
-		kind.Words = append(kind.Words, names[w.Kind])
+		kind.Words = append(kind.Words, kindOf(w))
 		behind.Values, ahead.Values = append(behind.Values, w.Behind), append(ahead.Values, w.Ahead)
 		slow.Values, fast.Values = append(slow.Values, w.SpeedBehind), append(fast.Values, w.SpeedAhead)
 	}
 	g.Columns = []Column{kind, behind, ahead, slow, fast}
+	first, last := f.arrivals("Arrives"), f.arrivals("Passed")
+	for _, w := range waves {
+		first.add(w.SpeedAhead)
+		last.add(w.SpeedBehind)
+	}
+	g.Columns = append(append(g.Columns, first.columns()...), last.columns()...)
 	return g
+}
+
+// kindOf is what a wave is called.
+func kindOf(w fracflow.Wave) string {
+	switch {
+	case w.SpeedAhead <= 0:
+		return "runs back, never enters"
+	case w.Kind == fracflow.Shock:
+		return "step"
+	case w.SpeedBehind < 0:
+		return "spreading, its slow part never enters"
+	}
+	return "spreading"
 }
 
 func (f *front) volumeTable() Grid {
@@ -49,7 +67,7 @@ func (f *front) volumeTable() Grid {
 	for _, q := range injected.Values {
 		state := d.After(q)
 		outlet.Values, average.Values = append(outlet.Values, state.Sw), append(average.Values, state.Average)
-		reservoir.Values, surface.Values = append(reservoir.Values, state.Cut), append(surface.Values, fracflow.SurfaceCut(state.Cut, f.bw, f.bo))
+		reservoir.Values, surface.Values = append(reservoir.Values, state.Cut), append(surface.Values, f.surfaceCut(state.Cut))
 		pore.Values, place.Values = append(pore.Values, state.Recovery), append(place.Values, d.OfOilInPlace(state.Recovery))
 	}
 	return Grid{ID: "front.volumes", Title: "After round volumes injected", Columns: []Column{injected, outlet, average, reservoir, surface, pore, place}}

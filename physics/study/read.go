@@ -7,6 +7,7 @@ import (
 	"strconv"
 	"strings"
 
+	"brinefront/physics/fluid"
 	"brinefront/physics/units"
 )
 
@@ -39,7 +40,7 @@ func Read(text string) (Study, error) {
 	if err := recognise(root); err != nil {
 		return Study{}, err
 	}
-	var st Study
+	st := Study{Fluids: Fluids{Pair: string(fluid.BrineOil)}} // of files from before pairs could be chosen
 	if err := lay(root, reflect.ValueOf(&st).Elem(), ""); err != nil {
 		return Study{}, err
 	}

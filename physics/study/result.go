@@ -168,8 +168,9 @@ type Grid struct {
 	Columns []Column `json:"columns"`
 }
 
-// Column is one column of a Grid. A column holds numbers, or words; the quantity
-// of words is units.Number.
+// Column is one column of a Grid. A column holds numbers, or words, or both: then a
+// word that is not empty stands instead of its number. The quantity of words alone is
+// units.Number.
 type Column struct {
 	Label    string         `json:"label"`
 	Symbol   string         `json:"symbol"`

@@ -45,7 +45,7 @@ func runRock(st *Study, problems *[]Problem) (Part, *rock) {
 	default:
 		r.measured(s)
 	}
-	*problems = append(*problems, s.problems...)
+	s.hand(problems)
 	if status := s.standing(); status != Ready {
 		return s.close(status), nil
 	}

@@ -11,7 +11,7 @@ func Run(st Study) Result {
 	if len(st.Cases) > 0 {
 		parts[SheetCompare] = runCompare(&st, base)
 	}
-	return Result{Problems: append([]Problem{}, base.problems...), Parts: parts}
+	return told(Result{Problems: append([]Problem{}, base.problems...), Parts: parts}, pairOf(&st))
 }
 
 // evaluation is a study taken through the sheets of the job.

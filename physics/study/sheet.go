@@ -46,7 +46,7 @@ func (s *sheet) input(path string) (si float64, given bool) {
 		s.problems = append(s.problems, *p)
 		return math.NaN(), false
 	}
-	return unit.ToSI(in.Value), true
+	return math.Max(spec.Min, math.Min(spec.Max, unit.ToSI(in.Value))), true // converting rounds
 }
 
 // need reads an input that the answer cannot do without.
@@ -66,6 +66,16 @@ func (s *sheet) miss(path string) {
 
 func (s *sheet) problem(path, read, allowed string) {
 	s.problems = append(s.problems, Problem{Path: path, Read: read, Allowed: allowed})
+}
+
+// hand passes the sheet's problems on, each once: an input that two sheets read is not
+// refused twice.
+func (s *sheet) hand(problems *[]Problem) {
+	for _, p := range s.problems {
+		if !slices.Contains(*problems, p) {
+			*problems = append(*problems, p)
+		}
+	}
 }
 
 // typed is an input as the person wrote it, for a message.

@@ -222,18 +222,38 @@ func chartFaults(c Chart) []string {
 			list = append(list, c.ID+" "+l.ID+" is there twice")
 		}
 		ids[l.ID] = true
+		for _, reading := range l.Readings {
+			if !columnHolds(reading, len(l.X)) || reading.Values == nil {
+				list = append(list, c.ID+" "+l.ID+", reading "+reading.Label)
+			}
+		}
+		if l.Moving && (c.Slider == nil || c.X.Max == nil) {
+			list = append(list, c.ID+" "+l.ID+" moves by nothing")
+		}
+	}
+	if s := c.Slider; s != nil && !(s.Min < s.Max && s.Min <= s.Value && s.Value <= s.Max && s.Label != "") {
+		list = append(list, fmt.Sprintf("%s has a slider %+v", c.ID, *s))
 	}
 	return list
 }
 
 func gridFaults(g Grid) []string {
 	var list []string
+	rows := max(len(g.Columns[0].Values), len(g.Columns[0].Words))
 	for _, c := range g.Columns {
-		if len(c.Values)+len(c.Words) != len(g.Columns[0].Values)+len(g.Columns[0].Words) || c.Quantity == "" || c.Label == "" {
+		if !columnHolds(c, rows) {
 			list = append(list, "table "+g.ID+", column "+c.Label)
 		}
 	}
 	return list
+}
+
+// columnHolds reports whether a column has an entry in every row: numbers, words, or
+// both, where an empty word leaves the number standing.
+func columnHolds(c Column, rows int) bool {
+	numbers, words := len(c.Values) == rows, len(c.Words) == rows
+	whole := numbers && (words || c.Words == nil) || words && c.Values == nil
+	return whole && c.Quantity != "" && c.Label != ""
 }
 
 // numbers walks through a value: every number finite, every list there.

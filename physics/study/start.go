@@ -1,11 +1,14 @@
 package study
 
+import "brinefront/physics/fluid"
+
 // Empty is a new study: choices at their usual values, nothing given.
 func Empty() Study {
 	return Study{
 		Type: Type, Version: Version, Program: Program,
 		System: "field",
 		Rock:   Rock{Reference: "absolute", Curve: "corey-fit", Weights: "relative"},
+		Fluids: Fluids{Pair: string(fluid.BrineOil)},
 		Field:  Field{Drive: "rate", Limit: "waterCut"},
 	}
 }

@@ -1,0 +1,114 @@
+package study
+
+import "brinefront/physics/fluid"
+
+// told is a result in the words of a pair, with what is to be said of the pair itself.
+// Nothing of the result given is changed: parts may be shared with other results.
+func told(r Result, pair fluid.Pair) Result {
+	w := wordsOf(pair)
+	out := Result{Problems: r.Problems, Parts: map[Sheet]Part{}}
+	if w != nil {
+		out.Problems = each(r.Problems, func(p Problem) Problem {
+			p.Read, p.Allowed = w.tell(p.Read), w.tell(p.Allowed)
+			return p
+		})
+	}
+	for sheet, part := range r.Parts {
+		if w != nil {
+			part = w.part(part)
+		}
+		if sheet == SheetFront && part.Status == Ready {
+			part.Notes = append(each(part.Notes, func(n Note) Note { return n }), pairNotes(pair)...)
+		}
+		out.Parts[sheet] = part
+	}
+	return out
+}
+
+// pairNotes are the cautions of a pair, written in its own words.
+func pairNotes(pair fluid.Pair) []Note {
+	var list []Note
+	for _, c := range pair.Cautions {
+		list = append(list, Note{ID: "front.pair." + c.ID, Level: "caution", Text: c.Text, Cause: c.Cause, Do: c.Do, Paths: []string{"fluids.pair"}})
+	}
+	if d, r := pair.Displacing, pair.Resident; pair.Drainage() {
+		list = append(list, Note{ID: "front.pair.roles", Level: "remark", Text: "Curves and points are read by the saturation of the displacing phase, " + d.Saturation + ": first column " + d.Saturation + ", then " + d.Kr() + ", then " + r.Kr() + ".",
+			Cause: "A laboratory table by the saturation of the other phase means something else.", Do: "Turn such a table over: " + d.Saturation + " is 1 less the other saturation, and the two columns of kr change places.", Paths: []string{"fluids.pair", "rock.table"}})
+	}
+	return list
+}
+
+// each is a new list of every element changed.
+func each[T any](list []T, change func(T) T) []T {
+	out := make([]T, len(list))
+	for i, element := range list {
+		out[i] = change(element)
+	}
+	return out
+}
+
+func (w *words) part(p Part) Part {
+	p.Answer = each(p.Answer, func(a Phrase) Phrase { a.Text = w.tell(a.Text); return a })
+	p.Figures = each(p.Figures, w.figure)
+	p.Charts = each(p.Charts, w.chart)
+	p.Tables = each(p.Tables, func(g Grid) Grid {
+		g.Title, g.Columns = w.tell(g.Title), each(g.Columns, w.column)
+		return g
+	})
+	p.Notes = each(p.Notes, func(n Note) Note {
+		n.Text, n.Cause, n.Do = w.tell(n.Text), w.tell(n.Cause), w.tell(n.Do)
+		return n
+	})
+	return p
+}
+
+func (w *words) figure(f Figure) Figure {
+	f.Label, f.Symbol = w.tell(f.Label), w.symbol(f.Symbol)
+	f.Working.Formula, f.Working.Method = w.tell(f.Working.Formula), w.tell(f.Working.Method)
+	f.Working.Terms = each(f.Working.Terms, func(t Term) Term {
+		t.Symbol, t.Label = w.symbol(t.Symbol), w.tell(t.Label)
+		return t
+	})
+	return f
+}
+
+func (w *words) chart(c Chart) Chart {
+	c.Title, c.Summary = w.tell(c.Title), w.tell(c.Summary)
+	c.X, c.Y = w.axis(c.X), w.axis(c.Y)
+	c.Marks = each(c.Marks, func(m Mark) Mark { m.Label = w.tell(m.Label); return m })
+	c.Lines = each(c.Lines, func(l Line) Line {
+		l.Label = w.tell(l.Label)
+		if l.Readings != nil {
+			l.Readings = each(l.Readings, w.column)
+		}
+		return l
+	})
+	if c.Slider != nil {
+		slider := *c.Slider
+		slider.Label = w.tell(slider.Label)
+		slider.Marks = each(slider.Marks, func(m Mark) Mark { m.Label = w.tell(m.Label); return m })
+		c.Slider = &slider
+	}
+	return c
+}
+
+func (w *words) axis(a Axis) Axis {
+	a.Label, a.Symbol = w.tell(a.Label), w.symbol(a.Symbol)
+	return a
+}
+
+func (w *words) column(c Column) Column {
+	c.Label, c.Symbol = w.tell(c.Label), w.symbol(c.Symbol)
+	if c.Words != nil {
+		c.Words = each(c.Words, w.tell)
+	}
+	return c
+}
+
+// symbol tells a symbol that stands alone.
+func (w *words) symbol(text string) string {
+	if told, ok := w.alone[text]; ok {
+		return told
+	}
+	return w.tell(text)
+}

@@ -1,0 +1,108 @@
+package study
+
+import (
+	"regexp"
+	"slices"
+	"strings"
+	"unicode"
+	"unicode/utf8"
+
+	"brinefront/physics/fluid"
+)
+
+// words tell a result in the names of a pair of phases. Every text of this package is
+// written for water that displaces oil, which are roles: see fluid.Pair. For another
+// pair the words and symbols of the two roles are changed for those of the phases, once,
+// when all parts are there.
+type words struct {
+	list  map[string]string
+	alone map[string]string // symbols that are words elsewhere, such as the exponent no
+	find  *regexp.Regexp
+}
+
+// wordsOf are the words of a pair; nil for the pair that texts are written for.
+func wordsOf(p fluid.Pair) *words {
+	if p.ID == fluid.BrineOil {
+		return nil
+	}
+	d, r := p.Displacing, p.Resident
+	w := &words{list: map[string]string{}}
+	for from, to := range map[string]string{
+		"water": d.Name, "oil": r.Name, "connate water": d.ImmobileName, "residual oil": r.ImmobileName,
+	} {
+		w.list[from], w.list[capital(from)] = to, capital(to)
+	}
+	w.list["Swc"], w.list["Sor"] = d.Immobile, r.Immobile
+	w.list["WOR"] = strings.ToUpper(d.Symbol+r.Symbol) + "R"
+	// Symbols whose index is the phase, and what may follow it.
+	w.symbols("w", d.Symbol, "kr fw f µ ρ B q", " 0 a i j f s 2 ,o")
+	w.symbols("o", r.Symbol, "kr µ ρ B q k", " 0 a i ,max")
+	for _, after := range []string{"", "i", "j", "f", "a", "2"} {
+		w.list["Sw"+after] = d.Saturation + after
+	}
+	for _, pair := range [][2]string{{"krw0,o", "kr" + d.Symbol + "0," + r.Symbol}, {"Sor,L", r.Immobile + ",L"}, {"fw,lim", d.Flow() + ",lim"}, {"qo,lim", "q" + r.Symbol + ",lim"},
+		{"dfw", "d" + d.Flow()}, {"dSw", "d" + d.Saturation}} {
+		w.list[pair[0]] = pair[1]
+	}
+	w.alone = map[string]string{}
+	for _, stem := range []string{"n", "L", "E", "T"} {
+		w.alone[stem+"w"], w.alone[stem+"o"] = stem+d.Symbol, stem+r.Symbol
+	}
+	w.compile()
+	return w
+}
+
+// symbols enters every stem with its index changed.
+func (w *words) symbols(from, to, stems, after string) {
+	for _, stem := range strings.Fields(stems) {
+		for _, end := range strings.Split(after, " ") {
+			w.list[stem+from+end] = stem + to + end
+		}
+	}
+}
+
+// compile makes the search for any of the words, the longest first.
+func (w *words) compile() {
+	var all []string
+	for from := range w.list {
+		all = append(all, regexp.QuoteMeta(from))
+	}
+	slices.SortFunc(all, func(a, b string) int {
+		if len(a) != len(b) {
+			return len(b) - len(a)
+		}
+		return strings.Compare(a, b)
+	})
+	w.find = regexp.MustCompile(strings.Join(all, "|"))
+}
+
+// tell changes the words of a text. A word stands by itself: no letter or digit before
+// or after it.
+func (w *words) tell(text string) string {
+	var b strings.Builder
+	for {
+		at := w.find.FindStringIndex(text)
+		if at == nil {
+			b.WriteString(text)
+			return b.String()
+		}
+		before, _ := utf8.DecodeLastRuneInString(text[:at[0]])
+		after, _ := utf8.DecodeRuneInString(text[at[1]:])
+		word := text[at[0]:at[1]]
+		if !part(before) && !part(after) {
+			word = w.list[word]
+		}
+		b.WriteString(text[:at[0]])
+		b.WriteString(word)
+		text = text[at[1]:]
+	}
+}
+
+// part reports whether a character can belong to a word.
+func part(r rune) bool { return r != utf8.RuneError && (unicode.IsLetter(r) || unicode.IsDigit(r)) }
+
+// capital begins a text with a capital letter.
+func capital(text string) string {
+	r, n := utf8.DecodeRuneInString(text)
+	return string(unicode.ToUpper(r)) + text[n:]
+}

@@ -21,25 +21,11 @@ func (f *Field) Render() app.UI {
 	d, m := f.Desk, f.Model
 	in := m.Study.Field
 	return laid(d, m, study.SheetField,
-		widget.Group(d, m, study.SheetField, "Block", "Block between the wells", nil),
-		widget.Group(d, m, study.SheetField, "Drive", "What drives the flood", idle(in),
+		widget.Group(d, m, study.SheetField, "Block", "Block between the wells"),
+		widget.Group(d, m, study.SheetField, "Drive", "What drives the flood",
 			widget.Radios(d, "field.drive", "Held constant", in.Drive, study.Drives)),
-		widget.Group(d, m, study.SheetField, "Limit", "When it stops paying", idle(in),
+		widget.Group(d, m, study.SheetField, "Limit", "When it stops paying",
 			widget.Radios(d, "field.limit", "Economic limit", in.Limit, study.Limits),
 			widget.Words(d, m, "field.start", "First day of injection", in.Start, "YYYY-MM-DD", "Turns times into dates. Optional.")),
 	)
-}
-
-// idle are the inputs that the choices made do not ask for.
-func idle(in study.Field) []string {
-	var paths []string
-	if in.Drive == "pressure" {
-		paths = append(paths, "field.rate")
-	} else {
-		paths = append(paths, "field.pressure", "field.permeability")
-	}
-	if in.Limit == "oilRate" {
-		return append(paths, "field.waterCut")
-	}
-	return append(paths, "field.oilRate")
 }

@@ -1,7 +1,9 @@
 package sheet
 
 import (
+	"fmt"
 	"strconv"
+	"strings"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
@@ -26,7 +28,28 @@ func screen(d widget.Desk, m state.Model) app.UI {
 			current(d, m),
 		),
 		foot(m),
+		running(m.Study.Title),
 	)
+}
+
+// running prints the study's title at the head of every page. The head of a page
+// takes its words from a style sheet alone.
+func running(title string) app.UI {
+	return app.Style().Text("@page { @top-right { content: " + quoted(title) + "; } }")
+}
+
+// quoted is a text as a string of a style sheet (CSS Syntax, section 4.3.5): what
+// could end it, and what could end the element, is written by its number.
+func quoted(text string) string {
+	var b strings.Builder
+	for _, r := range text {
+		if r < ' ' || strings.ContainsRune(`"\<`, r) {
+			fmt.Fprintf(&b, `\%x `, r)
+			continue
+		}
+		b.WriteRune(r)
+	}
+	return `"` + b.String() + `"`
 }
 
 // current is the sheet the address names.
@@ -151,16 +174,46 @@ func failure(d widget.Desk, m state.Model) app.UI {
 	)
 }
 
-// invented is the note that the demonstration study carries; as long as a study
-// carries it, its numbers are nobody's.
-var invented = study.Demo().Note
+// invented counts the inputs in use that are still the demonstration's, and says
+// whether all that are given are.
+func invented(st study.Study) (n int, all bool) {
+	all = true
+	count := func(source string) {
+		if source == study.Invented {
+			n++
+		} else {
+			all = false
+		}
+	}
+	for _, spec := range study.Specs() {
+		if in := spec.Get(&st); in != nil && spec.Applies(&st) {
+			count(in.Source)
+		}
+	}
+	if st.Rock.Table != nil {
+		count(st.Rock.Table.Source)
+	}
+	return n, all
+}
+
+// origin says how much of a study is the invented demonstration's.
+func origin(n int, all bool) string {
+	switch {
+	case all:
+		return "This is an invented demonstration study. "
+	case n == 1:
+		return "This study began as the invented demonstration; 1 input in use is still invented. "
+	}
+	return "This study began as the invented demonstration; " + strconv.Itoa(n) + " inputs in use are still invented. "
+}
 
 // demonstration says that what is open is invented, and how to start one's own;
 // beside it stands what could not be restored.
 func demonstration(d widget.Desk, m state.Model) app.UI {
+	n, all := invented(m.Study)
 	return app.Div().Class("openings").Body(
-		app.P().ID("demonstration").Hidden(m.Study.Note != invented).Body(
-			app.Text("This is an invented demonstration study. "),
+		app.P().ID("demonstration").Hidden(n == 0).Body(
+			app.Text(origin(n, all)),
 			app.Span().Hidden(m.Route.Embed).Body(
 				widget.Link(d, "start-empty", "Start empty", state.StartedEmpty{}),
 				app.Text(" or "),

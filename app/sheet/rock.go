@@ -38,21 +38,19 @@ func (r *Rock) points() app.UI {
 func (r *Rock) curve() app.UI {
 	d, m := r.Desk, r.Model
 	choice := widget.Choice(d, "rock.curve", "Curve used", m.Study.Rock.Curve, study.CurveKinds, "A curve either follows the laboratory points, is fitted to them, or is typed.")
-	switch {
-	case strings.HasSuffix(m.Study.Rock.Curve, "-fit"):
-		return app.Section().Class("group").Body(app.H3().Text("Curve"), choice,
-			widget.Choice(d, "rock.weights", "Weights of the fit", m.Study.Rock.Weights, study.Weightings, "Relative permeability spans decades; relative weights respect its small values."))
-	case m.Study.Rock.Curve == "corey":
-		return widget.Group(d, m, study.SheetRock, "Corey", "Curve", nil, choice)
-	case m.Study.Rock.Curve == "let":
-		return widget.Group(d, m, study.SheetRock, "LET", "Curve", nil, choice)
+	body := []app.UI{app.H3().Text("Curve"), choice}
+	if strings.HasSuffix(m.Study.Rock.Curve, "-fit") {
+		body = append(body, widget.Choice(d, "rock.weights", "Weights of the fit", m.Study.Rock.Weights, study.Weightings, "Relative permeability spans decades; relative weights respect its small values."))
 	}
-	return app.Section().Class("group").Body(app.H3().Text("Curve"), choice)
+	for _, group := range []string{"Corey", "LET"} { // the curve chosen asks for one, or none
+		body = append(body, widget.Fields(d, m, study.SheetRock, group)...)
+	}
+	return app.Section().Class("group").Body(body...)
 }
 
 func (r *Rock) plug() app.UI {
 	d, m := r.Desk, r.Model
-	return widget.Group(d, m, study.SheetRock, "Plug", "Plug", nil,
+	return widget.Group(d, m, study.SheetRock, "Plug", "Plug",
 		widget.Choice(d, "rock.reference", "Permeability that kr refers to", m.Study.Rock.Reference, study.References,
 			"Look in the laboratory report: kr at Swc of exactly 1 usually means ko(Swi)."))
 }

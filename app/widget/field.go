@@ -1,7 +1,6 @@
 package widget
 
 import (
-	"slices"
 	"strings"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
@@ -133,16 +132,4 @@ func end(of *float64) string {
 		return ""
 	}
 	return units.Exact(*of)
-}
-
-// Group is the fields of one group of a sheet's form, under one heading, those
-// left out that the choices made do not ask for.
-func Group(d Desk, m state.Model, sheet study.Sheet, group, title string, leaveOut []string, before ...app.UI) app.UI {
-	body := append([]app.UI{app.H3().Text(title)}, before...)
-	for _, spec := range study.Specs() {
-		if spec.Sheet == sheet && spec.Group == group && !slices.Contains(leaveOut, spec.Path) {
-			body = append(body, Field(d, m, spec))
-		}
-	}
-	return app.Section().Class("group").Body(body...)
 }

@@ -20,10 +20,14 @@ const (
 	previewLines   = 6
 )
 
+// oilColumn is the role of a column of oil saturation, which serves as Sw = 1 − So.
+const oilColumn = "so"
+
 // columnRoles are what a pasted column may be.
 var columnRoles = []study.Choice{
 	{Value: "", Label: "not used"},
 	{Value: "sw", Label: "Sw"},
+	{Value: oilColumn, Label: "So (oil saturation)"},
 	{Value: "krw", Label: "krw"},
 	{Value: "kro", Label: "kro"},
 }
@@ -74,7 +78,7 @@ func previewTable(d Desk, p *state.PasteDraft) app.UI {
 	width := min(len(r.Columns), previewColumns)
 	head := make([]app.UI, width)
 	for i := range width {
-		head[i] = app.Th().Scope("col").Body(role(d, i, r.Columns[i].Title, r.Columns[i].As))
+		head[i] = app.Th().Scope("col").Body(role(d, i, r.Columns[i].Title, roleOf(r.Columns[i].As, r.Columns[i].Oil)))
 	}
 	var rows []app.UI
 	for _, cells := range r.Cells[:min(len(r.Cells), previewRows)] {
@@ -88,6 +92,14 @@ func previewTable(d Desk, p *state.PasteDraft) app.UI {
 		app.THead().Body(app.Tr().Body(head...)),
 		app.TBody().Body(rows...),
 	)
+}
+
+// roleOf is what a column was read as.
+func roleOf(as string, oil bool) string {
+	if oil {
+		return oilColumn
+	}
+	return as
 }
 
 // role is the list that says what a pasted column is.

@@ -21,7 +21,14 @@ type Picture struct {
 	fault string // why it could not be drawn
 }
 
-func (p *Picture) holder() string { return "pic-" + p.Chart.ID }
+// holder is the id of the element that holds the drawing. What the reader does to a
+// picture, its slider and pins, is kept by it, and the report begins afresh.
+func (p *Picture) holder() string {
+	if p.Plain {
+		return "paper-" + p.Chart.ID
+	}
+	return "pic-" + p.Chart.ID
+}
 
 // OnMount draws the chart.
 func (p *Picture) OnMount(app.Context) { p.draw() }

@@ -14,12 +14,17 @@ const (
 	Craig1971            ID = "craig-1971"
 	CrandallMajda1980    ID = "crandall-majda-1980"
 	Dake1978             ID = "dake-1978"
+	DawsonLantz1972      ID = "dawson-lantz-1972"
 	Dietz1953            ID = "dietz-1953"
+	Fayers1962           ID = "fayers-1962"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
 	Godunov1959          ID = "godunov-1959"
 	GolubVanLoan2013     ID = "golub-van-loan-2013"
+	Hovdan1986           ID = "hovdan-1986"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
+	JohansenWinther1988  ID = "johansen-winther-1988"
+	KreftZuber1978       ID = "kreft-zuber-1978"
 	Kuznetsov1976        ID = "kuznetsov-1976"
 	Lake1989             ID = "lake-1989"
 	Land1968             ID = "land-1968"
@@ -34,10 +39,12 @@ const (
 	NISTStRD             ID = "nist-strd"
 	Nielsen1999          ID = "nielsen-1999"
 	NISTSP811            ID = "nist-sp-811"
+	OgataBanks1961       ID = "ogata-banks-1961"
 	Oleinik1957          ID = "oleinik-1957"
 	Osher1984            ID = "osher-1984"
 	PerthameShu1996      ID = "perthame-shu-1996"
 	Phillips1981         ID = "phillips-1981"
+	Pope1980             ID = "pope-1980"
 	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SeberWild1989        ID = "seber-wild-1989"
@@ -58,15 +65,20 @@ var sources = map[ID]Source{
 	Chaudhry2004:         {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
 	IAPWSIF97:            {Authors: "IAPWS", Year: 2012, Title: "Revised Release on the IAPWS Industrial Formulation 1997 for the Thermodynamic Properties of Water and Steam", Where: "IAPWS R7-97"},
 	IAPWSR12:             {Authors: "IAPWS", Year: 2008, Title: "Release on the IAPWS Formulation 2008 for the Viscosity of Ordinary Water Substance", Where: "IAPWS R12-08"},
+	JohansenWinther1988:  {Authors: "Johansen & Winther", Year: 1988, Title: "The solution of the Riemann problem for a hyperbolic system of conservation laws modeling polymer flooding", Where: "SIAM J. Math. Anal. 19(3), 541-566"},
+	KreftZuber1978:       {Authors: "Kreft & Zuber", Year: 1978, Title: "On the physical meaning of the dispersion equation and its solutions for different initial and boundary conditions", Where: "Chem. Eng. Sci. 33(11), 1471-1480"},
 	Lake1989:             {Authors: "Lake", Year: 1989, Title: "Enhanced Oil Recovery", Where: "Prentice Hall"},
 	Land1968:             {Authors: "Land", Year: 1968, Title: "Calculation of imbibition relative permeability for two- and three-phase flow from rock properties", Where: "SPE J. 8(2), 149-156"},
 	LeVeque2002:          {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press"},
 	NISTSP811:            {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811"},
+	OgataBanks1961:       {Authors: "Ogata & Banks", Year: 1961, Title: "A solution of the differential equation of longitudinal dispersion in porous media", Where: "Professional Paper 411-A, U.S. Geological Survey"},
 	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
 	Corey1954:            {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
 	Craig1971:            {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
 	Dake1978:             {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier"},
+	DawsonLantz1972:      {Authors: "Dawson & Lantz", Year: 1972, Title: "Inaccessible pore volume in polymer flooding", Where: "SPE J. 12(5), 448-452"},
 	Dietz1953:            {Authors: "Dietz", Year: 1953, Title: "A theoretical approach to the problem of encroaching and by-passing edge water", Where: "Proc. Koninkl. Ned. Akad. Wetensch. B 56, 83-92"},
+	Fayers1962:           {Authors: "Fayers", Year: 1962, Title: "Some theoretical results concerning the displacement of a viscous oil by a hot fluid in a porous medium", Where: "J. Fluid Mech. 13(1), 65-76"},
 	FritschCarlson1980:   {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
 	Levenberg1944:        {Authors: "Levenberg", Year: 1944, Title: "A method for the solution of certain non-linear problems in least squares", Where: "Quart. Appl. Math. 2(2), 164-168"},
 	Marquardt1963:        {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
@@ -78,12 +90,14 @@ var sources = map[ID]Source{
 	Lomeland2005:         {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
 	Oleinik1957:          {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
 	Phillips1981:         {Authors: "Phillips, Igbene, Fair, Ozbek & Tavana", Year: 1981, Title: "A technical databook for geothermal energy utilization", Where: "Report LBL-12810, Lawrence Berkeley Laboratory"},
+	Pope1980:             {Authors: "Pope", Year: 1980, Title: "The application of fractional flow theory to enhanced oil recovery", Where: "SPE J. 20(3), 191-205"},
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},
 	Godunov1959:          {Authors: "Godunov", Year: 1959, Title: "A difference method for numerical calculation of discontinuous solutions of the equations of hydrodynamics", Where: "Mat. Sbornik 47(89)(3), 271-306"},
 	GolubVanLoan2013:     {Authors: "Golub & Van Loan", Year: 2013, Title: "Matrix Computations", Where: "4th ed., Johns Hopkins University Press, secs. 4.2, 8.5"},
+	Hovdan1986:           {Authors: "Hovdan", Year: 1986, Title: "Water injection: incompressible analytical solution with temperature effects", Where: "Technical Report MH-1/86, Statoil"},
 	Kuznetsov1976:        {Authors: "Kuznetsov", Year: 1976, Title: "Accuracy of some approximate methods for computing the weak solutions of a first-order quasi-linear equation", Where: "USSR Comput. Math. Math. Phys. 16(6), 105-119"},
 	Neumaier1974:         {Authors: "Neumaier", Year: 1974, Title: "Rundungsfehleranalyse einiger Verfahren zur Summation endlicher Summen", Where: "Z. Angew. Math. Mech. 54(1), 39-51"},
 	Osher1984:            {Authors: "Osher", Year: 1984, Title: "Riemann solvers, the entropy condition, and difference approximations", Where: "SIAM J. Numer. Anal. 21(2), 217-235"},

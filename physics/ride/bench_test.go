@@ -13,7 +13,7 @@ func BenchmarkFlood(b *testing.B) {
 }
 
 func BenchmarkSlug(b *testing.B) {
-	c := families(b)[0]
+	c := named(b, "polymer")
 	f := c.flood(b)
 	b.Run("new", func(b *testing.B) {
 		for b.Loop() {
@@ -27,6 +27,11 @@ func BenchmarkSlug(b *testing.B) {
 			for i := range 100 {
 				s.At(float64(i)/100, 0.9*q)
 			}
+		}
+	})
+	b.Run("path", func(b *testing.B) {
+		for b.Loop() {
+			s.Path(0.9 * q)
 		}
 	})
 	b.Run("outlet after the rear", func(b *testing.B) {

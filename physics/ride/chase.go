@@ -1,6 +1,11 @@
 package ride
 
-import "brinefront/physics/numeric"
+import (
+	"math"
+
+	"brinefront/physics/fracflow"
+	"brinefront/physics/numeric"
+)
 
 // launch is where a state of the chase water left the rear of the slug (the inlet, for
 // states that never were beside it): PVI, place, and water that has passed it so far less
@@ -56,6 +61,43 @@ func (s *Slug) At(x, q float64) (n Node, ok bool) {
 	slug, _ := s.at(q)
 	p, _ := s.behindRear(x, q, s.beside(slug))
 	return Node{p.s, x / q, p.f, Chase}, true
+}
+
+// chaseBudget is the number of samples asked of the chase water's states in Path.
+const chaseBudget = 32
+
+// Path returns the states after q pore volumes from the inlet face to the initial state,
+// as Flood.Path does; that is quicker than At place by place. ok as for At.
+func (s *Slug) Path(q float64) (nodes []Node, ok bool) {
+	rear, ok := s.Rear(q)
+	switch {
+	case !ok || q > s.size && !s.clear:
+		return nil, false
+	case q <= s.size:
+		return s.flood.Path(), true
+	}
+	slug, _ := s.at(q)
+	low := s.beside(slug)
+	nodes = []Node{{s.face.s, 0, s.face.f, Chase}}
+	add := func(sw, f, x float64) {
+		if x < rear*(1-alike) { // the state at the rear itself follows
+			nodes = append(nodes, Node{sw, math.Max(nodes[len(nodes)-1].Xi, x/q), f, Chase})
+		}
+	}
+	for _, p := range fracflow.Samples(s.chase.fn, s.top, low.s, chaseBudget) {
+		from, place, _ := s.launch(p.S)
+		add(p.S, p.F, place+p.Above*(q-from))
+		if p.Below != p.Above {
+			add(p.S, p.F, place+p.Below*(q-from))
+		}
+	}
+	nodes = append(nodes, Node{low.s, slug.Xi, low.f, Chase}, Node{slug.S, slug.Xi, slug.F, Behind})
+	for _, n := range s.flood.nodes {
+		if n.Xi > slug.Xi {
+			nodes = append(nodes, n)
+		}
+	}
+	return nodes, true
 }
 
 // After returns the state when q pore volumes have been injected, slug and chase water

@@ -35,9 +35,10 @@
 //
 // v2 is the tangent from the pivot to f2 when the curve has one below the injected state, and
 // the line to the injected state itself otherwise; with several inflections it is the
-// outermost tangent. For water thickened by polymer v2 < v1 always, and this is the
-// textbook construction. For water that runs more easily than the one in place v1 may be the
-// lesser: then water in place is pushed ahead at its own tangent state.
+// outermost tangent. Water thickened by polymer has v2 < v1 unless little oil is left ahead, and
+// this is the textbook construction. v1 may be the lesser where little is left, or for
+// water that runs more easily than the one in place: then water in place is pushed ahead
+// at its own tangent state, or at the initial one.
 //
 // The two states are those met first on v: S2 going from the injected state (down when
 // the line to it is less steep than v, up when it is steeper), S1 going from the initial

@@ -12,10 +12,7 @@ import (
 
 // A passenger that changes nothing leaves the displacement as it is, wherever its front is.
 func TestTracerChangesNothing(t *testing.T) {
-	c := families(t)[8]
-	if c.ahead != c.behind {
-		t.Fatal("not the tracer")
-	}
+	c := named(t, "tracer")
 	for _, b := range []float64{-0.15, 0, 0.1, 0.6, 5} {
 		for _, initial := range []float64{0.2, 0.3, 0.7} {
 			f := flood(t, c.ahead, c.behind, Pivot{B: b}, c.injected, initial)
@@ -67,7 +64,7 @@ func TestBankOfWaterAtRest(t *testing.T) {
 // A bank of oil: after a long flood with brine, polymer pushes the water cut down before it
 // comes itself, and the cut is at the limit for good only after.
 func TestBankOfOil(t *testing.T) {
-	c := families(t)[1]
+	c := named(t, "polymer after water")
 	f := c.flood(t)
 	bank, edge, ok := f.Bank()
 	if !ok || !(bank.S < f.Initial()) {
@@ -116,7 +113,7 @@ func TestFloodAtItsEnds(t *testing.T) {
 }
 
 func TestRefusals(t *testing.T) {
-	c := families(t)[0]
+	c := named(t, "polymer")
 	still := c.ahead
 	still.MuO = math.Inf(1)
 	for _, r := range []struct {

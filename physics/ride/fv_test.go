@@ -122,6 +122,7 @@ func families(t testing.TB) []family {
 	return []family{
 		{"polymer", brine, polymer, thickened(rock, brine, polymer), Pivot{B: 0.12}, 0.77, 0.2},
 		{"polymer after water", brine, polymer, thickened(rock, brine, polymer), Pivot{B: 0.12}, 0.77, 0.62},
+		{"polymer after much water", brine, polymer, thickened(rock, brine, polymer), Pivot{B: 0.12}, 0.77, 0.715},
 		{"polymer kept out of pores", brine, polymer, thickened(rock, brine, polymer), Pivot{B: -0.08}, 0.77, 0.2},
 		{"hot water", cold, hot, thickened(rock, cold, hot), heat, 0.77, 0.2},
 		{"cold water", hot, cold, thickened(rock, hot, cold), heat, 0.77, 0.2},
@@ -130,6 +131,16 @@ func families(t testing.TB) []family {
 		{"thinner water", brine, thin, thickened(rock, brine, thin), Pivot{}, 0.77, 0.3},
 		{"tracer", brine, brine, thickened(rock, brine, brine), Pivot{B: 0.1}, 0.77, 0.3},
 	}
+}
+
+func named(t testing.TB, name string) family {
+	for _, c := range families(t) {
+		if c.name == name {
+			return c
+		}
+	}
+	t.Fatalf("no family %s", name)
+	return family{}
 }
 
 // fastest is the largest speed of waves of either flow and of the front.

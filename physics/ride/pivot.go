@@ -71,7 +71,7 @@ func (r Retention) Rear() Pivot { return Pivot{B: r.Reversible - r.Inaccessible}
 // mass of rock Gamma (kg/kg) at the concentration c injected (kg of solute per m³ of
 // solution). Valid for 0 < phi < 1, Gamma >= 0, c > 0.
 //
-// Source: Pope (1980), from memory; Lake (1989), sec. 8-2, from memory.
+// Source: Pope (1980), from memory; Lake (1989), ch. 8, from memory.
 func Adsorbed(porosity, grainDensity, massPerMass, concentration float64) float64 {
 	return (1 - porosity) / porosity * grainDensity * massPerMass / concentration
 }

@@ -167,6 +167,43 @@ func TestSlugBalances(t *testing.T) {
 	}
 }
 
+// The path is made of states that At finds at the same places, in the same order of zones.
+func TestSlugPath(t *testing.T) {
+	for _, c := range families(t) {
+		f := c.flood(t)
+		s := slug(t, f, c, 0.03, 0.4*f.Arrival())
+		arrival, _ := s.RearArrival()
+		for _, q := range []float64{0.2, 0.5, 0.9, 1.5} {
+			q *= arrival
+			nodes, ok := s.Path(q)
+			if !ok {
+				t.Fatalf("%s: no path", c.name)
+			}
+			last, chased := 0.0, 0
+			for i, n := range nodes {
+				if n.Xi < last {
+					t.Fatalf("%s: node %d: %+v is before %g", c.name, i, n, last)
+				}
+				last = n.Xi
+				if n.Zone == Chase {
+					chased++
+				}
+				jump := i > 0 && nodes[i-1].Xi == n.Xi || i+1 < len(nodes) && nodes[i+1].Xi == n.Xi
+				if jump || n.Xi == 0 {
+					continue
+				}
+				at, ok := s.At(n.Xi*q, q)
+				if !ok || at.Zone != n.Zone || math.Abs(at.S-n.S) > 1e-9 || math.Abs(at.F-n.F) > 1e-9 {
+					t.Fatalf("%s after %g: the path has %+v, At %+v, %v", c.name, q, n, at, ok)
+				}
+			}
+			if (chased > 10) != (q > s.size) {
+				t.Errorf("%s after %g: %d nodes of chase water, slug %g", c.name, q, chased, s.size)
+			}
+		}
+	}
+}
+
 // Slugs against the scheme on 50, 100 and 200 cells: profiles while the rear is in the rock,
 // at the order of smeared contacts, and what has been produced after it has left.
 func TestFiniteVolumesApproachTheSlug(t *testing.T) {
@@ -210,7 +247,7 @@ func (s *Slug) fastest(c family) float64 {
 // that it is spent. Both ends of so thin a slug are smeared into one another: halving the
 // cells brings 1.26, 1.33 and 1.38, towards the 1.41 of smeared contacts.
 func TestFiniteVolumesSpendTheSlug(t *testing.T) {
-	c := families(t)[0]
+	c := named(t, "polymer")
 	const kept, place = 0.3, 0.6
 	c.pivot.B = kept
 	f := c.flood(t)
@@ -235,7 +272,7 @@ func TestFiniteVolumesSpendTheSlug(t *testing.T) {
 }
 
 func TestSlugRefusals(t *testing.T) {
-	c := families(t)[0]
+	c := named(t, "polymer")
 	f := c.flood(t)
 	for _, r := range []struct {
 		chase    family

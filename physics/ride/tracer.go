@@ -25,7 +25,7 @@ import (
 // estimate where the saturation varies behind it.
 //
 // Valid for Speed > 0 and Peclet > 0; Peclet +Inf is the sharp front.
-// Sources: Ogata & Banks (1961), eq. 10; Kreft & Zuber (1978); both from memory.
+// Sources: Ogata & Banks (1961); Kreft & Zuber (1978); both from memory.
 type Tracer struct {
 	Speed  float64 // v, pore lengths per pore volume
 	Peclet float64
@@ -113,7 +113,7 @@ func (t Tracer) Peak(x, size float64) (q, c float64) {
 //
 //	4 erfinv(0.8) sqrt(v Q/Pe) = 3.625 sqrt(v Q/Pe)
 //
-// Source: Lake (1989), eq. 5.2-15, from memory.
+// Source: Lake (1989), ch. 5, from memory.
 func (t Tracer) MixingZone(q float64) float64 {
 	return 4 * math.Erfinv(0.8) * math.Sqrt(t.Speed*q/t.Peclet)
 }

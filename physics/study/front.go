@@ -194,6 +194,7 @@ func (f *front) figures(s *sheet, rock *rock) {
 	f.stepFigure(s)
 	f.mobilityFigures(s, behind, ahead, shock)
 	f.stabilityFigures(s)
+	f.apartFigure(s)
 	f.capillaryFigure(s)
 	f.trappedFigure(s, rock)
 }

@@ -135,6 +135,27 @@ func (f *front) stabilityFigures(s *sheet) {
 	}
 }
 
+// apartFigure is when water arrives if gravity parts the phases wholly and the
+// interface is not stable.
+func (f *front) apartFigure(s *sheet) {
+	g := 0.0
+	formula := "{Qs} = {Rmax} / {M}"
+	if layer, dips := f.segregated(); dips {
+		g = layer.Gravity(f.velocity)
+		formula = "{Qs} = {Rmax} / ({M} - {G})"
+	}
+	apart, err := regime.NewSegregated(f.flow.EndPointMobilityRatio(f.swi, f.swj), g)
+	if err != nil {
+		return
+	}
+	w := s.by(formula, "Both phases in vertical equilibrium, water in a tongue along the layer: the other extreme to phases spread over the whole height.", ref.Dake1978).
+		term("front.movable").term("front.endPointMobility")
+	if f.dip != nil {
+		w.term("front.gravityNumber")
+	}
+	s.figure(Figure{ID: "front.apartBreakthrough", Label: "Water arrives after, if the phases flow apart", Symbol: "Qs", Value: (f.swj - f.swi) * apart.Breakthrough(), Quantity: units.PoreVolumes}, w)
+}
+
 // capillaryFigure is the capillary number of the displacing phase.
 func (f *front) capillaryFigure(s *sheet) {
 	tension, given := s.input("fluids.tension")

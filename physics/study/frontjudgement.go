@@ -18,7 +18,7 @@ func said(v regime.Verdict) string {
 	if v.Source != "" {
 		source = ref.Get(v.Source).Short()
 	}
-	return v.Text + " Held against: " + v.Range + " (" + source + ")."
+	return v.Text + " Held against: " + v.Range + "; " + source + "."
 }
 
 // judgements tell the numbers of the displacement in words.
@@ -38,7 +38,7 @@ func (f *front) mobility(s *sheet) {
 		return
 	}
 	v := regime.EndPointMobility(m)
-	s.note(Note{ID: "front.mobility", Level: level(v.Class == regime.Unfavourable), Text: said(v),
+	s.note(Note{ID: "front.mobility", Level: "remark", Text: said(v),
 		Cause: "It governs sweep in patterns and layers, which this sheet does not see.", Do: "See the ratio across the front for whether fingers grow.", Paths: viscosityPaths()})
 }
 

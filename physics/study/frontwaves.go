@@ -57,7 +57,7 @@ func numbersOnly(c Column) Column {
 func (f *front) readings(saturations []float64) []Column {
 	slope := Column{Label: "Slope of the curve", Symbol: "dfw/dSw", Quantity: units.Number}
 	speed := Column{Label: "Speed", Symbol: "v", Quantity: units.Number}
-	wave := Column{Label: "Travels", Quantity: units.Number}
+	wave := Column{Label: "How it travels", Quantity: units.Number}
 	arrives := f.arrivals("Arrives")
 	waves := f.displacement.Waves()
 	i := len(waves) - 1 // waves run from high saturation to low, saturations rise
@@ -121,6 +121,10 @@ func (f *front) characteristics() []characteristic {
 	const rays = 10
 	var list []characteristic
 	foremost := f.displacement.FrontSpeed()
+	steps := f.steps()
+	drawn := func(v float64) bool { // as a step: the state at its edge travels with it
+		return slices.ContainsFunc(steps, func(step fracflow.Wave) bool { return step.SpeedAhead == v })
+	}
 	for _, w := range f.displacement.Waves() {
 		if w.Kind != fracflow.Fan || w.SpeedAhead <= 0 || math.Abs(w.Behind-w.Ahead) <= visibleStep*(f.swj-f.swi) {
 			continue
@@ -129,7 +133,7 @@ func (f *front) characteristics() []characteristic {
 		between := math.Max(1, math.Round(rays*(high-low)))
 		for i := range int(between) + 1 {
 			v := foremost * (low + (high-low)*float64(i)/between)
-			if v > 1e-3*foremost {
+			if v > 1e-3*foremost && !drawn(v) {
 				list = append(list, characteristic{f.displacement.Saturation(v), v})
 			}
 		}

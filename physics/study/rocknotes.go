@@ -1,9 +1,13 @@
 package study
 
 import (
+	"math"
 	"strings"
 
 	"brinefront/physics/fit"
+	"brinefront/physics/fluid"
+	"brinefront/physics/ref"
+	"brinefront/physics/regime"
 	"brinefront/physics/units"
 )
 
@@ -48,49 +52,25 @@ func (r *rock) fitNotes(s *sheet) {
 	}
 }
 
-// sign is one of Craig's signs of wettability.
-type sign struct {
-	text             string
-	waterWet, oilWet bool
-}
-
-// wettability weighs Craig's (1971) rules of thumb.
+// wettability weighs Craig's (1971) rules of thumb and, for a Corey curve, what its
+// exponents are usual for. The rules are made for water and oil.
 func (r *rock) wettability(s *sheet) {
-	ratio, crossover := s.number("rock.krwOverKro"), s.number("rock.crossover")
-	signs := []sign{
-		{"krw at Sor is " + units.Format(ratio, 2) + " of ko(Swi)", ratio < 0.3, ratio > 0.5},
-		{"Swc is " + units.Format(r.swc, 2), r.swc > 0.2, r.swc < 0.15},
+	if pairOf(s.st).ID != fluid.BrineOil {
+		return
 	}
-	if _, crosses := s.part.Figure("rock.crossover"); crosses {
-		signs = append(signs, sign{"the curves cross at Sw = " + units.Format(crossover, 2), crossover > 0.5, crossover < 0.5})
-	}
+	signs := regime.CraigSigns{KrwEnd: s.number("rock.krwOverKro"), Crossover: s.number("rock.crossover"), Swc: r.swc}
 	var texts []string
-	water, oil := 0, 0
-	for _, sign := range signs {
-		points := "neither"
-		switch {
-		case sign.waterWet:
-			points = "water-wet"
-			water++
-		case sign.oilWet:
-			points = "oil-wet"
-			oil++
-		}
-		texts = append(texts, sign.text+" ("+points+")")
+	for _, v := range signs.Judge() {
+		texts = append(texts, v.Text+" ("+v.Range+")")
 	}
-	verdict := "The signs do not agree: intermediate or mixed wettability, or curves that deserve a second look."
-	switch {
-	case water == len(signs):
-		verdict = "All signs are those of water-wet rock."
-	case oil == len(signs):
-		verdict = "All signs are those of oil-wet rock."
-	case water > 0 && oil == 0:
-		verdict = "Signs of water-wet rock, none of oil-wet rock."
-	case oil > 0 && water == 0:
-		verdict = "Signs of oil-wet rock, none of water-wet rock."
-	}
-	s.note(Note{ID: "rock.wettability", Level: "remark", Text: verdict + " By Craig's rules of thumb (1971): " + strings.Join(texts, "; ") + ".",
+	summary := signs.Summary()
+	s.note(Note{ID: "rock.wettability", Level: "remark", Text: summary.Text + " " + strings.Join(texts, " ") + " By " + ref.Get(summary.Source).Short() + ".",
 		Cause: "Rules of thumb, not a measurement.", Do: "Confirm with an Amott or USBM test where it matters.", Paths: r.inputs})
+	nw, no := s.number("rock.nw"), s.number("rock.no")
+	if !math.IsNaN(nw) && !math.IsNaN(no) {
+		s.note(Note{ID: "rock.exponents", Level: "remark", Text: said(regime.CoreyExponents(nw, no)),
+			Cause: "The ranges overlap and hold for many rocks, not for each.", Do: "Weigh it together with the other signs.", Paths: r.inputs})
+	}
 }
 
 // reference says which permeability kr refers to, and doubts it where it looks wrong.

@@ -28,8 +28,9 @@ func told(r Result, pair fluid.Pair) Result {
 // pairNotes are the cautions of a pair, written in its own words.
 func pairNotes(pair fluid.Pair) []Note {
 	var list []Note
+	usual := pair.ID == fluid.BrineOil // what holds of every waterflood is no reason for alarm
 	for _, c := range pair.Cautions {
-		list = append(list, Note{ID: "front.pair." + c.ID, Level: "caution", Text: c.Text, Cause: c.Cause, Do: c.Do, Paths: []string{"fluids.pair"}})
+		list = append(list, Note{ID: "front.pair." + c.ID, Level: level(!usual), Text: c.Text, Cause: c.Cause, Do: c.Do, Paths: []string{"fluids.pair"}})
 	}
 	if d, r := pair.Displacing, pair.Resident; pair.Drainage() {
 		list = append(list, Note{ID: "front.pair.roles", Level: "remark", Text: "Curves and points are read by the saturation of the displacing phase, " + d.Saturation + ": first column " + d.Saturation + ", then " + d.Kr() + ", then " + r.Kr() + ".",

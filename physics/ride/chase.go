@@ -8,12 +8,13 @@ import (
 )
 
 // launch is where a state of the chase water left the rear of the slug (the inlet, for
-// states that never were beside it): PVI, place, and water that has passed it so far less
-// water that lies between it and the inlet,
+// states that never were beside it; where it first did so while the rear crossed a
+// constant state): PVI, place, and water that has passed it so far less water that lies
+// between it and the inlet,
 //
 //	psi = integral of f dQ - S dx = Q (f2 - xi S2)
 func (s *Slug) launch(sw float64) (q, x, psi float64) {
-	v := s.chase.at(sw).speed
+	v := s.chase.at(sw).speed * (1 - alike) // rounding must not hide a constant state
 	n := s.along(func(n Node) float64 { return s.speed(n) - v })
 	q, x = s.when(n)
 	return q, x, q * (n.F - n.Xi*n.S)

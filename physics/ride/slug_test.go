@@ -24,10 +24,17 @@ func (c family) flood(t testing.TB) *Flood {
 // the classical Runge-Kutta method of fourth order, from a little after the start, where
 // the slug's profile is smooth.
 func TestRearPathSolvesItsEquation(t *testing.T) {
-	const size, start, end = 0.31, 0.4, 0.7
+	const size, start = 0.31, 0.4
 	for _, c := range families(t) {
 		for _, kept := range []float64{0, 0.07} {
 			s := slug(t, c.flood(t), c, kept, size)
+			end := 0.7
+			for _, w := range s.flood.back.Waves() { // where the slug's fan ends its speed has a kink
+				q, _ := s.when(s.flood.At(w.SpeedAhead))
+				if q > start && q < end {
+					end = q
+				}
+			}
 			want, ok := s.Rear(end)
 			if !ok {
 				t.Fatalf("%s: spent", c.name)
@@ -92,7 +99,7 @@ func TestSlugSizes(t *testing.T) {
 }
 
 // What lies in the rock, summed over its length by the midpoint rule between the rear, the
-// waves and the ends (good to 2e-5 with 300 points in each piece), is what the balances say: water, and what rides along, with what is kept for
+// waves and the ends (good to 2e-5 with 200 points in each piece), is what the balances say: water, and what rides along, with what is kept for
 // good behind the rear. Both sides of the rear satisfy both balances there.
 func TestSlugBalances(t *testing.T) {
 	for _, c := range families(t) {
@@ -127,7 +134,7 @@ func TestSlugBalances(t *testing.T) {
 				for i := 1; i < len(cuts); i++ {
 					a, b := cuts[i-1], cuts[i]
 					sum := func(part func(n Node) float64) float64 {
-						const n = 300
+						const n = 200
 						total := 0.0
 						for j := range n { // midpoints, closer at both ends, where profiles are steep
 							u := (float64(j) + 0.5) / n

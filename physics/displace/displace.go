@@ -204,6 +204,9 @@ func (d *Displacement) After(q float64) State {
 	}
 	n := d.at(1 / q)
 	gain := (n.S - d.initial) + q*(d.face.F-n.F)
+	if q <= d.Breakthrough() {
+		gain = q * (d.face.F - d.ahead.F) // the same without cancellation: no trace of water before there is any
+	}
 	return State{
 		Sw: n.S, Cut: n.F, Average: d.initial + gain, Recovery: gain,
 		Oil: gain + q*(1-d.face.F), Water: q*d.face.F - gain,

@@ -109,6 +109,9 @@ func sheetOf(path string) string {
 	if spec, ok := study.Find(path); ok {
 		return string(spec.Sheet)
 	}
+	if _, _, ok := study.AtCase(path); ok {
+		return string(study.SheetCompare)
+	}
 	first, _, found := strings.Cut(path, ".")
 	if !found {
 		return "report"

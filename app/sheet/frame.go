@@ -59,6 +59,8 @@ func current(d widget.Desk, m state.Model) app.UI {
 		return &Rock{Desk: d, Model: m}
 	case "field":
 		return &Field{Desk: d, Model: m}
+	case "compare":
+		return &Compare{Desk: d, Model: m}
 	case "report":
 		return &Report{Desk: d, Model: m}
 	case "evidence":
@@ -108,6 +110,7 @@ var sheets = []struct{ name, title, question string }{
 	{"rock", "Rock", "Which curves do the laboratory points support?"},
 	{"front", "Front", "When does water arrive, and how much oil is out by then?"},
 	{"field", "Field", "What does the flood make in time, and when does it stop paying?"},
+	{"compare", "Compare", "What comes of it when an input is another?"},
 	{"report", "Report", "Everything on paper: inputs, answers, workings, cautions."},
 	{"evidence", "Evidence", "Which published values does this very program reproduce, here, now?"},
 }
@@ -137,6 +140,9 @@ func standing(m state.Model, sheet string) string {
 		return ""
 	case "evidence":
 		return checked(m.Evidence)
+	}
+	if sheet == string(study.SheetCompare) && len(m.Study.Cases) == 0 {
+		return "○ no cases yet"
 	}
 	part := m.Result.Parts[study.Sheet(sheet)]
 	switch part.Status {

@@ -15,14 +15,6 @@ import (
 // tables, and beside them the inputs.
 func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.UI {
 	part := m.Result.Parts[sheet]
-	drawn := make([]app.UI, len(part.Charts))
-	for i, c := range part.Charts {
-		drawn[i] = &widget.Picture{Chart: c, System: m.System}
-	}
-	grids := make([]app.UI, len(part.Tables))
-	for i, g := range part.Tables {
-		grids[i] = widget.Grid("grid-"+g.ID, report.Print(g, m.System))
-	}
 	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
 		app.Div().Class("told").Body(
 			heading(string(sheet)),
@@ -30,13 +22,34 @@ func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.
 			&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
 			widget.Wanting(d, part, m.Result.Problems),
 			widget.Notes(d, "Cautions", "caution", part.Notes),
-			app.Section().Class("pictures").Aria("label", "Pictures").Body(drawn...),
+			pictures(m, part),
 			widget.Notes(d, "Remarks", "remark", part.Notes),
-			app.Section().Class("grids").Aria("label", "Tables").Body(grids...),
+			tables(m, part),
 		),
-		app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("labelledby", "inputs-title").Body(
-			append([]app.UI{app.H2().ID("inputs-title").Text("Inputs")}, forms...)...,
-		),
+		inputs("Inputs", forms...),
+	)
+}
+
+func pictures(m state.Model, part study.Part) app.UI {
+	drawn := make([]app.UI, len(part.Charts))
+	for i, c := range part.Charts {
+		drawn[i] = &widget.Picture{Chart: c, System: m.System}
+	}
+	return app.Section().Class("pictures").Aria("label", "Pictures").Body(drawn...)
+}
+
+func tables(m state.Model, part study.Part) app.UI {
+	grids := make([]app.UI, len(part.Tables))
+	for i, g := range part.Tables {
+		grids[i] = widget.Grid("grid-"+g.ID, report.Print(g, m.System))
+	}
+	return app.Section().Class("grids").Aria("label", "Tables").Body(grids...)
+}
+
+// inputs are the forms beside what they change.
+func inputs(title string, forms ...app.UI) app.UI {
+	return app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("labelledby", "inputs-title").Body(
+		append([]app.UI{app.H2().ID("inputs-title").Text(title)}, forms...)...,
 	)
 }
 

@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"slices"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -64,6 +65,7 @@ func evidenced() state.Model {
 func models() map[string]state.Model {
 	all := map[string]state.Model{"paste preview": pasted(), "evidence": evidenced()}
 	for _, s := range sheets {
+		all["cases, "+s.name] = compared(s.name)
 		all["demonstration, "+s.name] = on(s.name, after())
 		all["empty, "+s.name] = on(s.name, after(state.StartedEmpty{}))
 		all["refused, "+s.name] = refused(s.name)
@@ -311,6 +313,23 @@ func TestPastePreviewSaysHowItWasRead(t *testing.T) {
 	}
 }
 
+// A column of oil saturation may be named as such, and then is shown so.
+func TestPasteMayNameOilSaturation(t *testing.T) {
+	m := pasted()
+	m, _ = state.Update(m, state.PasteMapped{Column: 0, As: "so"})
+	chosen := ""
+	for _, n := range rendered(t, m).nodes {
+		if parent, _ := attribute(n.Parent, "id"); n.Data == "option" && parent == "paste-column-1" {
+			if value, selected := attribute(n, "selected"); selected && value != "false" {
+				chosen, _ = attribute(n, "value")
+			}
+		}
+	}
+	if chosen != "so" {
+		t.Errorf("the column is shown as %q, want so", chosen)
+	}
+}
+
 func TestEmbeddedSheetHasNoFrame(t *testing.T) {
 	p := rendered(t, after(state.Routed{Fragment: "/front?embed"}))
 	for _, id := range []string{"tab-front", "do-undo", "in-title"} {
@@ -346,6 +365,84 @@ func TestSheetOfPath(t *testing.T) {
 	} {
 		if got := sheetOf(path); got != want {
 			t.Errorf("%s is on %q, want %q", path, got, want)
+		}
+	}
+}
+
+// A form shows an input exactly when the study asks for it.
+func TestFormsHoldWhatTheStudyAsksFor(t *testing.T) {
+	for name, choices := range map[string][]state.Msg{
+		"demonstration":      nil,
+		"typed Corey":        {state.Chosen{Path: "rock.curve", Value: "corey"}},
+		"typed LET":          {state.Chosen{Path: "rock.curve", Value: "let"}},
+		"absolute reference": {state.Chosen{Path: "rock.reference", Value: "absolute"}},
+		"held pressure":      {state.Chosen{Path: "field.drive", Value: "pressure"}, state.Chosen{Path: "field.limit", Value: "oilRate"}},
+		"dipping, warm":      {state.Edited{Path: "front.dip", Text: "5", Unit: "deg"}, state.Edited{Path: "fluids.temperature", Text: "60", Unit: "degC"}},
+		"another pair":       {state.Chosen{Path: "fluids.pair", Value: study.Choices("fluids.pair")[2].Value}},
+	} {
+		m := after(choices...)
+		pages := map[study.Sheet]page{}
+		for _, sheet := range []study.Sheet{study.SheetRock, study.SheetFront, study.SheetField} {
+			pages[sheet] = rendered(t, on(string(sheet), m))
+		}
+		for _, spec := range study.Specs() {
+			if there, wanted := pages[spec.Sheet].byID[widget.FieldID(spec.Path)] != nil, spec.Applies(&m.Study); there != wanted {
+				t.Errorf("%s: the field of %s is there: %t, and the study asks for it: %t", name, spec.Path, there, wanted)
+			}
+		}
+	}
+}
+
+func TestFoldOpensForWhatIsGiven(t *testing.T) {
+	open := func(m state.Model) bool {
+		fold := rendered(t, on("front", m)).byID["fold-dip"]
+		if fold == nil {
+			t.Fatal("there is no group for gravity and dip")
+		}
+		value, there := attribute(fold, "open")
+		return there && value != "false"
+	}
+	if open(after(state.StartedEmpty{})) {
+		t.Error("an empty study shows the dip")
+	}
+	if !open(after(state.Edited{Path: "front.dip", Text: "5", Unit: "deg"})) {
+		t.Error("a dip that is given is folded away")
+	}
+	if !open(after(state.Edited{Path: "front.dip", Text: "steep", Unit: "deg"})) {
+		t.Error("a dip that was refused is folded away")
+	}
+}
+
+func TestDemonstrationSaysHowMuchIsInvented(t *testing.T) {
+	if said := rendered(t, after()).text(t, "demonstration"); !strings.HasPrefix(said, "This is an invented demonstration study.") {
+		t.Errorf("untouched, it says %q", said)
+	}
+	all, _ := invented(study.Demo())
+	said := rendered(t, after(state.Edited{Path: "fluids.oilViscosity", Text: "3", Unit: "cp"})).text(t, "demonstration")
+	if want := "This study began as the invented demonstration; " + strconv.Itoa(all-1) + " inputs in use are still invented."; !strings.HasPrefix(said, want) {
+		t.Errorf("after one edit it says %q, want %q", said, want)
+	}
+	own := study.Demo()
+	for _, spec := range study.Specs() {
+		if in := spec.Get(&own); in != nil {
+			spec.Set(&own, &study.Input{Value: in.Value, Unit: in.Unit})
+		}
+	}
+	own.Rock.Table.Source = "report, page 4"
+	m := after(state.FileChosen{Name: "own.json", Data: study.Write(own)})
+	if rendered(t, m).byID["demonstration"] != nil {
+		t.Error("a study without an invented number is called a demonstration")
+	}
+}
+
+// CSS Syntax Module Level 3, section 4.3.7: an escape is a backslash, hexadecimal
+// digits and one space.
+func TestRunningTitleStaysWithinItsQuotes(t *testing.T) {
+	for text, want := range map[string]string{
+		"Plain, title": `"Plain, title"`, `say "no"`: `"say \22 no\22 "`, `a\b`: `"a\5c b"`, "two\nlines": `"two\a lines"`, "</style>": `"\3c /style>"`,
+	} {
+		if got := quoted(text); got != want {
+			t.Errorf("%q is written %s, want %s", text, got, want)
 		}
 	}
 }

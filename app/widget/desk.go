@@ -10,6 +10,7 @@ import (
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
 	"brinefront/app/state"
+	"brinefront/physics/study"
 )
 
 // Desk is where a widget's messages go.
@@ -31,6 +32,11 @@ func dashed(path string) string { return strings.ReplaceAll(path, ".", "-") }
 func FieldID(path string) string {
 	if path == "rock.table" {
 		return pasteBox
+	}
+	if i, inner, ok := study.AtCase(path); ok && inner == "name" {
+		return caseID(i, inner)
+	} else if ok {
+		return caseID(i, "input-"+dashed(inner))
 	}
 	return "in-" + dashed(path)
 }

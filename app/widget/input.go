@@ -4,6 +4,7 @@ import (
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
 	"brinefront/app/state"
+	"brinefront/physics/study"
 )
 
 // Input is one line, or one block, of text that the model holds.
@@ -43,6 +44,8 @@ const (
 	WordsInput  InputSort = "words"   // Written
 	BlockInput  InputSort = "block"   // Written, many lines
 	PasteInput  InputSort = "pasting" // Pasted, many lines
+
+	CaseNameInput InputSort = "name" // CaseNamed
 )
 
 // message is what an edit sends.
@@ -58,6 +61,9 @@ func (i *Input) message(text string) state.Msg {
 		return state.Written{Path: i.Path, Text: text}
 	case PasteInput:
 		return state.Pasted{Text: text}
+	case CaseNameInput:
+		i, _, _ := study.AtCase(i.Path)
+		return state.CaseNamed{Index: i, Text: text}
 	}
 	return state.Edited{Path: i.Path, Text: text, Unit: i.With}
 }

@@ -13,7 +13,7 @@ var parts = []struct {
 	sheet study.Sheet
 	title string
 }{
-	{study.SheetRock, "Rock"}, {study.SheetFront, "Front"}, {study.SheetField, "Field"},
+	{study.SheetRock, "Rock"}, {study.SheetFront, "Front"}, {study.SheetField, "Field"}, {study.SheetCompare, "Compare"},
 }
 
 // Cautions are the usual ones of a screening-level answer; every report ends with them.
@@ -47,7 +47,10 @@ func Build(st study.Study, r study.Result, s units.System) Document {
 func summary(r study.Result, s units.System) Section {
 	section := Section{ID: "summary", Title: "Summary"}
 	for _, p := range parts {
-		part := r.Parts[p.sheet]
+		part, asked := r.Parts[p.sheet]
+		if !asked {
+			continue // a study without cases is not compared
+		}
 		text := Sentence(part, s)
 		if part.Status != study.Ready && part.Status != study.Stopped {
 			text = "No answer yet: " + standing(part, r) + "."

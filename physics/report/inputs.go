@@ -11,6 +11,9 @@ import (
 // Label names an input as the forms do. Paths that are not numeric inputs (the
 // table, a choice) are named by what they hold.
 func Label(path string) string {
+	if i, inner, ok := study.AtCase(path); ok {
+		return caseLabel(i, inner)
+	}
 	if spec, ok := study.Find(path); ok {
 		return spec.Label
 	}
@@ -45,6 +48,7 @@ func inputs(st study.Study, s units.System) Section {
 		Numeric: []bool{false, false, true, true, false},
 	}
 	for _, spec := range study.Specs() {
+		spec = spec.For(&st)
 		in := spec.Get(&st)
 		switch {
 		case !spec.Applies(&st):
@@ -57,6 +61,9 @@ func inputs(st study.Study, s units.System) Section {
 	section.Blocks = append(section.Blocks, Block{Table: choices(st)}, Block{Table: table})
 	if points := laboratory(st, s); points != nil {
 		section.Blocks = append(section.Blocks, Block{Table: points})
+	}
+	if changes := cases(st); changes != nil {
+		section.Blocks = append(section.Blocks, Block{Table: changes})
 	}
 	return section
 }

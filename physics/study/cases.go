@@ -118,13 +118,13 @@ func CheckCaseName(st *Study, i int, name string) *Problem {
 	return nil
 }
 
-// caseSpec describes an input that a case may change: as the study's own, but
-// that empty means as in the base case.
+// caseSpec describes an input that a case may change: as the study's own, but that
+// empty means as in the base case.
 func caseSpec(i int, path string) (Spec, bool) {
 	for _, s := range specs {
 		if s.Path == path {
 			s.Path, s.Sheet, s.of = CasePath(i, path), SheetCompare, i+1
-			s.Optional, s.Default = true, "as in the base case"
+			s.Optional, s.Default = false, "as in the base case"
 			return s, true
 		}
 	}

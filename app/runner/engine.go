@@ -41,7 +41,7 @@ func (r *Runner) evaluate(run state.Run) {
 	}
 	r.requests.running = true
 	r.mu.Unlock()
-	r.ask(request{kind: wire.Run, revision: run.Revision}, wire.Request{Kind: wire.Run, Study: &run.Study})
+	r.ask(request{kind: wire.Run, revision: run.Revision}, wire.Request{Kind: wire.Run, Study: &run.Study, Packed: true})
 }
 
 func (r *Runner) listEvidence() {
@@ -90,8 +90,7 @@ func (r *Runner) startEngine() *browser.Engine {
 
 // replied takes an answer of the engine.
 func (r *Runner) replied(born int, text string) {
-	var reply wire.Reply
-	err := json.Unmarshal([]byte(text), &reply)
+	reply, err := wire.Read([]byte(text))
 	r.mu.Lock()
 	asked, known := r.requests.open[reply.ID]
 	if born != r.requests.born || err == nil && !known {

@@ -2,7 +2,11 @@
 // text per request and one or more per reply.
 package wire
 
-import "brinefront/physics/study"
+import (
+	"encoding/json"
+
+	"brinefront/physics/study"
+)
 
 // Kinds of request.
 const (
@@ -17,6 +21,7 @@ type Request struct {
 	Kind    string       `json:"kind"`
 	Study   *study.Study `json:"study,omitempty"`
 	CheckID string       `json:"checkId,omitempty"`
+	Packed  bool         `json:"packed,omitempty"` // the reply may come as Pack has it
 }
 
 // Reply is what the engine answers. Failure is the engine's own bug in words;
@@ -25,8 +30,23 @@ type Reply struct {
 	ID      int           `json:"id"`
 	Kind    string        `json:"kind"`
 	Result  *study.Result `json:"result,omitempty"`
+	Numbers *Numbers      `json:"numbers,omitempty"` // of Result, when it was asked for packed
 	Checks  []Evidence    `json:"checks,omitempty"`
 	Failure string        `json:"failure,omitempty"`
+}
+
+// Read reads a reply, packed or not.
+func Read(text []byte) (Reply, error) {
+	var r Reply
+	if err := json.Unmarshal(text, &r); err != nil {
+		return r, err
+	}
+	if r.Result == nil || r.Numbers == nil {
+		return r, nil
+	}
+	whole, err := Unpack(*r.Result, *r.Numbers)
+	r.Result, r.Numbers = &whole, nil
+	return r, err
 }
 
 // Evidence is one published check, computed or not yet.

@@ -8,8 +8,8 @@ import (
 	"brinefront/physics/study"
 )
 
-// serveBench times a request whole, as the worker meets it: read, computed,
-// written.
+// serveBench times a request whole, as the worker meets it from the interface: read,
+// computed, written.
 func serveBench(b *testing.B, st study.Study) {
 	b.Helper()
 	for sheet, part := range study.Run(st).Parts {
@@ -17,7 +17,7 @@ func serveBench(b *testing.B, st study.Study) {
 			b.Fatalf("%s is %s: this would time something else than an answer", sheet, part.Status)
 		}
 	}
-	request := []byte(written(b, wire.Request{ID: 1, Kind: wire.Run, Study: &st}))
+	request := []byte(written(b, wire.Request{ID: 1, Kind: wire.Run, Study: &st, Packed: true}))
 	for b.Loop() {
 		Serve(request, func([]byte) {})
 	}

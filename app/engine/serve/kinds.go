@@ -17,5 +17,10 @@ func run(asked wire.Request, send func(wire.Reply)) {
 		panic("a request to run that holds no study")
 	}
 	result := study.Run(*asked.Study)
-	send(wire.Reply{Result: &result})
+	if !asked.Packed {
+		send(wire.Reply{Result: &result})
+		return
+	}
+	rest, numbers := wire.Pack(result)
+	send(wire.Reply{Result: &rest, Numbers: &numbers})
 }

@@ -59,6 +59,30 @@ func TestRunAnswersWithTheResult(t *testing.T) {
 	}
 }
 
+// What is asked for packed says the same.
+func TestPackedAnswer(t *testing.T) {
+	demo := study.Demo()
+	var reply wire.Reply
+	Serve([]byte(written(t, wire.Request{ID: 1, Kind: wire.Run, Study: &demo, Packed: true})), func(text []byte) {
+		var err error
+		if reply, err = wire.Read(text); err != nil {
+			t.Fatal(err)
+		}
+	})
+	plain := answers(t, written(t, wire.Request{ID: 1, Kind: wire.Run, Study: &demo}))[0]
+	got, err := json.Marshal(reply)
+	if err != nil {
+		t.Fatal(err)
+	}
+	want, err := json.Marshal(plain)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if string(got) != string(want) {
+		t.Errorf("packed and read: %.300s, plain: %.300s", got, want)
+	}
+}
+
 func TestUnusableStudyIsNoFailure(t *testing.T) {
 	empty := study.Empty()
 	replies := answers(t, written(t, wire.Request{ID: 1, Kind: wire.Run, Study: &empty}))

@@ -1,0 +1,115 @@
+package wire
+
+import (
+	"encoding/binary"
+	"errors"
+	"maps"
+	"math"
+	"slices"
+
+	"brinefront/physics/study"
+)
+
+// Numbers are the series of a result's charts and tables: nine tenths of a reply.
+// As digits between commas they would take longer to read than to compute; as
+// bytes they are read at once and lose no bit. Lines that share a series, as the
+// curves over one saturation do, share it here.
+type Numbers struct {
+	Place   []int  `json:"place"`   // of every series of the result, among the distinct ones; -1: it has none
+	Lengths []int  `json:"lengths"` // of the distinct series
+	Bytes   []byte `json:"bytes"`   // these end to end: IEEE 754 doubles, little-endian
+}
+
+const doubleSize = 8 // bytes
+
+// Pack parts a result into numbers and the rest. The result itself is left alone.
+func Pack(whole study.Result) (rest study.Result, numbers Numbers) {
+	rest = own(whole)
+	places := map[*float64]int{} // by the first number of a series
+	for _, series := range all(rest) {
+		place := -1
+		if s := *series; len(s) > 0 {
+			known := false
+			if place, known = places[&s[0]]; !known || numbers.Lengths[place] != len(s) {
+				place = len(numbers.Lengths)
+				places[&s[0]] = place
+				numbers.Lengths = append(numbers.Lengths, len(s))
+				for _, v := range s {
+					numbers.Bytes = binary.LittleEndian.AppendUint64(numbers.Bytes, math.Float64bits(v))
+				}
+			}
+		}
+		numbers.Place = append(numbers.Place, place)
+		*series = nil
+	}
+	return rest, numbers
+}
+
+// Unpack puts the numbers back where Pack took them from. A series that was empty
+// comes back as nil. Errors: the numbers belong to another result.
+func Unpack(rest study.Result, numbers Numbers) (study.Result, error) {
+	whole := own(rest)
+	left := numbers.Bytes
+	distinct := make([][]float64, len(numbers.Lengths))
+	for i, n := range numbers.Lengths {
+		if n < 0 || len(left)/doubleSize < n {
+			return rest, errForeign
+		}
+		distinct[i] = make([]float64, n)
+		for j := range distinct[i] {
+			distinct[i][j] = math.Float64frombits(binary.LittleEndian.Uint64(left[doubleSize*j:]))
+		}
+		left = left[doubleSize*n:]
+	}
+	series := all(whole)
+	if len(left) > 0 || len(series) != len(numbers.Place) {
+		return rest, errForeign
+	}
+	for i, place := range numbers.Place {
+		switch {
+		case place >= len(distinct):
+			return rest, errForeign
+		case place >= 0:
+			*series[i] = distinct[place]
+		}
+	}
+	return whole, nil
+}
+
+var errForeign = errors.New("the packed numbers do not fit the result they came with")
+
+// own is a copy whose series can be exchanged.
+func own(r study.Result) study.Result {
+	r.Parts = maps.Clone(r.Parts)
+	for sheet, part := range r.Parts {
+		part.Charts, part.Tables = slices.Clone(part.Charts), slices.Clone(part.Tables)
+		for i := range part.Charts {
+			part.Charts[i].Lines = slices.Clone(part.Charts[i].Lines)
+		}
+		for i := range part.Tables {
+			part.Tables[i].Columns = slices.Clone(part.Tables[i].Columns)
+		}
+		r.Parts[sheet] = part
+	}
+	return r
+}
+
+// all lists the series of a result, always in the same order.
+func all(r study.Result) []*[]float64 {
+	var list []*[]float64
+	for _, sheet := range slices.Sorted(maps.Keys(r.Parts)) {
+		part := r.Parts[sheet]
+		for _, chart := range part.Charts {
+			for i := range chart.Lines {
+				l := &chart.Lines[i]
+				list = append(list, &l.X, &l.Y, &l.Low)
+			}
+		}
+		for _, table := range part.Tables {
+			for i := range table.Columns {
+				list = append(list, &table.Columns[i].Values)
+			}
+		}
+	}
+	return list
+}

@@ -17,6 +17,7 @@ import { style } from "./plot/style.js";
 use([LineChart, ScatterChart, CustomChart, GridComponent, SVGRenderer]);
 
 const printedWidth = 640; // dots: the text area of A4 and of Letter, near enough; the page scales the rest
+const printedHeight = 270; // so that two pictures and their words stand on a page
 const plots = new Map(); // by holder
 const kept = new Map(); // by holder: where the slider stands and what is pinned, while another sheet is looked at
 let printing = false;
@@ -146,7 +147,7 @@ class Plot {
   redraw() {
     const width = printing ? printedWidth : this.width;
     if (!this.picture || width === 0) return;
-    const height = Math.round(Math.min(420, Math.max(260, 0.58 * width)));
+    const height = printing ? printedHeight : Math.round(Math.min(420, Math.max(260, 0.58 * width)));
     this.drawn = drawing(this.picture, this.state, width, height, this.family, this.palette);
     this.chart ??= init(this.canvas, null, { renderer: "svg", width, height });
     if (this.size !== `${width} ${height}`) {

@@ -168,7 +168,7 @@ func TestMovingLinesStandWhereTheSliderSays(t *testing.T) {
 
 // A pin is the same point after an edit, after a step of the slider, in other units.
 func TestPinsComeBack(t *testing.T) {
-	const readings = `readings: [{ label: "speed", unit: "", values: [0, 1, 2] }, { label: "arrives after", unit: "PV", values: [0, 1, 0.5], words: ["never", "", ""] }]`
+	const readings = `readings: [{ label: "speed", unit: "", values: [0, 1, 2] }, { label: "Arrives after", unit: "PV", values: [0, 1, 0.5], words: ["never", "", ""] }]`
 	const curve = `{ id: "f", label: "flow", data: [[0.2, 0], [0.4, 50], [0.6, 100]], ` + readings + ` }`
 	const edited = `{ id: "f", label: "flow", data: [[0.2, 0], [0.3, 9], [0.41, 70], [0.6, 100]], ` + readings + ` }`
 	const profile = `{ id: "p", label: "profile", moving: true, data: [[0, 0.6], [1, 0.4], [2, 0.2]], ` + readings + ` }`
@@ -187,13 +187,13 @@ func TestPinsComeBack(t *testing.T) {
 		{`found({ line: "f", index: 2, along: 9, unit: "ft" }, ` + picture(curve) + `)`, `{"line":"f","index":2,"along":0.6,"unit":""}`},
 		{`found({ line: "gone", index: 2, along: 9, unit: "" }, ` + picture(curve) + `)`, `{"line":"gone","index":2,"along":9,"unit":""}`},
 		{`pinText(pinned(` + curve + `, 2, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
-			`"Sw 0.600, fw 100` + hard + `%: speed 2.00, arrives after 0.500` + hard + `PV"`},
+			`"Sw 0.600, fw 100` + hard + `%: speed 2.00; arrives after 0.500` + hard + `PV"`},
 		{`pinText(pinned(` + curve + `, 0, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
-			`"Sw 0.200, fw 0` + hard + `%: speed 0, arrives after never"`},
+			`"Sw 0.200, fw 0` + hard + `%: speed 0; arrives after never"`},
 		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 0.5).lines`) + `, ` + moving + `)`,
-			`"Sw 0.400, x/L 0.500: speed 1.00, arrives after 1.00` + hard + `PV"`},
+			`"Sw 0.400, x/L 0.500: speed 1.00; arrives after 1.00` + hard + `PV"`},
 		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 2).lines`) + `, ` + moving + `)`, // it has left the picture
-			`"Sw 0.400: speed 1.00, arrives after 1.00` + hard + `PV"`},
+			`"Sw 0.400: speed 1.00; arrives after 1.00` + hard + `PV"`},
 		{`[0.5, 2].map((at) => pinMarks([pinned(` + profile + `, 1, ` + moving + `)], ` + lay(`still(`+moving+`, at).lines`) + `, ` + moving + `).map((m) => [m.label, m.x, m.y]))`,
 			`[[["Sw 0.400",0.5,0.4]],[]]`},
 	})

@@ -19,14 +19,10 @@ type Front struct {
 // Render draws the sheet.
 func (f *Front) Render() app.UI {
 	d, m := f.Desk, f.Model
-	fold := func(group, title string) app.UI {
-		return &widget.Fold{Desk: d, Model: m, Sheet: study.SheetFront, Group: group, Title: title}
-	}
 	return laid(d, m, study.SheetFront,
 		widget.Group(d, m, study.SheetFront, "Fluids", "Fluids at reservoir conditions",
 			widget.Choice(d, "fluids.pair", "What displaces what", m.Study.Fluids.Pair, study.Choices("fluids.pair"), "Labels, usual values and cautions follow the pair.")),
 		widget.Group(d, m, study.SheetFront, "States", "Saturations before and behind"),
-		fold("Dip", "Gravity and dip"),
-		fold("Water properties", "Water properties"),
+		&widget.Fold{Desk: d, Model: m, Sheet: study.SheetFront, Group: "Dip", Title: "Gravity and dip"},
 	)
 }

@@ -8,6 +8,7 @@ const spacing = 6; // dots between samples of a line
 const tries = 30; // places tried along a line
 const gap = 5; // between a line and its label
 const clear = 30; // farther from other lines than this is no better
+const many = 5; // lines: among more, a label across a line could be any line's
 
 // placeLabels returns [{text, line?, x, y, w}] with x, y the upper left corner.
 export function placeLabels(lay, marks) {
@@ -29,7 +30,7 @@ export function placeLabels(lay, marks) {
     const own = samples.filter((s) => s.of === c.line);
     const stride = Math.ceil(own.length / tries);
     const tried = own.filter((_, i) => i % stride === 0);
-    take(c.line.label, c.line, tried.flatMap((s) => beside(s, gap)), c.line.kind === "points");
+    take(c.line.label, c.line, tried.flatMap((s) => beside(s, gap)), c.line.kind === "points" || drawn.length > many);
   }
   return placed;
 

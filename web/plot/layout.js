@@ -30,8 +30,8 @@ export function layout(picture, state, width, height, family) {
   const left = Math.ceil(yTicks.reduce((w, t) => Math.max(w, measure(t.text)), 8)) + 12;
   const upright = axis(view.y, scaleY, height - bottom, top, yTicks);
   const lead = 10; // before a label at the end of a line
-  const ends = freeEnds(shown, view.x, scaleX, upright).filter((l) => measure(l.label) < 0.28 * width);
-  const margin = width < 480 ? 0 : ends.reduce((w, l) => Math.max(w, measure(l.label) + lead + 6), 0);
+  const ends = freeEnds(shown, view.x, scaleX, upright).filter((l) => measure(l.label) < (width < 480 ? 0.16 : 0.28) * width);
+  const margin = ends.reduce((w, l) => Math.max(w, measure(l.label) + lead + 6), 0);
   const last = 14; // room for half of the last tick's text
   const rect = { left, top, right: width - Math.max(margin, last), bottom: height - bottom };
   const xTicks = fitting(view.x, scaleX, rect.right - rect.left, measure);

@@ -37,7 +37,7 @@ export function pinMarks(pins, lay, picture) {
   });
 }
 
-// pinText is a pin as a sentence: "Sw 0.52, fw 71.2 %: speed 1.31, arrives after 0.76 PV".
+// pinText is a pin as a sentence: "Sw 0.52, fw 71.2 %: speed 1.31; arrives after 0.76 PV".
 export function pinText(pin, lay, picture) {
   const course = lay.courses.find((c) => c.line.id === pin.line && c.shown);
   const origin = course && (course.line.origin ?? course.line);
@@ -47,8 +47,11 @@ export function pinText(pin, lay, picture) {
   const now = pin.index < course.line.own && course.line.data[pin.index];
   if (now) place.push(withUnit(`${other.short} ${reading(now[1 - k], told)}`, other.unit));
   const several = lay.courses.filter((c) => c.line.readings).length > 1;
-  return `${several ? `${origin.label}, ` : ""}${place.join(", ")}: ${details(origin, pin.index, told).map((d) => `${d.label} ${d.text}`).join(", ")}`;
+  return `${several ? `${origin.label}, ` : ""}${place.join(", ")}: ${details(origin, pin.index, told).map((d) => `${within(d.label)} ${d.text}`).join("; ")}`;
 }
+
+// within is a label in the middle of a sentence; a symbol stays as it is.
+const within = (label) => (/^\p{Lu}\p{Ll}*[ ,]|^\p{Lu}\p{Ll}{2,}$/u.test(label) ? label[0].toLowerCase() + label.slice(1) : label);
 
 const name = (line, along, picture) => withUnit(`${axisOf(line, picture).short} ${reading(along, told)}`, axisOf(line, picture).unit);
 

@@ -108,12 +108,12 @@ func (f *front) brineFigures(s *sheet) {
 	}
 	for _, p := range viscosities(f.pair) {
 		f.computed(s, p, "{µ0} {r}", ref.IAPWSR12, ref.Phillips1981, func(w *working) {
-			w.value("µ0", "viscosity of fresh water", b.fresh.Viscosity, units.Viscosity).value("r", "brine over fresh water", b.salty.Viscosity/b.fresh.Viscosity, units.Number)
+			w.value("µ0", "viscosity without salt", b.fresh.Viscosity, units.Viscosity).value("r", "what salt multiplies it by", b.salty.Viscosity/b.fresh.Viscosity, units.Number)
 		})
 	}
 	for _, p := range densities(f.pair) {
 		f.computed(s, p, "{ρ0} + {Δρs}", ref.IAPWSIF97, ref.BatzleWang1992, func(w *working) {
-			w.value("ρ0", "density of fresh water", b.fresh.Density, units.Density).value("Δρs", "what salt adds", b.salty.Density-b.fresh.Density, units.Density)
+			w.value("ρ0", "density without salt", b.fresh.Density, units.Density).value("Δρs", "what salt adds", b.salty.Density-b.fresh.Density, units.Density)
 		})
 	}
 }
@@ -124,7 +124,7 @@ func (f *front) computed(s *sheet, p property, formula string, water, salt ref.I
 	if spec.Get(s.st) != nil || !p.brine || !spec.Applies(s.st) {
 		return
 	}
-	w := s.by("{"+spec.Symbol+"} = "+formula, "Fresh water at "+units.Format(f.brine.temperature-273.15, 4)+" °C and "+units.Format(f.brine.pressure/1e6, 4)+" MPa, corrected for "+units.Format(100*f.brine.salinity, 3)+" % of salt by weight, counted as sodium chloride.", water)
+	w := s.by("{"+spec.Symbol+"} = "+formula, "Without salt at "+units.Format(f.brine.temperature-273.15, 4)+" °C and "+units.Format(f.brine.pressure/1e6, 4)+" MPa, then corrected for "+units.Format(100*f.brine.salinity, 3)+" % of salt by weight, counted as sodium chloride.", water)
 	if f.brine.salinity > 0 {
 		w.Sources = append(w.Sources, salt)
 	}

@@ -49,6 +49,14 @@ func Find(path string) (Spec, bool) {
 // Applies reports whether the study, with the choices it has, asks for the input.
 func (s Spec) Applies(st *Study) bool { return s.when == nil || s.when(st) }
 
+// For returns the description in the words of the study's pair of fluids.
+func (s Spec) For(st *Study) Spec {
+	if w := wordsOf(pairOf(st)); w != nil {
+		s.Label, s.Symbol, s.Default, s.Help = w.tell(s.Label), w.symbol(s.Symbol), w.tell(s.Default), w.tell(s.Help)
+	}
+	return s
+}
+
 // Get returns the input of a study, nil when nothing is given.
 func (s Spec) Get(st *Study) *Input {
 	if s.of > 0 {

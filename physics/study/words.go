@@ -4,6 +4,7 @@ import (
 	"regexp"
 	"slices"
 	"strings"
+	"sync"
 	"unicode"
 	"unicode/utf8"
 
@@ -21,16 +22,28 @@ type words struct {
 }
 
 // wordsOf are the words of a pair; nil for the pair that texts are written for.
-func wordsOf(p fluid.Pair) *words {
-	if p.ID == fluid.BrineOil {
-		return nil
+func wordsOf(p fluid.Pair) *words { return vocabulary()[p.ID] }
+
+var vocabulary = sync.OnceValue(func() map[fluid.PairID]*words {
+	all := map[fluid.PairID]*words{}
+	for _, p := range fluid.Pairs() {
+		if p.ID != fluid.BrineOil {
+			all[p.ID] = newWords(p)
+		}
 	}
+	return all
+})
+
+func newWords(p fluid.Pair) *words {
 	d, r := p.Displacing, p.Resident
 	w := &words{list: map[string]string{}}
 	for from, to := range map[string]string{
 		"water": d.Name, "oil": r.Name, "connate water": d.ImmobileName, "residual oil": r.ImmobileName,
 	} {
 		w.list[from], w.list[capital(from)] = to, capital(to)
+	}
+	if r.Saturation == "SL" { // connate water is part of what is in place
+		w.list["oil in place"], w.list["Oil in place"] = "liquid in place", "Liquid in place"
 	}
 	w.list["Swc"], w.list["Sor"] = d.Immobile, r.Immobile
 	w.list["WOR"] = strings.ToUpper(d.Symbol+r.Symbol) + "R"

@@ -111,9 +111,9 @@ class Plot {
   slideTo(value) {
     this.state.at = value;
     this.keep();
+    if (!this.drawn) return;
     this.frame ??= requestAnimationFrame(() => {
       this.frame = null;
-      if (!this.chart) return;
       this.drawn = slid(this.drawn, this.picture, this.state, this.palette);
       this.chart.setOption(this.drawn.option);
     });
@@ -147,6 +147,8 @@ class Plot {
   redraw() {
     const width = printing ? printedWidth : this.width;
     if (!this.picture || width === 0) return;
+    cancelAnimationFrame(this.frame); // what is drawn here is newer
+    this.frame = null;
     const height = printing ? printedHeight : Math.round(Math.min(420, Math.max(260, 0.58 * width)));
     this.drawn = drawing(this.picture, this.state, width, height, this.family, this.palette);
     this.chart ??= init(this.canvas, null, { renderer: "svg", width, height });

@@ -189,7 +189,7 @@ func TestPinsComeBack(t *testing.T) {
 		{`pinText(pinned(` + curve + `, 2, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
 			`"Sw 0.600, fw 100` + hard + `%: speed 2.00; arrives after 0.500` + hard + `PV"`},
 		{`pinText(pinned(` + curve + `, 0, ` + picture(curve) + `), ` + lay(`still(`+picture(curve)+`, null).lines`) + `, ` + picture(curve) + `)`,
-			`"Sw 0.200, fw 0` + hard + `%: speed 0; arrives after never"`},
+			`"Sw 0.200, fw 0` + hard + `%: speed 0; arrives after: never"`},
 		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 0.5).lines`) + `, ` + moving + `)`,
 			`"Sw 0.400, x/L 0.500: speed 1.00; arrives after 1.00` + hard + `PV"`},
 		{`pinText(pinned(` + profile + `, 1, ` + moving + `), ` + lay(`still(`+moving+`, 2).lines`) + `, ` + moving + `)`, // it has left the picture

@@ -47,7 +47,7 @@ export function pinText(pin, lay, picture) {
   const now = pin.index < course.line.own && course.line.data[pin.index];
   if (now) place.push(withUnit(`${other.short} ${reading(now[1 - k], told)}`, other.unit));
   const several = lay.courses.filter((c) => c.line.readings).length > 1;
-  return `${several ? `${origin.label}, ` : ""}${place.join(", ")}: ${details(origin, pin.index, told).map((d) => `${within(d.label)} ${d.text}`).join("; ")}`;
+  return `${several ? `${origin.label}, ` : ""}${place.join(", ")}: ${details(origin, pin.index, told).map((d) => `${within(d.label)}${d.word ? ":" : ""} ${d.text}`).join("; ")}`;
 }
 
 // within is a label in the middle of a sentence; a symbol stays as it is.
@@ -57,5 +57,8 @@ const name = (line, along, picture) => withUnit(`${axisOf(line, picture).short} 
 
 // details are the readings of a point: its value, or a word where it has none.
 export function details(line, index, digits) {
-  return line.readings.map((r) => ({ label: r.label, text: r.words?.[index] || withUnit(reading(r.values[index], digits), r.unit) }));
+  return line.readings.map((r) => {
+    const word = r.words?.[index];
+    return { label: r.label, word: Boolean(word), text: word || withUnit(reading(r.values[index], digits), r.unit) };
+  });
 }

@@ -43,6 +43,7 @@ const (
 	Oleinik1957          ID = "oleinik-1957"
 	Osher1984            ID = "osher-1984"
 	PerthameShu1996      ID = "perthame-shu-1996"
+	Perry2019            ID = "perry-2019"
 	Phillips1981         ID = "phillips-1981"
 	Pope1980             ID = "pope-1980"
 	Roe1986              ID = "roe-1986"
@@ -89,6 +90,7 @@ var sources = map[ID]Source{
 	Nielsen1999:          {Authors: "Nielsen", Year: 1999, Title: "Damping parameter in Marquardt's method", Where: "Report IMM-REP-1999-05, Technical University of Denmark"},
 	Lomeland2005:         {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
 	Oleinik1957:          {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
+	Perry2019:            {Authors: "Green & Southard (eds.)", Year: 2019, Title: "Perry's Chemical Engineers' Handbook", Where: "9th ed., McGraw-Hill"},
 	Phillips1981:         {Authors: "Phillips, Igbene, Fair, Ozbek & Tavana", Year: 1981, Title: "A technical databook for geothermal energy utilization", Where: "Report LBL-12810, Lawrence Berkeley Laboratory"},
 	Pope1980:             {Authors: "Pope", Year: 1980, Title: "The application of fractional flow theory to enhanced oil recovery", Where: "SPE J. 20(3), 191-205"},
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},

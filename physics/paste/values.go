@@ -12,10 +12,15 @@ import (
 func (r Reading) interpret(roles []role, remarks []string) Reading {
 	said := notes{remarks: slices.Concat(r.layout, remarks)}
 	columns := make([]Column, len(r.Columns))
+	krPercent := r.krPercent(roles)
 	for i := range columns {
 		columns[i] = Column{Title: r.Columns[i].Title, As: roles[i].as, Oil: roles[i].oil}
-		if columns[i].As != "" {
-			r.fill(i, &columns[i], &said)
+		switch columns[i].As {
+		case "":
+		case Sw:
+			r.fill(i, &columns[i], r.swPercent(i), &said)
+		default:
+			r.fill(i, &columns[i], krPercent, &said)
 		}
 	}
 	r.Columns = columns
@@ -73,15 +78,16 @@ func falls(sw []float64) bool {
 	return len(sw) > 1 && sw[len(sw)-1] < sw[0]
 }
 
-// fill reads one column.
-func (r Reading) fill(i int, c *Column, said *notes) {
+// fill reads one column; guess says that its numbers look like percent where its
+// heading names no unit.
+func (r Reading) fill(i int, c *Column, guess bool, said *notes) {
 	name := fmt.Sprintf("Column %d (%s)", i+1, labels[c.As])
 	unit := unitOf(c.Title)
 	switch {
 	case unit == 100:
 		c.Percent = true
 		said.remark(name + " is in percent, as its heading says; its values were divided by 100.")
-	case unit == 0 && c.As == Sw && r.looksPercent(i):
+	case unit == 0 && guess:
 		c.Percent = true
 		said.remark(name + " reaches beyond 1 and stays within 100, so it was read as percent; no heading says so.")
 	}
@@ -137,26 +143,6 @@ func (r Reading) cell(row, column int, percent bool) (float64, bool) {
 		return math.NaN(), false
 	}
 	return number(r.Cells[row][column], r.Decimal, percent)
-}
-
-// looksPercent reports whether half of a column's numbers or more lie above 1 and
-// none above 100.
-func (r Reading) looksPercent(column int) bool {
-	above, count := 0, 0
-	for row := range r.Cells {
-		v, ok := r.cell(row, column, false)
-		if !ok {
-			continue
-		}
-		if v > 100 {
-			return false
-		}
-		count++
-		if v > 1 {
-			above++
-		}
-	}
-	return above > 0 && 2*above >= count
 }
 
 func hasSign(cell string) bool { return cell[len(cell)-1] == '%' }

@@ -15,7 +15,8 @@ const (
 )
 
 // Value prints a figure as the screen, the page and the text do: durations in
-// the span that suits them, everything else in the unit of the system.
+// the span that suits them and with a digit less, everything else in the unit of
+// the system.
 func Value(f study.Figure, s units.System) string { return printed(f.Value, f.Quantity, s, digits) }
 
 // Spoken prints a figure as a sentence says it.
@@ -25,7 +26,7 @@ func Spoken(f study.Figure, s units.System) string {
 
 func printed(si float64, q units.Quantity, s units.System, digits int) string {
 	if q == units.Duration {
-		return units.Span(si)
+		return units.Span(si, digits-1)
 	}
 	return units.Print(si, s.Unit(q), digits)
 }

@@ -64,22 +64,6 @@ func TestPrint(t *testing.T) {
 	}
 }
 
-func TestSpan(t *testing.T) {
-	for _, c := range []struct {
-		seconds float64
-		want    string
-	}{
-		{0, "0~seconds"}, {0.25, "0.25~seconds"}, {0.949, "0.95~seconds"}, {0.9999, "1~second"}, {1, "1~second"}, {1.04, "1~second"}, {12.4, "12~seconds"}, {59.4, "59~seconds"}, {59.7, "1~minute"},
-		{90, "1.5~minutes"}, {2400, "40~minutes"}, {3599, "1~hour"}, {5.2 * 3600, "5.2~hours"}, {23.4 * 3600, "23~hours"}, {23.8 * 3600, "1~day"},
-		{37 * 86400, "37~days"}, {1.25 * 86400, "1.3~days"}, {365 * 86400, "365~days"}, {365.25 * 86400, "1~year"}, {1.4 * year, "1.4~years"}, {12.34 * year, "12.3~years"},
-		{99.97 * year, "100~years"}, {123.4 * year, "123~years"}, {54321 * year, "54'321~years"}, {-37 * 86400, "−37~days"}, {math.Inf(1), "∞"}, {math.NaN(), "not a number"},
-	} {
-		if got := seen(Span(c.seconds)); got != c.want {
-			t.Errorf("Span(%v) = %q, want %q", c.seconds, got, c.want)
-		}
-	}
-}
-
 // FuzzFormat: what is printed for reading can be pasted back, and at seventeen
 // digits nothing is lost.
 func FuzzFormat(f *testing.F) {

@@ -31,6 +31,7 @@ const (
 	Temperature        Quantity = "temperature"        // a level, never a difference
 	Salinity           Quantity = "salinity"           // mass of salt in the mass of brine
 	InterfacialTension Quantity = "interfacialTension" // force per length between two phases
+	HeatCapacity       Quantity = "heatCapacity"       // heat per volume and degree of temperature
 )
 
 // Unit is one way to write a quantity: SI = (number + Zero) Factor.
@@ -49,7 +50,7 @@ func (u Unit) FromSI(si float64) float64 { return si/u.Factor - u.Zero }
 
 // Exact definitions: foot and pound, NIST SP 811 app. B; barrel, 42 US gallons of
 // 231 in3; millidarcy, from the darcy's own definition (1 cp cm2/(s atm)); the zeros of the
-// Celsius and Fahrenheit scales, NIST SP 811 app. B.
+// Celsius and Fahrenheit scales and the British thermal unit, NIST SP 811 app. B.
 const (
 	foot   = 0.3048
 	inch   = 0.0254
@@ -61,6 +62,7 @@ const (
 	day    = 86400.0
 	year   = 365.25 * day
 	acre   = 43560 * foot * foot
+	btu    = 1055.05585262 // International Table
 	degree = 3.14159265358979323846264338327950288 / 180
 )
 
@@ -90,6 +92,7 @@ var catalogue = []Unit{
 	{"degC", Temperature, 1, 273.15}, {"degF", Temperature, 5.0 / 9, 459.67}, {"K", Temperature, 1, 0},
 	{"wt%", Salinity, 0.01, 0}, {"g/kg", Salinity, 1e-3, 0}, {"ppm", Salinity, 1e-6, 0},
 	{"mN/m", InterfacialTension, 1e-3, 0}, {"dyn/cm", InterfacialTension, 1e-3, 0}, {"N/m", InterfacialTension, 1, 0},
+	{"MJ/(m3.K)", HeatCapacity, 1e6, 0}, {"kJ/(m3.K)", HeatCapacity, 1e3, 0}, {"J/(m3.K)", HeatCapacity, 1, 0}, {"Btu/(ft3.degF)", HeatCapacity, btu * 1.8 / (foot * foot * foot), 0},
 }
 
 // Of lists the units a quantity may be written in, the most used first.

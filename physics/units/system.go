@@ -17,7 +17,7 @@ var defaults = map[System]map[Quantity]string{
 	Field: {
 		FormationFactor: "rb/stb", WaterOilRatio: "bbl/bbl", Viscosity: "cp", Permeability: "md", Length: "ft", Area: "acre",
 		Volume: "bbl", Pressure: "psi", Rate: "bbl/d", Velocity: "ft/d", Duration: "d", Density: "lb/ft3",
-		Temperature: "degF", InterfacialTension: "dyn/cm",
+		Temperature: "degF", InterfacialTension: "dyn/cm", HeatCapacity: "Btu/(ft3.degF)",
 	},
 	Metric: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "m", Area: "ha",

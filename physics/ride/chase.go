@@ -54,12 +54,11 @@ func (s *Slug) At(x, q float64) (n Node, ok bool) {
 		return Node{}, false
 	case q <= s.size || x >= rear:
 		return s.flood.At(x / q), true
-	case x <= 0:
-		return Node{s.face.s, 0, s.face.f, Chase}, true
 	case !s.clear:
 		return Node{}, false
 	}
 	slug, _ := s.at(q)
+	x = math.Max(0, x)
 	p, _ := s.behindRear(x, q, s.beside(slug))
 	return Node{p.s, x / q, p.f, Chase}, true
 }
@@ -79,9 +78,10 @@ func (s *Slug) Path(q float64) (nodes []Node, ok bool) {
 	}
 	slug, _ := s.at(q)
 	low := s.beside(slug)
-	nodes = []Node{{s.face.s, 0, s.face.f, Chase}}
+	face, _ := s.behindRear(0, q, low)
+	nodes = []Node{{face.s, 0, face.f, Chase}}
 	add := func(sw, f, x float64) {
-		if x < rear*(1-alike) { // the state at the rear itself follows
+		if x > 0 && x < rear*(1-alike) { // the state at the rear itself follows
 			nodes = append(nodes, Node{sw, math.Max(nodes[len(nodes)-1].Xi, x/q), f, Chase})
 		}
 	}
@@ -102,27 +102,31 @@ func (s *Slug) Path(q float64) (nodes []Node, ok bool) {
 }
 
 // After returns the state when q pore volumes have been injected, slug and chase water
-// together; ok as for At. Until the rear arrives it is that of continuous injection, but
-// for what has been injected. Then, with psi of the outlet,
+// together; ok as for At. With psi of the inlet and of the outlet,
 //
-//	water produced = psi + Si,  savg = Si + water injected - water produced
+//	water injected = psi(0, Q),  water produced = psi(1, Q) + Si,  savg = Si + injected - produced
+//
+// where psi of the outlet is that of continuous injection until the rear arrives: till
+// then no state of the chase water need be known, unless oil leaves at the inlet.
 func (s *Slug) After(q float64) (State, bool) {
 	if q <= s.size {
 		return s.flood.After(q), true
 	}
 	slug, rear := s.at(q)
-	if spent, _ := s.Spent(); q > spent || rear > 1 && !s.clear {
+	if spent, _ := s.Spent(); q > spent || !s.clear && (rear > 1 || !s.steady) {
 		return State{}, false
 	}
-	var state State
-	if rear <= 1 {
-		state = s.flood.After(q)
-	} else {
-		n, psi := s.behindRear(1, q, s.beside(slug))
+	low := s.beside(slug)
+	water := s.size*s.flood.face.F + (q-s.size)*s.chase.at(s.from).f
+	if !s.steady {
+		_, water = s.behindRear(0, q, low)
+	}
+	state := s.flood.After(q)
+	if rear > 1 {
+		n, psi := s.behindRear(1, q, low)
 		state = State{Sw: n.s, Cut: n.f, Zone: Chase, Water: psi + s.flood.initial}
 		state.Carried.Produced = s.phi - (s.flood.pivot.B - s.rear.B) // the rest is kept for good
 	}
-	water := s.size*s.flood.face.F + (q-s.size)*s.face.f
 	state.Oil = q - state.Water
 	state.Recovery = water - state.Water
 	state.Average = s.flood.initial + state.Recovery

@@ -74,8 +74,10 @@
 //
 // At the front the bracket is v (b - b_rear), which gives the place where the slug is
 // spent, size (f_inlet + a)/(b - b_rear). If the passenger is given back in full the rear
-// never catches up, as its balance says: only mixing wears such a slug down. The chase
-// water behind the rear is followed along its own straight characteristics.
+// never catches up, as its balance says: only mixing wears such a slug down (Tracer.Peak).
+// The chase water behind the rear is followed along its own straight characteristics, as
+// long as these do not cross; with curves of several inflections they may, and then its
+// states are not given.
 //
 // Chase water that is thinner than the slug fingers into it. That is not modelled: the
 // times given for the rear are the latest that can be hoped for.

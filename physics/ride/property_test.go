@@ -268,3 +268,101 @@ func TestRandomFloods(t *testing.T) {
 		t.Errorf("%d solved, banks %v: the draw has become one-sided", solved, limited)
 	}
 }
+
+// checkSlugProfile sums the water of a slug's profile between the nodes of its path.
+func checkSlugProfile(s *Slug, q float64) error {
+	state, ok := s.After(q)
+	path, traced := s.Path(q)
+	if !ok || !traced {
+		return fmt.Errorf("after %g PV: no state", q)
+	}
+	cuts := []float64{0}
+	for _, n := range path {
+		if x := n.Xi * q; x > cuts[len(cuts)-1] && x < 1 {
+			cuts = append(cuts, x)
+		}
+	}
+	cuts = append(cuts, 1)
+	water := 0.0
+	for i := 1; i < len(cuts); i++ {
+		water += quad.Fixed(func(x float64) float64 {
+			n, _ := s.At(x, q)
+			return n.S
+		}, cuts[i-1], cuts[i], 12, quad.Legendre{}, 0)
+	}
+	if d := math.Abs(water - state.Average); !(d <= 3e-5) { // kinks between nodes
+		return fmt.Errorf("after %g PV, slug %g, the rock holds %.9g of water, by balance %.9g", q, s.size, water, state.Average)
+	}
+	return nil
+}
+
+// checkSlugOutflow sums the water cut from the arrival of the rear on.
+func checkSlugOutflow(s *Slug, arrival float64) error {
+	before, _ := s.After(arrival)
+	end := 1.4 * arrival
+	after, ok := s.After(end)
+	if spent, _ := s.Spent(); ok != (end <= spent) {
+		return fmt.Errorf("after %g PV, spent at %g, ok is %v", end, spent, ok)
+	}
+	if !ok {
+		return nil
+	}
+	water := 0.0
+	const parts = 30
+	for i := range parts {
+		a, b := arrival+(end-arrival)*float64(i)/parts, arrival+(end-arrival)*float64(i+1)/parts
+		water += quad.Fixed(func(q float64) float64 {
+			state, _ := s.After(q)
+			return state.Cut
+		}, a, b, 3, quad.Legendre{}, 0)
+	}
+	if d := math.Abs(after.Water - before.Water - water); !(d <= 1e-5*end) {
+		return fmt.Errorf("from %g to %g PV %.9g of water leaves, by balance %.9g", arrival, end, water, after.Water-before.Water)
+	}
+	return nil
+}
+
+// The fluid ahead drives slugs of the fluid behind.
+func TestRandomSlugs(t *testing.T) {
+	r := rand.New(rand.NewPCG(1972, 1962))
+	solved, vague, refused, faults := 0, 0, 0, 0
+	for i := range 400 {
+		d := draw(r)
+		f, err := New(d.ahead, d.behind, d.pivot, d.injected, d.initial)
+		if err != nil {
+			continue
+		}
+		kept := math.Max(0, r.Float64()-0.5) * math.Max(0, d.pivot.B-d.pivot.A)
+		_, hi := d.ahead.Ends()
+		s, err := NewSlug(f, d.ahead, hi, Pivot{d.pivot.A, d.pivot.B - kept}, wide(r, 0.1, 1)*f.Arrival())
+		if err != nil {
+			if !strings.Contains(err.Error(), "less easily") && !strings.Contains(err.Error(), "send waves") {
+				t.Errorf("draw %d: %v", i, err)
+			}
+			refused++
+			continue
+		}
+		arrival, ok := s.RearArrival()
+		if !ok {
+			continue
+		}
+		if !s.clear {
+			vague++
+			continue
+		}
+		solved++
+		err = checkSlugOutflow(s, arrival)
+		if solved%12 == 0 && err == nil {
+			err = checkSlugProfile(s, 0.7*arrival)
+		}
+		if err != nil {
+			t.Errorf("draw %d: %v\n%s", i, err, d)
+			if faults++; faults > 8 {
+				t.Fatal("and so on")
+			}
+		}
+	}
+	if solved < 180 || refused < 20 || vague < 20 {
+		t.Errorf("%d solved, %d with crossing characteristics, %d refused: the draw has become one-sided", solved, vague, refused)
+	}
+}

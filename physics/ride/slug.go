@@ -5,7 +5,6 @@ import (
 	"math"
 	"sort"
 
-	"brinefront/physics/displace"
 	"brinefront/physics/fracflow"
 	"brinefront/physics/numeric"
 )
@@ -16,15 +15,15 @@ const Chase Zone = "chase"
 // Slug is a flood whose injected fluid is followed by chase water after Size pore
 // volumes. It holds until the slug is spent; see the package comment for the method.
 type Slug struct {
-	flood *Flood
-	rear  Pivot
-	size  float64
-	phi   float64 // what the slug brought in
-	chase rays
-	from  float64 // injected saturation of the chase water
-	face  spot    // inlet face while it is injected
-	top   float64 // the largest saturation of the chase water inside the rock
-	clear bool    // its characteristics do not cross
+	flood  *Flood
+	rear   Pivot
+	size   float64
+	phi    float64 // what the slug brought in
+	chase  rays
+	from   float64 // injected saturation of the chase water
+	top    float64 // the largest saturation of the chase water inside the rock
+	clear  bool    // its characteristics do not cross
+	steady bool    // its inlet stays at the injected state
 }
 
 // NewSlug follows the first size pore volumes of a flood by chase water, its own fractional
@@ -34,7 +33,8 @@ type Slug struct {
 //
 // Errors tell of a size that is not positive, a saturation outside the range, a rear pivot
 // that is not allowed or is held up more than the front, and chase water that
-// moves less easily than the slug, so that its front would send waves through the slug.
+// moves less easily than the slug, so that its front would send waves through the slug; so
+// would the rear of a slug that is injected with so much oil that water crowds it.
 func NewSlug(flood *Flood, chase fracflow.Function, injected float64, rear Pivot, size float64) (*Slug, error) {
 	if !(size > 0) || math.IsInf(size, 0) {
 		return nil, fmt.Errorf("ride: the slug is %.6g pore volumes; it must be above 0 and finite", size)
@@ -59,20 +59,26 @@ func NewSlug(flood *Flood, chase fracflow.Function, injected float64, rear Pivot
 	if best := s.chase.feeds(injected).speed; best < fastest*(1-alike) {
 		return nil, fmt.Errorf("ride: the chase water can drive the rear of the slug at a speed of %.6g at most, the slug lets it run at %.6g; water that moves less easily than the slug is not followed", best, fastest)
 	}
-	return s, s.prepare(fastest)
+	slug, err := newRays(flood.fn[0], rear)
+	if err != nil {
+		return nil, err
+	}
+	if own := s.speed(flood.face); flood.left.s > flood.face.S || slug.takes(flood.face.S).speed > own*(1+alike) {
+		_, hi := flood.fn[0].Ends()
+		return nil, fmt.Errorf("ride: the slug enters at the saturation %.6g, at which its rear would send waves through it; slugs injected at a higher one, up to %.6g, are followed", flood.face.S, hi)
+	}
+	s.prepare(fastest)
+	return s, nil
 }
 
-// prepare finds the range of saturation of the chase water inside the rock, from its
-// inlet face to the state beside the rear when that is nearest to the front.
-func (s *Slug) prepare(fastest float64) error {
+// prepare finds the range of saturation of the chase water between its inlet and the state
+// beside the rear when that is nearest to the front, and whether speeds fall towards the
+// inlet all the way.
+func (s *Slug) prepare(fastest float64) {
 	start, end := s.chase.behind(s.from, s.speed(s.flood.face)), s.chase.behind(s.from, fastest)
-	d, err := displace.New(s.chase.fn, s.from, end.s)
-	if err != nil {
-		return err
-	}
-	s.face.s, s.face.f = d.InletFace()
 	s.top = math.Max(s.from, start.s)
 	injected := s.chase.at(s.from)
+	s.steady = true
 	s.clear = s.from >= start.s || injected.f == start.f // else a wave runs after the rear
 	last := math.Inf(1)
 	for _, p := range s.chase.spots {
@@ -80,10 +86,10 @@ func (s *Slug) prepare(fastest float64) error {
 			continue
 		}
 		_, slope := s.chase.fn.At(p.s)
+		s.steady = s.steady && p.f <= injected.f
 		s.clear = s.clear && slope <= last+bend*math.Abs(last)
 		last = slope
 	}
-	return nil
 }
 
 // bend is the relative rise of slope that is rounding, not a convex curve.

@@ -99,7 +99,7 @@ func TestSlugSizes(t *testing.T) {
 }
 
 // What lies in the rock, summed over its length by the midpoint rule between the rear, the
-// waves and the ends (good to 2e-5 with 200 points in each piece), is what the balances say: water, and what rides along, with what is kept for
+// waves and the ends (good to 2e-5 with 300 points in each piece), is what the balances say: water, and what rides along, with what is kept for
 // good behind the rear. Both sides of the rear satisfy both balances there.
 func TestSlugBalances(t *testing.T) {
 	for _, c := range families(t) {
@@ -134,7 +134,7 @@ func TestSlugBalances(t *testing.T) {
 				for i := 1; i < len(cuts); i++ {
 					a, b := cuts[i-1], cuts[i]
 					sum := func(part func(n Node) float64) float64 {
-						const n = 200
+						const n = 300
 						total := 0.0
 						for j := range n { // midpoints, closer at both ends, where profiles are steep
 							u := (float64(j) + 0.5) / n
@@ -252,7 +252,7 @@ func (s *Slug) fastest(c family) float64 {
 
 // A slug smaller than what the rock keeps: the scheme catches it where the solution says
 // that it is spent. Both ends of so thin a slug are smeared into one another: halving the
-// cells brings 1.26, 1.33 and 1.38, towards the 1.41 of smeared contacts.
+// cells brings 1.26 and 1.33, towards the 1.41 of smeared contacts.
 func TestFiniteVolumesSpendTheSlug(t *testing.T) {
 	c := named(t, "polymer")
 	const kept, place = 0.3, 0.6
@@ -261,7 +261,7 @@ func TestFiniteVolumesSpendTheSlug(t *testing.T) {
 	s := slug(t, f, c, kept, f.LeastSlug(Pivot{B: c.pivot.B - kept}, place))
 	spent, _ := s.Spent()
 	var errors []float64
-	for _, n := range []int{100, 200, 400, 800} {
+	for _, n := range []int{100, 200, 400} {
 		g := newGrid(c.mix, f.pivot, s.rear, n, c.initial)
 		g.run(s.size, 1, 1, s.fastest(c))
 		g.run(1.5*spent, 0, 1, s.fastest(c))
@@ -305,5 +305,9 @@ func TestSlugRefusals(t *testing.T) {
 	thick.MuW *= 20
 	if _, err := NewSlug(f, thick, 0.77, c.pivot, 0.1); err == nil || !strings.Contains(err.Error(), "less easily") {
 		t.Errorf("thicker chase water: %v", err)
+	}
+	oily := flood(t, c.ahead, c.behind, c.pivot, 0.5, 0.2)
+	if _, err := NewSlug(oily, c.ahead, 0.77, c.pivot, 0.1); err == nil || !strings.Contains(err.Error(), "send waves") {
+		t.Errorf("a slug with much oil: %v", err)
 	}
 }

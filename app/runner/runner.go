@@ -14,7 +14,7 @@ import (
 
 // How long effects wait for a newer one of their kind.
 const (
-	runWait   = 4 * time.Millisecond   // several messages of one event are one run
+	runWait   = 0                      // several messages of one event are one run, posted before they are drawn
 	keepWait  = 400 * time.Millisecond // typing is kept now and then, not at every key
 	printWait = 100 * time.Millisecond // an answer that has just come is drawn first
 )

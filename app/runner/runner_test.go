@@ -473,19 +473,3 @@ func TestRealClock(t *testing.T) {
 		t.Errorf("came %v, want the study kept", msg)
 	}
 }
-
-// A result is decoded on the thread of the interface: a few milliseconds, no more.
-func BenchmarkDecodeReply(b *testing.B) {
-	result := study.Run(study.Demo())
-	text, err := json.Marshal(wire.Reply{ID: 1, Kind: wire.Run, Result: &result})
-	if err != nil {
-		b.Fatal(err)
-	}
-	b.SetBytes(int64(len(text)))
-	for b.Loop() {
-		var reply wire.Reply
-		if err := json.Unmarshal(text, &reply); err != nil {
-			b.Fatal(err)
-		}
-	}
-}

@@ -24,7 +24,8 @@ var programs = []program{
 	// The interface computes nothing: without inlined copies of small functions it
 	// is a twentieth smaller to download and as quick to the hand.
 	{"./app", "interface-program.js", "brinefrontInterfaceProgram", []string{"-gcflags=all=-l"}},
-	{"./app/engine", "engine-program.js", "brinefrontEngineProgram", nil},
+	// So is the part of the engine that words and orders its results.
+	{"./app/engine", "engine-program.js", "brinefrontEngineProgram", []string{"-gcflags=brinefront/physics/study=-l"}},
 }
 
 // siteFiles are what a site holds, no more and no less. Only their names are

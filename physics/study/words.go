@@ -1,7 +1,8 @@
 package study
 
 import (
-	"regexp"
+	"cmp"
+	"maps"
 	"slices"
 	"strings"
 	"sync"
@@ -18,7 +19,7 @@ import (
 type words struct {
 	list  map[string]string
 	alone map[string]string // symbols that are words elsewhere, such as the exponent no
-	find  *regexp.Regexp
+	order []string          // of list, the longest first
 }
 
 // wordsOf are the words of a pair; nil for the pair that texts are written for.
@@ -74,41 +75,40 @@ func (w *words) symbols(from, to, stems, after string) {
 	}
 }
 
-// compile makes the search for any of the words, the longest first.
+// compile puts the words in the order in which they are looked for, the longest first.
 func (w *words) compile() {
-	var all []string
-	for from := range w.list {
-		all = append(all, regexp.QuoteMeta(from))
-	}
-	slices.SortFunc(all, func(a, b string) int {
-		if len(a) != len(b) {
-			return len(b) - len(a)
-		}
-		return strings.Compare(a, b)
+	w.order = slices.SortedFunc(maps.Keys(w.list), func(a, b string) int {
+		return cmp.Or(len(b)-len(a), strings.Compare(a, b))
 	})
-	w.find = regexp.MustCompile(strings.Join(all, "|"))
 }
 
 // tell changes the words of a text. A word stands by itself: no letter or digit before
 // or after it.
 func (w *words) tell(text string) string {
 	var b strings.Builder
-	for {
-		at := w.find.FindStringIndex(text)
-		if at == nil {
-			b.WriteString(text)
-			return b.String()
-		}
-		before, _ := utf8.DecodeLastRuneInString(text[:at[0]])
-		after, _ := utf8.DecodeRuneInString(text[at[1]:])
-		word := text[at[0]:at[1]]
-		if !part(before) && !part(after) {
-			word = w.list[word]
-		}
-		b.WriteString(text[:at[0]])
-		b.WriteString(word)
-		text = text[at[1]:]
+	for before := utf8.RuneError; text != ""; {
+		from, to := w.first(text, before)
+		b.WriteString(to)
+		before, _ = utf8.DecodeLastRuneInString(from)
+		text = text[len(from):]
 	}
+	return b.String()
+}
+
+// first is what a text begins with, a word of the list or else a character, and what
+// stands for it.
+func (w *words) first(text string, before rune) (from, to string) {
+	if !part(before) {
+		for _, word := range w.order {
+			if rest, found := strings.CutPrefix(text, word); found {
+				if after, _ := utf8.DecodeRuneInString(rest); !part(after) {
+					return word, w.list[word]
+				}
+			}
+		}
+	}
+	_, n := utf8.DecodeRuneInString(text)
+	return text[:n], text[:n]
 }
 
 // part reports whether a character can belong to a word.

@@ -72,6 +72,7 @@ var choiceFields = []choiceField{
 	{"rock.curve", CurveKinds, func(s *Study) *string { return &s.Rock.Curve }},
 	{"rock.weights", Weightings, func(s *Study) *string { return &s.Rock.Weights }},
 	{"fluids.pair", Pairs, func(s *Study) *string { return &s.Fluids.Pair }},
+	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 }

@@ -55,7 +55,7 @@ func (c comparison) difference(base, o outcome) (f Figure, of [2]Figure, word st
 }
 
 // compareFigures are the differences of every case from the base. On the strip
-// stand the arrival of water, and what is recovered in the end.
+// stand the arrival of water and what is recovered in the end, where they differ.
 func compareFigures(s *sheet, all []outcome) {
 	base := all[0]
 	for _, o := range all[1:] {
@@ -65,7 +65,8 @@ func compareFigures(s *sheet, all []outcome) {
 			if !ok {
 				continue
 			}
-			f.Strip = c.name == "breakthrough" || c.name == "recoveryAtLimit" || c.name == "recoveryAtOne" && !limited
+			told := c.name == "breakthrough" || c.name == "recoveryAtLimit" || c.name == "recoveryAtOne" && !limited
+			f.Strip = told && f.Value != 0
 			was, is := of[0], of[1]
 			symbol := is.Symbol + "," + strconv.Itoa(o.index+1)
 			formula := "{" + f.Symbol + "} = {" + symbol + "} - {" + was.Symbol + "}"

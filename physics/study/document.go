@@ -113,6 +113,8 @@ type Front struct {
 
 	Dip      *Input `json:"dip,omitempty"`      // of the layer along the flow, positive when water moves up-dip; nil: 0
 	Velocity *Input `json:"velocity,omitempty"` // total Darcy velocity; nil: rate over width and thickness of the field
+
+	Rider Rider `json:"rider,omitzero"` // what rides along with the injected water
 }
 
 // Field is the linear, single-layer flood in the ground.

@@ -40,9 +40,14 @@ func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part
 		s.note(Note{ID: "field.numerics", Level: "caution", Text: "The flood could not be computed: " + front.unflooded.Error() + ".", Cause: "An input leaves no flow.", Do: "Look at the block and at the drive."})
 		return s.close(Stopped)
 	}
+	if cut := front.cutAhead(); cut < -backward || cut > 1+backward {
+		s.note(Note{ID: "field.backflow", Level: "caution", Text: "There is no forecast: at the initial saturation one phase flows back, so that the producer would have to give it to the layer.",
+			Cause: "Gravity parts the phases faster than the rate pushes them.", Do: "Raise the rate, or look at the dip and the initial saturation.", Paths: []string{"front.dip", "field.rate", "front.initialWater"}})
+		return s.close(Stopped)
+	}
 	f := &field{linear: front.linear, front: front}
 	f.limit = limit(f.linear)
-	f.end = f.reach(horizon, bounded)
+	f.end = math.Min(f.reach(horizon, bounded), f.whole())
 	extra := []float64{1}
 	if f.limit.Outcome == reservoir.Reached {
 		extra = append(extra, f.limit.PVI*(1-aside), f.limit.PVI*(1+aside))
@@ -116,6 +121,19 @@ func (f *field) reach(horizon float64, bounded bool) float64 {
 		return past * math.Max(f.limit.PVI, bt)
 	}
 	return unlimited * math.Max(1, bt)
+}
+
+// backward is the part of the flow from which a phase is taken to flow back.
+const backward = 1e-9
+
+// whole is how far a producer can take what comes: to where the stream is all water
+// and oil would flow back into the layer from beyond; +Inf where that never happens.
+func (f *field) whole() float64 {
+	if _, inlet := f.front.displacement.InletFace(); inlet <= 1+backward {
+		return math.Inf(1)
+	}
+	q, _ := f.front.displacement.PVIAtCut(1)
+	return q * (1 - aside)
 }
 
 func (f *field) answer(s *sheet) {

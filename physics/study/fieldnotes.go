@@ -10,6 +10,10 @@ func (f *field) notes(s *sheet) {
 		Cause: "Patterns and layers sweep less of the rock and bring water sooner.", Do: "Take the recovery as that of the rock that water reaches."})
 	s.note(Note{ID: "field.incompressible", Level: "remark", Text: "Rock and fluids are incompressible: what goes in comes out at once.",
 		Cause: "A depleted reservoir fills up first, and production answers later.", Do: "Add the fill-up time where gas is present or pressure has fallen."})
+	if whole := f.whole(); whole <= f.end {
+		s.note(Note{ID: "field.oilBack", Level: "caution", Text: "The forecast ends after " + units.Format(whole, 3) + " PV, when the stream at the producer is all water.",
+			Cause: "Gravity draws oil back faster than the rate pushes it: later the layer would take oil from beyond the producer.", Do: "Raise the rate where more of the oil is wanted.", Paths: []string{"front.dip", "field.rate"}})
+	}
 	f.injectionPressure(s)
 	switch f.limit.Outcome {
 	case reservoir.FromTheStart:
@@ -21,7 +25,7 @@ func (f *field) notes(s *sheet) {
 	case reservoir.Reached:
 		if f.limit.PVI > f.end {
 			s.note(Note{ID: "field.limitLater", Level: "remark", Text: "The economic limit comes after the end of the forecast.",
-				Cause: "The forecast runs to the time that was given.", Do: "Give a longer time, or none, to see the limit in the pictures.", Paths: []string{"field.horizon"}})
+				Cause: "The forecast ends before it.", Do: "Give a longer time to forecast to, or none, to see the limit in the pictures.", Paths: []string{"field.horizon"}})
 		}
 	}
 	const long = 40 // years

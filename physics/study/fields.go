@@ -2,6 +2,7 @@ package study
 
 import (
 	"math"
+	"slices"
 
 	"brinefront/physics/fluid"
 	"brinefront/physics/units"
@@ -97,7 +98,7 @@ func velocityCounts(s *Study) bool {
 	return dipping(s) || s.Fluids.Tension != nil
 }
 
-var specs = []Spec{
+var specs = slices.Concat([]Spec{
 	{Path: "rock.permeability", Sheet: SheetRock, Group: "Plug", Label: "Permeability, absolute", Symbol: "k", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Optional: true, Default: "not needed unless kr refers to another permeability",
 		Help: "Brine permeability of the plug at full saturation.", at: func(s *Study) **Input { return &s.Rock.Permeability }, when: relativeToOil},
 	{Path: "rock.oilPermeability", Sheet: SheetRock, Group: "Plug", Label: "Oil permeability at initial water", Symbol: "ko(Swi)", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Optional: true, Default: "needed when kr refers to it",
@@ -138,7 +139,7 @@ var specs = []Spec{
 
 	{Path: "front.dip", Sheet: SheetFront, Group: "Dip", Label: "Dip of the layer along the flow", Symbol: "θ", Quantity: units.Angle, Min: -math.Pi / 2, Max: math.Pi / 2, Optional: true, Default: "0, a level layer", Help: "Positive when water moves up-dip, negative when it moves down-dip.", at: func(s *Study) **Input { return &s.Front.Dip }, when: mayDip},
 	{Path: "front.velocity", Sheet: SheetFront, Group: "Dip", Label: "Total Darcy velocity", Symbol: "u", Quantity: units.Velocity, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "rate over width and thickness of the field", Help: "Volume through a unit of cross-section while on; not divided by porosity.", at: func(s *Study) **Input { return &s.Front.Velocity }, when: velocityCounts},
-
+}, riderSpecs, []Spec{
 	{Path: "field.length", Sheet: SheetField, Group: "Block", Label: "Length, injector to producer", Symbol: "L", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Length }},
 	{Path: "field.width", Sheet: SheetField, Group: "Block", Label: "Width across the flow", Symbol: "W", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Width }},
 	{Path: "field.thickness", Sheet: SheetField, Group: "Block", Label: "Net thickness", Symbol: "h", Quantity: units.Length, Min: 0, OpenMin: true, Max: 5e3, at: func(s *Study) **Input { return &s.Field.Thickness }},
@@ -150,4 +151,4 @@ var specs = []Spec{
 	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface; common practice, no source: 90 to 98 %.", at: func(s *Study) **Input { return &s.Field.WaterCut }, when: limitedByCut},
 	{Path: "field.oilRate", Sheet: SheetField, Group: "Limit", Label: "Oil rate at the limit", Symbol: "qo,lim", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Calendar-day average at surface.", at: func(s *Study) **Input { return &s.Field.OilRate }, when: limitedByOil},
 	{Path: "field.horizon", Sheet: SheetField, Group: "Limit", Label: "Forecast to", Symbol: "tmax", Quantity: units.Duration, Min: 0, OpenMin: true, Max: 1e11, Optional: true, Default: "a little past the limit", at: func(s *Study) **Input { return &s.Field.Horizon }},
-}
+})

@@ -84,11 +84,11 @@ func (f *front) gravity(s *sheet) {
 func (f *front) backflow(s *sheet) {
 	cut, _ := f.flow.At(f.swi)
 	_, inlet := f.displacement.InletFace()
-	if cut < 0 {
+	if cut < -backward {
 		s.note(Note{ID: "front.waterBack", Level: "caution", Text: "At the initial saturation water flows back: its share of the flow is " + units.Format(100*cut, 3) + " %.",
 			Cause: "Gravity moves the mobile water against the displacement, which takes water from beyond the producer.", Do: "Read the answer as that of a layer that goes on beyond the producer.", Paths: []string{"front.dip", "front.initialWater"}})
 	}
-	if inlet > 1 {
+	if inlet > 1+backward {
 		s.note(Note{ID: "front.oilBack", Level: "caution", Text: "Oil flows back at the injector: the share of water there is " + units.Format(100*inlet, 3) + " % of the rate, the excess over 100 % being oil that rises past it.",
 			Cause: "Gravity parts the phases faster than the rate pushes them; late in the flood the same holds at the producer.", Do: "Read the answer as that of a layer that goes on beyond both wells, or raise the rate.", Paths: []string{"front.dip", "front.velocity"}})
 	}

@@ -32,6 +32,35 @@ func TestRandomStudiesAreSound(t *testing.T) {
 	}
 }
 
+// TestRandomDippingStudiesAreSound: the same for layers that dip, at any rate.
+func TestRandomDippingStudiesAreSound(t *testing.T) {
+	const count = 100
+	answered, back := 0, 0
+	for seed := range uint64(count) {
+		r := rand.New(rand.NewPCG(seed, 11))
+		st := randomStudy(r)
+		st.Rock.Curve, st.Field.Drive, st.Fluids.Pair = "corey", "rate", Pairs[r.IntN(len(Pairs))].Value
+		put(&st, "front.dip", 180*(r.Float64()-0.5), "deg")
+		put(&st, "fluids.waterDensity", 100+1000*r.Float64(), "kg/m3")
+		put(&st, "fluids.oilDensity", 100+1000*r.Float64(), "kg/m3")
+		put(&st, "field.permeability", math.Pow(10, 1+3*r.Float64()), "md")
+		put(&st, "front.velocity", math.Pow(10, 1-4*r.Float64()), "ft/d")
+		result := Run(st)
+		if part := result.Parts[SheetFront]; part.Status == Ready {
+			answered++
+			if _, drawn := line(part, "front.fractionalFlow", "back"); drawn {
+				back++
+			}
+		}
+		for _, fault := range faults(result) {
+			t.Errorf("seed %d: %s", seed, fault)
+		}
+	}
+	if answered < count/5 || back < count/10 {
+		t.Errorf("of %d, %d are answered, %d with a phase that flows back", count, answered, back)
+	}
+}
+
 // randomStudy draws every choice, most inputs and a table. Half of the inputs lie
 // near the demonstration's, the rest anywhere in their range.
 func randomStudy(r *rand.Rand) Study {

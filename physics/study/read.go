@@ -40,7 +40,8 @@ func Read(text string) (Study, error) {
 	if err := recognise(root); err != nil {
 		return Study{}, err
 	}
-	st := Study{Fluids: Fluids{Pair: string(fluid.BrineOil)}} // of files from before pairs could be chosen
+	// Of files from before these could be chosen.
+	st := Study{Fluids: Fluids{Pair: string(fluid.BrineOil)}, Front: Front{Rider: Rider{Kind: noRider}}}
 	if err := lay(root, reflect.ValueOf(&st).Elem(), ""); err != nil {
 		return Study{}, err
 	}

@@ -20,6 +20,11 @@ func TestWhatCannotBeUsedIsSaid(t *testing.T) {
 			put(st, "rock.corey.swc", 0.5, "fraction")
 			put(st, "rock.corey.sor", 50, "%")
 		}, "rock.corey.sor", "50 % beside Swc = 0.5", "below 1", []Sheet{SheetRock, SheetFront, SheetField}},
+		{"Swc + Sor, at the other field", func(st *Study) {
+			st.Rock.Curve = "corey"
+			put(st, "rock.corey.swc", 0.5, "fraction")
+			put(st, "rock.corey.sor", 50, "%")
+		}, "rock.corey.swc", "0.5 beside Sor = 0.5", "Swc below 0.5", []Sheet{SheetRock, SheetFront, SheetField}},
 		{"Swi below Swc", func(st *Study) { put(st, "front.initialWater", 20, "%") }, "front.initialWater", "20 %", "from 0.227 to 0.716", []Sheet{SheetFront, SheetField}},
 		{"Swi above 1 - Sor", func(st *Study) { put(st, "front.initialWater", 0.8, "fraction") }, "front.initialWater", "0.8", "from 0.227 to 0.716", []Sheet{SheetFront, SheetField}},
 		{"Swi at 1 - Sor", func(st *Study) { put(st, "front.initialWater", 0.716, "fraction") }, "front.initialWater", "0.716", "no oil moves", []Sheet{SheetFront, SheetField}},
@@ -135,7 +140,13 @@ func TestNotesAreRaised(t *testing.T) {
 			put(st, "field.rate", 20, "bbl/d")
 			put(st, "front.initialWater", 0.3, "fraction")
 		},
-		"front.oilBack":              func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
+		"front.oilBack": func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
+		"field.backflow": func(st *Study) {
+			dips(st, 40)
+			put(st, "field.rate", 20, "bbl/d")
+			put(st, "front.initialWater", 0.3, "fraction")
+		},
+		"field.oilBack":              func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
 		"front.velocityDiffers":      func(st *Study) { dips(st, 12); put(st, "front.velocity", 1, "ft/d") },
 		"front.capillarity":          func(st *Study) { put(st, "fluids.tension", 30, "mN/m") },
 		"front.land":                 func(st *Study) { st.Fluids.Pair = "brine-gas"; put(st, "rock.land", 2, "") },

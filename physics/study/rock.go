@@ -85,7 +85,9 @@ func (r *rock) typed(s *sheet, under string, curves func(map[string]float64) rel
 	}
 	r.ends, r.sources = "As typed.", []ref.ID{source}
 	if swc, sor := values["swc"], values["sor"]; swc+sor >= 1 {
-		s.problem(under+"sor", s.typed(under+"sor")+" beside Swc = "+units.Format(swc, 6), "Swc + Sor below 1, so that some oil can move: Sor below "+units.Format(1-swc, 6))
+		const allowed = "Swc + Sor below 1, so that some oil can move: "
+		s.problem(under+"swc", s.typed(under+"swc")+" beside Sor = "+units.Format(sor, 6), allowed+"Swc below "+units.Format(1-sor, 6))
+		s.problem(under+"sor", s.typed(under+"sor")+" beside Swc = "+units.Format(swc, 6), allowed+"Sor below "+units.Format(1-swc, 6))
 	}
 	r.reported = curves(values)
 	if points, given := s.points(); given {

@@ -19,7 +19,7 @@ func (s *sheet) inspect(points fit.Points, used bool) bool {
 	for _, finding := range fit.Inspect(points) {
 		if finding.Refuse && used {
 			sound = false
-			s.problem("rock.table", finding.Read, strings.TrimSuffix(finding.Text+" "+finding.Do, "."))
+			s.problem("rock.table", finding.Read, finding.Allowed)
 			continue
 		}
 		level := "remark"

@@ -51,6 +51,26 @@ func variants() map[string]Study {
 	add("long horizon", func(st *Study) { st.Field.Horizon = &Input{Value: 300, Unit: "yr"} })
 	add("limit in the jump", func(st *Study) { st.Field.WaterCut.Value = 30 })
 	add("limit from the start", func(st *Study) { st.Field.Limit = "oilRate"; st.Field.OilRate.Value = 5000 })
+	for _, pair := range Pairs {
+		add(pair.Value, func(st *Study) {
+			st.Fluids.Pair = pair.Value
+			put(st, "rock.land", 1.5, "")
+		})
+	}
+	for _, degrees := range []float64{-90, -50, -4, 4, 50, 90} {
+		for _, rate := range []float64{2, 50, 960} {
+			for _, swi := range []float64{0.227, 0.35, 0.6} {
+				add(fmt.Sprintf("dip %g, rate %g, Swi %g", degrees, rate, swi), func(st *Study) {
+					dips(st, degrees)
+					put(st, "field.rate", rate, "bbl/d")
+					put(st, "front.initialWater", swi, "fraction")
+					put(st, "fluids.tension", 22, "mN/m")
+				})
+			}
+		}
+	}
+	add("dip and straight lines", func(st *Study) { dips(st, 33); st.Rock.Curve = "table-linear" })
+	add("two steps", func(st *Study) { *st = twoSteps() })
 	add("no jump", func(st *Study) {
 		st.Rock.Curve = "corey"
 		st.Rock.Corey.Nw.Value, st.Rock.Corey.No.Value = 1, 1

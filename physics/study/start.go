@@ -9,6 +9,7 @@ func Empty() Study {
 		System: "field",
 		Rock:   Rock{Reference: "absolute", Curve: "corey-fit", Weights: "relative"},
 		Fluids: Fluids{Pair: string(fluid.BrineOil)},
+		Front:  Front{Rider: Rider{Kind: noRider}},
 		Field:  Field{Drive: "rate", Limit: "waterCut"},
 	}
 }

@@ -54,13 +54,13 @@ func preview(d Desk, p *state.PasteDraft) app.UI {
 	r := p.Reading
 	var lines []string
 	for _, problem := range r.Problems[:min(len(r.Problems), previewLines)] {
-		lines = append(lines, place(problem.Row, problem.Column)+"read "+strconv.Quote(problem.Read)+"; allowed: "+problem.Allowed+".")
+		lines = append(lines, wrong(problem.Row, problem.Column, problem.Quoted(), problem.Allowed))
 	}
 	accept, acceptScope := does(d, state.PasteAccepted{})
 	forget, forgetScope := does(d, state.PasteDropped{})
 	return app.Section().ID("paste-preview").Hidden(false).Aria("label", "How the pasted table was read").Body(
 		app.H4().Text("How it was read"),
-		app.P().Text("Columns apart by "+r.Separator+", decimal "+r.Decimal+", "+header(r.Header)+", "+counted(len(r.Cells), "row")+"."),
+		app.P().ID("paste-layout").Text(layout(p)),
 		app.Ul().Class("message").ID("paste-problems").Body(items(lines, len(r.Problems))...),
 		app.Ul().Class("help").ID("paste-remarks").Body(items(r.Remarks, len(r.Remarks))...),
 		app.Div().Class("scroll").TabIndex(0).Role("group").Aria("label", "First rows of the pasted table").Body(
@@ -119,6 +119,14 @@ func role(d Desk, column int, title, as string) app.UI {
 	)
 }
 
+// wrong says what is wrong at a place of a pasted text.
+func wrong(row, column int, read, allowed string) string {
+	if read != "" {
+		read = "read " + read + "; "
+	}
+	return place(row, column) + read + "allowed: " + allowed + "."
+}
+
 func place(row, column int) string {
 	var at []string
 	if row >= 0 {
@@ -131,6 +139,28 @@ func place(row, column int) string {
 		return "The table: "
 	}
 	return strings.ToUpper(at[0][:1]) + strings.Join(at, ", ")[1:] + ": "
+}
+
+// separators are the words for what parts columns.
+var separators = map[string]string{"tab": "tabs", "comma": "commas", "semicolon": "semicolons", "spaces": "spaces"}
+
+// layout says how the text was cut into cells, as far as that is known.
+func layout(p *state.PasteDraft) string {
+	r := p.Reading
+	var said []string
+	if parted := separators[r.Separator]; parted != "" {
+		said = append(said, "columns parted by "+parted)
+	}
+	if r.Decimal != "" {
+		said = append(said, "decimal "+r.Decimal+"s")
+	}
+	if len(r.Columns) == 0 {
+		said = append(said, "no table found")
+	} else {
+		said = append(said, header(r.Header), counted(len(r.Cells), "row")+" of numbers")
+	}
+	text := strings.Join(said, ", ")
+	return strings.ToUpper(text[:1]) + text[1:] + "."
 }
 
 func header(cells []string) string {

@@ -17,6 +17,8 @@ type Finding struct {
 	Text   string // what it means
 	Do     string // what to do about it
 	Refuse bool   // no curve can be drawn until it is mended
+
+	Allowed string // what may stand there instead; only where it refuses
 }
 
 const (
@@ -76,7 +78,7 @@ func (p Points) columns() []column {
 // unreadable finds what keeps the other looks from making sense.
 func (p Points) unreadable() []Finding {
 	if len(p.Sw) == 0 {
-		return []Finding{{ID: "missing", Read: "0 rows", Text: "There are no points.", Do: "Paste or type the laboratory table.", Refuse: true}}
+		return []Finding{{ID: "missing", Read: "0 rows", Text: "There are no points.", Do: "Paste or type the laboratory table.", Refuse: true, Allowed: "a table of at least 3 rows with Sw, krw and kro"}}
 	}
 	var found []Finding
 	for _, c := range p.columns() {
@@ -95,13 +97,13 @@ func (p Points) unreadable() []Finding {
 		switch {
 		case len(missing) > 0:
 			found = append(found, Finding{ID: "missing", Rows: missing, Read: c.name + " in " + rowList(missing),
-				Text: "These values are no numbers.", Do: "Type them again, or leave the rows out.", Refuse: true})
+				Text: "These values are no numbers.", Do: "Type them again, or leave the rows out.", Refuse: true, Allowed: "numbers; leave out rows that lack one"})
 		case percentLike(c.values, largest):
 			found = append(found, Finding{ID: "percent", Rows: outside, Read: fmt.Sprintf("%s up to %g", c.name, largest),
-				Text: c.name + " looks like percent; a fraction is between 0 and 1.", Do: "Divide the column by 100.", Refuse: true})
+				Text: c.name + " looks like percent; a fraction is between 0 and 1.", Do: "Divide the column by 100.", Refuse: true, Allowed: "fractions from 0 to 1; what looks like percent is to be divided by 100"})
 		case len(outside) > 0:
 			found = append(found, Finding{ID: "outside", Rows: outside, Read: c.name + " = " + c.list(outside),
-				Text: fmt.Sprintf("%s in %s is outside 0 to %g.", c.name, rowList(outside), c.highest), Do: "Correct these values, or leave the rows out.", Refuse: true})
+				Text: fmt.Sprintf("%s in %s is outside 0 to %g.", c.name, rowList(outside), c.highest), Do: "Correct these values, or leave the rows out.", Refuse: true, Allowed: fmt.Sprintf("values from 0 to %g in every row", c.highest)})
 		}
 	}
 	return found
@@ -133,7 +135,7 @@ func (p Points) count() []Finding {
 	f := Finding{ID: "few", Read: fmt.Sprintf("%d %s", n, plural(n, "row", "rows")), Text: "So few points leave the shape of the curves open.",
 		Do: "Add points, or hold parameters that are known.", Refuse: n < fewestRows}
 	if f.Refuse {
-		f.Text = "A curve needs at least 3 points."
+		f.Text, f.Allowed = "A curve needs at least 3 points.", "at least 3 points"
 	}
 	return []Finding{f}
 }

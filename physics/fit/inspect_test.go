@@ -71,7 +71,7 @@ func TestInspect(t *testing.T) {
 				t.Fatalf("found %+v, want %s", found, test.id)
 			}
 			f := found[i]
-			if !slices.Equal(f.Rows, test.rows) || !strings.Contains(f.Read, test.read) || f.Refuse != test.refuse || f.Text == "" || f.Do == "" {
+			if !slices.Equal(f.Rows, test.rows) || !strings.Contains(f.Read, test.read) || f.Refuse != test.refuse || f.Text == "" || f.Do == "" || (f.Allowed != "") != f.Refuse {
 				t.Errorf("found %+v", f)
 			}
 			for _, fit := range []func(Points, Options) (Fit, error){Corey, LET} {

@@ -15,7 +15,8 @@ func (p Points) turned() []Finding {
 	}
 	return []Finding{{ID: "swapped", Read: "krw falls and kro rises with Sw",
 		Text: "The water and oil columns look swapped, or Sw holds oil saturation.",
-		Do:   "Exchange krw and kro, or take Sw as 1 − So.", Refuse: true}}
+		Do:   "Exchange krw and kro, or take Sw as 1 − So.", Refuse: true,
+		Allowed: "krw that rises and kro that falls with Sw; where the columns are swapped, exchange them, and where Sw holds oil saturation, take 1 − So"}}
 }
 
 // trend is the sum of the signs of all steps of y with x, in rising order of x.
@@ -56,7 +57,7 @@ func (p Points) span() []Finding {
 	switch {
 	case high-low <= atEnd:
 		found = append(found, Finding{ID: "range", Read: read, Text: "With Swc as the smallest and 1 − Sor as the largest Sw, Swc + Sor is 1: no saturation can move.",
-			Do: "Give points between connate water and residual oil.", Refuse: true})
+			Do: "Give points between connate water and residual oil.", Refuse: true, Allowed: "points whose Swc + Sor is below 1, so that some oil can move"})
 	case high-low < narrow:
 		found = append(found, Finding{ID: "narrow", Read: read, Text: fmt.Sprintf("Only %.2g of the pore volume can move.", high-low),
 			Do: "Check that the points reach from connate water to residual oil."})
@@ -68,7 +69,7 @@ func (p Points) span() []Finding {
 		}
 		if flat {
 			found = append(found, Finding{ID: "flat", Read: c.name + " = 0 in every row", Text: "A phase that never flows has no curve.",
-				Do: "Check the column.", Refuse: true})
+				Do: "Check the column.", Refuse: true, Allowed: "a phase that flows in some of the rows"})
 		}
 	}
 	return found

@@ -4,6 +4,8 @@
 // so that the person can see and correct it before the table is used.
 package paste
 
+import "strconv"
+
 // Column names a table may ask for.
 const (
 	Sw  = "sw"
@@ -61,4 +63,16 @@ type Problem struct {
 	Row, Column int
 	Read        string
 	Allowed     string
+}
+
+// emptyCell is what is read of a cell without a text.
+const emptyCell = "an empty cell"
+
+// Quoted is Read as a sentence shows it: a cell's own text in quotes, the words of
+// the reader without.
+func (p Problem) Quoted() string {
+	if p.Row < 0 || p.Read == emptyCell || p.Read == "" {
+		return p.Read
+	}
+	return strconv.Quote(p.Read)
 }

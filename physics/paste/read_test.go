@@ -337,3 +337,11 @@ func BenchmarkRead(b *testing.B) {
 		})
 	}
 }
+
+func TestQuoted(t *testing.T) {
+	for text, want := range map[string]string{"Sw krw kro\n0.2 ten 1\n0.4 0.1 0.5\n0.6 0.2 0": `"ten"`, "Sw\tkrw\tkro\n0.2\t\t1\n0.4\t0.1\t0.5\n0.6\t0.2\t0": "an empty cell", "hello": "no row of numbers"} {
+		if got := Read(text).Problems[0].Quoted(); got != want {
+			t.Errorf("of %q it says %s, want %s", text, got, want)
+		}
+	}
+}

@@ -125,7 +125,7 @@ func (r Reading) check(row, column int, percent, ok bool, v float64, said *notes
 	case ok && v >= 0 && v <= 1:
 		return
 	case column >= len(r.Cells[row]) || r.Cells[row][column] == "":
-		said.problem(row, column, "an empty cell", allowed)
+		said.problem(row, column, emptyCell, allowed)
 		return
 	case !ok && numeric(r.Cells[row][column]):
 		allowed = "a number with a decimal " + r.Decimal + ", as in the rest of the text"

@@ -12,8 +12,8 @@ import (
 
 // Numbers are the series of a result's charts and tables: nine tenths of a reply.
 // As digits between commas they would take longer to read than to compute; as
-// bytes they are read at once and lose no bit. Lines that share a series, as the
-// curves over one saturation do, share it here.
+// bytes they are read at once and lose no bit. A series that is there twice, as the
+// saturations below several curves, is sent once.
 type Numbers struct {
 	Place   []int  `json:"place"`   // of every series of the result, among the distinct ones; -1: it has none
 	Lengths []int  `json:"lengths"` // of the distinct series
@@ -25,18 +25,20 @@ const doubleSize = 8 // bytes
 // Pack parts a result into numbers and the rest. The result itself is left alone.
 func Pack(whole study.Result) (rest study.Result, numbers Numbers) {
 	rest = own(whole)
-	places := map[*float64]int{} // by the first number of a series
+	places := map[string]int{} // by the bytes of a series
 	for _, series := range all(rest) {
 		place := -1
 		if s := *series; len(s) > 0 {
+			bytes := make([]byte, 0, doubleSize*len(s))
+			for _, v := range s {
+				bytes = binary.LittleEndian.AppendUint64(bytes, math.Float64bits(v))
+			}
 			known := false
-			if place, known = places[&s[0]]; !known || numbers.Lengths[place] != len(s) {
+			if place, known = places[string(bytes)]; !known {
 				place = len(numbers.Lengths)
-				places[&s[0]] = place
+				places[string(bytes)] = place
 				numbers.Lengths = append(numbers.Lengths, len(s))
-				for _, v := range s {
-					numbers.Bytes = binary.LittleEndian.AppendUint64(numbers.Bytes, math.Float64bits(v))
-				}
+				numbers.Bytes = append(numbers.Bytes, bytes...)
 			}
 		}
 		numbers.Place = append(numbers.Place, place)

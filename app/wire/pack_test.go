@@ -4,6 +4,7 @@ import (
 	"encoding/json"
 	"math"
 	"reflect"
+	"slices"
 	"testing"
 
 	"brinefront/physics/study"
@@ -21,7 +22,7 @@ func over(lines []study.Line, columns []study.Column) study.Result {
 func TestPackedAndBack(t *testing.T) {
 	shared := []float64{0, 1.0 / 3, math.MaxFloat64}
 	odd := over(
-		[]study.Line{{ID: "x", X: shared, Y: []float64{math.Copysign(0, -1), 5e-324, math.Pi}}, {ID: "y", X: shared, Y: shared, Low: shared[:2]}, {ID: "none"}},
+		[]study.Line{{ID: "x", X: shared, Y: []float64{math.Copysign(0, -1), 5e-324, math.Pi}}, {ID: "y", X: shared, Y: shared, Low: shared[:2]}, {ID: "again", X: slices.Clone(shared)}, {ID: "none"}},
 		[]study.Column{{Values: shared}, {Words: []string{"word"}}})
 	for name, whole := range map[string]study.Result{"demo": study.Run(study.Demo()), "empty": study.Run(study.Empty()), "odd": odd} {
 		before := text(t, whole)
@@ -50,7 +51,7 @@ func TestPackedAndBack(t *testing.T) {
 		}
 	}
 	// The field's table comes first: its shared column, then the lines of the rock.
-	if _, numbers := Pack(odd); !reflect.DeepEqual(numbers.Place, []int{0, -1, 0, 1, -1, 0, 0, 2, -1, -1, -1}) {
+	if _, numbers := Pack(odd); !reflect.DeepEqual(numbers.Place, []int{0, -1, 0, 1, -1, 0, 0, 2, 0, -1, -1, -1, -1, -1}) {
 		t.Errorf("shared series lie at %v", numbers.Place)
 	}
 }

@@ -1,6 +1,7 @@
 package sheet
 
 import (
+	"math"
 	"strconv"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
@@ -123,12 +124,22 @@ func mark(c wire.Evidence) string {
 // shownDigits is as many digits as any source prints.
 const shownDigits = 8
 
+// tellingDigits is how many digits of a number reach down to its tolerance: further
+// ones would say nothing of the agreement.
+func tellingDigits(number, tolerance float64) int {
+	if number == 0 || !(tolerance > 0) {
+		return shownDigits
+	}
+	place := func(v float64) int { return int(math.Floor(math.Log10(math.Abs(v)))) }
+	return min(shownDigits, max(1, place(number)-place(tolerance)+1))
+}
+
 func values(c wire.Evidence) app.UI {
 	rows := make([]app.UI, len(c.Items))
 	for i, item := range c.Items {
 		computed, said := "", ""
 		if c.Done {
-			computed, said = units.Format(item.Computed, shownDigits), "✕ differs"
+			computed, said = units.Format(item.Computed, tellingDigits(item.Computed, item.Tolerance)), "✕ differs"
 			if item.Pass {
 				said = "● agrees"
 			}

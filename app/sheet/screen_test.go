@@ -358,6 +358,19 @@ func TestEvidenceCountsEveryVerdict(t *testing.T) {
 	}
 }
 
+func TestEvidenceShowsTheDigitsThatTell(t *testing.T) {
+	for _, c := range []struct {
+		number, tolerance float64
+		want              int
+	}{
+		{5.6145833, 0.0005, 5}, {-7758.3673, 0.5, 5}, {0.0070818794, 5e-6, 4}, {9.8692327e-13, 5e-20, 8}, {0.5001, 0, 8}, {0, 0.1, 8}, {0.002, 0.1, 1},
+	} {
+		if got := tellingDigits(c.number, c.tolerance); got != c.want {
+			t.Errorf("%v within %v is told with %d digits, want %d", c.number, c.tolerance, got, c.want)
+		}
+	}
+}
+
 func TestSheetOfPath(t *testing.T) {
 	for path, want := range map[string]string{
 		"fluids.oilViscosity": "front", "front.initialWater": "front", "rock.table": "rock", "rock.table.3.sw": "rock",

@@ -2,6 +2,7 @@ package fit
 
 import (
 	"math"
+	"slices"
 
 	"gonum.org/v1/gonum/mathext"
 
@@ -15,21 +16,31 @@ const (
 	vague         = 0.25  // standard error over size from which a parameter is not determined
 	entangled     = 0.98  // correlation from which two parameters cannot be told apart ...
 	entangledFrom = 0.1   // ... when the standard error is more than this of the value
-	offCurve      = 3.0   // studentised deviation from which a point lies off
-	offAtLeast    = 0.1   // ... when it is more than this share of the floor
+	offChance     = 0.01  // chance that any sound point of a phase is called off its curve
+	offAtLeast    = 0.1   // deviation that is never off, as a share of the floor
 )
 
 // confidence is what the linearised fit knows of its own error (Seber & Wild 1989,
 // ch. 5): with s² = SS/(degrees of freedom), the covariance of the fitted
-// parameters is s² (JᵀJ)⁻¹.
+// parameters is s² (JᵀJ)⁻¹. Where the phases are fitted apart each has its own s²
+// and degrees of freedom, for krw and kro seldom scatter alike; a free saturation
+// couples them to one s². The intervals suppose that the scatter is σ times one
+// number: in percent alike for relative weights, in kr alike for absolute ones.
 type confidence struct {
 	family     family
 	values     []float64
 	active     []int     // parameters fitted and not at a bound
 	covariance symmetric // of the active ones, as the minimiser moves them
 	blind      []bool    // active ones in a direction that the points do not see
-	variance   float64   // s²
-	student    float64   // two-sided quantile of Student's t
+	scatter    [2]scatter
+}
+
+// scatter is how widely the points of a phase lie about its curve.
+type scatter struct {
+	variance float64 // s²
+	freedom  int     // degrees of freedom of s²
+	student  float64 // two-sided quantile of Student's t for an interval
+	borrowed bool    // the phase has no degree of freedom left; s² is that of both phases
 }
 
 // conclude reports the fit.
@@ -44,11 +55,11 @@ func (t *task) conclude() Fit {
 		DegreesOfFreedom: t.used([]int{0, 1}) - len(c.active)}
 	rows := t.linearise(f.Curves, c.active)
 	normal := newSymmetric(len(c.active))
-	sum, squares := 0.0, [2]float64{}
+	var sum, squares [2]float64
 	for _, row := range rows {
 		squares[row.phase] += row.deviation * row.deviation
 		if row.sigma > 0 {
-			sum += row.deviation * row.deviation / (row.sigma * row.sigma)
+			sum[row.phase] += row.deviation * row.deviation / (row.sigma * row.sigma)
 			for p, a := range row.slopes {
 				for q := p; q < len(row.slopes); q++ {
 					normal.set(p, q, normal.at(p, q)+a*row.slopes[q])
@@ -58,11 +69,12 @@ func (t *task) conclude() Fit {
 	}
 	n := float64(len(t.points.Sw))
 	f.RMSKrw, f.RMSKro = math.Sqrt(squares[0]/n), math.Sqrt(squares[1]/n)
-	c.variance = sum / float64(f.DegreesOfFreedom)
-	c.student = student(float64(f.DegreesOfFreedom))
+	c.scatter = t.scatters(sum, c.active)
 	c.covariance, c.blind = invert(normal)
-	for i := range c.covariance.v {
-		c.covariance.v[i] *= c.variance
+	for p, j := range c.active {
+		for q, k := range c.active[:p+1] {
+			c.covariance.set(p, q, c.covariance.at(p, q)*math.Sqrt(c.of(j).variance*c.of(k).variance))
+		}
 	}
 	f.state = c
 	f.Covariance, f.Correlation = c.matrices(len(t.values))
@@ -71,11 +83,53 @@ func (t *task) conclude() Fit {
 	return f
 }
 
+// scatters finds s² of each block that is fitted by itself, from the phases' sums of
+// squares. A block with as many points as parameters leaves no deviation to judge
+// by: it takes s² of both phases together.
+func (t *task) scatters(sum [2]float64, active []int) (list [2]scatter) {
+	pooled := newScatter(sum[0]+sum[1], t.used([]int{0, 1})-len(active))
+	for _, b := range t.blocks() {
+		squares, freedom := 0.0, t.used(b.phases)
+		for _, k := range b.phases {
+			squares += sum[k]
+		}
+		for _, j := range b.free {
+			if slices.Contains(active, j) {
+				freedom--
+			}
+		}
+		s := pooled
+		s.borrowed = freedom == 0
+		if freedom > 0 {
+			s = newScatter(squares, freedom)
+		}
+		for _, k := range b.phases {
+			list[k] = s
+		}
+	}
+	return list
+}
+
+func newScatter(squares float64, freedom int) scatter {
+	nu := float64(freedom)
+	return scatter{variance: squares / nu, freedom: freedom, student: student(nu, 1-level)}
+}
+
+// of is the scatter that a parameter's error follows from; where a parameter shapes
+// both curves they share one.
+func (c confidence) of(j int) scatter {
+	if c.family.specs[j].phase == oil {
+		return c.scatter[1]
+	}
+	return c.scatter[0]
+}
+
 // student is the two-sided quantile t of Student's distribution with ν degrees of
-// freedom: with x = ν/(ν + t²), the regularised incomplete beta function
-// I_x(ν/2, 1/2) is 1 - level (Abramowitz & Stegun 1964, 26.7.1).
-func student(nu float64) float64 {
-	x := mathext.InvRegIncBeta(nu/2, 0.5, 1-level)
+// freedom, exceeded by the given chance: with x = ν/(ν + t²), the regularised
+// incomplete beta function I_x(ν/2, 1/2) is that chance (Abramowitz & Stegun 1964,
+// 26.7.1).
+func student(nu, chance float64) float64 {
+	x := mathext.InvRegIncBeta(nu/2, 0.5, chance)
 	return math.Sqrt(nu * (1 - x) / x)
 }
 
@@ -206,8 +260,8 @@ func (c confidence) parameters(t *task, correlation [][]float64) []Parameter {
 			q.Low, q.High, q.Determined = q.Min, q.Max, false
 			continue
 		}
-		q.Low = max(s.outer(s.inner(q.Value)-c.student*stdErr), q.Min)
-		q.High = min(s.outer(s.inner(q.Value)+c.student*stdErr), q.Max)
+		q.Low = max(s.outer(s.inner(q.Value)-c.of(j).student*stdErr), q.Min)
+		q.High = min(s.outer(s.inner(q.Value)+c.of(j).student*stdErr), q.Max)
 		relative := q.StdErr / c.size(j)
 		_, r := strongest(correlation, j)
 		q.Determined = relative <= vague && (math.Abs(r) <= entangled || relative <= entangledFrom)
@@ -234,16 +288,39 @@ func strongest(correlation [][]float64, j int) (other int, r float64) {
 	return other, r
 }
 
-// off returns the rows whose deviation, studentised by s sqrt(1-h) with h the row's
-// leverage, is too large to be chance.
+// off returns the rows whose deviation is too large to be chance: with r the
+// deviation over σ, h the row's leverage and ν the degrees of freedom,
+//
+//	r² / (1-h) > t² (ν s² - r²/(1-h)) / (ν-1)
+//
+// The right side is s² without the row itself, which would hide among few others; t
+// is Student's quantile at the chance offChance shared out over the phase's rows.
+// Source: Cook & Weisberg (1982), the outlier test.
 func (c confidence) off(rows []row, floor float64) []row {
+	var count [2]int
+	for _, r := range rows {
+		if r.sigma > 0 {
+			count[r.phase]++
+		}
+	}
+	var t [2]float64
+	for k, s := range c.scatter {
+		if s.freedom >= 2 && count[k] > 0 {
+			t[k] = student(float64(s.freedom-1), offChance/float64(count[k]))
+		}
+	}
 	var list []row
 	for _, r := range rows {
-		if r.sigma == 0 || math.Abs(r.deviation) < offAtLeast*floor {
+		s := c.scatter[r.phase]
+		if r.sigma == 0 || math.Abs(r.deviation) < offAtLeast*floor || s.freedom < 2 {
 			continue
 		}
-		left := c.variance - c.spread(r.slopes)
-		if left > 0 && math.Abs(r.deviation)/r.sigma > offCurve*math.Sqrt(left) {
+		left := s.variance - c.spread(r.slopes) // s² (1-h)
+		if left <= 0 {
+			continue
+		}
+		nu, own := float64(s.freedom), s.variance/left*math.Pow(r.deviation/r.sigma, 2)
+		if own > t[r.phase]*t[r.phase]*max(nu*s.variance-own, 0)/(nu-1) {
 			list = append(list, r)
 		}
 	}
@@ -279,7 +356,7 @@ func (f Fit) Band(sw float64) (krwLow, krwHigh, kroLow, kroHigh float64) {
 		for p, j := range c.active {
 			g[p] = slopes[k][j]
 		}
-		half[k] = c.student * math.Sqrt(c.spread(g))
+		half[k] = c.scatter[k].student * math.Sqrt(c.spread(g))
 	}
 	return max(at.Krw-half[0], 0), at.Krw + half[0], max(at.Kro-half[1], 0), at.Kro + half[1]
 }

@@ -42,7 +42,7 @@ type Weighting int
 
 const (
 	Relative Weighting = iota // by its error in percent: small values count as much as large ones
-	Absolute                  // by its error in kr: large values dominate
+	Absolute                  // by its error in kr: large values dominate; intervals hold only where small kr scatter as widely
 )
 
 // Options say how to fit; the zero value is the default.

@@ -33,8 +33,28 @@ func (t *task) verdict(f Fit, off []row) []string {
 	if len(off) > 0 {
 		said = append(said, listOff(off))
 	}
+	if len(f.state.active) > 0 {
+		said = append(said, t.suppositions(f)...)
+	}
 	return said
 }
+
+// suppositions says under what conditions the intervals hold, where these are not
+// what a reader would take for granted.
+func (t *task) suppositions(f Fit) []string {
+	var said []string
+	for k, s := range f.state.scatter {
+		if s.borrowed {
+			said = append(said, fmt.Sprintf("%s has as many points as parameters: its intervals borrow the scatter of %s.", phaseNames[k], phaseNames[1-k]))
+		}
+	}
+	if t.options.Weights == Absolute {
+		said = append(said, "With absolute weights the intervals hold only if the scatter is as large at small kr as at large.")
+	}
+	return said
+}
+
+var phaseNames = [2]string{"krw", "kro"}
 
 // doubt is the reason why a parameter is not determined.
 func (t *task) doubt(f Fit, j int) string {
@@ -55,7 +75,7 @@ func listOff(off []row) string {
 	const most = 5
 	var names []string
 	for _, r := range off[:min(len(off), most)] {
-		names = append(names, fmt.Sprintf("%s at Sw = %.4g", [2]string{"krw", "kro"}[r.phase], r.sw))
+		names = append(names, fmt.Sprintf("%s at Sw = %.4g", phaseNames[r.phase], r.sw))
 	}
 	if more := len(off) - most; more > 0 {
 		names = append(names, fmt.Sprintf("%d more", more))

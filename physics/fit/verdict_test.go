@@ -70,6 +70,19 @@ func TestVerdict(t *testing.T) {
 		}
 	}
 
+	// What the intervals suppose: one size of scatter in kr, or for two values of krw
+	// beside two parameters the scatter of the other phase.
+	if f, err = Corey(noisy(table(trueCorey, 13), 0.02, 5), Options{Weights: Absolute}); err != nil {
+		t.Fatal(err)
+	}
+	says(t, f, "hold only if the scatter is as large at small kr as at large")
+	short := noisy(table(trueCorey, 3), 0.02, 5)
+	if f, err = Corey(short, Options{Hold: map[string]float64{"kro0": trueCorey.Kro0}}); err != nil {
+		t.Fatal(err)
+	}
+	says(t, f, "krw has as many points as parameters: its intervals borrow the scatter of kro.")
+	checkBand(t, f)
+
 	// The printed table of Dake is not a Corey curve up to its oil end.
 	if f, err = Corey(dake(t), Options{}); err != nil {
 		t.Fatal(err)

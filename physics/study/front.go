@@ -26,6 +26,7 @@ type front struct {
 	linear    *reservoir.Linear // the field's flood; nil while the field is not all given
 	unflooded error             // why there is no flood though all is given
 	curve     []string          // the inputs behind the curves
+	rider     *rider            // nil when nothing rides along
 }
 
 // runFront answers the Front sheet; nil when there is no displacement to build on.
@@ -36,6 +37,9 @@ func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, 
 	if rock != nil {
 		f.flow.Curves, f.curve = rock.curves, rock.inputs
 		f.swi, f.swj = s.states(rock)
+		if f.rider != nil && s.standing() == Ready {
+			f.rider.place(s, f, rock)
+		}
 	} else {
 		s.input("front.initialWater")
 		s.input("front.injectedWater")
@@ -65,7 +69,9 @@ func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, 
 	f.charts(s)
 	f.tables(s)
 	f.notes(s)
+	f.ride(s)
 	f.sentence(s)
+	f.rideSentence(s)
 	return s.close(rockPart.Status), f
 }
 
@@ -82,6 +88,7 @@ func (s *sheet) fluids() *front {
 	if f.dip = s.dip(f.brine, f.velocity); f.dip != nil {
 		f.flow.Gravity = f.dip.gravity
 	}
+	f.rider = s.rider(f)
 	for _, path := range []string{"fluids.tension", "rock.land"} {
 		s.input(path) // an optional number that cannot be used is a problem all the same
 	}

@@ -140,7 +140,7 @@ func TestReadRefuses(t *testing.T) {
 		{"missing", swap("      \"value\": 0.213,\n", ""), "field.porosity.value", "missing"},
 		{"text for a number", swap(porosity, strings.Replace(porosity, "0.213", `"0.213"`, 1)), "field.porosity.value", "read a text, allowed: a number"},
 		{"number for a text", swap(`"unit": "md"`, `"unit": 7`), "rock.permeability.unit", "read a number, allowed: a text"},
-		{"null for an input", swap(`"front": {}`, `"front": {"initialWater": null}`), "front.initialWater", "read null, allowed: an object"},
+		{"null for an input", swap(`"front": {`, `"front": {"initialWater": null,`), "front.initialWater", "read null, allowed: an object"},
 		{"object for a list", swap(`"sw": [`, `"sw": {}, "krw": [`), "rock.table.krw", "twice"},
 		{"text in the table", swap(`"krw": [`, `"krw": [ "x",`), "rock.table.krw.0", "a number"},
 		{"columns of unequal length", swap(`"krw": [`, `"krw": [ 0,`), "rock.table", "12 values of sw, 13 of krw and 12 of kro"},

@@ -125,7 +125,11 @@ func another(d Desk, m state.Model, i int, shown []string) app.UI {
 func starting(m state.Model, i int, inner string) state.Msg {
 	spec, ok := study.Find(inner)
 	if !ok {
-		return state.CaseChosen{Index: i, Path: inner, Value: study.Chosen(&m.Study, inner)}
+		value := study.Chosen(&m.Study, inner)
+		if value == "" {
+			value = study.Choices(inner)[0].Value // an optional choice that nobody has made
+		}
+		return state.CaseChosen{Index: i, Path: inner, Value: value}
 	}
 	if in := spec.Get(&m.Study); in != nil {
 		return state.CaseInputSet{Index: i, Path: inner, Text: units.Exact(in.Value), Unit: in.Unit}

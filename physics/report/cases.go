@@ -52,7 +52,7 @@ func Held(st study.Study, path string) string {
 	}
 	spec, ok := study.Find(path)
 	if !ok {
-		return ""
+		return "not chosen"
 	}
 	if in := spec.Get(&st); in != nil {
 		return given(spec, in.Value, in.Unit)

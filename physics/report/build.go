@@ -92,6 +92,9 @@ func pictures(r study.Result) Section {
 	section := Section{ID: "pictures", Title: "Pictures"}
 	for _, p := range parts {
 		charts := r.Parts[p.sheet].Charts
+		if len(charts) > 0 {
+			section.Blocks = append(section.Blocks, Block{Heading: p.title})
+		}
 		for i := range charts {
 			section.Blocks = append(section.Blocks, Block{Chart: &charts[i]})
 		}

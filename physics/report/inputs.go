@@ -34,7 +34,7 @@ func Label(path string) string {
 
 var choiceLabels = map[string]string{
 	"rock.reference": "Permeability that kr refers to", "rock.curve": "Curve used", "rock.weights": "Weights of the fit",
-	"fluids.pair": "Pair of fluids",
+	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -83,6 +83,7 @@ func choices(st study.Study) *Table {
 		add("rock.weights", st.Rock.Weights, study.Weightings)
 	}
 	add("fluids.pair", st.Fluids.Pair, study.Pairs)
+	add("front.rider.kind", st.Front.Rider.Kind, study.Riders)
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Start != "" {

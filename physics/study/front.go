@@ -116,7 +116,11 @@ func (f *front) sentence(s *sheet) {
 	case waterAhead:
 		opening = "The front arrives after"
 	}
-	s.answer(opening + " {front.breakthrough} injected with {front.recoveryAtBreakthrough} of the pore volume produced ({front.recoveryAtBreakthroughInPlace} of the oil in place)")
+	fate := "produced"
+	if _, inlet := f.displacement.InletFace(); math.Abs(inlet-1) > backward { // some is injected too, or leaves at the injector
+		fate = "displaced"
+	}
+	s.answer(opening + " {front.breakthrough} injected with {front.recoveryAtBreakthrough} of the pore volume " + fate + " ({front.recoveryAtBreakthroughInPlace} of the oil in place)")
 	if _, _, shock := f.displacement.Front(); shock {
 		if waterAhead {
 			s.answer("; the water cut jumps from {front.surfaceCutAhead} to {front.surfaceCutAtBreakthrough} at surface")

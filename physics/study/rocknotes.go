@@ -61,7 +61,7 @@ func (r *rock) wettability(s *sheet) {
 	signs := regime.CraigSigns{KrwEnd: s.number("rock.krwOverKro"), Crossover: s.number("rock.crossover"), Swc: r.swc}
 	var texts []string
 	for _, v := range signs.Judge() {
-		texts = append(texts, v.Text+" ("+v.Range+")")
+		texts = append(texts, strings.TrimSuffix(v.Text, ".")+" ("+v.Range+").")
 	}
 	summary := signs.Summary()
 	s.note(Note{ID: "rock.wettability", Level: "remark", Text: summary.Text + " " + strings.Join(texts, " ") + " By " + ref.Get(summary.Source).Short() + ".",

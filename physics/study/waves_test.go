@@ -191,6 +191,21 @@ func TestMobileWaterIsTold(t *testing.T) {
 	}
 }
 
+// What is displaced is produced only where water alone enters: not where oil is injected
+// too, nor where oil leaves at the injector.
+func TestDisplacedIsNotAlwaysProduced(t *testing.T) {
+	all := journeys()
+	for name, want := range map[string]string{"water-wet": "produced", "up-dip": "produced", "oil injected": "displaced", "down-dip": "displaced"} {
+		text := ""
+		for _, p := range Run(all[name]).Parts[SheetFront].Answer {
+			text += p.Text
+		}
+		if !strings.Contains(text, "of the pore volume "+want+" (") {
+			t.Errorf("%s: %q", name, text)
+		}
+	}
+}
+
 // In the wave diagram a step runs straight at its speed, and every dashed line is a
 // state: at its end the profile has that saturation.
 func TestWaveDiagram(t *testing.T) {

@@ -166,6 +166,15 @@ func TestMovingLinesStandWhereTheSliderSays(t *testing.T) {
 	})
 }
 
+func TestSliderTellsItsValue(t *testing.T) {
+	const slider = `{ min: 0, max: 2, unit: "PV", stops: [{ label: "breakthrough", at: 0.4123 }] }`
+	const hard = "\u00a0"
+	expect(t, []string{"scale.js", "still.js", "slide.js"}, []expectation{
+		{`[0, 0.4123, 0.41, 1.2345].map((v) => sliderText(` + slider + `, v))`,
+			`["0` + hard + `PV","0.412` + hard + `PV, breakthrough","0.410` + hard + `PV","1.23` + hard + `PV"]`},
+	})
+}
+
 // A pin is the same point after an edit, after a step of the slider, in other units.
 func TestPinsComeBack(t *testing.T) {
 	const readings = `readings: [{ label: "speed", unit: "", values: [0, 1, 2] }, { label: "Arrives after", unit: "PV", values: [0, 1, 0.5], words: ["never", "", ""] }]`

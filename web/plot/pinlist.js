@@ -6,7 +6,6 @@ export function pinList(list, away) {
   let shown = "";
   return function update(pins, lay, picture) {
     const texts = pins.map((pin) => pinText(pin, lay, picture));
-    list.hidden = texts.every((t) => t === "");
     if (JSON.stringify(texts) === shown) return; // a live region speaks of every change
     shown = JSON.stringify(texts);
     list.replaceChildren(...texts.flatMap((text, i) => (text ? [item(text, pins[i])] : [])));

@@ -23,6 +23,7 @@ const rules = `
 .plot-stops { display: flex; flex-wrap: wrap; gap: 0 0.75rem; margin-left: auto; }
 .plot-slide .plot-act { color: var(--quiet, #565a5c); text-decoration: underline; text-decoration-thickness: 1px; text-underline-offset: 3px; }
 .plot-pins { list-style: none; margin: 0.25rem 0 0; padding: 0; font-size: 0.8125rem; line-height: 1.4; }
+.plot-pins:empty { margin: 0; }
 .plot-pins li::before { content: "○ "; }
 .plot-pins button { font: inherit; color: var(--quiet, #565a5c); background: none; border: 0; padding: 0 0.1rem; min-height: 1.5rem; cursor: pointer;
   text-decoration: underline; text-decoration-thickness: 1px; text-underline-offset: 3px; }
@@ -38,8 +39,9 @@ const rules = `
 :where(.plot-hint) { position: absolute; right: 0; bottom: 100%; z-index: 2; padding: 0.25rem; font-size: 0.75rem; line-height: 1.2; white-space: pre; visibility: hidden; pointer-events: none;
   color: var(--quiet, #565a5c); background: var(--paper, #fff); }
 :where(.plot-figure:focus-visible .plot-hint) { visibility: visible; }
-.plot-hair[hidden], .plot-box[hidden], .plot-slip[hidden], .plot-dot[hidden], .plot-slide[hidden], .plot-pins[hidden], .plot-row [hidden] { display: none; }
+.plot-hair[hidden], .plot-box[hidden], .plot-slip[hidden], .plot-dot[hidden], .plot-slide[hidden], .plot-row [hidden] { display: none; }
 .plot-unseen { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
+@media (pointer: coarse) { .plot-range, .plot-slide button { height: 2.5rem; min-height: 2.5rem; } .plot-pins button { min-height: 2rem; } }
 @media print {
   .plot { break-inside: avoid; }
   .plot-figure { outline: none !important; }

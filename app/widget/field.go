@@ -78,7 +78,7 @@ func meaning(m state.Model, spec study.Spec) string {
 	if in := spec.Get(&m.Study); in != nil {
 		typed, known := units.Find(spec.Quantity, in.Unit)
 		shown := m.System.Unit(spec.Quantity)
-		if known && typed.Factor != shown.Factor {
+		if known && typed.ToSI(1) != shown.ToSI(1) {
 			parts = append(parts, "= "+units.Print(typed.ToSI(in.Value), shown, 4)+".")
 		}
 	} else if spec.Default != "" {

@@ -55,15 +55,6 @@ type Caution struct{ ID, Text, Cause, Do string }
 // Kr is the symbol of the phase's relative permeability, e.g. "krw".
 func (p Phase) Kr() string { return "kr" + p.Symbol }
 
-// KrEnd is the symbol of its end point, e.g. "krw0".
-func (p Phase) KrEnd() string { return p.Kr() + "0" }
-
-// Mu is the symbol of its viscosity.
-func (p Phase) Mu() string { return "μ" + p.Symbol }
-
-// Rho is the symbol of its density.
-func (p Phase) Rho() string { return "ρ" + p.Symbol }
-
 // Flow is the symbol of its fractional flow.
 func (p Phase) Flow() string { return "f" + p.Symbol }
 

@@ -8,13 +8,13 @@ import (
 // TestPairLabels: each symbol follows the phase that plays the role.
 func TestPairLabels(t *testing.T) {
 	want := map[PairID]string{
-		BrineOil: "krw krw0 μw ρw fw Sw Swc | kro kro0 μo ρo fo So Sor | imbibition",
-		GasOil:   "krg krg0 μg ρg fg Sg Sgc | kro kro0 μo ρo fo SL SLr | drainage",
-		BrineGas: "krw krw0 μw ρw fw Sw Swc | krg krg0 μg ρg fg Sg Sgr | imbibition",
-		CO2Brine: "krg krg0 μg ρg fg Sg Sgc | krw krw0 μw ρw fw Sw Swirr | drainage",
+		BrineOil: "krw fw Sw Swc | kro fo So Sor | imbibition",
+		GasOil:   "krg fg Sg Sgc | kro fo SL SLr | drainage",
+		BrineGas: "krw fw Sw Swc | krg fg Sg Sgr | imbibition",
+		CO2Brine: "krg fg Sg Sgc | krw fw Sw Swirr | drainage",
 	}
 	labels := func(p Phase) string {
-		return strings.Join([]string{p.Kr(), p.KrEnd(), p.Mu(), p.Rho(), p.Flow(), p.Saturation, p.Immobile}, " ")
+		return strings.Join([]string{p.Kr(), p.Flow(), p.Saturation, p.Immobile}, " ")
 	}
 	if len(Pairs()) != len(want) {
 		t.Errorf("%d pairs, want %d", len(Pairs()), len(want))

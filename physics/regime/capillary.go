@@ -20,19 +20,10 @@ const (
 // authors who divide u by porosity get numbers three to ten times as large.
 func CapillaryNumber(u, mu, sigma float64) float64 { return u * mu / sigma }
 
-// GradientCapillaryNumber is the same ratio told by what drives the flow.
-//
-//	Nc = k |grad p|/sigma
-//
-// k permeability (m2), gradient of pressure along the flow (Pa/m). It equals
-// CapillaryNumber where the displacing phase flows alone with a relative permeability
-// of 1. Source: Lake (1989), ch. 3.
-func GradientCapillaryNumber(k, gradient, sigma float64) float64 { return k * gradient / sigma }
-
 // Desaturation is the published spread of capillary numbers between which a residual
 // phase goes from trapped to gone: begin of release, then full release.
 //
-// Source: Lake (1989), table 3-3, from memory; orders of magnitude.
+// Source: Lake (1989), ch. 3, from memory; orders of magnitude.
 type Desaturation struct {
 	BeginLow, BeginHigh float64
 	FullLow, FullHigh   float64
@@ -41,9 +32,9 @@ type Desaturation struct {
 
 var (
 	// NonWettingResidual: oil in water-wet rock, gas.
-	NonWettingResidual = Desaturation{1e-5, 1e-4, 1e-2, 1e-1, "non-wetting residual: release begins at 1e−5 to 1e−4 and is complete at 1e−2 to 1e−1"}
+	NonWettingResidual = Desaturation{1e-5, 1e-4, 1e-2, 1e-1, "non-wetting residual: release begins at 1e−5 to 1e−4 and is complete at 1e−2 to 1e−1 (ch. 3, from memory)"}
 	// WettingResidual: oil in oil-wet rock, irreducible water.
-	WettingResidual = Desaturation{1e-4, 1e-3, 1e-2, 1e-1, "wetting residual: release begins at 1e−4 to 1e−3 and is complete at 1e−2 to 1e−1"}
+	WettingResidual = Desaturation{1e-4, 1e-3, 1e-2, 1e-1, "wetting residual: release begins at 1e−4 to 1e−3 and is complete at 1e−2 to 1e−1 (ch. 3, from memory)"}
 )
 
 // Judge says whether the residual phase, named as within a sentence, would move at

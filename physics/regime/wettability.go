@@ -101,7 +101,7 @@ func CoreyExponents(nw, no float64) Verdict {
 			v.Class = e.class
 		}
 	}
-	v.Range = strings.Join(rules, "; ")
+	v.Range = strings.Join(rules, "; ") + " (from memory)"
 	pair := "Corey exponents nw = " + number(nw) + " and no = " + number(no)
 	switch len(fit) {
 	case 0:

@@ -2,6 +2,7 @@ package regime
 
 import (
 	"math"
+	"strings"
 	"testing"
 )
 
@@ -72,6 +73,9 @@ func TestCoreyExponents(t *testing.T) {
 		complete(t, v)
 		if v.Class != class {
 			t.Errorf("nw = %g, no = %g: %+v, want %s", nw, no, v, class)
+		}
+		if !strings.Contains(v.Range, "from memory") {
+			t.Errorf("%q does not say that the ranges are from memory", v.Range)
 		}
 	}
 	for _, c := range []struct{ nw, no float64 }{

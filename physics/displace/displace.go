@@ -197,7 +197,7 @@ type State struct {
 // is Q (f_inlet - f(Si)). Oil produced differs from recovery where the injected stream
 // holds oil, or where oil leaves at the inlet.
 //
-// Source: Welge (1952), eq. 5, with the fractional flow of the inlet face for 1.
+// Source: Welge (1952), average saturation, with the fractional flow of the inlet face for 1.
 func (d *Displacement) After(q float64) State {
 	if !(q > 0) {
 		return State{Sw: d.initial, Cut: d.ahead.F, Average: d.initial}

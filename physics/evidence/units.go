@@ -86,7 +86,7 @@ var unitChecks = []Check{
 		compute: func() ([]float64, error) {
 			return []float64{waterGradient(si(units.Density, 62.4, "lb/ft3")), waterGradient(1000)}, nil
 		}},
-	{ID: "unit-gravity", Topic: "Units", Title: "Gravity term in field units", Source: ref.Dake1978, Place: "Eq. 10.18 prints 4.9e-4; Ahmed (2001) ch. 14 multiplies 0.001127 by 0.433", Provenance: Memory,
+	{ID: "unit-gravity", Topic: "Units", Title: "Gravity term in field units", Source: ref.Dake1978, Place: "Ch. 10 prints 4.9e-4; Ahmed (2001) ch. 14 multiplies 0.001127 by 0.433", Provenance: Memory,
 		Inputs: "bbl/d, md, ft², cp, difference of specific gravity", How: "Darcy's law in field units times the gradient of fresh water",
 		Items: []Item{
 			{"Dake's constant", 4.9e-4, 0.5e-5, lastDigit},

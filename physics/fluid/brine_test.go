@@ -95,8 +95,8 @@ func mccain(tF, percent float64) (mu, lbFt3 float64) {
 
 // TestMcCain checks our writing of the second correlation (formula from memory) against
 // the independent computation, then that both tell the same effect of salt: viscosity over
-// that of fresh water from 60 to 200 F within 12 %, which is how far apart published correlations
-// lie, and density over that of fresh water at 60 F within 0.5 %.
+// that of fresh water from 60 to 200 F within 12 % (the measured spread between the
+// two correlations, no source), and density over that of fresh water at 60 F within 0.5 %.
 func TestMcCain(t *testing.T) {
 	m := readPublished(t).McCain
 	for i, tF := range rows(t, m.TF) {

@@ -9,7 +9,7 @@ package fracflow
 // both > 0. Exact at f = 0 and f = 1. Meant for 0 <= f <= 1: outside it one phase
 // flows back and "cut" has lost its meaning.
 //
-// Source: Dake (1978), eq. 10.27.
+// Source: Dake (1978), ch. 10, water cut at surface.
 func SurfaceCut(f, bw, bo float64) float64 {
 	return f * bo / (f*bo + (1-f)*bw)
 }

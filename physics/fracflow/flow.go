@@ -25,7 +25,7 @@ type Function interface {
 // [0, 1]: that is counter-current flow. It is NaN where both mobilities vanish.
 //
 // Valid for MuW > 0 and MuO > 0 (Pa s), any finite Gravity.
-// Source: Buckley & Leverett (1942); Dake (1978), eq. 10.12 and 10.18.
+// Source: Buckley & Leverett (1942); Dake (1978), ch. 10, fractional flow with dip.
 type Flow struct {
 	Curves   relperm.Curves
 	MuW, MuO float64 // viscosities, Pa s
@@ -72,7 +72,7 @@ func (w Flow) Mobility(sw float64) (lambdaT, dLambdaT float64) {
 // only water has passed over that of oil where none has. +Inf when the oil does
 // not move at the initial saturation.
 //
-// Source: Dake (1978), eq. 10.7.
+// Source: Dake (1978), ch. 10, end-point mobility ratio.
 func (w Flow) EndPointMobilityRatio(initial, injected float64) float64 {
 	return w.Curves.At(injected).Krw / w.MuW / (w.Curves.At(initial).Kro / w.MuO)
 }
@@ -82,7 +82,8 @@ func (w Flow) EndPointMobilityRatio(initial, injected float64) float64 {
 // water ahead does not move the latter is the oil mobility. The front is stable
 // in a horizontal layer when it is below 1.
 //
-// Source: Dake (1978), section 10.3 (Ms); Craig (1971) averages the water behind instead.
+// Source: Dake (1978), ch. 10, shock-front mobility ratio (Ms); Craig (1971) averages the water
+// behind instead.
 func (w Flow) FrontMobilityRatio(behind, ahead float64) float64 {
 	b, _ := w.Mobility(behind)
 	a, _ := w.Mobility(ahead)

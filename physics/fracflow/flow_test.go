@@ -122,7 +122,7 @@ func TestCut(t *testing.T) {
 			t.Errorf("cut %g is not kept", f)
 		}
 	}
-	// Printed form of the definition, Dake (1978) eq. 10.27: 1/(1 + (Bw/Bo)(1/f - 1)).
+	// Printed form of the definition, Dake (1978), ch. 10, water cut at surface: 1/(1 + (Bw/Bo)(1/f - 1)).
 	for f := 0.05; f < 1; f += 0.05 {
 		near(t, "surface cut", SurfaceCut(f, 1.02, 1.31), 1/(1+1.02/1.31*(1/f-1)), 1e-15)
 		near(t, "there and back", ReservoirCut(SurfaceCut(f, 1.02, 1.31), 1.02, 1.31), f, 1e-15)

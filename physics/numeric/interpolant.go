@@ -68,12 +68,18 @@ func (l Linear) At(x float64) (value, slope float64) { return l.at(x, Cell.Line)
 // MonotoneCubic joins points by cubics with a continuous slope that rise where
 // the data rise, fall where they fall, and are level where they are level.
 //
-// Slopes start as those of the parabola through three neighbouring points (not
-// centred at the two ends), are zero where the data turn, and are then drawn into
-// the circle alpha² + beta² <= 9, with alpha and beta the slopes at the two ends
-// of a cell over the slope of its chord.
+// The rule, to be done again: with h the width and d the chord's slope of a cell,
 //
-// Source: Fritsch & Carlson (1980), sec. 4.
+//	inner node  m = (h₊ d₋ + h₋ d₊)/(h₋ + h₊), 0 where d₋ d₊ <= 0
+//	end node    m = ((2h + h₂) d - h d₂)/(h + h₂), 0 where its sign is not that of d
+//
+// which are the slopes of the parabola through three neighbouring points. Then cell
+// by cell, in rising x: both slopes are 0 where d = 0, and with alpha and beta the
+// slopes at its two ends over d, both are scaled by 3/sqrt(alpha² + beta²) where that
+// is below 1.
+//
+// Source: Fritsch & Carlson (1980) for the monotone region; the three-point slopes
+// are one of the starts that it leaves open.
 type MonotoneCubic struct{ table }
 
 var _ Interpolant = MonotoneCubic{}

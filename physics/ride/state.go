@@ -53,7 +53,7 @@ type Balance struct {
 //
 // the latter once the front has arrived.
 //
-// Source: Welge (1952), eq. 5; the same integral of the second balance.
+// Source: Welge (1952), average saturation; the same integral of the second balance.
 func (f *Flood) After(q float64) State {
 	if !(q > 0) {
 		return State{Sw: f.initial, Cut: f.node(Ahead, f.initial, 0).F, Zone: Ahead, Average: f.initial}

@@ -25,19 +25,36 @@ func (m Model) edited(msg Edited) (Model, []Effect) {
 	if !ok {
 		unit = m.System.Unit(spec.Quantity)
 	}
-	// Choosing another unit is a step of its own.
-	key := msg.Path + " " + unit.Symbol
-	var former *study.Input
-	if before := m.history.last(key); before != nil {
-		former = spec.Get(&before.study)
+	// What is typed is one step, a unit typed along included; choosing another unit
+	// beside the text is a step of its own.
+	key := msg.Path
+	if text, shown := m.Shown(spec); text == msg.Text && shown != unit.Symbol {
+		key = ""
 	}
-	return m.amend(key, func(p *page) { p.input(spec, clean(msg.Text), unit, former) })
+	before := m.history.last(key)
+	return m.amend(key, func(p *page) { p.input(spec, clean(msg.Text), unit, before) })
 }
 
-// input takes a text for an input. former is what it held before the keystrokes of
-// the same step: a number typed over another keeps its source, and a text that
-// turns out bad leaves in use what was there, not what its first letters spelled.
-func (p *page) input(spec study.Spec, text string, unit units.Unit, former *study.Input) {
+// Shown is the text and the unit that the field of an input shows: what was typed
+// while that differs from the study, else what the study holds, else nothing in the
+// unit of the system.
+func (m Model) Shown(spec study.Spec) (text, unit string) { return m.page().shown(spec) }
+
+func (p page) shown(spec study.Spec) (text, unit string) {
+	if draft, ok := p.drafts[spec.Path]; ok {
+		return draft.Text, draft.Unit
+	}
+	if in := spec.Get(&p.study); in != nil {
+		return units.Exact(in.Value), in.Unit
+	}
+	return "", units.System(p.study.System).Unit(spec.Quantity).Symbol
+}
+
+// input takes a text for an input. before is the page before the keystrokes of the
+// same step, nil when this is the first: a number typed over another keeps its
+// source, and a text that turns out bad leaves in use what was there, in the unit
+// chosen there, not what its first letters spelled.
+func (p *page) input(spec study.Spec, text string, unit units.Unit, before *page) {
 	path := spec.Path
 	in := spec.Get(&p.study)
 	delete(p.messages, path)
@@ -53,17 +70,18 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 		}
 		return
 	}
+	typed := Draft{text, unit.Symbol}
 	number, unit, problem := asNumber(spec, text, unit)
 	if problem != nil {
-		if former != nil {
-			in = former
-			spec.Set(&p.study, in)
+		if before != nil {
+			p.revert(spec, before)
+			_, typed.Unit = before.shown(spec)
 		}
-		p.refuse(path, Draft{text, unit.Symbol}, problem, inUse(spec, in))
+		p.refuse(path, typed, problem, inUse(spec, spec.Get(&p.study)))
 		return
 	}
-	if in == nil {
-		in = former
+	if in == nil && before != nil {
+		in = spec.Get(&before.study)
 	}
 	changed := study.Input{}
 	if in != nil {
@@ -77,6 +95,21 @@ func (p *page) input(spec study.Spec, text string, unit units.Unit, former *stud
 	spec.Set(&p.study, &changed)
 	p.keep(path, Draft{text, unit.Symbol}, units.Exact(number))
 	p.span(spec, low, high)
+}
+
+// revert takes an input and its range back to what they were on another page.
+func (p *page) revert(spec study.Spec, before *page) {
+	spec.Set(&p.study, spec.Get(&before.study))
+	p.forgetRange(spec.Path)
+	for _, end := range []string{lowEnd, highEnd} {
+		path := spec.Path + end
+		if draft, ok := before.drafts[path]; ok {
+			p.drafts[path] = draft
+		}
+		if message, ok := before.messages[path]; ok {
+			p.messages[path] = message
+		}
+	}
 }
 
 // asNumber reads a text as a lawful number of an input, or says why it is none.

@@ -26,8 +26,8 @@ func TestEdited(t *testing.T) {
 		{"percent typed along", []Msg{Edited{"field.porosity", "21 %", "fraction"}}, "field.porosity", "21 %", "21 %", nil},
 		{"unit corrected", []Msg{Edited{oil, "5", "cp"}, Edited{oil, "5", "Pa.s"}}, oil, "5 Pa.s", "", nil},
 		{"unknown unit falls back", []Msg{Edited{oil, "5", "furlong"}}, oil, "5 cp", "", nil},
-		{"letters", []Msg{Edited{oil, "5", "cp"}, Edited{oil, "thick", "cp"}}, oil, "5 cp", "thick", []string{"thick", "allowed", "In use: 5 cp."}},
-		{"negative", []Msg{Edited{oil, "5", "cp"}, Edited{oil, "-5", "cp"}}, oil, "5 cp", "-5", []string{"-5 cp", "allowed", "In use: 5 cp."}},
+		{"letters", []Msg{Edited{oil, "5", "cp"}, Left{}, Edited{oil, "thick", "cp"}}, oil, "5 cp", "thick", []string{"thick", "allowed", "In use: 5 cp."}},
+		{"negative", []Msg{Edited{oil, "5", "cp"}, Left{}, Edited{oil, "-5", "cp"}}, oil, "5 cp", "-5", []string{"-5 cp", "allowed", "In use: 5 cp."}},
 		{"1e999", []Msg{Edited{oil, "1e999", "cp"}}, oil, "", "1e999", []string{"1e999", "allowed"}},
 		{"nothing in use", []Msg{Edited{oil, "x", "cp"}}, oil, "", "x", []string{"x"}},
 		{"percent as fraction", []Msg{Edited{"field.porosity", "21", "fraction"}}, "field.porosity", "", "21", []string{"21"}},
@@ -69,6 +69,7 @@ func TestEmptiedKeepsItsUnitAndSource(t *testing.T) {
 func TestEditedAsksToComputeAndKeep(t *testing.T) {
 	m := empty()
 	n, effects := Update(m, Edited{oil, "5", "cp"})
+	n = after(n, Left{})
 	if n.Revision != m.Revision+1 || !n.Computing {
 		t.Errorf("revision %d after %d, computing %t; want the next one, computing", n.Revision, m.Revision, n.Computing)
 	}
@@ -227,4 +228,41 @@ func TestFirstLettersOfABadText(t *testing.T) {
 	if m = after(m, Undone{}); m.Messages[oil] != "" || m.Study.Fluids.OilViscosity.Value != 4 {
 		t.Errorf("one undo leads to %+v, message %q", m.Study.Fluids.OilViscosity, m.Messages[oil])
 	}
+}
+
+// TestRefusedTextChangesNothingElse: the unit inside a text that is refused is not
+// chosen, and what the letters before it spelled is not in use, nor its range moved.
+func TestRefusedTextChangesNothingElse(t *testing.T) {
+	const porosity = "field.porosity"
+	base := after(empty(), Edited{porosity, "0.213", "fraction"}, Ranged{porosity, "0.2", "0.25"}, Left{})
+	for _, text := range []string{"120 %", "0.3 %%", "0 md", "21 % of it"} {
+		m := base
+		for i := range text { // key by key, in the unit that the field shows
+			_, unit := m.Shown(spec(t, porosity))
+			m = after(m, Edited{porosity, text[:i+1], unit})
+		}
+		if m.Drafts[porosity] != (Draft{text, "fraction"}) || m.Messages[porosity] == "" {
+			t.Errorf("%q leaves %+v, message %q", text, m.Drafts[porosity], m.Messages[porosity])
+		}
+		if !sameStudy(m.Study, base.Study) || m.Messages[porosity+".low"]+m.Messages[porosity+".high"] != "" {
+			t.Errorf("%q leaves %s in use, and says %v", text, given(t, m, porosity), m.Messages)
+		}
+		_, unit := m.Shown(spec(t, porosity))
+		if m = after(m, Edited{porosity, "0.25", unit}); given(t, m, porosity) != "0.25 fraction" {
+			t.Errorf("after %q, 0.25 is read as %s", text, given(t, m, porosity))
+		}
+	}
+	m := after(empty(), Edited{porosity, "0.2", "fraction"}, Edited{porosity, "0.2x", "fraction"})
+	if given(t, m, porosity) != "" {
+		t.Errorf("in an empty field the first letters of a bad text leave %s in use", given(t, m, porosity))
+	}
+}
+
+func spec(t *testing.T, path string) study.Spec {
+	t.Helper()
+	s, ok := study.Find(path)
+	if !ok {
+		t.Fatalf("the study has no input %s", path)
+	}
+	return s
 }

@@ -78,3 +78,31 @@ func TestManySteps(t *testing.T) {
 		t.Error("redo does not lead back to the last study")
 	}
 }
+
+// TestAUnitTypedAlongIsNoStepOfItsOwn: "0.22 frac" is a number with its unit, and so
+// is "0.22 fraction"; undo leads to before the field was typed in.
+func TestAUnitTypedAlongIsNoStepOfItsOwn(t *testing.T) {
+	const porosity = "field.porosity"
+	base := after(empty(), Edited{porosity, "21", "%"}, Left{})
+	m := base
+	text := "0.22 fraction"
+	for i := range text {
+		_, unit := m.Shown(spec(t, porosity))
+		m = after(m, Edited{porosity, text[:i+1], unit})
+	}
+	if m = after(m, Left{}); given(t, m, porosity) != "0.22 fraction" {
+		t.Fatalf("in use is %s", given(t, m, porosity))
+	}
+	if m = after(m, Undone{}); !m.page().same(base.page()) {
+		t.Errorf("undo leads to %q, draft %+v", given(t, m, porosity), m.Drafts[porosity])
+	}
+}
+
+func TestAUnitChosenIsAStepOfItsOwn(t *testing.T) {
+	m := after(empty(), Edited{oil, "5", "cp"}, Edited{oil, "5", "Pa.s"}, Edited{oil, "56", "Pa.s"})
+	for _, want := range []string{"5 Pa.s", "5 cp", ""} {
+		if m = after(m, Undone{}); given(t, m, oil) != want {
+			t.Errorf("undo leads to %q, want %q", given(t, m, oil), want)
+		}
+	}
+}

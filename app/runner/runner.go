@@ -86,6 +86,8 @@ func (r *Runner) do(effect state.Effect) {
 		r.wish(&r.run, func() { r.evaluate(effect) })
 	case state.Keep:
 		r.wish(&r.keep, func() { r.store(effect.Study) })
+	case state.KeepFormer:
+		r.keepFormer(effect.Study)
 	case state.SetAside:
 		r.setAside(effect.Text)
 	case state.Download:

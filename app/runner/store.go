@@ -11,8 +11,9 @@ import (
 
 // Keys of the browser's storage. What is set aside has a number after its key.
 const (
-	studyKey = "brinefront/study"
-	asideKey = "brinefront/aside/"
+	studyKey  = "brinefront/study"
+	formerKey = "brinefront/before" // the study that the one kept took the place of
+	asideKey  = "brinefront/aside/"
 )
 
 // mostAside is how many damaged autosaves are set aside before no more is kept.
@@ -27,6 +28,20 @@ func (r *Runner) restore() {
 		r.deliver(state.NotKept{Reason: err.Error()})
 	}
 	r.deliver(state.Restored{Text: text})
+	if former, _, err := browser.Load(formerKey); err == nil && former != "" { // a fault is told above
+		r.deliver(state.FormerFound{Text: former})
+	}
+}
+
+// keepFormer keeps the study that another takes the place of; nil: none any more.
+func (r *Runner) keepFormer(st *study.Study) {
+	text := ""
+	if st != nil {
+		text = study.Write(*st)
+	}
+	if err := browser.Save(formerKey, text); err != nil {
+		r.deliver(state.Told{Level: "refused", Text: "The study before this one is not kept for the next visit; undo still brings it back. " + err.Error()})
+	}
 }
 
 // store keeps the study, unless it would overwrite what could not be set aside.

@@ -14,6 +14,9 @@ type (
 	}
 	// Keep writes the autosave; replies Kept or NotKept.
 	Keep struct{ Study study.Study }
+	// KeepFormer keeps the study that the one open took the place of, in place of the
+	// one kept so before; nil: none any more. Replies Told when that fails.
+	KeepFormer struct{ Study *study.Study }
 	// SetAside stores a damaged autosave under another key, never overwriting.
 	SetAside struct{ Text string }
 	// Download hands a file to the person.
@@ -35,6 +38,7 @@ type (
 
 func (Run) effect()           {}
 func (Keep) effect()          {}
+func (KeepFormer) effect()    {}
 func (SetAside) effect()      {}
 func (Download) effect()      {}
 func (PickFile) effect()      {}

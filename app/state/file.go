@@ -14,15 +14,15 @@ func (m Model) fileChosen(msg FileChosen) (Model, []Effect) {
 	if err != nil {
 		return m.notice("refused", strconv.Quote(msg.Name)+": "+err.Error()), nil
 	}
-	m = m.notice("done", strconv.Quote(msg.Name)+" is open. Undo brings back the study before.")
-	return m.turn("", fresh(st))
+	m, effects := m.turn("", m.replaced(st))
+	return m.notice("done", strconv.Quote(msg.Name)+" is open. Undo brings back the study before."), effects
 }
 
 // started opens a study of the program's own, in the units that are in use.
 func (m Model) started(st study.Study, said string) (Model, []Effect) {
 	st.System = m.Study.System
 	before := m.Revision
-	m, effects := m.turn("", fresh(st))
+	m, effects := m.turn("", m.replaced(st))
 	if m.Revision != before {
 		m = m.notice("done", said)
 	}
@@ -64,7 +64,9 @@ func (m Model) restored(msg Restored) (Model, []Effect) {
 		return m, append([]Effect{SetAside{msg.Text}}, effects...)
 	}
 	before := m.Revision
-	m, effects := m.show(fresh(st))
+	p := fresh(st)
+	p.former = m.Former
+	m, effects := m.show(p)
 	m.Saved = Saving{Done: true}
 	if m.Revision == before {
 		return m.compute()

@@ -166,10 +166,22 @@ func TestNotices(t *testing.T) {
 		t.Errorf("notices are %v after one was dismissed", m.Notices)
 	}
 	for i := range 20 {
-		m = after(m, Told{"done", strings.Repeat("x", i)})
+		m = after(m, Told{"done", strings.Repeat("x", i)}, Told{"refused", strings.Repeat("y", i)})
 	}
-	if len(m.Notices) > notices {
-		t.Errorf("%d notices stand at a time", len(m.Notices))
+	if len(m.Notices) != 2*notices || lastNotice(m) != strings.Repeat("y", 19) {
+		t.Errorf("notices are %v", m.Notices)
+	}
+	if n := after(m, Edited{oil, "thick", "cp"}); len(n.Notices) != 2*notices {
+		t.Error("a text that changes nothing takes notices away")
+	}
+	m = after(m, Edited{oil, "4", "cp"})
+	for _, n := range m.Notices {
+		if n.Level == "done" {
+			t.Errorf("%q stands after the next change of the study", n.Text)
+		}
+	}
+	if len(m.Notices) != notices {
+		t.Errorf("refusals left are %v, want %d", m.Notices, notices)
 	}
 }
 

@@ -37,6 +37,7 @@ func (m Model) undo() (Model, []Effect) {
 	if n < 0 {
 		return m, nil
 	}
+	m = m.settled()
 	m.history = history{past: h.past[:n], future: with(h.future, m.page())}
 	return m.show(*h.past[n])
 }
@@ -48,6 +49,7 @@ func (m Model) redo() (Model, []Effect) {
 	if n < 0 {
 		return m, nil
 	}
+	m = m.settled()
 	m.history = history{past: with(h.past, m.page()), future: h.future[:n]}
 	return m.show(*h.future[n])
 }

@@ -82,8 +82,11 @@ type (
 
 	Routed   struct{ Fragment string } // the address changed
 	Restored struct{ Text string }     // what the browser had kept; empty: nothing
-	Kept     struct{}                  // the autosave is written
-	NotKept  struct{ Reason string }
+	// FormerFound: the browser had kept the study before the one restored.
+	FormerFound struct{ Text string }
+	BroughtBack struct{} // open the former study again
+	Kept        struct{} // the autosave is written
+	NotKept     struct{ Reason string }
 
 	Answered struct {
 		Revision int
@@ -133,6 +136,8 @@ func (PrintAsked) message()       {}
 func (ExportAsked) message()      {}
 func (Routed) message()           {}
 func (Restored) message()         {}
+func (FormerFound) message()      {}
+func (BroughtBack) message()      {}
 func (Kept) message()             {}
 func (NotKept) message()          {}
 func (Answered) message()         {}

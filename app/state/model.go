@@ -25,6 +25,14 @@ type Model struct {
 	Computing      bool   // an answer to Revision is still to come
 	Failure        string // the engine's own failure, a bug to report; empty otherwise
 
+	// LastGood is the last answer of each sheet to inputs that stood before the step
+	// under way: what is shown, marked, while the newest ones contradict each other.
+	LastGood map[study.Sheet]study.Part
+
+	// Former is the study that the present one took the place of as a whole, until it
+	// is brought back or another takes its place; nil: none.
+	Former *study.Study
+
 	Route Route
 	Paste *PasteDraft // a pasted table being looked at; nil: none
 
@@ -36,10 +44,12 @@ type Model struct {
 	Evidence []wire.Evidence // the published checks, in order
 	Checking bool            // some of them are still to be computed
 
-	history history
-	linked  bool   // the address holds the study that is open
-	owed    string // an export asked for while the answers to it were still being computed
-	noticed int    // the ID of the newest notice
+	history    history
+	opened     *study.Study // the study as it was opened
+	formerKept *study.Study // the former study that the browser keeps
+	linked     bool         // the address holds the study that is open, untouched
+	owed       string       // an export asked for while the answers to it were still being computed
+	noticed    int          // the ID of the newest notice
 }
 
 // Draft is a text as typed and the unit chosen beside it.

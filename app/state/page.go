@@ -18,14 +18,16 @@ type page struct {
 	drafts   map[string]Draft
 	messages map[string]string
 	rows     []Row
+	former   *study.Study // another study that this one took the place of, and that can be brought back; nil: none
+	opened   *study.Study // the study as it was opened: tells whose page this is
 }
 
 // fresh is the page of a study that nobody has typed into yet.
 func fresh(st study.Study) page {
-	return page{study: st, drafts: map[string]Draft{}, messages: map[string]string{}, rows: rowsOf(st.Rock.Table)}
+	return page{study: st, drafts: map[string]Draft{}, messages: map[string]string{}, rows: rowsOf(st.Rock.Table), opened: &st}
 }
 
-func (m Model) page() page { return page{m.Study, m.Drafts, m.Messages, m.Rows} }
+func (m Model) page() page { return page{m.Study, m.Drafts, m.Messages, m.Rows, m.Former, m.opened} }
 
 // amend makes one undo step of a change to the page. Successive changes under
 // one key, as the keystrokes in one field, are one step; "" is a key of its own.
@@ -45,6 +47,9 @@ func (m Model) turn(key string, after page) (Model, []Effect) {
 	if before.same(after) {
 		return m, nil
 	}
+	if m.history.last(key) == nil {
+		m = m.settled()
+	}
 	m.history = m.history.push(key, before)
 	return m.show(after)
 }
@@ -53,18 +58,26 @@ func (m Model) turn(key string, after page) (Model, []Effect) {
 // computed and kept, and is no longer what the address holds.
 func (m Model) show(p page) (Model, []Effect) {
 	changed := !sameStudy(m.Study, p.study)
-	m.Study, m.Drafts, m.Messages, m.Rows = p.study, p.drafts, p.messages, p.rows
+	if m.opened != p.opened {
+		m.LastGood = nil // the answers to another study are none to this one
+	}
+	m.Study, m.Drafts, m.Messages, m.Rows, m.Former, m.opened = p.study, p.drafts, p.messages, p.rows, p.former, p.opened
 	m.System = units.System(m.Study.System)
 	m.CanUndo, m.CanRedo = m.history.has()
 	if !changed {
 		return m, nil
 	}
 	m.Revision++
+	m.Notices = slices.DeleteFunc(slices.Clone(m.Notices), func(n Notice) bool { return n.Level == "done" })
 	m, effects := m.compute()
 	// A page within another page is for looking at: it leaves the person's own
 	// autosave alone.
 	if !m.Route.Embed {
 		m.Saved.Done = false
+		if m.Former != m.formerKept {
+			m.formerKept = m.Former
+			effects = append(effects, KeepFormer{m.Former})
+		}
 		effects = append(effects, Keep{m.Study})
 	}
 	if m.linked {
@@ -81,7 +94,7 @@ func (m Model) compute() (Model, []Effect) {
 }
 
 func (p page) same(q page) bool {
-	return maps.Equal(p.drafts, q.drafts) && maps.Equal(p.messages, q.messages) &&
+	return p.former == q.former && maps.Equal(p.drafts, q.drafts) && maps.Equal(p.messages, q.messages) &&
 		slices.EqualFunc(p.rows, q.rows, func(a, b Row) bool { return a.Text == b.Text }) &&
 		sameStudy(p.study, q.study)
 }

@@ -50,7 +50,7 @@ func random(r *rand.Rand, m Model) Msg {
 	case 18:
 		return Redone{}
 	case 19:
-		return []Msg{StartedEmpty{}, DemoOpened{}, FileChosen{"x", mine()}, FileChosen{"x", text}, FileRefused{"x", text}, Restored{text}}[r.IntN(6)]
+		return []Msg{StartedEmpty{}, DemoOpened{}, FileChosen{"x", mine()}, FileChosen{"x", text}, FileRefused{"x", text}, Restored{text}, BroughtBack{}, FormerFound{mine()}, FormerFound{text}}[r.IntN(9)]
 	case 20:
 		return []Msg{OpenAsked{}, SaveAsked{}, ShareAsked{}, PrintAsked{}, ExportAsked{"report-text"}, ExportAsked{"damaged"}}[r.IntN(6)]
 	case 21:
@@ -134,7 +134,7 @@ func TestBadTextIsNeverLost(t *testing.T) {
 			return msg.Path != "field.start"
 		case Ranged:
 			return msg.Path != "field.length"
-		case Undone, Redone, RowAdded, RowRemoved, PasteAccepted, StartedEmpty, DemoOpened, FileChosen, Restored:
+		case Undone, Redone, RowAdded, RowRemoved, PasteAccepted, StartedEmpty, DemoOpened, FileChosen, Restored, BroughtBack:
 			return false
 		}
 		return true

@@ -49,10 +49,10 @@ func (m Model) routed(msg Routed) (Model, []Effect) {
 	if err != nil {
 		return m.notice("refused", "The study in this link cannot be opened: "+err.Error()), nil
 	}
-	before := m.Revision
+	before, kept, p := m.Revision, m.formerKept, m.replaced(st)
 	m.linked = false
-	m, effects := m.turn("", fresh(st))
-	m.linked = true
+	m, effects := m.turn("", p)
+	m.linked, m.formerKept = true, kept
 	if m.Revision == before {
 		return m, nil
 	}
@@ -63,10 +63,13 @@ func (m Model) routed(msg Routed) (Model, []Effect) {
 	return m, unkept(effects)
 }
 
-// unkept are the effects without the autosave.
+// unkept are the effects without what the browser is to keep.
 func unkept(effects []Effect) []Effect {
 	return slices.DeleteFunc(effects, func(e Effect) bool {
-		_, keeps := e.(Keep)
-		return keeps
+		switch e.(type) {
+		case Keep, KeepFormer:
+			return true
+		}
+		return false
 	})
 }

@@ -79,6 +79,10 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 		return m.routed(msg)
 	case Restored:
 		return m.restored(msg)
+	case FormerFound:
+		return m.formerFound(msg), nil
+	case BroughtBack:
+		return m.broughtBack()
 	case Kept:
 		m.Saved = Saving{Done: true}
 		return m, nil

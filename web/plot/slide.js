@@ -3,7 +3,7 @@
 import { reading, withUnit } from "./scale.js";
 import { sliderAt } from "./still.js";
 
-const steps = 200; // of the range input; its value counts them, its text tells the value
+const notches = 200; // of the range input; its value counts them, its text tells the value
 const whole = 6000; // milliseconds from one end to the other
 const stills = 10; // pictures of a run for a reader who wants no motion
 
@@ -12,7 +12,7 @@ const stills = 10; // pictures of a run for a reader who wants no motion
 export function slide(row, id, act) {
   const label = part("label", "plot-variable"), range = part("input", "plot-range"), said = part("output", "plot-value-now");
   const stops = part("span", "plot-stops"), play = part("button", "plot-play");
-  Object.assign(range, { type: "range", min: 0, max: steps, step: 1, id: `${id}-slider` });
+  Object.assign(range, { type: "range", min: 0, max: notches, step: 1, id: `${id}-slider` });
   Object.assign(play, { type: "button", id: `${id}-play` });
   Object.assign(said, { id: `${id}-slider-at` });
   label.htmlFor = range.id;
@@ -23,7 +23,7 @@ export function slide(row, id, act) {
   let slider = null, running = 0, named = "";
 
   function show(value) {
-    range.value = Math.round((steps * (value - slider.min)) / (slider.max - slider.min));
+    range.value = Math.round((notches * (value - slider.min)) / (slider.max - slider.min));
     const text = sliderText(slider, value);
     range.setAttribute("aria-valuetext", text);
     said.textContent = text;
@@ -62,7 +62,7 @@ export function slide(row, id, act) {
 
   range.addEventListener("input", () => {
     stop();
-    const value = slider.min + (range.value / steps) * (slider.max - slider.min);
+    const value = slider.min + (range.value / notches) * (slider.max - slider.min);
     show(value);
     act.to(value);
   });
@@ -72,7 +72,7 @@ export function slide(row, id, act) {
       stop();
       return act.rest();
     }
-    run(Number(range.value) >= steps ? slider.min : slider.min + (range.value / steps) * (slider.max - slider.min));
+    run(Number(range.value) >= notches ? slider.min : slider.min + (range.value / notches) * (slider.max - slider.min));
   });
   stop();
 

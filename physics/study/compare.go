@@ -34,6 +34,10 @@ func runCompare(st *Study, base evaluation) Part {
 			all = append(all, o)
 		}
 	}
+	if slices.ContainsFunc(all, outcome.rides) {
+		s.note(Note{ID: "compare.ride", Level: "remark", Text: "Recovery after 1 PV and its curve count what rides along; the arrival of water and all that is told in time are those of water alone.",
+			Cause: "What rides along is answered on the Front sheet.", Do: "Read the arrival of its front and bank there.", Paths: []string{"front.rider.kind"}})
+	}
 	compareFigures(s, all)
 	compareCharts(s, all)
 	compareTables(s, all)
@@ -134,8 +138,21 @@ func (o outcome) places(paths []string) []string {
 	return places
 }
 
-// figure is a figure of an outcome, found on the sheet its ID names.
+// counted is the figure that counts what rides along, by that of water alone.
+var counted = map[string]string{"front.recoveryAtOne": "front.ride.recoveryAtOne"}
+
+// rides reports whether something rides along that the outcome's recovery counts.
+func (o outcome) rides() bool {
+	_, ok := o.frontPart.Figure(counted["front.recoveryAtOne"])
+	return ok
+}
+
+// figure is a figure of an outcome, found on the sheet its ID names, with what
+// rides along where that is answered.
 func (o outcome) figure(id string) (Figure, bool) {
+	if f, ok := o.frontPart.Figure(counted[id]); ok {
+		return f, true
+	}
 	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
 		if f, ok := p.Figure(id); ok {
 			return f, true

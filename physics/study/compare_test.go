@@ -213,6 +213,35 @@ func TestCaseOfAnotherRate(t *testing.T) {
 	}
 }
 
+// Polymer beside water: recovery counts it, and what does not says so.
+func TestCaseOfPolymer(t *testing.T) {
+	st := Demo()
+	st.Cases = []Case{{Name: "polymer", Choose: map[string]string{"front.rider.kind": "polymer"}, Set: map[string]Input{"front.rider.viscosity": {Value: 9, Unit: "cp"}}}}
+	r := Run(st)
+	p, alone := r.Parts[SheetCompare], r.Parts[SheetFront]
+	with := Run(st.Cases[0].On(st)).Parts[SheetFront]
+	polymer, ok := with.Figure("front.ride.recoveryAtOne")
+	water, _ := alone.Figure("front.recoveryAtOne")
+	if !ok || polymer.Value <= water.Value {
+		t.Fatalf("polymer of 9 cp recovers %v, water %v", polymer.Value, water.Value)
+	}
+	row := comparedRow(t, p, "compare.figures", "polymer")
+	near(t, "recovery after 1 PV", row["R1"], polymer.Value, 0)
+	near(t, "what the polymer adds", row["ΔR1"], polymer.Value-water.Value, 0)
+	line := must(t, p, "compare.recovery", "case1")
+	near(t, "recovery in the picture", interpolate(line.X, line.Y, 1), polymer.Value, 1e-9)
+	if !slices.ContainsFunc(p.Notes, func(n Note) bool { return n.ID == "compare.ride" }) {
+		t.Error("nothing says what is told of water alone")
+	}
+	var said string
+	for _, phrase := range p.Answer {
+		said += phrase.Text
+	}
+	if !strings.Contains(said, "more of the pore volume produced after 1 PV") {
+		t.Errorf("the answer is %q", said)
+	}
+}
+
 func BenchmarkRunFiveCases(b *testing.B) {
 	st := Demo()
 	for i := range MaxCases {

@@ -72,9 +72,18 @@ func (o outcome) flowLine() Line {
 
 func (o outcome) recoveryLine(end float64) Line {
 	d := o.front.displacement
-	l := o.over("", "line", injections(d, end, 1), nil)
-	for _, q := range l.X {
-		l.Y = append(l.Y, d.After(q).Recovery)
+	if !o.rides() {
+		l := o.over("", "line", injections(d, end, 1), nil)
+		for _, q := range l.X {
+			l.Y = append(l.Y, d.After(q).Recovery)
+		}
+		return l
+	}
+	l := o.over("", "line", nil, nil)
+	for _, q := range injections(d, end, append(o.front.rideEvents(), 1)...) {
+		if state, ok := o.front.rider.after(q); ok { // up to where a slug is spent
+			l.X, l.Y = append(l.X, q), append(l.Y, state.Recovery)
+		}
 	}
 	return l
 }

@@ -59,13 +59,13 @@ func (c comparison) difference(base, o outcome) (f Figure, of [2]Figure, word st
 func compareFigures(s *sheet, all []outcome) {
 	base := all[0]
 	for _, o := range all[1:] {
-		_, limited := o.figure("field.recoveryAtLimit")
+		limited := o.limited(base)
 		for _, c := range slices.Concat(comparedInFront, comparedInField) {
 			f, of, word, ok := c.difference(base, o)
 			if !ok {
 				continue
 			}
-			told := c.name == "breakthrough" || c.name == "recoveryAtLimit" || c.name == "recoveryAtOne" && !limited
+			told := c.name == "breakthrough" || c.name == "recoveryAtLimit" && limited || c.name == "recoveryAtOne" && !limited
 			f.Strip = told && f.Value != 0
 			was, is := of[0], of[1]
 			symbol := is.Symbol + "," + strconv.Itoa(o.index+1)
@@ -78,6 +78,14 @@ func compareFigures(s *sheet, all []outcome) {
 				rests(was.Working.Inputs...).rests(o.places(is.Working.Inputs)...))
 		}
 	}
+}
+
+// limited reports whether the outcome is judged at the economic limit: when it and
+// the base have one, and nothing rides along, which the limit does not know of.
+func (o outcome) limited(base outcome) bool {
+	_, was := base.figure("field.recoveryAtLimit")
+	_, is := o.figure("field.recoveryAtLimit")
+	return was && is && !o.rides() && !base.rides()
 }
 
 // compareTables set the figures side by side: those of the front for all, those
@@ -132,7 +140,7 @@ func compareAnswer(s *sheet, all []outcome) {
 		s.tell(lead + "“" + o.name + "” ")
 		lead = "; "
 		s.told(all[0], o, comparedInFront[0], "brings water ", "", "after the same volume injected")
-		if _, limited := s.part.Figure("compare." + o.id + ".recoveryAtLimit"); limited {
+		if o.limited(all[0]) {
 			s.told(all[0], o, comparedInField[1], " and reaches the limit ", "", "at the same time")
 			s.told(all[0], o, comparedInField[2], " with ", " of the pore volume produced", "the same recovery")
 		} else {

@@ -89,14 +89,7 @@ func TestReleasedStudiesOpen(t *testing.T) {
 }
 
 func TestReleasedDemoKeepsItsMeaning(t *testing.T) {
-	text, err := os.ReadFile("../../testdata/cases/v1-demo.json")
-	if err != nil {
-		t.Fatal(err)
-	}
-	st, err := Read(string(text))
-	if err != nil {
-		t.Fatal(err)
-	}
+	st := released(t, "v1-demo.json")
 	if in := st.Fluids.OilViscosity; in == nil || in.Value != 8.3 || in.Unit != "cp" {
 		t.Errorf("oil viscosity: %+v", in)
 	}
@@ -106,6 +99,40 @@ func TestReleasedDemoKeepsItsMeaning(t *testing.T) {
 	if st.Rock.Reference != "oil" || st.Field.Start != "2027-03-01" {
 		t.Errorf("choices: %+v %+v", st.Rock.Reference, st.Field.Start)
 	}
+}
+
+// TestReleasedDipKeepsItsMeaning: a pair, a dip, brine by its temperature; and of a file
+// from before there were pairs, that it is about brine and oil.
+func TestReleasedDipKeepsItsMeaning(t *testing.T) {
+	st := released(t, "v1-dip.json")
+	if st.Fluids.Pair != "brine-gas" {
+		t.Errorf("the pair is %q", st.Fluids.Pair)
+	}
+	for path, want := range map[string]float64{"front.dip": 17, "fluids.temperature": 74, "fluids.salinity": 4.1, "fluids.oilDensity": 141, "rock.land": 1.9, "front.velocity": 0.23, "fluids.tension": 41} {
+		spec, _ := Find(path)
+		if in := spec.Get(&st); in == nil || in.Value != want {
+			t.Errorf("%s: %+v, want %g", path, in, want)
+		}
+	}
+	if part := Run(st).Parts[SheetFront]; part.Status != Ready {
+		t.Errorf("its front is %s, misses %v", part.Status, part.Missing)
+	}
+	if old := released(t, "v1-demo.json"); old.Fluids.Pair != "brine-oil" || old.Front.Dip != nil {
+		t.Errorf("an older file is about %q and dips by %+v", old.Fluids.Pair, old.Front.Dip)
+	}
+}
+
+func released(t *testing.T, name string) Study {
+	t.Helper()
+	text, err := os.ReadFile("../../testdata/cases/" + name)
+	if err != nil {
+		t.Fatal(err)
+	}
+	st, err := Read(string(text))
+	if err != nil {
+		t.Fatal(err)
+	}
+	return st
 }
 
 func TestReadRefuses(t *testing.T) {
@@ -118,6 +145,7 @@ func TestReadRefuses(t *testing.T) {
 	}
 	porosity := "\"porosity\": {\n      \"value\": 0.213,"
 	cases := []struct{ name, text, path, reason string }{
+		{"an unknown pair", swap(`"pair": "brine-oil"`, `"pair": "oil-oil"`), "fluids.pair", `"oil-oil", allowed: one of "brine-oil", "gas-oil", "brine-gas", "co2-brine"`},
 		{"nothing", " \n", "", "empty"},
 		{"too large", strings.Repeat(" ", MaxBytes+1), "", "larger than 4 MB"},
 		{"not text", "\xff\xfe\x00", "", "UTF-8"},

@@ -17,7 +17,7 @@ func (f *front) rideCharts(s *sheet) {
 	end := math.Max(1.5, math.Max(1.5*r.flood.Arrival(), 3*f.displacement.Breakthrough()))
 	s.part.Charts = append(s.part.Charts, f.constructionChart(), f.rideProfileChart(end))
 	if r.kind == tracer {
-		s.part.Charts = append(s.part.Charts, f.responseChart(end))
+		s.part.Charts = append(s.part.Charts, f.responseChart())
 	} else {
 		s.part.Charts = append(s.part.Charts, f.rideRecoveryChart(end))
 	}
@@ -165,10 +165,10 @@ func (f *front) rideEvents() []float64 {
 }
 
 // responseChart is the tracer at the producer.
-func (f *front) responseChart(end float64) Chart {
+func (f *front) responseChart() Chart {
 	r := f.rider
 	t, size, arrival := r.tracer(), r.size(), r.flood.Arrival()
-	end = math.Max(end, 1.5*arrival)
+	end := math.Max(1.5, 1.5*arrival)
 	if !math.IsInf(size, 1) {
 		end += size
 	}

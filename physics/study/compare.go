@@ -27,7 +27,7 @@ func runCompare(st *Study, base evaluation) Part {
 	}
 	all := []outcome{{evaluation: base, id: "base", name: BaseCase, index: -1}}
 	for i, c := range st.Cases {
-		o := outcome{id: "case" + strconv.Itoa(i+1), name: c.Name, index: i, changed: c.Changes()}
+		o := outcome{id: "case" + strconv.Itoa(i+1), name: standIn(i), index: i, changed: c.Changes()}
 		o.evaluation = base.with(c)
 		s.cautions(o, base)
 		if o.front != nil {
@@ -43,6 +43,20 @@ func runCompare(st *Study, base evaluation) Part {
 	compareTables(s, all)
 	compareAnswer(s, all)
 	return s.close(base.frontPart.Status)
+}
+
+// standIn stands for the name of a case until all else is told in the words of the
+// pair: "More viscous oil" is the person's, and stays so where gas is displaced.
+func standIn(i int) string { return string(rune('\uE000' + i)) } // of the code points that mean nothing
+
+// caseNames are the words that put the names in.
+func caseNames(cases []Case) *words {
+	w := &words{list: map[string]string{}}
+	for i, c := range cases {
+		w.list[standIn(i)] = c.Name
+	}
+	w.compile()
+	return w
 }
 
 // with evaluates a case of the study that was evaluated.

@@ -242,6 +242,34 @@ func TestCaseOfPolymer(t *testing.T) {
 	}
 }
 
+// Names are the person's: where another pair changes the words for water and oil,
+// it leaves them alone.
+func TestNamesOfCasesAreKept(t *testing.T) {
+	const name = "More viscous oil, less water"
+	for _, pair := range Pairs {
+		st := Demo()
+		st.Fluids.Pair = pair.Value
+		st.Cases = []Case{{Name: name, Set: map[string]Input{"fluids.oilViscosity": {Value: 24, Unit: "cp"}}}}
+		p := Run(st).Parts[SheetCompare]
+		if p.Status != Ready {
+			t.Errorf("%s: %s", pair.Value, p.Status)
+			continue
+		}
+		if got := p.Tables[0].Columns[0].Words[1]; got != name {
+			t.Errorf("%s: the table says %q", pair.Value, got)
+		}
+		if got := must(t, p, "compare.recovery", "case1").Label; got != name {
+			t.Errorf("%s: the line says %q", pair.Value, got)
+		}
+		if f := p.Figures[0]; !strings.Contains(f.Label, "“"+name+"”") || !strings.Contains(p.Answer[0].Text, name) {
+			t.Errorf("%s: the figure says %q, the answer %q", pair.Value, f.Label, p.Answer[0].Text)
+		}
+		if label := p.Figures[0].Label; pair.Value == "gas-oil" && !strings.Contains(label, "gas arrives") {
+			t.Errorf("%s: the figure says %q, not in the words of the pair", pair.Value, label)
+		}
+	}
+}
+
 func BenchmarkRunFiveCases(b *testing.B) {
 	st := Demo()
 	for i := range MaxCases {

@@ -11,7 +11,11 @@ func Run(st Study) Result {
 	if len(st.Cases) > 0 {
 		parts[SheetCompare] = runCompare(&st, base)
 	}
-	return told(Result{Problems: append([]Problem{}, base.problems...), Parts: parts}, pairOf(&st))
+	r := told(Result{Problems: append([]Problem{}, base.problems...), Parts: parts}, pairOf(&st))
+	if compared, ok := r.Parts[SheetCompare]; ok {
+		r.Parts[SheetCompare] = caseNames(st.Cases).part(compared)
+	}
+	return r
 }
 
 // evaluation is a study taken through the sheets of the job.

@@ -24,5 +24,7 @@ func (f *Front) Render() app.UI {
 			widget.Choice(d, "fluids.pair", "What displaces what", m.Study.Fluids.Pair, study.Choices("fluids.pair"), "Labels, usual values and cautions follow the pair.")),
 		widget.Group(d, m, study.SheetFront, "States", "Saturations before and behind"),
 		&widget.Fold{Desk: d, Model: m, Sheet: study.SheetFront, Group: "Dip", Title: "Gravity and dip"},
+		widget.Group(d, m, study.SheetFront, "Rider", "What rides along",
+			widget.Choice(d, "front.rider.kind", "With the injected water rides", m.Study.Front.Rider.Kind, study.Choices("front.rider.kind"), "Only with brine as the displacing phase. The front of it, its bank and what it adds are told beside the flood with water alone.")),
 	)
 }

@@ -35,6 +35,10 @@ type Points struct {
 	// RelativeToOil: the study says that kr refers to the oil permeability at
 	// initial water. Default: it refers to absolute permeability. Inspect uses it.
 	RelativeToOil bool
+
+	// FilledByOil: where there is no water there is nothing but "oil" in the pores,
+	// as with brine before gas enters: its kr is then 1 of absolute permeability.
+	FilledByOil bool
 }
 
 // Weighting is how much a point counts.

@@ -59,6 +59,8 @@ func TestInspect(t *testing.T) {
 		{"oil still flows", func(p *Points) { p.Kro[5] = 0.02 }, "kro-end", []int{5}, "kro = 0.02 at Sw = 0.7", false},
 		{"above one", func(p *Points) { p.Kro[0] = 1.1 }, "above-one", []int{0}, "kro = 1.1", false},
 		{"relative to oil", func(p *Points) { p.Kro[0] = 1 }, "reference", []int{0}, "kro = 1 at Sw = 0.2", false},
+		{"no longer full", func(p *Points) { p.Kro[0], p.FilledByOil = 1, true }, "reference", []int{0}, "kro = 1 at Sw = 0.2", false},
+		{"oil beside connate water", func(p *Points) { p.Sw[0], p.Kro[0] = 0, 1 }, "reference", []int{0}, "kro = 1 at Sw = 0", false},
 		{"not relative to oil", func(p *Points) { p.RelativeToOil = true }, "reference", []int{0}, "kro = 0.8", false},
 	}
 	for _, test := range tests {
@@ -83,7 +85,10 @@ func TestInspect(t *testing.T) {
 	}
 	relative := sound()
 	relative.Kro[0], relative.RelativeToOil = 1, true
-	for _, p := range []Points{sound(), relative} {
+	// One phase alone in the rock flows as absolute permeability says.
+	full := sound()
+	full.Sw[0], full.Kro[0], full.FilledByOil = 0, 1, true
+	for _, p := range []Points{sound(), relative, full} {
 		if found := Inspect(p); found != nil {
 			t.Errorf("found %+v in sound points", found)
 		}

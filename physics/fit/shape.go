@@ -176,8 +176,9 @@ func (p Points) scale() []Finding {
 	start := p.Kro[first]
 	read := fmt.Sprintf("kro = %.4g at Sw = %.4g", start, p.Sw[first])
 	one := math.Abs(start-1) < exactly
+	full := p.FilledByOil && p.Sw[first] < exactly
 	switch {
-	case one && !p.RelativeToOil:
+	case one && !p.RelativeToOil && !full:
 		found = append(found, Finding{ID: "reference", Rows: []int{first}, Read: read,
 			Text: "kro is exactly 1 at initial water. That is how kr looks when it refers to ko(Swi); the study says absolute permeability.",
 			Do:   "Look in the laboratory report; if it says ko(Swi), choose that as the reference."})

@@ -62,6 +62,11 @@ func (p Phase) Flow() string { return "f" + p.Symbol }
 // must then come from a drainage experiment, otherwise from imbibition.
 func (p Pair) Drainage() bool { return !p.Displacing.Wetting }
 
+// FilledByResident reports whether the pores hold nothing but the resident phase where
+// none of the displacing one is: brine before gas enters. There its relative
+// permeability is 1 by definition. Oil always has connate water beside it.
+func (p Pair) FilledByResident() bool { return p.Resident.Wetting && p.Resident.Brine }
+
 // WettingSaturation turns the saturation of the displacing phase into that of the wetting
 // phase, and back: s where the displacing phase wets, 1 - s where it does not. With
 // gas and oil over connate water the wetting phase is all liquid.

@@ -29,6 +29,9 @@ func TestPairLabels(t *testing.T) {
 		if p.Drainage() {
 			kind = "drainage"
 		}
+		if got := p.FilledByResident(); got != (id == CO2Brine) {
+			t.Errorf("%s: filled by the resident phase alone: %v", id, got)
+		}
 		if got := labels(p.Displacing) + " | " + labels(p.Resident) + " | " + kind; got != text {
 			t.Errorf("%s: %s\nwant %s", id, got, text)
 		}

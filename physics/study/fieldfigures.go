@@ -55,7 +55,7 @@ func (f *field) rateHeld() bool {
 
 // clock is how time follows from volume at a constant pressure difference.
 func (f *field) clock(s *sheet) *working {
-	return s.by("", "At a constant pressure difference the rate follows the resistance of the flood: t = φ L²/(k Δp u) ∫ R dQ with R(Q) = ∫ dx/λt from injector to producer, integrated exactly over the states of the displacement.", ref.Dake1978).
+	return s.by("", "Darcy's law over the displacement: at a constant pressure difference the rate follows the resistance of the flood, t = φ L²/(k Δp u) ∫ R dQ with R(Q) = ∫ dx/λt from injector to producer, integrated exactly over the states of the displacement.", ref.BuckleyLeverett1942, ref.Welge1952).
 		rests("field.length", "field.porosity", "field.permeability", "field.pressure").on("field.uptime", "front.breakthrough")
 }
 

@@ -11,13 +11,23 @@ func (f *front) notes(s *sheet) {
 		Cause: "Each of these can move the front and the recovery.", Do: "Use it to decide what to look at next, not to sanction a project."})
 	f.judgements(s)
 	f.brineNotes(s)
+	waterEnd, oilEnd := flowAtEnds(f.flow.Curves)
 	if _, cut := f.displacement.InletFace(); cut < 1 {
+		cause, do := "Water alone would bring the inlet to 1 − Sor.", "Leave the inlet saturation empty unless oil is injected too."
+		if oilEnd {
+			cause = "Oil still flows in the last row of the table, so that the saturation where it stops is not known."
+			do = "Add the row of residual oil with kro = 0."
+		}
 		s.note(Note{ID: "front.inlet", Level: "caution", Text: "The saturation held at the inlet lets oil flow there: the injected stream is " + units.Format(100*(1-cut), 3) + " % oil.",
-			Cause: "Water alone would bring the inlet to 1 − Sor.", Do: "Leave the inlet saturation empty unless oil is injected too. Recovery counts the oil displaced, net of the oil injected.", Paths: []string{"front.injectedWater"}})
+			Cause: cause, Do: do + " Recovery counts the oil displaced, net of the oil injected.", Paths: []string{"front.injectedWater"}})
 	}
 	if cut := f.cutAhead(); cut > 0 {
+		cause := "The initial water saturation lies above the connate water of the curve."
+		if waterEnd {
+			cause = "Water already flows in the first row of the table, so that the curve does not tell where it begins to."
+		}
 		s.note(Note{ID: "front.mobileWater", Level: "remark", Text: "Water flows from the first day: at the initial saturation the water cut is " + units.Format(100*cut, 3) + " % at reservoir conditions.",
-			Cause: "The initial water saturation lies above the connate water of the curve.", Do: "Breakthrough here means the arrival of the injected front, not of the first water.", Paths: []string{"front.initialWater"}})
+			Cause: cause, Do: "Breakthrough here means the arrival of the injected front, not of the first water.", Paths: []string{"front.initialWater"}})
 	}
 	if waves := f.displacement.Waves(); len(waves) > 2 && s.st.Rock.Curve == "table-linear" {
 		s.note(Note{ID: "front.staircase", Level: "remark", Text: "The displacement is a staircase of small steps.",

@@ -58,13 +58,28 @@ func runRock(st *Study, problems *[]Problem) (Part, *rock) {
 	s.part.Charts = append(s.part.Charts, r.chart(s))
 	r.tables(s)
 	r.notes(s)
-	s.answer("Water begins to flow at Swc = {rock.swc} and oil stops at Sor = {rock.sor}",
+	begins, stops := "Water begins to flow at Swc = {rock.swc}", "oil stops at Sor = {rock.sor}"
+	water, oil := flowAtEnds(r.reported)
+	if water {
+		begins = "Water already flows in the first row, at Sw = {rock.swc}"
+	}
+	if oil {
+		stops = "oil still flows in the last row, with {rock.sor} of it left"
+	}
+	s.answer(begins+" and "+stops,
 		"; the curves cross at Sw = {rock.crossover}", "; krw ends at {rock.krw0} of the absolute permeability", ".")
 	status := Ready
 	if r.fitted != nil && r.fitted.Status != fit.Converged {
 		status = Stopped
 	}
 	return s.close(status), r
+}
+
+// flowAtEnds reports whether water flows at the smallest saturation of the curves and
+// oil at the largest: a table may start and end short of the states where they stop.
+func flowAtEnds(c relperm.Curves) (water, oil bool) {
+	low, high := c.Ends()
+	return c.At(low).Krw > 0, c.At(high).Kro > 0
 }
 
 // measures reports whether the curve rests on the laboratory points.
@@ -168,6 +183,9 @@ func (r *rock) table(s *sheet, points fit.Points, kind relperm.Kind) {
 		return
 	}
 	r.reported, r.ends = table, "First and last row of the table."
+	if kind == relperm.MonotoneCubic {
+		r.ends += " Between the rows a monotone cubic: three-point slopes, limited."
+	}
 }
 
 // points are the laboratory points; false when none are given.
@@ -176,5 +194,5 @@ func (s *sheet) points() (fit.Points, bool) {
 	if t == nil || len(t.Sw) == 0 || len(t.Krw) != len(t.Sw) || len(t.Kro) != len(t.Sw) {
 		return fit.Points{}, false
 	}
-	return fit.Points{Sw: t.Sw, Krw: t.Krw, Kro: t.Kro, RelativeToOil: s.st.Rock.Reference == "oil"}, true
+	return fit.Points{Sw: t.Sw, Krw: t.Krw, Kro: t.Kro, RelativeToOil: s.st.Rock.Reference == "oil", FilledByOil: pairOf(s.st).FilledByResident()}, true
 }

@@ -38,6 +38,7 @@ func (r *rock) notes(s *sheet) {
 	}
 	r.wettability(s)
 	r.reference(s)
+	r.aboveOne(s)
 }
 
 // fitNotes passes on what the fit says of itself.
@@ -76,6 +77,7 @@ func (r *rock) wettability(s *sheet) {
 // reference says which permeability kr refers to, and doubts it where it looks wrong.
 func (r *rock) reference(s *sheet) {
 	start := r.reported.At(r.swc).Kro
+	full := pairOf(s.st).FilledByResident() && r.swc == 0
 	switch {
 	case s.st.Rock.Reference == "oil":
 		s.note(Note{ID: "rock.converted", Level: "remark", Text: "kr was reported relative to ko(Swi) and is used relative to absolute permeability: multiplied by ko(Swi)/k = " + units.Format(r.factor, 4) + ".",
@@ -84,8 +86,45 @@ func (r *rock) reference(s *sheet) {
 			s.note(Note{ID: "rock.referenceStart", Level: "caution", Text: "kro starts at " + units.Format(start, 3) + ", though kr is said to refer to ko(Swi).",
 				Cause: "Relative to the oil permeability at initial water kro starts at 1.", Do: "Look which permeability the laboratory report names.", Paths: []string{"rock.reference"}})
 		}
-	case start == 1 && !r.measures():
+	case start == 1 && !full && !r.measures():
 		s.note(Note{ID: "rock.referenceAbsolute", Level: "caution", Text: "kro starts at exactly 1, though kr is said to refer to absolute permeability.",
 			Cause: "Oil beside connate water hardly ever flows as easily as water alone; a start at 1 is how curves relative to ko(Swi) look.", Do: "Look which permeability the laboratory report names.", Paths: []string{"rock.reference"}})
 	}
+}
+
+// aboveOne doubts a phase that would flow more easily beside another than water does
+// alone. Points above 1 as they were typed are a finding of their own.
+func (r *rock) aboveOne(s *sheet) {
+	const rounding = 1e-9
+	note := Note{Level: "caution", Paths: []string{"rock.reference", "rock.permeability", "rock.oilPermeability"}}
+	if r.factor > 1 {
+		note.ID, note.Text = "rock.exchanged", "ko(Swi) is larger than the absolute permeability k, by the factor "+units.Format(r.factor, 4)+"."
+		note.Cause, note.Do = "Oil beside connate water hardly ever flows as easily as one phase alone: most likely the two entries are exchanged.", "Exchange them if the laboratory report says so."
+		s.note(note)
+		return
+	}
+	var read []string
+	for _, end := range []struct {
+		symbol   string
+		reported float64
+	}{{"krw0", r.reported.At(r.swmax).Krw}, {"kro0", r.reported.At(r.swc).Kro}} {
+		if end.reported*r.factor > 1+rounding {
+			read = append(read, end.symbol+" = "+units.Format(end.reported*r.factor, 4))
+		}
+	}
+	switch {
+	case len(read) == 0:
+		return
+	case r.factor != 1:
+		note.ID, note.Text = "rock.convertedAboveOne", "Converted to absolute permeability a curve ends above 1: "+strings.Join(read, ", ")+"."
+		note.Do = "Look whether kr refers to ko(Swi) at all, and whether both permeabilities are right."
+	case r.measures():
+		return
+	default:
+		note.ID, note.Text = "rock.aboveOne", "A curve ends above 1: "+strings.Join(read, ", ")+", though kr is said to refer to absolute permeability."
+		note.Do = "Look for a slip in typing, and which permeability the laboratory report names."
+		note.Paths = append([]string{"rock.reference"}, r.inputs...)
+	}
+	note.Cause = "A phase flows no more easily beside another than alone in the rock."
+	s.note(note)
 }

@@ -21,7 +21,7 @@ type Compare struct {
 // Render draws the sheet: the table first, since it is what cases are made for.
 func (c *Compare) Render() app.UI {
 	d, m := c.Desk, c.Model
-	part := m.Result.Parts[study.SheetCompare]
+	part, stale := m.Part(study.SheetCompare)
 	return app.Article().Class("sheet").DataSet("sheet", "compare").Aria("busy", strconv.FormatBool(m.Computing)).Body(
 		app.Div().Class("told").Body(
 			heading("compare"),
@@ -30,8 +30,8 @@ func (c *Compare) Render() app.UI {
 				app.H2().Text("○ No cases yet"),
 				app.P().Text("A case is this study with a few inputs changed: a more viscous oil, another curve, half the rate. Add one, choose what it changes, and its curves and figures appear here beside those of the study."),
 			),
-			&widget.Answers{Desk: d, Sheet: study.SheetCompare, Part: part, System: m.System},
-			widget.Wanting(d, part, m.Result.Problems),
+			widget.Wanting(d, m.Result.Parts[study.SheetCompare], m.Result.Problems),
+			&widget.Answers{Desk: d, Sheet: study.SheetCompare, Part: part, Stale: stale, System: m.System},
 			widget.Notes(d, "Cautions", "caution", part.Notes),
 			tables(m, part),
 			pictures(m, part),

@@ -144,6 +144,9 @@ func standing(m state.Model, sheet string) string {
 	if sheet == string(study.SheetCompare) && len(m.Study.Cases) == 0 {
 		return "○ no cases yet"
 	}
+	if refusesText(m, sheet) {
+		return "✕ input refused"
+	}
 	part := m.Result.Parts[study.Sheet(sheet)]
 	switch part.Status {
 	case study.Waiting:
@@ -168,6 +171,20 @@ func standing(m state.Model, sheet string) string {
 		return "▲ " + strconv.Itoa(cautions) + " cautions"
 	}
 	return "… computing"
+}
+
+// refusesText reports whether a text typed into the form of a sheet cannot be used.
+// A row of the table that is merely unfinished is no such text.
+func refusesText(m state.Model, sheet string) bool {
+	for path := range m.Messages {
+		for _, about := range []string{".low", ".high", ".source"} {
+			path = strings.TrimSuffix(path, about)
+		}
+		if path != "rock.table" && sheetOf(path) == sheet {
+			return true
+		}
+	}
+	return false
 }
 
 // failure is the program's own fault, in words, with what to send.
@@ -227,11 +244,24 @@ func demonstration(d widget.Desk, m state.Model) app.UI {
 				app.Text("."),
 			),
 		),
+		former(d, m),
 		app.P().ID("damaged").Hidden(m.Damaged == "").Body(
 			app.Text("✕ What this browser had kept could not be read and was set aside unchanged. "),
 			widget.Link(d, "damaged-download", "Download it", state.ExportAsked{What: "damaged"}),
 			app.Text("."),
 		),
+	)
+}
+
+// former leads back to the study that the present one took the place of.
+func former(d widget.Desk, m state.Model) app.UI {
+	title, ok := m.CanBringBack()
+	name := "“" + title + "”"
+	if title == "" {
+		name = "the untitled study"
+	}
+	return app.P().ID("former").Hidden(!ok || m.Route.Embed).Body(
+		widget.Link(d, "bring-back", "Bring back "+name, state.BroughtBack{}),
 	)
 }
 

@@ -14,13 +14,13 @@ import (
 // laid is a sheet of the job: the answers, what they still want, the pictures and
 // tables, and beside them the inputs.
 func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.UI {
-	part := m.Result.Parts[sheet]
+	part, stale := m.Part(sheet)
 	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
 		app.Div().Class("told").Body(
 			heading(string(sheet)),
 			app.A().Class("jump").Href("#inputs").Text("To the inputs"),
-			&widget.Answers{Desk: d, Sheet: sheet, Part: part, System: m.System},
-			widget.Wanting(d, part, m.Result.Problems),
+			widget.Wanting(d, m.Result.Parts[sheet], m.Result.Problems),
+			&widget.Answers{Desk: d, Sheet: sheet, Part: part, Stale: stale, System: m.System},
 			widget.Notes(d, "Cautions", "caution", part.Notes),
 			pictures(m, part),
 			widget.Notes(d, "Remarks", "remark", part.Notes),

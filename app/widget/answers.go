@@ -18,6 +18,7 @@ type Answers struct {
 	Desk   Desk
 	Sheet  study.Sheet
 	Part   study.Part
+	Stale  bool // the answer to earlier inputs: those that stand have none
 	System units.System
 
 	open string // the figure whose working is shown
@@ -33,7 +34,13 @@ func (a *Answers) Render() app.UI {
 			rest = append(rest, a.figure(f))
 		}
 	}
-	return app.Div().Class("answers").Body(
+	all := app.Div().Class("answers")
+	if a.Stale {
+		all = all.DataSet("stale", "yes")
+	}
+	return all.Body(
+		app.P().Class("stopped").Hidden(!a.Stale).
+			Text("◌ Answer to the inputs before. The inputs as they stand have none; figures, pictures and tables below are of those before."),
 		app.P().Class("sentence").ID("answer-"+string(a.Sheet)).Body(a.sentence()...),
 		app.P().Class("stopped").Hidden(a.Part.Status != study.Stopped).
 			Text("◐ The computation stopped short. What it reached is shown; treat it as provisional."),

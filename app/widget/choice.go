@@ -56,8 +56,8 @@ func words(d Desk, m state.Model, path, label, text, empty, help string, sort In
 	return app.Div().Class("field").Body(
 		app.Label().For(FieldID(path)).Text(label),
 		&Input{Desk: d, ID: FieldID(path), Path: path, Sort: sort, Text: drafted(m, path, text), Empty: empty,
-			Bad: m.Messages[path] != "", Told: messageID(path) + " help-" + dashed(path)},
-		app.P().ID(messageID(path)).Class("message").Text(m.Messages[path]),
+			Bad: m.Said(path) != "", Told: messageID(path) + " help-" + dashed(path)},
+		app.P().ID(messageID(path)).Class("message").Text(m.Said(path)),
 		app.P().ID("help-"+dashed(path)).Class("help").Text(help),
 	)
 }

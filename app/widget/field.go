@@ -13,8 +13,8 @@ import (
 // Field is one numeric input: label, number, unit, what is wrong with it, what
 // it means, where it comes from and how far it may range.
 func Field(d Desk, m state.Model, spec study.Spec) app.UI {
-	text, unit := Shown(m, spec)
-	message := m.Messages[spec.Path]
+	text, unit := m.Shown(spec)
+	message := m.Said(spec.Path)
 	class := "field"
 	if message != "" {
 		class += " bad"
@@ -40,18 +40,6 @@ func optional(spec study.Spec) app.UI {
 		return nil
 	}
 	return app.Span().Class("optional").Text(" optional")
-}
-
-// Shown is the text and unit a field shows: what was typed while that cannot be
-// used, else what the study holds, else nothing in the unit of the system.
-func Shown(m state.Model, spec study.Spec) (text, unit string) {
-	if draft, ok := m.Drafts[spec.Path]; ok {
-		return draft.Text, draft.Unit
-	}
-	if in := spec.Get(&m.Study); in != nil {
-		return units.Exact(in.Value), in.Unit
-	}
-	return "", m.System.Unit(spec.Quantity).Symbol
 }
 
 // unitChoice is a list of units, or the one unit there is.

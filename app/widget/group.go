@@ -64,7 +64,7 @@ func (f *Fold) Render() app.UI {
 
 // touched reports whether there is something to see at an input.
 func touched(m state.Model, spec study.Spec) bool {
-	if spec.Get(&m.Study) != nil || m.Messages[spec.Path] != "" {
+	if spec.Get(&m.Study) != nil || m.Said(spec.Path) != "" {
 		return true
 	}
 	return slices.Contains(m.Result.Parts[spec.Sheet].Missing, spec.Path)

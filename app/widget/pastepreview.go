@@ -38,11 +38,12 @@ func Pasting(d Desk, m state.Model) app.UI {
 	if m.Paste != nil {
 		text = m.Paste.Text
 	}
+	said := m.Said(tablePath)
 	return app.Div().Class("pasting").DataSet("paste", "table").Body(
 		app.Label().For(pasteBox).Text("Paste a table from a spreadsheet or a report"),
-		&Input{Desk: d, ID: pasteBox, Path: tablePath, Sort: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: m.Messages[tablePath] != ""},
+		&Input{Desk: d, ID: pasteBox, Path: tablePath, Sort: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: said != ""},
 		app.P().ID("paste-help").Class("help").Text("Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row."),
-		app.P().ID(messageID(tablePath)).Class("message").Text(m.Messages[tablePath]),
+		app.P().ID(messageID(tablePath)).Class("message").Text(said),
 		preview(d, m.Paste),
 	)
 }
@@ -121,10 +122,10 @@ func role(d Desk, column int, title, as string) app.UI {
 
 // wrong says what is wrong at a place of a pasted text.
 func wrong(row, column int, read, allowed string) string {
-	if read != "" {
-		read = "read " + read + "; "
+	if read == "" {
+		return place(row, column) + "needs " + allowed + "."
 	}
-	return place(row, column) + read + "allowed: " + allowed + "."
+	return place(row, column) + "read " + read + "; allowed: " + allowed + "."
 }
 
 func place(row, column int) string {
@@ -147,6 +148,9 @@ var separators = map[string]string{"tab": "tabs", "comma": "commas", "semicolon"
 // layout says how the text was cut into cells, as far as that is known.
 func layout(p *state.PasteDraft) string {
 	r := p.Reading
+	if len(r.Columns) == 0 {
+		return "No table found."
+	}
 	var said []string
 	if parted := separators[r.Separator]; parted != "" {
 		said = append(said, "columns parted by "+parted)
@@ -154,11 +158,7 @@ func layout(p *state.PasteDraft) string {
 	if r.Decimal != "" {
 		said = append(said, "decimal "+r.Decimal+"s")
 	}
-	if len(r.Columns) == 0 {
-		said = append(said, "no table found")
-	} else {
-		said = append(said, header(r.Header), counted(len(r.Cells), "row")+" of numbers")
-	}
+	said = append(said, header(r.Header), counted(len(r.Cells), "row")+" of numbers")
 	text := strings.Join(said, ", ")
 	return strings.ToUpper(text[:1]) + text[1:] + "."
 }

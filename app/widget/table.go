@@ -73,7 +73,7 @@ func (p *Points) row(row int) app.UI {
 	cells := []app.UI{app.Th().Scope("row").Text(number)}
 	for i, c := range columns {
 		path := cellPath(row, c.name)
-		message := p.Model.Messages[path]
+		message := p.Model.Said(path)
 		cells = append(cells, app.Td().Body(
 			&Input{Desk: p.Desk, ID: FieldID(path), Path: path, Sort: CellInput, Text: p.Model.Rows[row].Text[i],
 				Bad: message != "", Told: messageID(path), Name: c.label + ", row " + number},

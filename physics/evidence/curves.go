@@ -6,7 +6,7 @@ import (
 )
 
 var curveChecks = []Check{
-	{ID: "corey-exponent-4", Topic: "Curves", Title: "Wetting phase of Brooks & Corey at λ = 2", Source: ref.BrooksCorey1964, Place: "krw = Se^((2+3λ)/λ)", Provenance: Memory,
+	{ID: "corey-exponent-4", Topic: "Curves", Title: "Corey curve with the exponent 4 that Brooks & Corey give for λ = 2", Source: ref.BrooksCorey1964, Place: "krw = Se^((2+3λ)/λ)", Provenance: Memory,
 		Inputs: "λ = 2, Se = 0.5", How: "the Corey model with exponent (2 + 3λ)/λ = 4",
 		Items: items(1e-15, rounding, "krw", 0.0625),
 		compute: value(func() float64 {

@@ -29,9 +29,10 @@ func (f *front) rideCharts(s *sheet) {
 // constructionChart is both fractional flow curves with the line from the pivot.
 func (f *front) constructionChart() Chart {
 	r := f.rider
-	speed, behind, ahead := r.flood.Front()
-	const farthest = 0.5 // a pivot further to the left would leave no room for the curves
-	left := math.Min(0, -math.Ceil(10*math.Min(r.pivot.B, farthest))/10)
+	speed, behind, _ := r.flood.Front()
+	const farthest = 0.5   // a pivot further to the left would leave no room for the curves
+	pivot := 0 - r.pivot.B // no negative nothing
+	left := 0 - math.Max(0, math.Ceil(10*math.Min(r.pivot.B, farthest))/10)
 	c := Chart{ID: "front.ride.construction", Title: "How the " + r.name + " is found", X: axis("Water saturation", "Sw", units.Fraction).from(left, 1), Y: axis("Water cut", "fw", units.Share).from(0, 1)}
 	draw := func(id, label, role string, flow fracflow.Flow) {
 		l := Line{ID: id, Label: label, Role: role, Kind: "line"}
@@ -48,13 +49,13 @@ func (f *front) constructionChart() Chart {
 		draw("behind", "injected water", "total", r.behind)
 	}
 	on := func(sw float64) float64 { return speed*(sw+r.pivot.B) - r.pivot.A }
-	from, to := math.Max(left, -r.pivot.B), math.Min(1, math.Max(behind.S, ahead.S)+0.1)
+	from, to := math.Max(left, pivot), math.Min(1, (math.Max(1, behind.F)+r.pivot.A)/speed-r.pivot.B)
 	c.Lines = append(c.Lines, Line{ID: "front", Label: "line from the pivot", Role: "aid", Kind: "dashed", X: []float64{from, to}, Y: []float64{on(from), on(to)}})
-	if from == -r.pivot.B {
+	if from == pivot {
 		c.Marks = append(c.Marks, Mark{"pivot", from, on(from)})
 	}
 	c.Marks = append(c.Marks, Mark{r.name, behind.S, behind.F})
-	c.Summary = "Water cut against water saturation for the water in place and for the injected water. The line from the pivot at Sw = " + units.Format(-r.pivot.B, 3) + " meets the curve of the injected water at Sw = " + units.Format(behind.S, 3)
+	c.Summary = "Water cut against water saturation for the water in place and for the injected water, which a tracer leaves alike. The line from the pivot at Sw = " + units.Format(pivot, 3) + " meets the curve of the injected water at Sw = " + units.Format(behind.S, 3)
 	if bank, edge, ok := r.flood.Bank(); ok && r.kind != tracer {
 		c.Marks = append(c.Marks, Mark{"bank", bank.S, bank.F})
 		c.Summary += " and that of the water in place at Sw = " + units.Format(bank.S, 3) + ", the bank"
@@ -127,7 +128,11 @@ func (f *front) rideRecoveryChart(end float64) Chart {
 		without.X, without.Y = append(without.X, q), append(without.Y, alone)
 		if state, ok := r.after(q); ok {
 			with.X, with.Y = append(with.X, q), append(with.Y, state.Recovery)
-			added.X, added.Y = append(added.X, q), append(added.Y, state.Recovery-alone)
+			gain := state.Recovery - alone
+			if math.Abs(gain) < 1e-12 { // rounding of two equal recoveries
+				gain = 0
+			}
+			added.X, added.Y = append(added.X, q), append(added.Y, gain)
 		}
 	}
 	c := Chart{

@@ -51,8 +51,8 @@ func (f *front) rideNotes(s *sheet) {
 			Cause: "The answer is that of water alone.", Do: "Look at the inputs of what rides along and at both saturations.", Paths: kind})
 		return
 	}
-	s.note(Note{ID: "front.ride.assumptions", Level: "remark", Text: "The " + r.name + " is one sharp step: rock and water exchange at once and in proportion, " + limits[r.kind] + ".",
-		Cause: "Rates of exchange, reactions and mixing round the step off and can hold it up.", Do: "Take the arrival as that of the middle of the step.", Paths: kind})
+	s.note(Note{ID: "front.ride.assumptions", Level: "remark", Text: "Rock and water exchange at once and in proportion; " + assumed[r.kind] + ".",
+		Cause: "Rates of exchange, reactions and mixing round a step off and can hold it up.", Do: "Take the arrival as that of the middle of the step.", Paths: kind})
 	s.note(Note{ID: "front.ride.field", Level: "remark", Text: "What rides along is answered on this sheet; the Field sheet and the figures without it are those of water alone.",
 		Cause: "Injectivity and rates with what rides along are not forecast; at a constant pressure difference its times are left out.", Do: "Set the recovery curves side by side in pore volumes.", Paths: kind})
 	if r.kind == tracer && math.IsInf(r.at("peclet", math.Inf(1)), 1) {
@@ -62,12 +62,12 @@ func (f *front) rideNotes(s *sheet) {
 	f.slugNotes(s)
 }
 
-// limits are what is left out, by kind.
-var limits = map[string]string{
-	polymer:     "polymer does not degrade and what the rock keeps stays for good",
-	salt:        "water viscosity and Swc stay as they are, and residual oil changes where the salinity does",
-	tracer:      "it spreads as in a uniform stream behind it, which is an estimate where the saturation varies",
-	riderOfHeat: "no heat is lost to the layers above and below, and kr does not change",
+// assumed is what else is taken for granted, by kind.
+var assumed = map[string]string{
+	polymer:     "the polymer front is one sharp step, polymer does not degrade, and what the rock keeps of it stays for good",
+	salt:        "the salinity front is one sharp step, water viscosity and Swc stay as they are, residual oil changes where the salinity does, and chase water takes back what the rock holds",
+	tracer:      "a tracer changes nothing of the flow and spreads as in a uniform stream, which is an estimate where the saturation varies behind it",
+	riderOfHeat: "the temperature front is one sharp step, no heat is lost to the layers above and below, and kr does not change",
 }
 
 func (f *front) slugNotes(s *sheet) {

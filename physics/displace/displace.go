@@ -222,10 +222,11 @@ func (d *Displacement) Recovery(q float64) float64 { return d.After(q).Recovery 
 // OfOilInPlace turns a recovery in pore volumes into a fraction of the oil in place, 1 - Si.
 func (d *Displacement) OfOilInPlace(recovery float64) float64 { return recovery / (1 - d.initial) }
 
-// OfMovableOil turns a recovery in pore volumes into a fraction of the movable oil, the
-// change from the initial to the injected saturation.
+// OfMovableOil turns a recovery in pore volumes into a fraction of the movable oil, what
+// endless injection displaces: the change from the initial saturation to that of the
+// inlet face.
 func (d *Displacement) OfMovableOil(recovery float64) float64 {
-	return recovery / (d.injected - d.initial)
+	return recovery / (d.face.S - d.initial)
 }
 
 // PVIAtCut is the first Q at which the water cut at the outlet (reservoir conditions)

@@ -70,7 +70,7 @@ var independentCases = []Check{
 				f, slope := flow.At(sw)
 				values, slopes = append(values, f), append(slopes, slope)
 			}
-			return append(append(values, slopes...), flow.EndPointMobilityRatio(0.178, 0.794), flow.Gravity), nil
+			return append(append(values, slopes...), flow.EndPointMobilityRatio(), flow.Gravity), nil
 		}},
 	{ID: "independent-water-wet", Topic: "Front", Title: "Displacement, water-wet Corey", Place: "Invented rock, case bl-01", Provenance: Independent,
 		Inputs: "Corey nw 2.7, no 2.15, µw 0.47 and µo 1.93 mPa·s", How: "the envelope solution",

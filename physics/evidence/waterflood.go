@@ -5,6 +5,7 @@ import (
 	"brinefront/physics/fracflow"
 	"brinefront/physics/ref"
 	"brinefront/physics/relperm"
+	"brinefront/physics/reservoir"
 	"brinefront/physics/units"
 )
 
@@ -91,22 +92,37 @@ var waterfloods = []Check{
 				if err != nil {
 					return nil, err
 				}
-				values[i] = flow.EndPointMobilityRatio(0.2, 0.8)
+				values[i] = flow.EndPointMobilityRatio()
 				values[len(cases)+i] = flow.FrontMobilityRatio(c.front, 0.2)
 			}
 			return values, nil
 		}},
 	{ID: "dake-10.2-time", Topic: "Field", Title: "Time to breakthrough of a linear flood", Source: ref.Dake1978, Place: "Exercise 10.2", Provenance: Memory,
-		Inputs: "625 ft wide, 40 ft thick, 2000 ft long, porosity 0.18, 1000 rb/d, breakthrough at 0.35 PV", How: "pore volume over rate, years of 365 days",
-		Items: items(0.5e-2, lastDigit, "years per pore volume", 4.39, "years to breakthrough", 1.54),
+		Inputs: dakeInputs + "µo = 5 cp, µw = 0.5 cp; 625 ft wide, 40 ft thick, 2000 ft long, porosity 0.18, 1000 rb/d", How: "a layer flooded at constant rate by the front of exercise 10.1, case 2, as solved here; years of 365 days",
+		Items: []Item{
+			{"years per pore volume", 4.39, 0.005, lastDigit},
+			{"years to breakthrough", 1.54, 0.05, "the printed 0.35 PV is read by hand: 0.01 PV is 0.044 years, and 0.005 for the last digit"},
+		},
 		compute: func() ([]float64, error) {
-			volume := si(units.Length, 625, "ft") * si(units.Length, 40, "ft") * si(units.Length, 2000, "ft") * 0.18
-			years := volume / si(units.Rate, 1000, "bbl/d") / si(units.Duration, 365, "d")
-			return []float64{years, 0.35 * years}, nil
+			flow, d, err := dake(5, 0.5, relperm.MonotoneCubic)
+			if err != nil {
+				return nil, err
+			}
+			flood, err := reservoir.NewLinear(reservoir.Layer{
+				Length: si(units.Length, 2000, "ft"), Area: si(units.Length, 625, "ft") * si(units.Length, 40, "ft"), Porosity: 0.18,
+				Permeability: anyPermeability, Bw: 1, Bo: 1.3, Uptime: 1, Drive: reservoir.ConstantRate{Q: si(units.Rate, 1000, "bbl/d")},
+			}, flow, d)
+			if err != nil {
+				return nil, err
+			}
+			year := si(units.Duration, 365, "d")
+			arrival, _ := flood.Breakthrough()
+			return []float64{flood.TimeAt(1) / year, arrival / year}, nil
 		}},
 	{ID: "ahmed-breakthrough", Topic: "Field", Title: "Water at the producer of a linear flood", Source: ref.Ahmed2001, Place: "Ch. 14, breakthrough examples", Provenance: Memory,
-		Inputs: "pore volume 775 779 bbl, 900 bbl/d, Swi 0.20, front at Sw 0.596, fw 0.78, slope 1.973, Bo 1.25, Bw 1.02", How: "volumes and time from the printed slope of the tangent; water cut at surface from the printed fw",
+		Inputs: "pore volume 775 779 bbl, 900 bbl/d, Swi 0.20, fw 0.78 at the front, slope 1.973 of its tangent, Bo 1.25, Bw 1.02", How: "a flood at constant rate along curves made so that their front has the printed fw and slope: its saturation, the volumes, the average, the time and the cut at surface are then solved here, the tangent is not",
 		Items: []Item{
+			{"Sw at the front", 0.596, 0.001, "printed with three decimals beside a slope and an fw that give 0.5953"},
 			{"days to breakthrough", 436.88, 0.01, lastDigit},
 			{"injected at breakthrough, bbl", 393198, 0.5, lastDigit},
 			{"injected at breakthrough, PV", 0.507, 0.0005, lastDigit},
@@ -114,14 +130,40 @@ var waterfloods = []Check{
 			{"displacement efficiency", 0.634, 0.0005, lastDigit},
 			{"water-oil ratio at surface", 4.34, 0.01, "fw printed with two decimals"},
 		},
-		compute: func() ([]float64, error) {
-			q := 1 / 1.973
-			volume := si(units.Volume, 775779, "bbl")
-			cut := fracflow.SurfaceCut(0.78, 1.02, 1.25)
-			average := 0.2 + q // no water is produced before
-			return []float64{
-				q * volume / si(units.Rate, 900, "bbl/d") / si(units.Duration, 1, "d"), q * volume / si(units.Volume, 1, "bbl"), q,
-				average, (average - 0.2) / (1 - 0.2), cut / (1 - cut),
-			}, nil
-		}},
+		compute: ahmedFlood},
+}
+
+// anyPermeability (m2): at a constant rate time and volumes do not hang on it.
+const anyPermeability = 1e-13
+
+// ahmedFlood floods 775,779 bbl of pores with 900 bbl/d. The curves are straight lines
+// between three points, for phases of one viscosity, so that fw = krw runs straight from
+// Swi to the printed fw with the printed slope and less steeply from there on.
+func ahmedFlood() ([]float64, error) {
+	const swi, swmax, cut, slope, bw, bo = 0.2, 0.8, 0.78, 1.973, 1.02, 1.25
+	table, err := relperm.NewTable([]float64{swi, swi + cut/slope, swmax}, []float64{0, cut, 1}, []float64{1, 1 - cut, 0}, relperm.StraightLine)
+	if err != nil {
+		return nil, err
+	}
+	mu := si(units.Viscosity, 1, "cp")
+	flow := fracflow.Flow{Curves: table, MuW: mu, MuO: mu}
+	d, err := displace.New(flow, swmax, swi)
+	if err != nil {
+		return nil, err
+	}
+	flood, err := reservoir.NewLinear(reservoir.Layer{
+		Length: 1, Area: si(units.Volume, 775779, "bbl"), Porosity: 1, Permeability: anyPermeability,
+		Bw: bw, Bo: bo, Uptime: 1, Drive: reservoir.ConstantRate{Q: si(units.Rate, 900, "bbl/d")},
+	}, flow, d)
+	if err != nil {
+		return nil, err
+	}
+	t, q := flood.Breakthrough()
+	behind, _, _ := d.Front()
+	f, _ := flow.At(behind)
+	surface := fracflow.SurfaceCut(f, bw, bo)
+	return []float64{
+		behind, t / si(units.Duration, 1, "d"), q * flood.PoreVolume() / si(units.Volume, 1, "bbl"), q,
+		d.Average(q), d.Recovery(q) / (1 - swi), surface / (1 - surface),
+	}, nil
 }

@@ -56,7 +56,7 @@ func incompressible(pair, cause, do string) Caution {
 func gasFingers(pair, resident string) Caution {
 	return Caution{pair + ".fingers", "The displacing phase is far less viscous than the " + resident + ": without gravity's help the front is rarely stable.",
 		"Fingers run ahead of the front in real rock; the one-dimensional answer has none.",
-		"Take breakthrough and early recovery as upper bounds; look at the mobility ratio across the front and at the critical rate."}
+		"Take breakthrough as the latest and early recovery as the most to expect; look at the mobility ratio across the front and at the critical rate."}
 }
 
 var (
@@ -65,7 +65,7 @@ var (
 		"Use curves measured on rock in its reservoir state; see the signs of wettability on the Rock sheet."}
 	override = Caution{"gas-oil.override", "Gas is much lighter than oil and runs along the top of the layer unless it drives oil down-dip slowly enough.",
 		"The one-dimensional answer spreads both phases over the whole height.",
-		"Inject at the crest and stay below the critical rate; with no dip, or above that rate, take breakthrough as an upper bound."}
+		"Inject at the crest and stay below the critical rate; with no dip, or above that rate, take breakthrough as the latest."}
 	liquidStays = Caution{"gas-oil.connateWater", "Connate water is counted as part of the liquid and does not move.",
 		"Gas saturation is a fraction of the whole pore space, and the liquid left behind includes connate water.",
 		"Give curves by gas or liquid saturation measured with connate water in place."}

@@ -68,13 +68,15 @@ func (w Flow) Mobility(sw float64) (lambdaT, dLambdaT float64) {
 	return lambdaT, dLambdaT
 }
 
-// EndPointMobilityRatio is lw(injected)/lo(initial): the mobility of water where
-// only water has passed over that of oil where none has. +Inf when the oil does
-// not move at the initial saturation.
+// EndPointMobilityRatio is lw at the upper end of the curves over lo at their lower
+// end, krw(1-Sor)/muw over kro(Swc)/muo: each phase where it alone can move. It is a
+// number of rock and fluids; the states of a displacement play no part in it. +Inf when
+// oil does not move at the lower end.
 //
 // Source: Dake (1978), ch. 10, end-point mobility ratio.
-func (w Flow) EndPointMobilityRatio(initial, injected float64) float64 {
-	return w.Curves.At(injected).Krw / w.MuW / (w.Curves.At(initial).Kro / w.MuO)
+func (w Flow) EndPointMobilityRatio() float64 {
+	lo, hi := w.Ends()
+	return w.Curves.At(hi).Krw / w.MuW / (w.Curves.At(lo).Kro / w.MuO)
 }
 
 // FrontMobilityRatio is the shock-front mobility ratio lt(behind)/lt(ahead): the

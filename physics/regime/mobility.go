@@ -11,12 +11,13 @@ const (
 )
 
 // EndPointMobility judges the end-point mobility ratio M, displacing over resident
-// phase, each alone at its end point. Source: Craig (1971).
+// phase, each alone at its end point. Source: Dake (1978), ch. 10. Craig's ratio is
+// another: it takes the displacing phase at its average saturation behind the front.
 func EndPointMobility(m float64) Verdict {
 	return judge("The end-point mobility ratio", m, []band{
 		{1, true, Favourable, "the displacing phase moves no more easily than the resident one, which is favourable"},
 		{class: Unfavourable, means: "the displacing phase moves more easily than the resident one, which is unfavourable to sweep"},
-	}, "favourable up to 1, unfavourable above", ref.Craig1971)
+	}, "favourable up to 1, unfavourable above", ref.Dake1978)
 }
 
 // FrontMobility judges the mobility ratio across the front, total mobility behind

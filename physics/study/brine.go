@@ -2,6 +2,7 @@ package study
 
 import (
 	"errors"
+	"math"
 	"slices"
 	"strings"
 
@@ -11,7 +12,7 @@ import (
 )
 
 // usualPressure stands in where no reservoir pressure is given: brine's viscosity and
-// density hardly depend on it. Common practice, no source.
+// density depend on it little, and a note tells how much. Common practice, no source.
 const usualPressure = 20e6
 
 // pairOf is the pair of phases of a study.
@@ -166,6 +167,17 @@ func (w *working) onFlow(curve []string) *working {
 	return w.on("front.gravityTerm")
 }
 
+// underPressure says how much the pressure matters.
+func (b *brine) underPressure() string {
+	const more = 10e6
+	pressed, err := fluid.Brine(b.temperature, b.pressure+more, b.salinity)
+	if err != nil {
+		return "How much it matters at this temperature is not known."
+	}
+	change := func(is, was float64) string { return units.Format(100*math.Abs(is/was-1), 2) + " %" }
+	return "At this temperature 10 MPa more change its density by " + change(pressed.Density, b.salty.Density) + " and its viscosity by " + change(pressed.Viscosity, b.salty.Viscosity) + "."
+}
+
 // brineNotes tell where computed brine leaves what was measured.
 func (f *front) brineNotes(s *sheet) {
 	mu, rho := viscosities(f.pair), densities(f.pair)
@@ -183,6 +195,6 @@ func (f *front) brineNotes(s *sheet) {
 	}
 	if s.st.Fluids.Pressure == nil {
 		s.note(Note{ID: "front.brinePressure", Level: "remark", Text: "Brine is computed at 20 MPa, since no reservoir pressure is given.",
-			Cause: "10 MPa more or less change its density by about half a percent, its viscosity by less than one.", Do: "Give the pressure where that matters.", Paths: []string{"fluids.pressure"}})
+			Cause: b.underPressure(), Do: "Give the pressure where that matters.", Paths: []string{"fluids.pressure"}})
 	}
 }

@@ -125,7 +125,7 @@ func TestLightDownDipIsHeavyUpDip(t *testing.T) {
 	up, down := Run(heavy).Parts[SheetFront], Run(light).Parts[SheetFront]
 	for _, f := range up.Figures {
 		other, ok := down.Figure(f.ID)
-		if strings.Contains(f.ID, "ensity") {
+		if strings.Contains(f.ID, "ensity") || strings.HasSuffix(f.ID, "InPlace") { // nothing of which is known where connate water counts as liquid
 			continue
 		}
 		if !ok || math.Abs(other.Value-f.Value) > 1e-13*math.Abs(f.Value) {

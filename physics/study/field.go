@@ -2,7 +2,9 @@ package study
 
 import (
 	"math"
+	"slices"
 
+	"brinefront/physics/fracflow"
 	"brinefront/physics/reservoir"
 )
 
@@ -136,15 +138,41 @@ func (f *field) whole() float64 {
 	return q * (1 - aside)
 }
 
+// jumps reports whether the water cut passes its limit in the step of a front.
+func (f *field) jumps(s *sheet) bool {
+	if f.limit.Outcome != reservoir.Reached || limitPath(s.st) != "field.waterCut" {
+		return false
+	}
+	cut := s.need("field.waterCut")
+	return f.state(f.limit.PVI*(1-aside)).WaterCut < cut*(1-backward) && f.state(f.limit.PVI*(1+aside)).WaterCut > cut*(1+backward) &&
+		slices.ContainsFunc(f.front.steps(), func(w fracflow.Wave) bool { return math.Abs(w.SpeedAhead*f.limit.PVI-1) < backward })
+}
+
+// withFront reports whether the limit is met as the foremost wave arrives.
+func (f *field) withFront() bool {
+	return f.limit.PVI <= f.front.displacement.Breakthrough()*(1+backward)
+}
+
 func (f *field) answer(s *sheet) {
-	s.answer("Water arrives after {field.breakthrough} ({field.injectedAtBreakthrough} injected) with {field.recoveryAtBreakthrough} of the pore volume produced")
+	opening := "Water arrives after"
+	if f.front.waterMoves() {
+		opening = "The front arrives after"
+	}
+	s.answer(opening+" {field.breakthrough} ({field.injectedAtBreakthrough} injected) with {field.recoveryAtBreakthrough} of the pore volume "+f.front.fate(), ", {field.oilAtBreakthrough} of oil at surface")
 	limit := "at {field.limit} water cut"
 	if s.st.Field.Limit == "oilRate" {
 		limit = "at an oil rate of {field.limit}"
 	}
 	switch f.limit.Outcome {
 	case reservoir.Reached:
-		s.answer("; "+limit+", after {field.limitTime}, it is {field.recoveryAtLimit}", ".")
+		switch {
+		case !f.jumps(s):
+			s.answer("; "+limit+", after {field.limitTime}, it is {field.recoveryAtLimit}", ", {field.oilAtLimit}", ".")
+		case !f.withFront():
+			s.answer("; the water cut passes {field.limit} as the next step arrives, after {field.limitTime}", ".")
+		default:
+			s.answer("; the water cut passes {field.limit} as the front arrives", ".")
+		}
 	case reservoir.FromTheStart:
 		s.answer("; the flood is beyond its limit from the start.")
 	default:

@@ -52,10 +52,18 @@ func (f *field) charts(s *sheet) {
 	f.chart(s, Chart{ID: "field.waterCut", Title: "Water cut", Y: axis("Water cut, surface", "fw", units.Share).from(0, 1), Marks: f.events(cut),
 		Summary: "Water cut at surface against time: a jump at breakthrough, then a slow climb to the limit and beyond."},
 		f.line("surface", "at surface", "water", "line", cut))
+	lines, beside := []Line{f.line("pore", "of the pore volume", "oil", "line", recovery)}, ""
+	if !holdsConnate(s.st) {
+		lines = append(lines, f.line("place", "of the oil in place", "total", "line", func(s reservoir.State) float64 { return s.Recovery / (1 - f.front.swi) }))
+		beside = " and of the oil in place"
+	}
+	rise := "steady until breakthrough, slower after it."
+	if !f.rateHeld() {
+		rise = "as the resistance of the flood lets it until breakthrough, less for each volume injected after it."
+	}
 	f.chart(s, Chart{ID: "field.recovery", Title: "Recovery", Y: axis("Recovery", "R", units.Share).from(0, 1), Marks: f.events(recovery),
-		Summary: "Recovery against time, as a part of the pore volume and of the oil in place: steady until breakthrough, slower after it."},
-		f.line("pore", "of the pore volume", "oil", "line", recovery),
-		f.line("place", "of the oil in place", "total", "line", func(s reservoir.State) float64 { return s.Recovery / (1 - f.front.swi) }))
+		Summary: "Recovery against time, as a part of the pore volume" + beside + ": " + rise},
+		lines...)
 	f.chart(s, Chart{ID: "field.cumulative", Title: "Cumulative volumes", Y: axis("Volume", "V", units.Volume), Marks: f.events(oil),
 		Summary: "Oil and water produced at surface and water injected, all cumulative, against time."},
 		f.line("oil", "oil, surface", "oil", "line", oil),

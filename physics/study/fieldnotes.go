@@ -1,6 +1,8 @@
 package study
 
 import (
+	"math"
+
 	"brinefront/physics/reservoir"
 	"brinefront/physics/units"
 )
@@ -15,6 +17,7 @@ func (f *field) notes(s *sheet) {
 			Cause: "Gravity draws oil back faster than the rate pushes it: later the layer would take oil from beyond the producer.", Do: "Raise the rate where more of the oil is wanted.", Paths: []string{"front.dip", "field.rate"}})
 	}
 	f.injectionPressure(s)
+	f.insideJump(s)
 	switch f.limit.Outcome {
 	case reservoir.FromTheStart:
 		s.note(Note{ID: "field.limitAtStart", Level: "caution", Text: "The flood is beyond its economic limit from the start.",
@@ -38,7 +41,30 @@ func (f *field) notes(s *sheet) {
 	}
 }
 
+// insideJump warns of a cut for a limit that the front passes as it arrives.
+func (f *field) insideJump(s *sheet) {
+	if !f.jumps(s) || !f.withFront() {
+		return
+	}
+	typed := *s.st.Field.WaterCut
+	text := "The limit lies below the cut that arrives with the front: " + s.typed("field.waterCut") + " against " + units.Format(100*f.state(f.limit.PVI*(1+aside)).WaterCut, 3) + " %."
+	if typed.Unit == "%" && typed.Value < 1 {
+		text += " Was " + units.Exact(100*typed.Value) + " % meant?"
+	}
+	s.note(Note{ID: "field.limitInJump", Level: "caution", Text: text,
+		Cause: "The flood would be stopped in the moment in which the injected water arrives.", Do: "Look at the limit and its unit.", Paths: []string{"field.waterCut"}})
+}
+
 func (f *field) injectionPressure(s *sheet) {
+	const most = 1e9 // Pa, ten times what the deepest reservoirs hold
+	highest := 0.0
+	for _, state := range f.history {
+		highest = math.Max(highest, state.PressureDrop)
+	}
+	if f.rateHeld() && s.st.Field.Permeability != nil && highest > most {
+		s.note(Note{ID: "field.pressureHuge", Level: "caution", Text: "The rate would take a pressure difference of up to " + units.Format(highest/1e6, 3) + " MPa, which no well can give.",
+			Cause: "Rate, permeability, length and cross-section do not go together.", Do: "Look at their numbers and units.", Paths: []string{"field.rate", "field.permeability", "field.length", "field.width", "field.thickness"}})
+	}
 	n := Note{ID: "field.fracture", Level: "caution", Text: "Injection must stay below the pressure that fractures the reservoir and its cap rock.",
 		Cause: "A fracture short-cuts the flood and can take water where it does harm. The pressure difference between injector and producer is not the injection pressure; converging flow near the wells comes on top.",
 		Do:    "Have licensed engineers set the injection pressure, well integrity and water handling under the local code.", Paths: []string{"field.rate"}}

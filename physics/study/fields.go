@@ -25,9 +25,15 @@ type Spec struct {
 	Default  string // what an empty optional input means, in words
 	Help     string // one sentence
 
-	at   func(*Study) **Input
-	of   int               // the case it belongs to, counted from 1; 0: the study itself
-	when func(*Study) bool // the choices under which the study asks for it; nil: under all
+	// Usual is the range, SI, outside which a value is asked back about: common practice,
+	// no source. Both are 0 where nothing is unusual.
+	Usual    [2]float64
+	practice string // a rule of the trade that ends Help, for the pairs of usualFor
+
+	usualFor func(*Study) bool // the pairs that Usual and practice are about; nil: all
+	at       func(*Study) **Input
+	of       int               // the case it belongs to, counted from 1; 0: the study itself
+	when     func(*Study) bool // the choices under which the study asks for it; nil: under all
 }
 
 // Specs lists every numeric input in the order of the forms.
@@ -52,6 +58,9 @@ func (s Spec) Applies(st *Study) bool { return s.when == nil || s.when(st) }
 
 // For returns the description in the words of the study's pair of fluids.
 func (s Spec) For(st *Study) Spec {
+	if s.practice != "" && s.customary(st) {
+		s.Help += " " + s.practice
+	}
 	if w := wordsOf(pairOf(st)); w != nil {
 		s.Label, s.Symbol, s.Default, s.Help = w.tell(s.Label), w.symbol(s.Symbol), w.tell(s.Default), w.tell(s.Help)
 	}
@@ -74,6 +83,11 @@ func (s Spec) Set(st *Study, in *Input) {
 	}
 	*s.at(st) = in
 }
+
+// The pairs that a usual range is about.
+func displacedByBrine(s *Study) bool { return pairOf(s).Displacing.Brine }
+func oilResident(s *Study) bool      { return pairOf(s).Resident.Name == "oil" }
+func waterflood(s *Study) bool       { return displacedByBrine(s) && oilResident(s) }
 
 // The choices under which an input is asked for.
 func typedCorey(s *Study) bool    { return s.Rock.Curve == "corey" }
@@ -122,12 +136,12 @@ var specs = slices.Concat([]Spec{
 	{Path: "rock.let.eo", Sheet: SheetRock, Group: "LET", Label: "Oil, elevation", Symbol: "Eo", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Eo }, when: typedLET},
 	{Path: "rock.let.to", Sheet: SheetRock, Group: "LET", Label: "Oil, top part", Symbol: "To", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.To }, when: typedLET},
 
-	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature.", at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
-	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature and pressure, oil with its gas in solution.", at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
-	{Path: "fluids.waterFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Water formation volume factor", Symbol: "Bw", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of water.", at: func(s *Study) **Input { return &s.Fluids.WaterFormationFactor }},
-	{Path: "fluids.oilFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Oil formation volume factor", Symbol: "Bo", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of oil.", at: func(s *Study) **Input { return &s.Fluids.OilFormationFactor }},
+	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature.", Usual: [2]float64{0.1e-3, 2e-3}, usualFor: displacedByBrine, at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
+	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature and pressure, oil with its gas in solution.", Usual: [2]float64{0.1e-3, 1}, usualFor: oilResident, at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
+	{Path: "fluids.waterFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Water formation volume factor", Symbol: "Bw", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of water.", Usual: [2]float64{0.98, 1.1}, usualFor: displacedByBrine, at: func(s *Study) **Input { return &s.Fluids.WaterFormationFactor }},
+	{Path: "fluids.oilFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Oil formation volume factor", Symbol: "Bo", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of oil.", Usual: [2]float64{1, 3}, usualFor: oilResident, at: func(s *Study) **Input { return &s.Fluids.OilFormationFactor }},
 	{Path: "fluids.temperature", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir temperature", Symbol: "T", Quantity: units.Temperature, Min: 273.15, Max: 623.15, Optional: true, Default: "viscosity and density of brine must be typed", Help: "Gives the viscosity and density of brine where none is typed.", at: func(s *Study) **Input { return &s.Fluids.Temperature }, when: withBrine},
-	{Path: "fluids.pressure", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir pressure", Symbol: "p", Quantity: units.Pressure, Min: 611, Max: 1e8, Optional: true, Default: "20 MPa; 10 MPa more or less changes brine by about half a percent", at: func(s *Study) **Input { return &s.Fluids.Pressure }, when: computedBrine},
+	{Path: "fluids.pressure", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir pressure", Symbol: "p", Quantity: units.Pressure, Min: 611, Max: 1e8, Optional: true, Default: "20 MPa; 10 MPa more or less changes brine by up to half a percent in density and one in viscosity below 110 °C, by more above", at: func(s *Study) **Input { return &s.Fluids.Pressure }, when: computedBrine},
 	{Path: "fluids.salinity", Sheet: SheetFront, Group: "Fluids", Label: "Salinity", Symbol: "s", Quantity: units.Salinity, Min: 0, Max: fluid.MaxSalinity, Optional: true, Default: "0, fresh water", Help: "Mass of all salts in the mass of brine.", at: func(s *Study) **Input { return &s.Fluids.Salinity }, when: computedBrine},
 	{Path: "fluids.waterDensity", Sheet: SheetFront, Group: "Fluids", Label: "Water density", Symbol: "ρw", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", at: func(s *Study) **Input { return &s.Fluids.WaterDensity }, when: dipping},
 	{Path: "fluids.oilDensity", Sheet: SheetFront, Group: "Fluids", Label: "Oil density", Symbol: "ρo", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", Help: "At reservoir conditions.", at: func(s *Study) **Input { return &s.Fluids.OilDensity }, when: dipping},
@@ -143,12 +157,12 @@ var specs = slices.Concat([]Spec{
 	{Path: "field.length", Sheet: SheetField, Group: "Block", Label: "Length, injector to producer", Symbol: "L", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Length }},
 	{Path: "field.width", Sheet: SheetField, Group: "Block", Label: "Width across the flow", Symbol: "W", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Width }},
 	{Path: "field.thickness", Sheet: SheetField, Group: "Block", Label: "Net thickness", Symbol: "h", Quantity: units.Length, Min: 0, OpenMin: true, Max: 5e3, at: func(s *Study) **Input { return &s.Field.Thickness }},
-	{Path: "field.porosity", Sheet: SheetField, Group: "Block", Label: "Porosity", Symbol: "φ", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 1, OpenMax: true, at: func(s *Study) **Input { return &s.Field.Porosity }},
+	{Path: "field.porosity", Sheet: SheetField, Group: "Block", Label: "Porosity", Symbol: "φ", Quantity: units.Fraction, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Usual: [2]float64{0.03, 0.4}, at: func(s *Study) **Input { return &s.Field.Porosity }},
 	{Path: "field.permeability", Sheet: SheetField, Group: "Drive", Label: "Permeability, absolute", Symbol: "k", Quantity: units.Permeability, Min: 0, OpenMin: true, Max: 1e-9, Help: "Decides the rate when the pressure difference is held; at a constant rate it tells what pressure difference that takes.", at: func(s *Study) **Input { return &s.Field.Permeability }},
 	{Path: "field.rate", Sheet: SheetField, Group: "Drive", Label: "Injection rate while on", Symbol: "q", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Reservoir volume of water per day while the injector is on.", at: func(s *Study) **Input { return &s.Field.Rate }, when: heldRate},
 	{Path: "field.pressure", Sheet: SheetField, Group: "Drive", Label: "Pressure difference", Symbol: "Δp", Quantity: units.Pressure, Min: 0, OpenMin: true, Max: 1e9, Help: "Injector to producer, held constant. Keep injection below fracture pressure.", at: func(s *Study) **Input { return &s.Field.Pressure }, when: heldPressure},
-	{Path: "field.uptime", Sheet: SheetField, Group: "Drive", Label: "Share of time on", Symbol: "u", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "100 %", at: func(s *Study) **Input { return &s.Field.Uptime }},
-	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface; common practice, no source: 90 to 98 %.", at: func(s *Study) **Input { return &s.Field.WaterCut }, when: limitedByCut},
+	{Path: "field.uptime", Sheet: SheetField, Group: "Drive", Label: "Share of time on", Symbol: "e", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "100 %", at: func(s *Study) **Input { return &s.Field.Uptime }},
+	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface.", practice: "Common practice, no source: 90 to 98 %.", Usual: [2]float64{0.5, 0.995}, usualFor: waterflood, at: func(s *Study) **Input { return &s.Field.WaterCut }, when: limitedByCut},
 	{Path: "field.oilRate", Sheet: SheetField, Group: "Limit", Label: "Oil rate at the limit", Symbol: "qo,lim", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Calendar-day average at surface.", at: func(s *Study) **Input { return &s.Field.OilRate }, when: limitedByOil},
 	{Path: "field.horizon", Sheet: SheetField, Group: "Limit", Label: "Forecast to", Symbol: "tmax", Quantity: units.Duration, Min: 0, OpenMin: true, Max: 1e11, Optional: true, Default: "a little past the limit", at: func(s *Study) **Input { return &s.Field.Horizon }},
 })

@@ -113,15 +113,11 @@ func (f *front) sentence(s *sheet) {
 	switch {
 	case len(f.steps()) > 1 && f.steps()[0].SpeedAhead == f.displacement.FrontSpeed():
 		opening = "The first of " + units.Format(float64(len(f.steps())), 3) + " steps arrives after"
-	case waterAhead:
+	case f.waterMoves():
 		opening = "The front arrives after"
 	}
-	fate := "produced"
-	if _, inlet := f.displacement.InletFace(); math.Abs(inlet-1) > backward { // some is injected too, or leaves at the injector
-		fate = "displaced"
-	}
-	s.answer(opening + " {front.breakthrough} injected with {front.recoveryAtBreakthrough} of the pore volume " + fate + " ({front.recoveryAtBreakthroughInPlace} of the oil in place)")
-	if _, _, shock := f.displacement.Front(); shock {
+	s.answer(opening+" {front.breakthrough} injected with {front.recoveryAtBreakthrough} of the pore volume "+f.fate(), " ({front.recoveryAtBreakthroughInPlace} of the oil in place)")
+	if _, _, shock := f.displacement.Front(); shock && s.number("front.cutAtBreakthrough") > 0 {
 		if waterAhead {
 			s.answer("; the water cut jumps from {front.surfaceCutAhead} to {front.surfaceCutAtBreakthrough} at surface")
 		} else {
@@ -129,6 +125,15 @@ func (f *front) sentence(s *sheet) {
 		}
 	}
 	s.answer("; the next step arrives after {front.nextStep}", "; after 1 PV the recovery is {front.recoveryAtOne}", ".")
+}
+
+// fate is what becomes of oil that is displaced: it is produced, unless some oil is
+// injected too or leaves at the injector.
+func (f *front) fate() string {
+	if _, inlet := f.displacement.InletFace(); math.Abs(inlet-1) > backward {
+		return "displaced"
+	}
+	return "produced"
 }
 
 // steps are the shocks that can be seen and that enter, the foremost first.
@@ -210,22 +215,31 @@ func (f *front) figures(s *sheet, rock *rock) {
 	f.trappedFigure(s, rock)
 }
 
+// arriving says which state it is that arrives first.
+func (f *front) arriving() string {
+	if _, _, shock := f.displacement.Front(); shock {
+		return "behind the front"
+	}
+	return "of the foremost state"
+}
+
 // cutFigures are the water cut behind the front, and ahead of it where water flows there.
 func (f *front) cutFigures(s *sheet, behind float64) (cut float64) {
 	p := f.flow.Curves.At(behind)
 	cut, _ = f.flow.At(behind)
-	formula, method := "{fwf} = ({krw} / {µw}) / ({krw} / {µw} + {kro} / {µo})", "kr at the saturation behind the front."
+	place := f.arriving()
+	formula, share := "{fwf} = ", "({krw} / {µw}) / ({krw} / {µw} + {kro} / {µo})"
 	if f.dip != nil {
-		formula += " (1 - {Ng} {kro} / {µo})"
+		formula += "(1 - {Ng} {kro} / {µo}) "
 	}
-	w := s.by(formula, method, ref.BuckleyLeverett1942).
-		value("krw", "krw behind the front", p.Krw, units.Fraction).value("kro", "kro behind the front", p.Kro, units.Fraction).
+	w := s.by(formula+share, "kr at the saturation "+place+".", ref.BuckleyLeverett1942).
+		value("krw", "krw "+place, p.Krw, units.Fraction).value("kro", "kro "+place, p.Kro, units.Fraction).
 		viscosities().rests(f.curve...)
 	if f.dip != nil {
 		w.term("front.gravityTerm")
 	}
-	s.figure(Figure{ID: "front.cutAtBreakthrough", Label: "Water cut behind the front, reservoir", Symbol: "fwf", Value: cut, Quantity: units.Share}, w)
-	f.surfaceFigure(s, Figure{ID: "front.surfaceCutAtBreakthrough", Label: "Water cut behind the front, surface", Symbol: "fws", Strip: true}, "front.cutAtBreakthrough")
+	s.figure(Figure{ID: "front.cutAtBreakthrough", Label: "Water cut " + place + ", reservoir", Symbol: "fwf", Value: cut, Quantity: units.Share}, w)
+	f.surfaceFigure(s, Figure{ID: "front.surfaceCutAtBreakthrough", Label: "Water cut " + place + ", surface", Symbol: "fws", Strip: true}, "front.cutAtBreakthrough")
 	if ahead := f.cutAhead(); ahead > 0 {
 		s.figure(Figure{ID: "front.cutAhead", Label: "Water cut ahead of the front, reservoir", Symbol: "fwi", Value: ahead, Quantity: units.Share},
 			s.by("", "Fractional flow at the initial saturation, where water already flows.", ref.BuckleyLeverett1942).on("front.initialWater").onFlow(f.curve))
@@ -241,7 +255,11 @@ func (f *front) surfaceFigure(s *sheet, figure Figure, reservoir string) {
 		return
 	}
 	figure.Value, figure.Quantity = f.surfaceCut(cut.Value), units.Share
-	if cut.Value <= 0 || cut.Value > 1 {
+	switch {
+	case cut.Value == 0:
+		s.figure(figure, s.by("", "No water flows.").on(reservoir))
+		return
+	case cut.Value < 0 || cut.Value > 1:
 		s.figure(figure, s.by("", "One phase flows back, so that the stream is all of the other.").on(reservoir))
 		return
 	}
@@ -271,9 +289,20 @@ func (f *front) stateFigures(s *sheet) {
 		{"front.injectedWater", "front.injectedWater", "Saturation held at the inlet", "Swj", "rock.sor", "{Swj} = 1 - {Sor}", "The largest water saturation of the curve, since none is typed.", f.swj},
 	} {
 		figure := Figure{ID: state.id, Label: state.label, Symbol: state.symbol, Value: state.value, Quantity: units.Fraction}
-		if spec, _ := Find(state.path); spec.Get(s.st) != nil {
+		face, _ := f.displacement.InletFace()
+		spec, _ := Find(state.path)
+		typed := spec.Get(s.st) != nil
+		switch {
+		case state.id == "front.injectedWater" && math.Abs(face-f.swj) > backward:
+			figure.Label, figure.Value = "Saturation at the inlet face", face
+			w := s.by("", "Where the fractional flow is largest: the states from here up to Sw = "+units.Format(f.swj, 4)+", held at the inlet, run back and never enter.", ref.BuckleyLeverett1942).onFlow(f.curve)
+			if typed {
+				w.rests(state.path)
+			}
+			s.figure(figure, w)
+		case typed:
 			s.figure(figure, s.by("", "As typed.").rests(state.path))
-		} else {
+		default:
 			s.figure(figure, s.by(state.endSymbol, state.default_).term(state.end))
 		}
 	}

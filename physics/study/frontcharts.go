@@ -2,6 +2,7 @@ package study
 
 import (
 	"math"
+	"slices"
 
 	"brinefront/physics/displace"
 	"brinefront/physics/fracflow"
@@ -193,8 +194,10 @@ func (f *front) recoveryChart(s *sheet, injected []float64, history []displace.S
 	}
 	c.Lines = []Line{
 		{ID: "pore", Label: "of the pore volume", Role: "oil", Kind: "line", X: injected, Y: pore},
-		{ID: "place", Label: "of the oil in place", Role: "total", Kind: "line", X: injected, Y: place},
 		{ID: "movable", Label: "of the movable oil", Role: "aid", Kind: "dashed", X: injected, Y: movable},
+	}
+	if !holdsConnate(s.st) {
+		c.Lines = slices.Insert(c.Lines, 1, Line{ID: "place", Label: "of the oil in place", Role: "total", Kind: "line", X: injected, Y: place})
 	}
 	c.Summary = "Recovery against pore volumes of water injected: a straight rise until breakthrough, then ever slower."
 	return c

@@ -86,15 +86,23 @@ func (f *front) velocityFigure(s *sheet) {
 	}
 }
 
+// waterMoves reports whether water flows at the initial saturation.
+func (f *front) waterMoves() bool { return f.flow.Curves.At(f.swi).Krw > 0 }
+
+// oneOnEachSide reports whether water alone flows behind an interface between the two
+// states and oil alone ahead of it: what theory of two phases that flow apart supposes.
+func (f *front) oneOnEachSide() bool { return !f.waterMoves() && f.flow.Curves.At(f.swj).Kro == 0 }
+
 // segregated is the displacement in the dipping layer as two phases that flow apart,
-// the limit in which stability is judged; false in a level layer.
+// the limit in which stability is judged; false in a level layer, and where both flow
+// on one side of the interface.
 func (f *front) segregated() (d regime.Dip, ok bool) {
-	if f.dip == nil {
+	if f.dip == nil || !f.oneOnEachSide() {
 		return d, false
 	}
 	return regime.Dip{
 		Permeability: f.dip.permeability, Kr: f.flow.Curves.At(f.swj).Krw, Viscosity: f.flow.MuW,
-		DensityDifference: f.dip.rho[0] - f.dip.rho[1], Angle: f.dip.angle, Mobility: f.flow.EndPointMobilityRatio(f.swi, f.swj),
+		DensityDifference: f.dip.rho[0] - f.dip.rho[1], Angle: f.dip.angle, Mobility: f.flow.EndPointMobilityRatio(),
 	}, true
 }
 
@@ -130,21 +138,25 @@ func (f *front) stabilityFigures(s *sheet) {
 	}
 	if beta, stable := layer.Interface(f.velocity); stable {
 		s.figure(Figure{ID: "front.interface", Label: "Angle between interface and layer", Symbol: "β", Value: beta, Quantity: units.Angle},
-			s.by("", "tan β = tan θ (1 − (M − 1)/G): the interface of a stable displacement of two phases that flow apart. At rest it is level, β = θ; at the critical rate β = 0.", ref.Dietz1953, ref.Dake1978).
+			s.by("", "tan β = |tan θ| (1 − (M − 1)/G): the interface of a stable displacement of two phases that flow apart. At rest it is level, β = |θ|; at the critical rate β = 0.", ref.Dietz1953, ref.Dake1978).
 				term("front.gravityNumber").term("front.endPointMobility").rests("front.dip"))
 	}
 }
 
 // apartFigure is when water arrives if gravity parts the phases wholly and the
-// interface is not stable.
+// interface is not stable. Where water moves ahead of it, or oil behind, the flux of
+// the tongue is another one and the figure is left out.
 func (f *front) apartFigure(s *sheet) {
+	if !f.oneOnEachSide() {
+		return
+	}
 	g := 0.0
 	formula := "{Qs} = {Rmax} / {M}"
 	if layer, dips := f.segregated(); dips {
 		g = layer.Gravity(f.velocity)
 		formula = "{Qs} = {Rmax} / ({M} - {G})"
 	}
-	apart, err := regime.NewSegregated(f.flow.EndPointMobilityRatio(f.swi, f.swj), g)
+	apart, err := regime.NewSegregated(f.flow.EndPointMobilityRatio(), g)
 	if err != nil {
 		return
 	}

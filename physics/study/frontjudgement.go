@@ -38,8 +38,12 @@ func (f *front) mobility(s *sheet) {
 		return
 	}
 	v := regime.EndPointMobility(m)
+	do := "See the ratio across the front for whether fingers grow."
+	if _, _, shock := f.displacement.Front(); !shock {
+		do = "Keep it in mind for sweep; no step runs ahead from which fingers could grow."
+	}
 	s.note(Note{ID: "front.mobility", Level: "remark", Text: said(v),
-		Cause: "It governs sweep in patterns and layers, which this sheet does not see.", Do: "See the ratio across the front for whether fingers grow.", Paths: viscosityPaths()})
+		Cause: "It governs sweep in patterns and layers, which this sheet does not see.", Do: do, Paths: viscosityPaths()})
 }
 
 // stability tells the front mobility ratio in words.
@@ -51,9 +55,14 @@ func (f *front) stability(s *sheet) {
 		return
 	}
 	v := regime.FrontMobility(ratio.Value)
+	if layer, dips := f.segregated(); dips && v.Class != regime.Stable && layer.Judge(f.velocity).Class == regime.Stable {
+		s.note(Note{ID: "front.gravityHolds", Level: "remark", Text: "Gravity holds the front, which without it would be unstable. " + said(v),
+			Cause: "The rate lies below the critical one, so that what runs ahead falls back.", Do: "Keep the rate below the critical one.", Paths: append(viscosityPaths(), "front.dip")})
+		return
+	}
 	if v.Class != regime.Stable {
 		s.note(Note{ID: "front.unstable", Level: "caution", Text: "Without help from gravity the front is unstable. " + said(v),
-			Cause: "Water fingers ahead of the front in real rock, so it arrives earlier and sweeps less than computed here.", Do: "Take breakthrough and early recovery as upper bounds; consider a more viscous injected water.", Paths: viscosityPaths()})
+			Cause: "Water fingers ahead of the front in real rock, so it arrives earlier and sweeps less than computed here.", Do: "Take breakthrough as the latest and early recovery as the most to expect; consider a more viscous injected water.", Paths: viscosityPaths()})
 		return
 	}
 	s.note(Note{ID: "front.stable", Level: "remark", Text: "The front is stable without gravity. " + said(v),
@@ -62,8 +71,15 @@ func (f *front) stability(s *sheet) {
 
 // gravity tells what the dip does.
 func (f *front) gravity(s *sheet) {
+	f.velocityDiffers(s)
+	if f.dip == nil {
+		return
+	}
+	f.backflow(s)
 	layer, ok := f.segregated()
 	if !ok {
+		s.note(Note{ID: "front.gravityUnjudged", Level: "remark", Text: "Whether gravity keeps the interface in shape is not judged: both phases flow on one side of it.",
+			Cause: "The critical rate is known for water alone behind the interface and oil alone ahead.", Do: "Look at the fractional flow curve, which counts gravity as it is.", Paths: []string{"front.initialWater", "front.injectedWater"}})
 		return
 	}
 	paths := []string{"front.dip", "field.permeability"}
@@ -73,11 +89,14 @@ func (f *front) gravity(s *sheet) {
 	_, rates := layer.Critical()
 	s.note(Note{ID: "front.dipStability", Level: level(v.Class != regime.Stable), Text: said(v) + " " + rates.Text,
 		Cause: "Above the critical rate one phase overruns the other along the layer, which one dimension does not show.", Do: "Hold the rate on the stable side of the critical rate where that pays.", Paths: append(paths, "front.velocity")})
-	if u := s.fieldVelocity(); s.st.Front.Velocity != nil && math.Abs(u/f.velocity-1) > 0.01 {
+}
+
+// velocityDiffers warns where a velocity that is typed and counts is not that of the field.
+func (f *front) velocityDiffers(s *sheet) {
+	if u := s.fieldVelocity(); velocityCounts(s.st) && s.st.Front.Velocity != nil && math.Abs(u/f.velocity-1) > 0.01 {
 		s.note(Note{ID: "front.velocityDiffers", Level: "caution", Text: "The Darcy velocity typed is " + units.Format(f.velocity/u, 3) + " times that of the field's rate over its cross-section.",
-			Cause: "Gravity counts by the velocity typed, time by the rate of the field.", Do: "Leave the velocity empty so that both agree.", Paths: []string{"front.velocity", "field.rate"}})
+			Cause: "Gravity and the capillary number count by the velocity typed, time by the rate of the field.", Do: "Leave the velocity empty so that both agree.", Paths: []string{"front.velocity", "field.rate"}})
 	}
-	f.backflow(s)
 }
 
 // backflow tells where a phase flows against the displacement.

@@ -33,19 +33,11 @@ func (f *front) notes(s *sheet) {
 		s.note(Note{ID: "front.staircase", Level: "remark", Text: "The displacement is a staircase of small steps.",
 			Cause: "Straight lines between the rows of the table make the slope of the fractional flow jump at every row; this is the exact solution for them.", Do: "Choose the monotone cubic or a fitted curve for smooth answers.", Paths: []string{"rock.curve"}})
 	}
-	f.volumeFactors(s)
+	if holdsConnate(s.st) {
+		s.note(Note{ID: "front.inPlace", Level: "remark", Text: "Nothing is told as a part of the oil in place.",
+			Cause: "The resident saturation counts connate water, and how much of it there is, is not asked for.", Do: "Divide a recovery of the pore volume by the oil saturation at the start.", Paths: []string{"fluids.pair"}})
+	}
 	f.frontPlace(s)
-}
-
-func (f *front) volumeFactors(s *sheet) {
-	if f.pair.Resident.Name == "oil" && f.bo < 1 {
-		s.note(Note{ID: "front.oilFactor", Level: "caution", Text: "Bo is below 1: oil would swell on its way to surface.",
-			Cause: "Oil loses gas and cools on its way up, so that Bo is above 1 nearly always.", Do: "Look whether Bo was typed as its inverse.", Paths: []string{"fluids.oilFormationFactor"}})
-	}
-	if f.pair.Displacing.Brine && (f.bw < 0.95 || f.bw > 1.1) {
-		s.note(Note{ID: "front.waterFactor", Level: "caution", Text: "Bw is " + units.Format(f.bw, 4) + ", far from 1.",
-			Cause: "Brine hardly shrinks; common practice, no source: 1.00 to 1.07.", Do: "Look whether Bw and Bo were exchanged.", Paths: []string{"fluids.waterFormationFactor"}})
-	}
 }
 
 // frontPlace warns where the front rests on a stretch without laboratory points.

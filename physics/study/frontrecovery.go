@@ -10,13 +10,17 @@ import (
 func (f *front) recoveryFigures(s *sheet, behind, cut float64) {
 	d := f.displacement
 	bt := d.Breakthrough()
-	_, inlet := d.InletFace()
-	s.figure(Figure{ID: "front.breakthrough", Label: "Water arrives after", Symbol: "Qbt", Value: bt, Quantity: units.PoreVolumes, Strip: true},
+	face, inlet := d.InletFace()
+	arrives, place := "Water arrives after", f.arriving()
+	if f.waterMoves() {
+		arrives = "Front arrives after"
+	}
+	s.figure(Figure{ID: "front.breakthrough", Label: arrives, Symbol: "Qbt", Value: bt, Quantity: units.PoreVolumes, Strip: true},
 		s.by("{Qbt} = 1 / {v}", "Pore volumes injected until the front reaches the producer.", ref.BuckleyLeverett1942, ref.Welge1952).term("front.speed"))
 	s.figure(Figure{ID: "front.averageAtBreakthrough", Label: "Average saturation at breakthrough", Symbol: "Sav", Value: d.Average(bt), Quantity: units.Fraction},
 		s.by("{Sav} = {Swf} + ({fwj} - {fwf}) {Qbt}", "Welge's tangent carried to the fractional flow of the inlet.", ref.Welge1952).
-			value("Swf", "saturation behind the front", behind, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
-			value("fwf", "water cut behind the front", cut, units.Fraction).term("front.breakthrough"))
+			value("Swf", "saturation "+place, behind, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
+			value("fwf", "water cut "+place, cut, units.Fraction).term("front.breakthrough"))
 	s.recovery("front.recoveryAtBreakthrough", "Recovery at breakthrough", "Rbt", d.Recovery(bt), true,
 		s.by("{Rbt} = {Sav} - {Swi}", "Oil displaced, as a part of the pore volume.", ref.Welge1952).term("front.averageAtBreakthrough").term("front.initialWater"))
 
@@ -26,7 +30,7 @@ func (f *front) recoveryFigures(s *sheet, behind, cut float64) {
 			value("Sw2", "outlet saturation", outlet, units.Fraction).value("fwj", "fractional flow at the inlet", inlet, units.Fraction).
 			value("fw2", "water cut at the outlet", outletCut, units.Fraction).value("Q", "injected", 1, units.PoreVolumes).
 			term("front.initialWater").on("front.breakthrough"))
-	s.figure(Figure{ID: "front.movable", Label: "Movable oil", Symbol: "Rmax", Value: f.swj - f.swi, Quantity: units.Share},
+	s.figure(Figure{ID: "front.movable", Label: "Movable oil", Symbol: "Rmax", Value: face - f.swi, Quantity: units.Share},
 		s.by("{Rmax} = {Swj} - {Swi}", "What endless injection would displace, as a part of the pore volume.").term("front.injectedWater").term("front.initialWater"))
 	s.inPlace("front.recoveryAtBreakthrough", "Rbt,o", true)
 	s.movable("front.recoveryAtBreakthrough", "Rbt,m")
@@ -38,10 +42,14 @@ func (s *sheet) recovery(id, label, symbol string, value float64, strip bool, w 
 	s.figure(Figure{ID: id, Label: label + ", of the pore volume", Symbol: symbol, Value: value, Quantity: units.Share, Strip: strip}, w)
 }
 
-// inPlace adds the same recovery as a part of the oil in place.
+// holdsConnate reports whether the resident saturation counts connate water, of which
+// nothing is asked: then how much oil is in place is not known.
+func holdsConnate(st *Study) bool { return pairOf(st).Resident.Saturation == "SL" }
+
+// inPlace adds the same recovery as a part of the oil in place, where that is known.
 func (s *sheet) inPlace(id, symbol string, strip bool) {
 	f, ok := s.find(id)
-	if !ok {
+	if !ok || holdsConnate(s.st) {
 		return
 	}
 	s.figure(Figure{ID: id + "InPlace", Label: trimmed(f.Label) + ", of the oil in place", Symbol: symbol, Value: f.Value / (1 - s.number("front.initialWater")), Quantity: units.Share, Strip: strip},
@@ -59,11 +67,11 @@ func (s *sheet) movable(id, symbol string) {
 }
 
 func (f *front) mobilityFigures(s *sheet, behind, ahead float64, shock bool) {
-	injected, initial := f.flow.Curves.At(f.swj), f.flow.Curves.At(f.swi)
-	s.figure(Figure{ID: "front.endPointMobility", Label: "End-point mobility ratio", Symbol: "M", Value: f.flow.EndPointMobilityRatio(f.swi, f.swj), Quantity: units.MobilityRatio, Strip: true},
-		s.by("{M} = ({krw} / {µw}) / ({kro} / {µo})", "Water where only water flows over oil where only oil flows.", ref.Dake1978).
-			value("krw", "krw at Swj", injected.Krw, units.Fraction).value("kro", "kro at Swi", initial.Kro, units.Fraction).
-			viscosities().on("front.initialWater", "front.injectedWater"))
+	low, high := f.flow.Ends()
+	s.figure(Figure{ID: "front.endPointMobility", Label: "End-point mobility ratio", Symbol: "M", Value: f.flow.EndPointMobilityRatio(), Quantity: units.MobilityRatio, Strip: true},
+		s.by("{M} = ({krw} / {µw}) / ({kro} / {µo})", "Water where only water flows over oil where only oil flows: at the two ends of the curve, whatever the two states of the displacement.", ref.Dake1978).
+			value("krw", "krw at 1 − Sor", f.flow.Curves.At(high).Krw, units.Fraction).value("kro", "kro at Swc", f.flow.Curves.At(low).Kro, units.Fraction).
+			viscosities().rests(f.curve...))
 	if !shock {
 		return
 	}

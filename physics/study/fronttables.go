@@ -8,7 +8,7 @@ import (
 // tables lists the waves of the displacement, and what is at the producer and in
 // the rock after round volumes injected.
 func (f *front) tables(s *sheet) {
-	s.part.Tables = append(s.part.Tables, f.waveTable(), f.volumeTable())
+	s.part.Tables = append(s.part.Tables, f.waveTable(), f.volumeTable(s))
 }
 
 // shownWaves is the longest list of waves that still tells something; a table
@@ -55,7 +55,7 @@ func kindOf(w fracflow.Wave) string {
 	return "spreading"
 }
 
-func (f *front) volumeTable() Grid {
+func (f *front) volumeTable(s *sheet) Grid {
 	d := f.displacement
 	injected := Column{Label: "Injected", Symbol: "Q", Quantity: units.PoreVolumes, Values: []float64{0.1, 0.2, 0.3, 0.5, 0.75, 1, 1.5, 2, 3, 5}}
 	outlet := Column{Label: "Sw at the producer", Quantity: units.Fraction}
@@ -70,5 +70,9 @@ func (f *front) volumeTable() Grid {
 		reservoir.Values, surface.Values = append(reservoir.Values, state.Cut), append(surface.Values, f.surfaceCut(state.Cut))
 		pore.Values, place.Values = append(pore.Values, state.Recovery), append(place.Values, d.OfOilInPlace(state.Recovery))
 	}
-	return Grid{ID: "front.volumes", Title: "After round volumes injected", Columns: []Column{injected, outlet, average, reservoir, surface, pore, place}}
+	g := Grid{ID: "front.volumes", Title: "After round volumes injected", Columns: []Column{injected, outlet, average, reservoir, surface, pore}}
+	if !holdsConnate(s.st) {
+		g.Columns = append(g.Columns, place)
+	}
+	return g
 }

@@ -89,7 +89,12 @@ func TestPairChangesNoNumber(t *testing.T) {
 		got := Run(st)
 		for sheet, part := range want.Parts {
 			for _, f := range part.Figures {
-				if other, ok := got.Parts[sheet].Figure(f.ID); !ok || other.Value != f.Value {
+				other, ok := got.Parts[sheet].Figure(f.ID)
+				if inPlace := strings.HasSuffix(f.ID, "InPlace"); inPlace && pair.Value == string(fluid.GasOil) {
+					if ok { // the liquid saturation counts connate water
+						t.Errorf("%s: %s is told", pair.Value, f.ID)
+					}
+				} else if !ok || other.Value != f.Value {
 					t.Errorf("%s: %s is %v, with brine and oil %v", pair.Value, f.ID, other.Value, f.Value)
 				}
 			}

@@ -110,11 +110,11 @@ func TestNotesAreRaised(t *testing.T) {
 			put(st, "rock.corey.nw", 1, "")
 			put(st, "rock.corey.no", 1, "")
 		},
-		"front.inlet":       func(st *Study) { put(st, "front.injectedWater", 0.66, "fraction") },
-		"front.mobileWater": func(st *Study) { put(st, "front.initialWater", 0.4, "fraction") },
-		"front.staircase":   func(st *Study) { st.Rock.Curve = "table-linear" },
-		"front.oilFactor":   func(st *Study) { put(st, "fluids.oilFormationFactor", 0.8, "rb/stb") },
-		"front.waterFactor": func(st *Study) { put(st, "fluids.waterFormationFactor", 1.3, "rb/stb") },
+		"front.inlet":                         func(st *Study) { put(st, "front.injectedWater", 0.66, "fraction") },
+		"front.mobileWater":                   func(st *Study) { put(st, "front.initialWater", 0.4, "fraction") },
+		"front.staircase":                     func(st *Study) { st.Rock.Curve = "table-linear" },
+		"unusual.fluids.oilFormationFactor":   func(st *Study) { put(st, "fluids.oilFormationFactor", 0.8, "rb/stb") },
+		"unusual.fluids.waterFormationFactor": func(st *Study) { put(st, "fluids.waterFormationFactor", 1.3, "rb/stb") },
 		"front.sparse": func(st *Study) {
 			t := st.Rock.Table
 			t.Sw, t.Krw, t.Kro = thinned(t.Sw), thinned(t.Krw), thinned(t.Kro)
@@ -146,7 +146,16 @@ func TestNotesAreRaised(t *testing.T) {
 			put(st, "field.rate", 20, "bbl/d")
 			put(st, "front.initialWater", 0.3, "fraction")
 		},
-		"field.oilBack":              func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
+		"field.oilBack":         func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
+		"field.limitInJump":     func(st *Study) { put(st, "field.waterCut", 0.95, "%") },
+		"field.pressureHuge":    func(st *Study) { put(st, "field.permeability", 1e-5, "md") },
+		"front.inPlace":         func(st *Study) { st.Fluids.Pair = "gas-oil" },
+		"front.gravityUnjudged": func(st *Study) { dips(st, 12); put(st, "front.initialWater", 0.4, "fraction") },
+		"front.gravityHolds": func(st *Study) {
+			dips(st, 40)
+			put(st, "fluids.oilViscosity", 30, "cp")
+			put(st, "field.rate", 20, "bbl/d")
+		},
 		"front.velocityDiffers":      func(st *Study) { dips(st, 12); put(st, "front.velocity", 1, "ft/d") },
 		"front.capillarity":          func(st *Study) { put(st, "fluids.tension", 30, "mN/m") },
 		"front.land":                 func(st *Study) { st.Fluids.Pair = "brine-gas"; put(st, "rock.land", 2, "") },

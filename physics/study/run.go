@@ -38,4 +38,6 @@ func evaluate(st *Study) evaluation {
 func (e *evaluation) answer() {
 	e.frontPart, e.front = runFront(e.st, &e.problems, e.rockPart, e.rock)
 	e.fieldPart = runField(e.st, &e.problems, e.frontPart, e.front)
+	e.frontPart.unusual(e.st, SheetFront)
+	e.fieldPart.unusual(e.st, SheetField)
 }

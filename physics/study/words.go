@@ -43,9 +43,6 @@ func newWords(p fluid.Pair) *words {
 	} {
 		w.list[from], w.list[capital(from)] = to, capital(to)
 	}
-	if r.Saturation == "SL" { // connate water is part of what is in place
-		w.list["oil in place"], w.list["Oil in place"] = "liquid in place", "Liquid in place"
-	}
 	w.list["Swc"], w.list["Sor"] = d.Immobile, r.Immobile
 	w.list["WOR"] = strings.ToUpper(d.Symbol+r.Symbol) + "R"
 	// Symbols whose index is the phase, and what may follow it.

@@ -34,6 +34,7 @@ type Spec struct {
 	at       func(*Study) **Input
 	of       int               // the case it belongs to, counted from 1; 0: the study itself
 	when     func(*Study) bool // the choices under which the study asks for it; nil: under all
+	spared   func(*Study) bool // when an optional input is so only under some choices: those
 }
 
 // Specs lists every numeric input in the order of the forms.
@@ -60,6 +61,9 @@ func (s Spec) Applies(st *Study) bool { return s.when == nil || s.when(st) }
 func (s Spec) For(st *Study) Spec {
 	if s.practice != "" && s.customary(st) {
 		s.Help += " " + s.practice
+	}
+	if s.spared != nil {
+		s.Optional = s.spared(st)
 	}
 	if w := wordsOf(pairOf(st)); w != nil {
 		s.Label, s.Symbol, s.Default, s.Help = w.tell(s.Label), w.symbol(s.Symbol), w.tell(s.Default), w.tell(s.Help)
@@ -136,15 +140,15 @@ var specs = slices.Concat([]Spec{
 	{Path: "rock.let.eo", Sheet: SheetRock, Group: "LET", Label: "Oil, elevation", Symbol: "Eo", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e4, at: func(s *Study) **Input { return &s.Rock.LET.Eo }, when: typedLET},
 	{Path: "rock.let.to", Sheet: SheetRock, Group: "LET", Label: "Oil, top part", Symbol: "To", Quantity: units.Number, Min: 0.5, Max: 20, at: func(s *Study) **Input { return &s.Rock.LET.To }, when: typedLET},
 
-	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature.", Usual: [2]float64{0.1e-3, 2e-3}, usualFor: displacedByBrine, at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
-	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature and pressure, oil with its gas in solution.", Usual: [2]float64{0.1e-3, 1}, usualFor: oilResident, at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
+	{Path: "fluids.waterViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Water viscosity", Symbol: "µw", Quantity: units.Viscosity, Min: 1e-6, Max: 10, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature.", Usual: [2]float64{0.1e-3, 2e-3}, usualFor: displacedByBrine, spared: func(s *Study) bool { return s.Fluids.Temperature != nil && pairOf(s).Displacing.Brine }, at: func(s *Study) **Input { return &s.Fluids.WaterViscosity }},
+	{Path: "fluids.oilViscosity", Sheet: SheetFront, Group: "Fluids", Label: "Oil viscosity", Symbol: "µo", Quantity: units.Viscosity, Min: 1e-6, Max: 1e4, Optional: true, Default: "computed when it is brine and a temperature is given; needed otherwise", Help: "At reservoir temperature and pressure, oil with its gas in solution.", Usual: [2]float64{0.1e-3, 1}, usualFor: oilResident, spared: func(s *Study) bool { return s.Fluids.Temperature != nil && pairOf(s).Resident.Brine }, at: func(s *Study) **Input { return &s.Fluids.OilViscosity }},
 	{Path: "fluids.waterFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Water formation volume factor", Symbol: "Bw", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of water.", Usual: [2]float64{0.98, 1.1}, usualFor: displacedByBrine, at: func(s *Study) **Input { return &s.Fluids.WaterFormationFactor }},
 	{Path: "fluids.oilFormationFactor", Sheet: SheetFront, Group: "Fluids", Label: "Oil formation volume factor", Symbol: "Bo", Quantity: units.FormationFactor, Min: 1e-4, Max: 10, Help: "Reservoir volume of one surface volume of oil.", Usual: [2]float64{1, 3}, usualFor: oilResident, at: func(s *Study) **Input { return &s.Fluids.OilFormationFactor }},
 	{Path: "fluids.temperature", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir temperature", Symbol: "T", Quantity: units.Temperature, Min: 273.15, Max: 623.15, Optional: true, Default: "viscosity and density of brine must be typed", Help: "Gives the viscosity and density of brine where none is typed.", at: func(s *Study) **Input { return &s.Fluids.Temperature }, when: withBrine},
 	{Path: "fluids.pressure", Sheet: SheetFront, Group: "Fluids", Label: "Reservoir pressure", Symbol: "p", Quantity: units.Pressure, Min: 611, Max: 1e8, Optional: true, Default: "20 MPa; 10 MPa more or less changes brine by up to half a percent in density and one in viscosity below 110 °C, by more above", at: func(s *Study) **Input { return &s.Fluids.Pressure }, when: computedBrine},
 	{Path: "fluids.salinity", Sheet: SheetFront, Group: "Fluids", Label: "Salinity", Symbol: "s", Quantity: units.Salinity, Min: 0, Max: fluid.MaxSalinity, Optional: true, Default: "0, fresh water", Help: "Mass of all salts in the mass of brine.", at: func(s *Study) **Input { return &s.Fluids.Salinity }, when: computedBrine},
-	{Path: "fluids.waterDensity", Sheet: SheetFront, Group: "Fluids", Label: "Water density", Symbol: "ρw", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", at: func(s *Study) **Input { return &s.Fluids.WaterDensity }, when: dipping},
-	{Path: "fluids.oilDensity", Sheet: SheetFront, Group: "Fluids", Label: "Oil density", Symbol: "ρo", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", Help: "At reservoir conditions.", at: func(s *Study) **Input { return &s.Fluids.OilDensity }, when: dipping},
+	{Path: "fluids.waterDensity", Sheet: SheetFront, Group: "Fluids", Label: "Water density", Symbol: "ρw", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", spared: func(s *Study) bool { return s.Fluids.Temperature != nil && pairOf(s).Displacing.Brine }, at: func(s *Study) **Input { return &s.Fluids.WaterDensity }, when: dipping},
+	{Path: "fluids.oilDensity", Sheet: SheetFront, Group: "Fluids", Label: "Oil density", Symbol: "ρo", Quantity: units.Density, Min: 0, OpenMin: true, Max: 3000, Optional: true, Default: "computed when it is brine and a temperature is given; needed when the layer dips", Help: "At reservoir conditions.", spared: func(s *Study) bool { return s.Fluids.Temperature != nil && pairOf(s).Resident.Brine }, at: func(s *Study) **Input { return &s.Fluids.OilDensity }, when: dipping},
 	{Path: "fluids.tension", Sheet: SheetFront, Group: "Fluids", Label: "Interfacial tension", Symbol: "σ", Quantity: units.InterfacialTension, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "the capillary number is not told", Help: "Between the two phases, at reservoir conditions.", at: func(s *Study) **Input { return &s.Fluids.Tension }},
 
 	{Path: "front.initialWater", Sheet: SheetFront, Group: "States", Label: "Initial water saturation", Symbol: "Swi", Quantity: units.Fraction, Min: 0, Max: 1, Optional: true, Default: "Swc of the curve", at: func(s *Study) **Input { return &s.Front.InitialWater }},

@@ -13,6 +13,7 @@ import (
 // Field is one numeric input: label, number, unit, what is wrong with it, what
 // it means, where it comes from and how far it may range.
 func Field(d Desk, m state.Model, spec study.Spec) app.UI {
+	spec = spec.For(&m.Study)
 	text, unit := m.Shown(spec)
 	message := m.Said(spec.Path)
 	class := "field"

@@ -151,6 +151,23 @@ func (r *rider) after(q float64) (ride.State, bool) {
 	return r.flood.After(q), true
 }
 
+// short reports whether a slug is spent before the producer, so that its front never arrives.
+func (r *rider) short() bool {
+	if r.slug == nil {
+		return false
+	}
+	_, place := r.slug.Spent()
+	return place < 1
+}
+
+// arrives says that the front does, or would if its slug lasted.
+func (r *rider) arrives() string {
+	if r.short() {
+		return r.name + " would arrive"
+	}
+	return r.name + " arrives"
+}
+
 // tracer is the concentration at the producer, where it rides through a uniform stream.
 func (r *rider) tracer() ride.Tracer {
 	speed, _, _ := r.flood.Front()

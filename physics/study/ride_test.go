@@ -161,6 +161,10 @@ func TestSlugOfPolymer(t *testing.T) {
 		if _, arrives := part.Figure("front.ride.rearArrival"); arrives == c.note {
 			t.Errorf("the rear of %g PV arrives: %v", c.size, arrives)
 		}
+		front, _ := part.Figure("front.ride.arrival")
+		if late := front.Label == "Polymer front would arrive after"; late != c.note || part.Answer[len(part.Answer)-1].Text != "." {
+			t.Errorf("a slug of %g PV: %s, %+v", c.size, front.Label, part.Answer)
+		}
 		rear := must(t, part, "front.ride.slug", "rear")
 		near(t, "the slug's rear sets out", rear.Y[0], c.size, 0)
 		if last := rear.X[len(rear.X)-1]; c.note {

@@ -55,7 +55,11 @@ func (f *front) constructionChart() Chart {
 		c.Marks = append(c.Marks, Mark{"pivot", from, on(from)})
 	}
 	c.Marks = append(c.Marks, Mark{r.name, behind.S, behind.F})
-	c.Summary = "Water cut against water saturation for the water in place and for the injected water, which a tracer leaves alike. The line from the pivot at Sw = " + units.Format(pivot, 3) + " meets the curve of the injected water at Sw = " + units.Format(behind.S, 3)
+	c.Summary = "Water cut against water saturation for the water in place and for the injected water"
+	if r.kind == tracer {
+		c.Summary = "Water cut against water saturation, the same with a tracer and without"
+	}
+	c.Summary += ". The line from the pivot at Sw = " + units.Format(pivot, 3) + " meets the curve of the injected water at Sw = " + units.Format(behind.S, 3)
 	if bank, edge, ok := r.flood.Bank(); ok && r.kind != tracer {
 		c.Marks = append(c.Marks, Mark{"bank", bank.S, bank.F})
 		c.Summary += " and that of the water in place at Sw = " + units.Format(bank.S, 3) + ", the bank"
@@ -90,7 +94,7 @@ func (f *front) rideProfileChart(end float64) Chart {
 			{ID: "share", Label: shares[r.kind], Role: "total", Kind: "dashed", X: []float64{0, v, v}, Y: []float64{1, 1, 0}, Moving: true},
 		},
 		Slider: &Slider{Label: "Injected", Symbol: "Q", Quantity: units.PoreVolumes, Min: 0, Max: end, Value: r.flood.Breakthrough() / 2,
-			Marks: []Mark{{Label: r.name + " arrives", X: r.flood.Arrival()}}},
+			Marks: []Mark{{Label: r.arrives(), X: r.flood.Arrival()}}},
 		Summary: "Water saturation from injector to producer, and how far the injected water with what it carries has come, after a volume injected that the reader moves.",
 	}
 	if bank, edge, ok := r.flood.Bank(); ok && r.kind != tracer {
@@ -182,8 +186,10 @@ func (f *front) responseChart() Chart {
 		injected = append(injected, end*float64(i)/(2*historyPoints))
 	}
 	starts := []float64{0}
+	response := func(q float64) float64 { return t.Concentration(1, q) }
 	if !math.IsInf(size, 1) {
 		starts = append(starts, size)
+		response = func(q float64) float64 { return t.Pulse(1, q, size) }
 	}
 	for _, start := range starts {
 		injected = append(injected, start+arrival*(1-aside), start+arrival*(1+aside))
@@ -197,16 +203,12 @@ func (f *front) responseChart() Chart {
 	injected = slices.Compact(injected)
 	l := Line{ID: "response", Label: "tracer", Role: "total", Kind: "line", X: injected}
 	for _, q := range injected {
-		if math.IsInf(size, 1) {
-			l.Y = append(l.Y, t.Concentration(1, q))
-		} else {
-			l.Y = append(l.Y, t.Pulse(1, q, size))
-		}
+		l.Y = append(l.Y, response(q))
 	}
 	return Chart{
 		ID: "front.ride.response", Title: "Tracer at the producer",
 		X: axis("Water injected", "Q", units.PoreVolumes), Y: axis("Concentration, of the injected one", "C", units.Share).from(0, 1),
-		Lines: []Line{l}, Marks: []Mark{{"without spreading", arrival, t.Concentration(1, arrival)}},
+		Lines: []Line{l}, Marks: []Mark{{"step without spreading", arrival, response(arrival)}},
 		Summary: "Concentration in the water at the producer against pore volumes injected. Without spreading the tracer would step up after " + units.Format(arrival, 3) + " PV.",
 	}
 }

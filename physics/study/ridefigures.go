@@ -54,7 +54,7 @@ func (f *front) rideFigures(s *sheet) {
 	}
 	s.figure(Figure{ID: "front.ride.speed", Label: "Speed of the " + r.name, Symbol: "vr", Value: speed, Quantity: units.Number},
 		w.term("front.ride.retardation").onRider(f))
-	s.figure(Figure{ID: "front.ride.arrival", Label: capital(r.name) + " arrives after", Symbol: "Qr", Value: r.flood.Arrival(), Quantity: units.PoreVolumes, Strip: true},
+	s.figure(Figure{ID: "front.ride.arrival", Label: capital(r.arrives()) + " after", Symbol: "Qr", Value: r.flood.Arrival(), Quantity: units.PoreVolumes, Strip: true},
 		s.by("{Qr} = 1 / {vr}", "", r.sources()...).term("front.ride.speed"))
 	f.rideTime(s)
 	s.figure(Figure{ID: "front.ride.saturation", Label: "Saturation behind the " + r.name, Symbol: "S2", Value: behind.S, Quantity: units.Fraction},
@@ -115,7 +115,7 @@ func (f *front) rideTime(s *sheet) {
 			w.rests(spec.Path)
 		}
 	}
-	s.figure(Figure{ID: "front.ride.time", Label: capital(f.rider.name) + " arrives at", Symbol: "tr", Value: f.linear.TimeAt(f.rider.flood.Arrival()), Quantity: units.Duration}, w)
+	s.figure(Figure{ID: "front.ride.time", Label: capital(f.rider.arrives()) + " at", Symbol: "tr", Value: f.linear.TimeAt(f.rider.flood.Arrival()), Quantity: units.Duration}, w)
 }
 
 // bankFigures are the bank ahead of the front.
@@ -129,7 +129,11 @@ func (f *front) bankFigures(s *sheet) {
 		s.by("", "Where the line of the front meets the curve of the water in place: both balances hold across the front only there.", r.sources()...).onRider(f))
 	s.figure(Figure{ID: "front.ride.bankCut", Label: "Water cut of the bank, reservoir", Symbol: "f1", Value: bank.F, Quantity: units.Share},
 		s.by("{f1} = {vr} ({S1} + {b}) - {a}", "", r.sources()...).term("front.ride.speed").term("front.ride.bankSaturation").term("front.ride.retardation").value("a", "carried by the oil", r.pivot.A, units.Number))
-	s.figure(Figure{ID: "front.ride.bankArrival", Label: "Bank arrives after", Symbol: "Qb", Value: 1 / edge, Quantity: units.PoreVolumes},
+	label := "Bank arrives after"
+	if r.short() {
+		label = "Bank arrives, if the slug lasts, after"
+	}
+	s.figure(Figure{ID: "front.ride.bankArrival", Label: label, Symbol: "Qb", Value: 1 / edge, Quantity: units.PoreVolumes},
 		s.by("{Qb} = 1 / {vb}", "The first wave of the water in place, from the bank to the initial state.", ref.Welge1952, ref.Pope1980).value("vb", "speed of the bank's edge", edge, units.Number).on("front.ride.bankSaturation"))
 }
 
@@ -214,6 +218,9 @@ func (f *front) rideTable(s *sheet) Grid {
 	if len(waves) > shownWaves {
 		waves = waves[len(waves)-shownWaves:]
 		g.Title = "Waves with the " + f.rider.name + ", the foremost " + units.Format(shownWaves, 3) + " of them"
+	}
+	if f.rider.slug != nil {
+		g.Title += "; injected without end"
 	}
 	kind, water := Column{Label: "Wave", Quantity: units.Number}, Column{Label: "In", Quantity: units.Number}
 	behind, ahead := Column{Label: "Sw behind", Quantity: units.Fraction}, Column{Label: "Sw ahead", Quantity: units.Fraction}

@@ -29,6 +29,10 @@ func (f *front) rideSentence(s *sheet) {
 	if f.rider == nil || f.rider.flood == nil {
 		return
 	}
+	if f.rider.short() {
+		s.answer(" The slug is spent after {front.ride.spent}, at {front.ride.spentAt} of the length; injected without end its "+f.rider.name+" would arrive after {front.ride.arrival}", ".")
+		return
+	}
 	adds := "; at 1 PV it adds {front.ride.gainAtOne} of the pore volume"
 	if s.number("front.ride.gainAtOne") < 0 {
 		adds = "; at 1 PV it changes recovery by {front.ride.gainAtOne} of the pore volume"
@@ -83,7 +87,7 @@ func (f *front) slugNotes(s *sheet) {
 	}
 	s.note(Note{ID: "front.ride.rear", Level: "caution", Text: "The rear of the slug is taken as one step, without fingers.",
 		Cause: "Plain water that moves more easily than the slug fingers through it, so that the rear comes earlier.", Do: "Take the times of the rear as the latest, recovery as an upper bound; grade the viscosity down at the rear.", Paths: path})
-	if _, x := r.slug.Spent(); x < 1 {
+	if _, x := r.slug.Spent(); r.short() {
 		s.note(Note{ID: "front.ride.slugSmall", Level: "caution", Text: "The slug is too small: it is spent at " + units.Format(x, 3) + " of the way to the producer.",
 			Cause: "The rock keeps what the slug carries; from there on plain water leads, which is not followed here.", Do: "Inject " + units.Format(r.flood.LeastSlug(r.retention().Rear(), 1), 3) + " PV or more, and some for fingers.", Paths: append(path, riderPath("retention"))})
 	}

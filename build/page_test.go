@@ -141,6 +141,9 @@ func (p *Page) Retype(selector, text string) {
 	p.t.Helper()
 	p.Focus(selector)
 	p.command("a", "selectAll")
+	if text == "" {
+		p.Press(kb.Delete)
+	}
 	p.Type(text + kb.Tab)
 }
 

@@ -47,21 +47,41 @@ func TestBadTextIsExplainedBesideItsField(t *testing.T) {
 	p.NoTrouble()
 }
 
-// TestEndPointsThatMeetAreRefused: Swc + Sor >= 1, each lawful by itself.
+// TestEndPointsThatMeetAreRefused: Swc + Sor >= 1, each lawful by itself. Both fields
+// say so, and the last good answer stays, marked as such.
 func TestEndPointsThatMeetAreRefused(t *testing.T) {
 	p := OpenFile(t, At("#/rock"))
 	p.WaitIdle()
 	p.Focus("#in-rock-curve")
 	p.Type("Corey, typed")
 	p.WaitIdle()
+	stale := func() bool { return Eval[bool](p, `document.querySelector(".answers").hasAttribute("data-stale")`) }
 	p.Retype(field("rock.corey.swc"), "0.6")
-	p.Retype(field("rock.corey.sor"), "0.5")
+	p.Retype(field("rock.corey.sor"), "0.2")
+	p.Press(kb.Tab)
 	p.WaitIdle()
-	if screen := p.Screen(); len(p.figures()) > 0 || !strings.Contains(screen, "below 1") {
-		t.Errorf("Swc 0.6 and Sor 0.5 give %v and\n%s", p.figures(), screen)
+	before := p.figures()
+	if len(before) == 0 || stale() {
+		t.Fatalf("Swc 0.6 and Sor 0.2 give %v, marked as stale: %t", before, stale())
 	}
+	p.Retype(field("rock.corey.sor"), "0.5")
+	p.Press(kb.Tab)
+	p.WaitIdle()
+	if after := p.figures(); fmt.Sprint(after) != fmt.Sprint(before) || !stale() {
+		t.Errorf("Swc 0.6 and Sor 0.5 give %v, marked as stale: %t; want %v, marked", after, stale(), before)
+	}
+	for _, path := range []string{"rock.corey.swc", "rock.corey.sor"} {
+		marked := Eval[bool](p, fmt.Sprintf(`document.querySelector(%s).getAttribute("aria-invalid") !== null`, quote(field(path))))
+		if said := p.Text(message(path)); !marked || !strings.Contains(said, "below 1") {
+			t.Errorf("beside %s stands %q, marked: %t", path, said, marked)
+		}
+	}
+	p.Focus("#inputs")
 	p.Press("z", kb.ModifierCtrl)
 	p.WaitIdle()
+	if after := p.figures(); fmt.Sprint(after) != fmt.Sprint(before) || stale() {
+		t.Errorf("undo gives %v, marked as stale: %t", after, stale())
+	}
 	p.NoTrouble()
 }
 

@@ -39,7 +39,7 @@ func compareCharts(s *sheet, all []outcome) {
 	recovery := Chart{ID: "compare.recovery", Title: "Recovery, of the pore volume", X: axis("Water injected", "Q", units.PoreVolumes), Y: axis("Recovery", "R", units.Share).from(0, 1),
 		Summary: "Recovery against pore volumes of water injected" + of}
 	profile := Chart{ID: "compare.profile", Title: "Saturation along the flood at breakthrough", X: axis("Distance from the injector, part of the length", "x/L", units.Number).from(0, 1), Y: saturationAxis,
-		Summary: "Water saturation from injector to producer when water arrives" + of}
+		Summary: "Water saturation from injector to producer at breakthrough" + of}
 	for _, o := range all {
 		flow.Lines = append(flow.Lines, o.flowLine())
 		recovery.Lines = append(recovery.Lines, o.recoveryLine(end))

@@ -4,6 +4,7 @@ import (
 	"math"
 	"slices"
 	"strconv"
+	"strings"
 
 	"brinefront/physics/units"
 )
@@ -13,18 +14,18 @@ import (
 type comparison struct {
 	id         string // of the figure on its own sheet
 	name       string // of the difference, under "compare.case1."
-	label      string
+	label      string // with {first} for what arrives first
 	less, more string
 }
 
 var (
 	comparedInFront = []comparison{
-		{"front.breakthrough", "breakthrough", "water arrives", "earlier", "later"},
+		{"front.breakthrough", "breakthrough", "{first} arrives", "earlier", "later"},
 		{"front.recoveryAtBreakthrough", "recoveryAtBreakthrough", "recovery at breakthrough", "less", "more"},
 		{"front.recoveryAtOne", "recoveryAtOne", "recovery after 1 PV", "less", "more"},
 	}
 	comparedInField = []comparison{
-		{"field.breakthrough", "breakthroughTime", "water arrives in time", "earlier", "later"},
+		{"field.breakthrough", "breakthroughTime", "{first} arrives in time", "earlier", "later"},
 		{"field.limitTime", "limitTime", "the limit comes", "earlier", "later"},
 		{"field.recoveryAtLimit", "recoveryAtLimit", "recovery at the limit", "less", "more"},
 	}
@@ -50,7 +51,7 @@ func (c comparison) difference(base, o outcome) (f Figure, of [2]Figure, word st
 	default:
 		word, f.Value = c.more, d
 	}
-	f.Label = "“" + o.name + "”: " + c.label + " " + word
+	f.Label = "“" + o.name + "”: " + strings.ReplaceAll(c.label, "{first}", o.first(base)) + " " + word
 	return f, [2]Figure{was, is}, word, true
 }
 
@@ -78,6 +79,22 @@ func compareFigures(s *sheet, all []outcome) {
 				rests(was.Working.Inputs...).rests(o.places(is.Working.Inputs)...))
 		}
 	}
+}
+
+// first is what arrives first in both: water, or the front where water flows before it.
+func (o outcome) first(base outcome) string {
+	if o.front.waterMoves() || base.front.waterMoves() {
+		return "the front"
+	}
+	return "water"
+}
+
+// fate is what becomes of the oil displaced in both.
+func (o outcome) fate(base outcome) string {
+	if fate := base.front.fate(); fate != "produced" {
+		return fate
+	}
+	return o.front.fate()
 }
 
 // limited reports whether the outcome is judged at the economic limit: when it and
@@ -139,12 +156,12 @@ func compareAnswer(s *sheet, all []outcome) {
 		}
 		s.tell(lead + "“" + o.name + "” ")
 		lead = "; "
-		s.told(all[0], o, comparedInFront[0], "brings water ", "", "after the same volume injected")
+		s.told(all[0], o, comparedInFront[0], "brings "+o.first(all[0])+" ", "", "after the same volume injected")
 		if o.limited(all[0]) {
 			s.told(all[0], o, comparedInField[1], " and reaches the limit ", "", "at the same time")
-			s.told(all[0], o, comparedInField[2], " with ", " of the pore volume produced", "the same recovery")
+			s.told(all[0], o, comparedInField[2], " with ", " of the pore volume "+o.fate(all[0]), "the same recovery")
 		} else {
-			s.told(all[0], o, comparedInFront[2], " and has ", " of the pore volume produced after 1 PV", "the same recovery after 1 PV")
+			s.told(all[0], o, comparedInFront[2], " and has ", " of the pore volume "+o.fate(all[0])+" after 1 PV", "the same recovery after 1 PV")
 		}
 	}
 	if len(s.part.Answer) == 0 {

@@ -145,8 +145,12 @@ func (f *field) limitFigures(s *sheet) {
 	if cut < 0 || cut > 1 {
 		return // one phase flows back: there is no ratio
 	}
-	s.figure(Figure{ID: "field.waterOilRatioAtLimit", Label: "Water-oil ratio at the limit, at surface", Symbol: "WOR", Value: cut * f.front.bo / ((1 - cut) * f.front.bw), Quantity: units.WaterOilRatio},
-		s.by("{WOR} = {fw2} {Bo} / ((1 - {fw2}) {Bw})", "").term("field.limitCut").input("fluids.oilFormationFactor").input("fluids.waterFormationFactor"))
+	surface, method := "at surface", ""
+	if !waterflood(s.st) {
+		surface, method = "volumes by Bo and Bw as typed", "Volume over volume, both in one unit: surface volumes where the formation volume factors typed are those to surface, reservoir volumes where they are 1."
+	}
+	s.figure(Figure{ID: "field.waterOilRatioAtLimit", Label: "Water-oil ratio at the limit, " + surface, Symbol: "WOR", Value: cut * f.front.bo / ((1 - cut) * f.front.bw), Quantity: units.WaterOilRatio},
+		s.by("{WOR} = {fw2} {Bo} / ((1 - {fw2}) {Bw})", method).term("field.limitCut").input("fluids.oilFormationFactor").input("fluids.waterFormationFactor"))
 }
 
 // limitVolume is how the volume injected at the limit was found. As a rule it is met as

@@ -86,12 +86,19 @@ func (f *front) velocityFigure(s *sheet) {
 	}
 }
 
-// waterMoves reports whether water flows at the initial saturation.
-func (f *front) waterMoves() bool { return f.flow.Curves.At(f.swi).Krw > 0 }
+// waterMoves reports whether water can flow at the initial saturation.
+func (f *front) waterMoves() bool { return f.ofMobility(f.swi) > backward }
+
+// ofMobility is the share of water in the total mobility.
+func (f *front) ofMobility(sw float64) float64 {
+	p := f.flow.Curves.At(sw)
+	water, oil := p.Krw/f.flow.MuW, p.Kro/f.flow.MuO
+	return water / (water + oil)
+}
 
 // oneOnEachSide reports whether water alone flows behind an interface between the two
 // states and oil alone ahead of it: what theory of two phases that flow apart supposes.
-func (f *front) oneOnEachSide() bool { return !f.waterMoves() && f.flow.Curves.At(f.swj).Kro == 0 }
+func (f *front) oneOnEachSide() bool { return !f.waterMoves() && f.ofMobility(f.swj) > 1-backward }
 
 // segregated is the displacement in the dipping layer as two phases that flow apart,
 // the limit in which stability is judged; false in a level layer, and where both flow

@@ -114,7 +114,7 @@ func TestPathsOfCasesLeadToFields(t *testing.T) {
 		if sheetOf(path) != "compare" || p.byID[widget.FieldID(path)] == nil {
 			t.Errorf("%s leads to %s, %q", path, sheetOf(path), widget.FieldID(path))
 		}
-		if report.Label(path) == path {
+		if report.Label(&m.Study, path) == path {
 			t.Errorf("%s has no label", path)
 		}
 	}

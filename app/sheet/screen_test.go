@@ -12,6 +12,7 @@ import (
 	"brinefront/app/state"
 	"brinefront/app/widget"
 	"brinefront/app/wire"
+	"brinefront/physics/report"
 	"brinefront/physics/study"
 )
 
@@ -21,6 +22,10 @@ type desk struct{ sent []state.Msg }
 func (d *desk) Send(msg state.Msg) { d.sent = append(d.sent, msg) }
 func (d *desk) Find(string)        {}
 func (d *desk) Await()             {}
+func (d *desk) Label(path string) string {
+	st := study.Empty()
+	return report.Label(&st, path)
+}
 
 // after is the model after messages, answered as the engine would.
 func after(messages ...state.Msg) state.Model {

@@ -69,7 +69,7 @@ func change(d Desk, m state.Model, i int, inner string) app.UI {
 		app.P().Class("base").Body(
 			app.Span().Text(study.BaseCase+": "+report.Held(m.Study, inner)+". "),
 			button("As in the base case").ID(caseID(i, "back-"+dashed(inner))).Class("link").
-				Aria("label", report.Label(inner)+" as in the base case").OnClick(back, scope),
+				Aria("label", d.Label(inner)+" as in the base case").OnClick(back, scope),
 		),
 	)
 }
@@ -81,7 +81,7 @@ func caseChoice(d Desk, m state.Model, i int, inner string) app.UI {
 		options = append(options, option(c.Value, c.Label, c.Value == m.Study.Cases[i].Choose[inner]))
 	}
 	return app.Div().Class("field").Body(
-		app.Label().For(FieldID(path)).Text(report.Label(inner)),
+		app.Label().For(FieldID(path)).Text(d.Label(inner)),
 		app.Select().ID(FieldID(path)).DataSet("path", path).
 			OnChange(func(ctx app.Context, _ app.Event) {
 				d.Send(state.CaseChosen{Index: i, Path: inner, Value: valueOf(ctx)})
@@ -98,7 +98,7 @@ func another(d Desk, m state.Model, i int, shown []string) app.UI {
 	options := []app.UI{option("", "choose an input …", true)}
 	for _, path := range study.CaseChoices() {
 		if !slices.Contains(shown, path) {
-			options = append(options, option(path, report.Label(path), false))
+			options = append(options, option(path, d.Label(path), false))
 		}
 	}
 	for _, spec := range study.Specs() {

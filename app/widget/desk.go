@@ -19,6 +19,8 @@ type Desk interface {
 	Send(msg state.Msg)
 	// Find brings the person to the field of an input, on whichever sheet it is.
 	Find(path string)
+	// Label names an input as its field does.
+	Label(path string) string
 	// Await counts what a widget has just changed in itself as pending until it
 	// is on the screen.
 	Await()

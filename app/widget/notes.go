@@ -6,7 +6,6 @@ import (
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
 	"brinefront/app/state"
-	"brinefront/physics/report"
 	"brinefront/physics/study"
 )
 
@@ -34,7 +33,7 @@ func note(d Desk, n study.Note) app.UI {
 		app.P().Class("quiet").Text(strings.TrimSpace(n.Cause + " " + n.Do)),
 	}
 	for _, path := range n.Paths {
-		body = append(body, toField(d, path, report.Label(path)))
+		body = append(body, toField(d, path, d.Label(path)))
 	}
 	return app.Li().Class(n.Level).DataSet("note", n.ID).Body(body...)
 }
@@ -46,14 +45,14 @@ func Wanting(d Desk, part study.Part, problems []study.Problem) app.UI {
 	case study.Waiting:
 		links := make([]app.UI, len(part.Missing))
 		for i, path := range part.Missing {
-			links[i] = app.Li().Body(toField(d, path, report.Label(path)))
+			links[i] = app.Li().Body(toField(d, path, d.Label(path)))
 		}
 		return wanting("○ Waiting for "+counted(len(links), "input"), "The answer appears as soon as these are given:", links)
 	case study.Refused:
 		links := make([]app.UI, len(problems))
 		for i, p := range problems {
 			links[i] = app.Li().Body(
-				toField(d, p.Path, report.Label(p.Path)),
+				toField(d, p.Path, d.Label(p.Path)),
 				app.Text(": read "+p.Read+"; allowed: "+p.Allowed+"."),
 			)
 		}

@@ -49,7 +49,7 @@ func terms(list []study.Term, s units.System) app.UI {
 func rests(d Desk, paths []string) app.UI {
 	links := []app.UI{app.Span().Text("Rests on: ")}
 	for _, path := range paths {
-		links = append(links, toField(d, path, report.Label(path)))
+		links = append(links, toField(d, path, d.Label(path)))
 	}
 	return app.P().Class("rests").Hidden(len(paths) == 0).Body(links...)
 }

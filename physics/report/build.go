@@ -35,7 +35,7 @@ func Build(st study.Study, r study.Result, s units.System) Document {
 		d.About = append(d.About, [2]string{"Note", st.Note})
 	}
 	for _, section := range []Section{
-		summary(r, s), inputs(st, s), answers(r, s), pictures(r), tables(r, s), workings(r, s), notes(r), cautions(), sources(r),
+		summary(st, r, s), inputs(st, s), answers(r, s), pictures(r), tables(r, s), workings(st, r, s), notes(st, r), cautions(), sources(r),
 	} {
 		if len(section.Blocks) > 0 {
 			d.Sections = append(d.Sections, section)
@@ -44,7 +44,7 @@ func Build(st study.Study, r study.Result, s units.System) Document {
 	return d
 }
 
-func summary(r study.Result, s units.System) Section {
+func summary(st study.Study, r study.Result, s units.System) Section {
 	section := Section{ID: "summary", Title: "Summary"}
 	for _, p := range parts {
 		part, asked := r.Parts[p.sheet]
@@ -53,7 +53,7 @@ func summary(r study.Result, s units.System) Section {
 		}
 		text := Sentence(part, s)
 		if part.Status != study.Ready && part.Status != study.Stopped {
-			text = "No answer yet: " + standing(part, r) + "."
+			text = "No answer yet: " + standing(st, part, r) + "."
 		}
 		if text != "" {
 			section.Blocks = append(section.Blocks, Block{Heading: p.title}, Block{Paragraph: text})
@@ -63,13 +63,13 @@ func summary(r study.Result, s units.System) Section {
 }
 
 // standing says why a part has no answer.
-func standing(p study.Part, r study.Result) string {
+func standing(st study.Study, p study.Part, r study.Result) string {
 	var reasons []string
 	for _, path := range p.Missing {
-		reasons = append(reasons, Label(path)+" is not given")
+		reasons = append(reasons, Label(&st, path)+" is not given")
 	}
 	for _, problem := range r.Problems {
-		reasons = append(reasons, Label(problem.Path)+" cannot be used (read "+problem.Read+"; allowed: "+problem.Allowed+")")
+		reasons = append(reasons, Label(&st, problem.Path)+" cannot be used (read "+problem.Read+"; allowed: "+problem.Allowed+")")
 	}
 	return strings.Join(reasons, "; ")
 }
@@ -113,18 +113,21 @@ func tables(r study.Result, s units.System) Section {
 	return section
 }
 
-func workings(r study.Result, s units.System) Section {
+func workings(st study.Study, r study.Result, s units.System) Section {
 	section := Section{ID: "workings", Title: "Workings"}
 	for _, p := range parts {
 		for _, f := range r.Parts[p.sheet].Figures {
 			w := Explain(f, s)
+			for _, path := range f.Working.Inputs {
+				w.Inputs = append(w.Inputs, Label(&st, path))
+			}
 			section.Blocks = append(section.Blocks, Block{Explained: &w})
 		}
 	}
 	return section
 }
 
-// Explain prints a figure's working.
+// Explain prints a figure's working, but for the inputs it rests on.
 func Explain(f study.Figure, s units.System) Explanation {
 	w := Explanation{Label: f.Label, Value: Value(f, s), Method: f.Working.Method}
 	if f.Symbol != "" {
@@ -134,16 +137,13 @@ func Explain(f study.Figure, s units.System) Explanation {
 	for _, id := range f.Working.Sources {
 		w.Sources = append(w.Sources, ref.Get(id).Short())
 	}
-	for _, path := range f.Working.Inputs {
-		w.Inputs = append(w.Inputs, Label(path))
-	}
 	return w
 }
 
-func notes(r study.Result) Section {
+func notes(st study.Study, r study.Result) Section {
 	section := Section{ID: "notes", Title: "Checks and notes"}
 	for _, p := range r.Problems {
-		section.Blocks = append(section.Blocks, Block{Paragraph: Label(p.Path) + ": read " + p.Read + "; allowed: " + p.Allowed + "."})
+		section.Blocks = append(section.Blocks, Block{Paragraph: Label(&st, p.Path) + ": read " + p.Read + "; allowed: " + p.Allowed + "."})
 	}
 	for _, p := range parts {
 		for _, n := range r.Parts[p.sheet].Notes {

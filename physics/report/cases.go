@@ -7,11 +7,11 @@ import (
 )
 
 // caseLabel names what a case holds at a path, as "Case 2, Oil viscosity".
-func caseLabel(i int, inner string) string {
+func caseLabel(st *study.Study, i int, inner string) string {
 	if inner == "name" {
 		return "Case " + strconv.Itoa(i+1) + ", name"
 	}
-	return "Case " + strconv.Itoa(i+1) + ", " + Label(inner)
+	return "Case " + strconv.Itoa(i+1) + ", " + Label(st, inner)
 }
 
 // cases lists what every case changes, beside what the study itself has; nil when
@@ -32,7 +32,7 @@ func cases(st study.Study) *Table {
 		}
 		as := c.On(st)
 		for _, path := range changes {
-			row := []string{c.Name, Label(path), Held(st, path), Held(as, path), "", ""}
+			row := []string{c.Name, Label(&st, path), Held(st, path), Held(as, path), "", ""}
 			if spec, ok := study.Find(study.CasePath(i, path)); ok {
 				in := spec.Get(&st)
 				row[4], row[5] = span(spec, in), orNone(in.Source)

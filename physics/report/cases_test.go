@@ -48,7 +48,7 @@ func TestCasesAreReported(t *testing.T) {
 	if part.Status != study.Ready {
 		t.Fatalf("the comparison is %s", part.Status)
 	}
-	for _, want := range []string{"Against the base case, “Thick {oil}” brings water ", part.Tables[0].Title, part.Charts[0].Summary, "Case 1, Oil viscosity"} {
+	for _, want := range []string{"Against the base case, “Thick {oil}” brings the front ", part.Tables[0].Title, part.Charts[0].Summary, "Case 1, Oil viscosity"} {
 		if !strings.Contains(text, want) {
 			t.Errorf("the report does not hold %q", want)
 		}
@@ -65,11 +65,21 @@ func TestCasesAreReported(t *testing.T) {
 }
 
 func TestLabelsOfCases(t *testing.T) {
+	st := study.Empty()
 	for path, want := range map[string]string{
 		"cases.1.fluids.oilViscosity": "Case 2, Oil viscosity", "cases.0.rock.curve": "Case 1, Curve used", "cases.4.name": "Case 5, name",
 	} {
-		if got := Label(path); got != want {
+		if got := Label(&st, path); got != want {
 			t.Errorf("%s is called %q, want %q", path, got, want)
 		}
+	}
+}
+
+// TestLabelsFollowThePair: what is called oil viscosity is that of the phase that is there.
+func TestLabelsFollowThePair(t *testing.T) {
+	st := study.Empty()
+	st.Fluids.Pair = "co2-brine"
+	if got := Label(&st, "fluids.oilViscosity"); got == "Oil viscosity" || !strings.Contains(strings.ToLower(got), "brine") {
+		t.Errorf("the viscosity of brine before CO2 is called %q", got)
 	}
 }

@@ -8,14 +8,14 @@ import (
 	"brinefront/physics/units"
 )
 
-// Label names an input as the forms do. Paths that are not numeric inputs (the
-// table, a choice) are named by what they hold.
-func Label(path string) string {
+// Label names an input as the forms do, in the words of the study's pair of fluids.
+// Paths that are not numeric inputs (the table, a choice) are named by what they hold.
+func Label(st *study.Study, path string) string {
 	if i, inner, ok := study.AtCase(path); ok {
-		return caseLabel(i, inner)
+		return caseLabel(st, i, inner)
 	}
 	if spec, ok := study.Find(path); ok {
-		return spec.Label
+		return spec.For(st).Label
 	}
 	if rest, ok := strings.CutPrefix(path, "rock.table"); ok {
 		if cell := strings.Split(strings.TrimPrefix(rest, "."), "."); len(cell) == 2 {
@@ -73,7 +73,7 @@ func choices(st study.Study) *Table {
 	add := func(path, value string, list []study.Choice) {
 		for _, c := range list {
 			if c.Value == value {
-				table.Rows = append(table.Rows, []string{Label(path), c.Label})
+				table.Rows = append(table.Rows, []string{Label(&st, path), c.Label})
 			}
 		}
 	}
@@ -87,7 +87,7 @@ func choices(st study.Study) *Table {
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Start != "" {
-		table.Rows = append(table.Rows, []string{Label("field.start"), st.Field.Start})
+		table.Rows = append(table.Rows, []string{Label(&st, "field.start"), st.Field.Start})
 	}
 	return table
 }

@@ -356,6 +356,9 @@ func TestGasHasItsOwnPractice(t *testing.T) {
 			}
 		}
 	}
+	if n, told := noteOf(r.Parts[SheetFront], "front.pair.inPlace"); !told || !strings.Contains(n.Cause, "connate water") {
+		t.Errorf("why nothing is told of the oil in place (%v): %q", told, n.Cause)
+	}
 	ratio, ok := r.Parts[SheetField].Figure("field.waterOilRatioAtLimit")
 	if !ok || !strings.HasPrefix(ratio.Label, "Gas-oil ratio at the limit, volumes by Bo and Bg as typed") {
 		t.Errorf("the ratio (%v) is labelled %q", ok, ratio.Label)

@@ -53,7 +53,7 @@ func (f *field) charts(s *sheet) {
 		Summary: "Water cut at surface against time: a jump at breakthrough, then a slow climb to the limit and beyond."},
 		f.line("surface", "at surface", "water", "line", cut))
 	lines, beside := []Line{f.line("pore", "of the pore volume", "oil", "line", recovery)}, ""
-	if !holdsConnate(s.st) {
+	if !holdsConnate(pairOf(s.st)) {
 		lines = append(lines, f.line("place", "of the oil in place", "total", "line", func(s reservoir.State) float64 { return s.Recovery / (1 - f.front.swi) }))
 		beside = " and of the oil in place"
 	}

@@ -37,9 +37,9 @@ func (s *sheet) borrow(id, as, label string, strip bool) {
 
 func (f *field) volumeFigures(s *sheet) {
 	pv := f.linear.PoreVolume()
-	s.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: pv, Quantity: units.Volume, Strip: holdsConnate(s.st)},
+	s.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: pv, Quantity: units.Volume, Strip: holdsConnate(pairOf(s.st))},
 		s.by("{PV} = {L} {W} {h} {φ}", "").input("field.length").input("field.width").input("field.thickness").input("field.porosity"))
-	if !holdsConnate(s.st) {
+	if !holdsConnate(pairOf(s.st)) {
 		s.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: pv * (1 - f.front.swi) / f.front.bo, Quantity: units.Volume, Strip: true},
 			s.by("{N} = {PV} (1 - {Swi}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term("front.initialWater").input("fluids.oilFormationFactor"))
 	}

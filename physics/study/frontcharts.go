@@ -196,7 +196,7 @@ func (f *front) recoveryChart(s *sheet, injected []float64, history []displace.S
 		{ID: "pore", Label: "of the pore volume", Role: "oil", Kind: "line", X: injected, Y: pore},
 		{ID: "movable", Label: "of the movable oil", Role: "aid", Kind: "dashed", X: injected, Y: movable},
 	}
-	if !holdsConnate(s.st) {
+	if !holdsConnate(pairOf(s.st)) {
 		c.Lines = slices.Insert(c.Lines, 1, Line{ID: "place", Label: "of the oil in place", Role: "total", Kind: "line", X: injected, Y: place})
 	}
 	c.Summary = "Recovery against pore volumes of water injected: a straight rise until breakthrough, then ever slower."

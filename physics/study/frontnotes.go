@@ -33,10 +33,6 @@ func (f *front) notes(s *sheet) {
 		s.note(Note{ID: "front.staircase", Level: "remark", Text: "The displacement is a staircase of small steps.",
 			Cause: "Straight lines between the rows of the table make the slope of the fractional flow jump at every row; this is the exact solution for them.", Do: "Choose the monotone cubic or a fitted curve for smooth answers.", Paths: []string{"rock.curve"}})
 	}
-	if holdsConnate(s.st) {
-		s.note(Note{ID: "front.inPlace", Level: "remark", Text: "Nothing is told as a part of the oil in place.",
-			Cause: "The resident saturation counts connate water, and how much of it there is, is not asked for.", Do: "Divide a recovery of the pore volume by the oil saturation at the start.", Paths: []string{"fluids.pair"}})
-	}
 	f.frontPlace(s)
 }
 

@@ -3,6 +3,7 @@ package study
 import (
 	"strings"
 
+	"brinefront/physics/fluid"
 	"brinefront/physics/ref"
 	"brinefront/physics/units"
 )
@@ -44,12 +45,12 @@ func (s *sheet) recovery(id, label, symbol string, value float64, strip bool, w 
 
 // holdsConnate reports whether the resident saturation counts connate water, of which
 // nothing is asked: then how much oil is in place is not known.
-func holdsConnate(st *Study) bool { return pairOf(st).Resident.Saturation == "SL" }
+func holdsConnate(pair fluid.Pair) bool { return pair.Resident.Saturation == "SL" }
 
 // inPlace adds the same recovery as a part of the oil in place, where that is known.
 func (s *sheet) inPlace(id, symbol string, strip bool) {
 	f, ok := s.find(id)
-	if !ok || holdsConnate(s.st) {
+	if !ok || holdsConnate(pairOf(s.st)) {
 		return
 	}
 	s.figure(Figure{ID: id + "InPlace", Label: trimmed(f.Label) + ", of the oil in place", Symbol: symbol, Value: f.Value / (1 - s.number("front.initialWater")), Quantity: units.Share, Strip: strip},

@@ -71,7 +71,7 @@ func (f *front) volumeTable(s *sheet) Grid {
 		pore.Values, place.Values = append(pore.Values, state.Recovery), append(place.Values, d.OfOilInPlace(state.Recovery))
 	}
 	g := Grid{ID: "front.volumes", Title: "After round volumes injected", Columns: []Column{injected, outlet, average, reservoir, surface, pore}}
-	if !holdsConnate(s.st) {
+	if !holdsConnate(pairOf(s.st)) {
 		g.Columns = append(g.Columns, place)
 	}
 	return g

@@ -149,7 +149,7 @@ func TestNotesAreRaised(t *testing.T) {
 		"field.oilBack":         func(st *Study) { dips(st, -40); put(st, "field.rate", 20, "bbl/d") },
 		"field.limitInJump":     func(st *Study) { put(st, "field.waterCut", 0.95, "%") },
 		"field.pressureHuge":    func(st *Study) { put(st, "field.permeability", 1e-5, "md") },
-		"front.inPlace":         func(st *Study) { st.Fluids.Pair = "gas-oil" },
+		"front.pair.inPlace":    func(st *Study) { st.Fluids.Pair = "gas-oil" },
 		"front.gravityUnjudged": func(st *Study) { dips(st, 12); put(st, "front.initialWater", 0.4, "fraction") },
 		"front.gravityHolds": func(st *Study) {
 			dips(st, 40)

@@ -32,6 +32,10 @@ func pairNotes(pair fluid.Pair) []Note {
 	for _, c := range pair.Cautions {
 		list = append(list, Note{ID: "front.pair." + c.ID, Level: level(!usual), Text: c.Text, Cause: c.Cause, Do: c.Do, Paths: []string{"fluids.pair"}})
 	}
+	if holdsConnate(pair) {
+		list = append(list, Note{ID: "front.pair.inPlace", Level: "remark", Text: "Nothing is told as a part of the oil in place.",
+			Cause: "The liquid saturation counts connate water, and how much of it there is, is not asked for.", Do: "Divide a recovery of the pore volume by the oil saturation at the start.", Paths: []string{"fluids.pair"}})
+	}
 	if d, r := pair.Displacing, pair.Resident; pair.Drainage() {
 		list = append(list, Note{ID: "front.pair.roles", Level: "remark", Text: "Curves and points are read by the saturation of the displacing phase, " + d.Saturation + ": first column " + d.Saturation + ", then " + d.Kr() + ", then " + r.Kr() + ".",
 			Cause: "A laboratory table by the saturation of the other phase means something else.", Do: "Turn such a table over: " + d.Saturation + " is 1 less the other saturation, and the two columns of kr change places.", Paths: []string{"fluids.pair", "rock.table"}})

@@ -13,6 +13,7 @@ import { attach } from "./plot/pointer.js";
 import { savePNG, saveSVG } from "./plot/save.js";
 import { slide } from "./plot/slide.js";
 import { style } from "./plot/style.js";
+import { settled, turn } from "./plot/turn.js";
 
 use([LineChart, ScatterChart, CustomChart, GridComponent, SVGRenderer]);
 
@@ -53,7 +54,7 @@ class Plot {
     this.updatePins = pinList(this.pinRows, (pin) => this.keepPins(this.state.pins.filter((p) => p !== pin)));
     this.pointer = attach({
       figure: this.figure,
-      lay: () => this.drawn.lay, labels: () => this.drawn.labels, picture: () => this.picture, palette: () => this.palette,
+      lay: () => this.newest().lay, labels: () => this.newest().labels, picture: () => this.picture, palette: () => this.palette,
       setView: (view) => this.change({ view }), toggle: act.toggle, say: (text) => { this.said.textContent = text; },
       pin: (line, index) => this.pin(line, index), pins: () => this.state.pins.length, unpin: () => this.keepPins([]),
     });
@@ -64,9 +65,10 @@ class Plot {
       const width = Math.floor(entry.contentRect.width);
       if (printing || width === this.width) return;
       this.width = width;
-      this.redraw();
+      this.show();
     });
     this.watcher.observe(this.figure);
+    this.turn = turn(this.figure, () => this.redraw());
     this.restyle();
   }
 
@@ -87,7 +89,23 @@ class Plot {
     this.instruct(picture.lines.some((l) => l.readings));
     this.figure.setAttribute("aria-label", `${picture.title}. ${picture.summary}`);
     this.pointer.leave();
-    this.redraw();
+    this.show();
+  }
+
+  // show draws what can be seen, and what is on the way to paper. Elsewhere only the
+  // words are renewed, and the drawing awaits its turn; pins are words that hang on it.
+  show() {
+    if (printing || this.turn.inSight() || this.state.pins.length > 0) return this.redraw();
+    if (!this.picture || this.width === 0) return;
+    this.room();
+    this.describe();
+    this.turn.wait();
+  }
+
+  // newest is the drawing of the newest picture.
+  newest() {
+    if (this.turn.waits()) this.redraw();
+    return this.drawn;
   }
 
   restyle() {
@@ -111,10 +129,10 @@ class Plot {
   slideTo(value) {
     this.state.at = value;
     this.keep();
-    if (!this.drawn) return;
+    if (!this.newest()) return;
     this.frame ??= requestAnimationFrame(() => {
       this.frame = null;
-      this.drawn = slid(this.drawn, this.picture, this.state, this.palette);
+      this.drawn = slid(this.newest(), this.picture, this.state, this.palette);
       this.chart.setOption(this.drawn.option);
     });
   }
@@ -143,18 +161,32 @@ class Plot {
     this.redraw();
   }
 
-  // redraw draws at the size the page gives now; nothing while it gives none.
-  redraw() {
+  // room is the size the page gives now, and keeps it free.
+  room() {
     const width = printing ? printedWidth : this.width;
+    const height = printing ? printedHeight : Math.round(Math.min(420, Math.max(260, 0.58 * width)));
+    if (height !== this.height) this.figure.style.height = `${height}px`;
+    this.height = height;
+    return { width, height };
+  }
+
+  // describe says what there is to see and to do.
+  describe() {
+    this.updateRow(this.picture, this.state, this.palette);
+    this.slider.update(this.picture, this.state.at);
+  }
+
+  // redraw draws in the room there is; nothing while there is none.
+  redraw() {
+    this.turn.done();
+    const { width, height } = this.room();
     if (!this.picture || width === 0) return;
     cancelAnimationFrame(this.frame); // what is drawn here is newer
     this.frame = null;
-    const height = printing ? printedHeight : Math.round(Math.min(420, Math.max(260, 0.58 * width)));
     this.drawn = drawing(this.picture, this.state, width, height, this.family, this.palette);
     this.chart ??= init(this.canvas, null, { renderer: "svg", width, height });
     if (this.size !== `${width} ${height}`) {
       this.size = `${width} ${height}`;
-      this.figure.style.height = `${height}px`;
       this.chart.resize({ width, height });
       // A picture that is scaled, as on paper, keeps its proportions.
       this.canvas.querySelector("svg").setAttribute("viewBox", `0 0 ${this.size}`);
@@ -162,8 +194,7 @@ class Plot {
     const structure = this.drawn.option.series.map((s) => s.type + s.id).join();
     this.chart.setOption(this.drawn.option, structure === this.structure ? {} : { notMerge: true });
     this.structure = structure;
-    this.updateRow(this.picture, this.state, this.palette);
-    this.slider.update(this.picture, this.state.at);
+    this.describe();
     this.updatePins(this.state.pins, this.drawn.lay, this.picture);
   }
 
@@ -175,6 +206,7 @@ class Plot {
 
   forget() {
     this.watcher.disconnect();
+    this.turn.stop();
     this.slider.stop();
     cancelAnimationFrame(this.frame);
     this.chart?.dispose();
@@ -191,7 +223,7 @@ function element(tag, name, attributes) {
 function redrawAll() {
   for (const plot of plots.values()) {
     plot.restyle();
-    plot.redraw();
+    plot.show();
   }
 }
 
@@ -200,7 +232,8 @@ addEventListener("beforeprint", () => { printing = true; redrawAll(); });
 addEventListener("afterprint", () => { printing = false; redrawAll(); });
 
 self.brinefrontPlot = {
-  // draw shows a picture in the element with this id; the same again costs nothing.
+  // draw shows a picture in the element with this id, at once where it is in sight; the
+  // same again costs nothing.
   draw(holderId, json) {
     const holder = document.getElementById(holderId);
     if (!holder) throw new Error(`the page has no place called ${holderId} for a picture`);
@@ -223,6 +256,8 @@ self.brinefrontPlot = {
     if (!plot) throw new Error(`no picture is drawn in ${holderId}`);
     return plot.save(format, name);
   },
+  // settled reports whether all that is in sight is drawn.
+  settled,
   // theme reads the page's colours anew, after the page changed them by itself.
   theme: redrawAll,
 };

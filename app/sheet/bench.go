@@ -43,7 +43,7 @@ func (b *Bench) OnMount(ctx app.Context) {
 			b.unshown.Add(-1)
 		})
 	})
-	browser.PublishIdle(func() bool { return b.unshown.Load() == 0 && b.runner.Idle() })
+	browser.PublishIdle(func() bool { return b.unshown.Load() == 0 && b.runner.Idle() && browser.Drawn() })
 	b.runner.Start()
 }
 
@@ -57,7 +57,8 @@ func (b *Bench) Send(msg state.Msg) {
 	b.Await()
 }
 
-// Await counts a change as pending until it is rendered and its pictures drawn.
+// Await counts a change as pending until it is rendered and its pictures are drawn, or
+// await their turn out of sight.
 func (b *Bench) Await() {
 	b.unshown.Add(1)
 	b.ctx.Defer(func(ctx app.Context) {
@@ -88,6 +89,9 @@ func (b *Bench) Find(path string) {
 			field = app.Window().GetElementByID("inputs")
 		}
 		if field.Truthy() {
+			if fold := field.Call("closest", "details"); fold.Truthy() {
+				fold.Set("open", true) // what is folded away takes no focus
+			}
 			field.Call("focus")
 		}
 	})

@@ -162,24 +162,6 @@ func (f *front) profileAtBreakthrough() (x, sw []float64) {
 	return x, sw
 }
 
-// profile is saturation against the speed at which it travels, from the inlet face to
-// the state ahead of the front.
-func (f *front) profile() (speed, sw []float64) {
-	d := f.displacement
-	face, _ := d.InletFace()
-	speed, sw = []float64{0}, []float64{face}
-	step := finest * d.FrontSpeed()
-	visible := finest * (f.swj - f.swi)
-	nodes := d.Path()
-	for i, n := range nodes {
-		last := len(speed) - 1
-		if n.Xi-speed[last] > step || math.Abs(n.S-sw[last]) > visible || i == len(nodes)-1 {
-			speed, sw = append(speed, n.Xi), append(sw, n.S)
-		}
-	}
-	return speed, sw
-}
-
 func (f *front) recoveryChart(s *sheet, injected []float64, history []displace.State) Chart {
 	c := Chart{
 		ID: "front.recovery", Title: "Recovery",

@@ -11,6 +11,7 @@ import (
 const (
 	curvePoints   = 120  // of a curve over saturation
 	historyPoints = 90   // evenly over injected volume, beside the places where something happens
+	profilePoints = 80   // of a profile over speed, beside the states of the path
 	finest        = 1e-3 // part of an axis below which two points are one
 	// aside is the relative step to either side of an arriving shock.
 	aside = 1e-11
@@ -80,4 +81,36 @@ func injections(d *displace.Displacement, end float64, extra ...float64) []float
 	}
 	slices.Sort(list)
 	return slices.Compact(list)
+}
+
+// profile is saturation against the speed at which it travels, from the inlet face to
+// the state ahead of the front: the states of the path that can be told apart, and
+// between them speeds that close in on the inlet, where a flood of many pore volumes
+// spreads the slowest few over the whole length.
+func (f *front) profile() (speed, sw []float64) {
+	d := f.displacement
+	face, _ := d.InletFace()
+	speed, sw = []float64{0}, []float64{face}
+	step := finest * d.FrontSpeed()
+	visible := finest * (f.swj - f.swi)
+	nodes := d.Path()
+	kept := displace.Node{S: face}
+	k := 1
+	for i, n := range nodes {
+		for ; k < profilePoints; k++ {
+			share := float64(k) / profilePoints
+			v := d.FrontSpeed() * share * share * share
+			if v >= n.Xi {
+				break
+			}
+			if v > speed[len(speed)-1] {
+				speed, sw = append(speed, v), append(sw, d.Saturation(v))
+			}
+		}
+		if n.Xi-kept.Xi > step || math.Abs(n.S-kept.S) > visible || i == len(nodes)-1 {
+			kept = n
+			speed, sw = append(speed, n.Xi), append(sw, n.S)
+		}
+	}
+	return speed, sw
 }

@@ -441,3 +441,31 @@ func TestRoundedEndsAreImmobile(t *testing.T) {
 		}
 	}
 }
+
+// A formula reads as it is meant: the factor of gravity stands before the quotient, never
+// behind it, where it would seem to be divided by; and the dip counts by its size.
+func TestFormulasOfGravityReadAsMeant(t *testing.T) {
+	st := viscousOil()
+	dips(&st, 40)
+	put(&st, "field.rate", 1, "m3/d")
+	p := Run(st).Parts[SheetFront]
+	cut, _ := p.Figure("front.cutAtBreakthrough")
+	if !strings.HasPrefix(cut.Working.Formula, "{fwf} = (1 - ") {
+		t.Errorf("%q", cut.Working.Formula)
+	}
+	if angle, told := p.Figure("front.interface"); !told || !strings.Contains(angle.Working.Method, "|tan θ|") {
+		t.Errorf("the interface (%v): %q", told, angle.Working.Method)
+	}
+}
+
+// A rate through rock that hardly lets it is asked back about.
+func TestPressureBeyondAnyWell(t *testing.T) {
+	st := viscousOil()
+	if n, told := noteOf(Run(st).Parts[SheetField], "field.pressureHuge"); told {
+		t.Errorf("%+v", n)
+	}
+	put(&st, "field.permeability", 1e-3, "md")
+	if _, told := noteOf(Run(st).Parts[SheetField], "field.pressureHuge"); !told {
+		t.Error("nothing is said")
+	}
+}

@@ -71,6 +71,17 @@ func variants() map[string]Study {
 	}
 	add("dip and straight lines", func(st *Study) { dips(st, 33); st.Rock.Curve = "table-linear" })
 	add("two steps", func(st *Study) { *st = twoSteps() })
+	for _, curve := range []string{"table", "table-linear"} {
+		for rate := 800.0; rate < 6000; rate += 800 { // most are passed while one state stays at the producer
+			add(fmt.Sprintf("%s at a pressure, to %g bbl/d", curve, rate), func(st *Study) {
+				*st = twoSteps()
+				st.Rock.Curve, st.Field.Drive, st.Field.Limit = curve, "pressure", "oilRate"
+				put(st, "fluids.waterViscosity", 3, "cp")
+				put(st, "fluids.oilViscosity", 1, "cp")
+				put(st, "field.oilRate", rate, "bbl/d")
+			})
+		}
+	}
 	add("no jump", func(st *Study) {
 		st.Rock.Curve = "corey"
 		st.Rock.Corey.Nw.Value, st.Rock.Corey.No.Value = 1, 1

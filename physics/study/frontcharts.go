@@ -24,7 +24,11 @@ var saturationAxis = axis("Water saturation", "Sw", units.Fraction).from(0, 1)
 
 func (f *front) charts(s *sheet) {
 	end := math.Max(1.5, 3*f.displacement.Breakthrough())
-	s.part.Charts = append(s.part.Charts, f.flowChart(s), f.profileChart(end), f.waveChart(end))
+	waves := f.waveChart(end)
+	s.part.Charts = append(s.part.Charts, f.flowChart(s), f.profileChart(end), waves)
+	if f.linear != nil {
+		s.part.Charts = append(s.part.Charts, f.waveTimes(waves))
+	}
 	injected := injections(f.displacement, end, 1)
 	history := make([]displace.State, len(injected))
 	for i, q := range injected {

@@ -104,6 +104,29 @@ func (f *front) waveChart(end float64) Chart {
 	return c
 }
 
+// waveTimes is the wave diagram in time, where the field is given: at a constant rate
+// the same picture in other units, at a constant pressure difference ways that bend as
+// the resistance changes.
+func (f *front) waveTimes(volumes Chart) Chart {
+	const steps = 24
+	c := volumes
+	c.ID, c.Title = "front.waveTimes", "Waves in time"
+	c.Y = axis("Time since injection began", "t", units.Duration).from(0, f.linear.TimeAt(*volumes.Y.Max))
+	c.Marks = []Mark{{"breakthrough", 1, f.linear.TimeAt(f.displacement.Breakthrough())}}
+	c.Summary = "The same waves against time: distance from the injector, and when each step and each state comes there."
+	c.Lines = slices.Clone(volumes.Lines)
+	for i, l := range volumes.Lines {
+		x, q := l.X[len(l.X)-1], l.Y[len(l.Y)-1]
+		l.X, l.Y = make([]float64, steps+1), make([]float64, steps+1)
+		for j := range steps + 1 {
+			part := float64(j) / steps
+			l.X[j], l.Y[j] = part*x, f.linear.TimeAt(part*q)
+		}
+		c.Lines[i] = l
+	}
+	return c
+}
+
 // ray is the way of a speed: to the producer, or as far as it comes by the end.
 func ray(id, label, role, kind string, speed, end float64) Line {
 	x, q := 1.0, 1/speed

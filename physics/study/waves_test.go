@@ -236,6 +236,37 @@ func TestWaveDiagram(t *testing.T) {
 	}
 }
 
+// In time a way ends when its volume has been injected, and at a constant rate time
+// and volume keep their ratio.
+func TestWaveTimes(t *testing.T) {
+	for _, drive := range []string{"rate", "pressure"} {
+		st := Demo()
+		st.Field.Drive = drive
+		r := Run(st)
+		volumes, times := chartOf(t, r.Parts[SheetFront], "front.waveDiagram"), chartOf(t, r.Parts[SheetFront], "front.waveTimes")
+		arrival, _ := r.Parts[SheetField].Figure("field.breakthrough")
+		near(t, drive+", breakthrough", times.Marks[0].X, 1, 0)
+		near(t, drive+", breakthrough in time", times.Marks[0].Y/arrival.Value, 1, 1e-9)
+		for i, l := range times.Lines {
+			of := volumes.Lines[i]
+			near(t, drive+", end of "+l.ID, l.X[len(l.X)-1], of.X[1], 1e-15)
+			half := l.Y[len(l.Y)/2] / l.Y[len(l.Y)-1]
+			if drive == "rate" {
+				near(t, "half way of "+l.ID, half, 0.5, 1e-12)
+			} else if math.Abs(half-0.5) < 1e-3 {
+				t.Errorf("%s: at a constant pressure difference half the volume takes %g of the time", l.ID, half)
+			}
+		}
+	}
+	st := Demo()
+	st.Field.Length = nil
+	for _, c := range Run(st).Parts[SheetFront].Charts {
+		if c.ID == "front.waveTimes" {
+			t.Error("times are drawn without a field")
+		}
+	}
+}
+
 // saturationIn reads the saturation in a label such as "Sw 0.583".
 func saturationIn(label string) float64 {
 	value, err := units.ParseNumber(strings.TrimPrefix(label, "Sw "))

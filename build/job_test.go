@@ -174,6 +174,7 @@ func job(t *testing.T, p *Page) {
 	p.Type(kb.Enter)
 	p.WaitIdle()
 	p.choose(saved)
+	p.WaitFor(`document.querySelector("#notices").innerText.includes("study.json")`)
 	p.WaitIdle()
 	p.sheet("front")
 	p.compare(want.Parts[study.SheetFront])

@@ -23,13 +23,14 @@ type rock struct {
 	parameters []fit.Parameter   // of a parametric curve, in its own order
 	origins    map[string]string // how a parameter was found, by symbol
 	fitted     *fit.Fit          // nil unless fitted
+	memory     *Memory           // of fits
 	others     []candidate       // other families through the same points
 }
 
 // runRock answers the Rock sheet; nil when there is no curve to build on.
-func runRock(st *Study, problems *[]Problem) (Part, *rock) {
+func runRock(st *Study, problems *[]Problem, m *Memory) (Part, *rock) {
 	s := newSheet(st)
-	r := &rock{factor: 1, origins: map[string]string{}}
+	r := &rock{memory: m, factor: 1, origins: map[string]string{}}
 	if st.Rock.Reference == "oil" {
 		r.factor = s.need("rock.oilPermeability") / s.need("rock.permeability")
 	}
@@ -144,7 +145,7 @@ func (r *rock) measured(s *sheet) {
 func (r *rock) fit(s *sheet, f family, points fit.Points, options fit.Options) {
 	r.inputs = append(r.inputs, "rock.weights")
 	r.sources = []ref.ID{f.source}
-	fitted, err := f.through(points, options)
+	fitted, err := r.memory.through(f, points, options)
 	if err != nil {
 		s.problem("rock.table", strconv.Itoa(len(points.Sw))+" rows: "+err.Error(), "points that determine the curve, or another kind of curve")
 		return

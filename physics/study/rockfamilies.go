@@ -35,7 +35,7 @@ func (r *rock) compare(f family, points fit.Points, options fit.Options) {
 	if len(points.Sw) > compareUpTo {
 		return
 	}
-	if other, err := f.through(points, options); err == nil {
+	if other, err := r.memory.through(f, points, options); err == nil {
 		r.others = append(r.others, candidate{f, other})
 	}
 }

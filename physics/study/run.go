@@ -5,8 +5,11 @@ package study
 // has no state and no clock, and gives the same result for the same study. What
 // cannot be used is a Problem, what is still to be given a Missing path; neither
 // keeps an earlier part from answering.
-func Run(st Study) Result {
-	base := evaluate(&st)
+func Run(st Study) Result { return (*Memory)(nil).Run(st) }
+
+// Run evaluates a study; see the function Run.
+func (m *Memory) Run(st Study) Result {
+	base := m.evaluate(&st)
 	parts := map[Sheet]Part{SheetRock: base.rockPart, SheetFront: base.frontPart, SheetField: base.fieldPart}
 	if len(st.Cases) > 0 {
 		parts[SheetCompare] = runCompare(&st, base)
@@ -27,9 +30,9 @@ type evaluation struct {
 	front                          *front
 }
 
-func evaluate(st *Study) evaluation {
+func (m *Memory) evaluate(st *Study) evaluation {
 	e := evaluation{st: st}
-	e.rockPart, e.rock = runRock(st, &e.problems)
+	e.rockPart, e.rock = runRock(st, &e.problems, m)
 	e.answer()
 	return e
 }

@@ -12,11 +12,14 @@ var kinds = map[string]func(asked wire.Request, send func(wire.Reply)){
 	wire.Check:  check,
 }
 
+// memory keeps fits from one edit to the next. A worker answers one request at a time.
+var memory study.Memory
+
 func run(asked wire.Request, send func(wire.Reply)) {
 	if asked.Study == nil {
 		panic("a request to run that holds no study")
 	}
-	result := study.Run(*asked.Study)
+	result := memory.Run(*asked.Study)
 	if !asked.Packed {
 		send(wire.Reply{Result: &result})
 		return

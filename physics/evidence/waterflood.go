@@ -63,7 +63,7 @@ var waterfloods = []Check{
 		Items: []Item{
 			{"Sw at the front", 0.45, 0.01, handDrawn},
 			{"fw at the front, reservoir", 0.70, 0.028, handDrawn + "; 0.01 in Sw is 0.028 in fw there"},
-			{"fw at the front, surface", 0.75, 0.028, handDrawn + "; as above"},
+			{"fw at the front, surface", 0.75, 0.025, handDrawn},
 			{"average Sw at breakthrough", 0.55, 0.01, handDrawn},
 			{"recovery at breakthrough, PV", 0.35, 0.01, handDrawn},
 		},

@@ -33,17 +33,18 @@ var arrows = map[string][]string{
 	"physics/fracflow":  {"physics/numeric", "physics/relperm"},
 	"physics/displace":  {"physics/numeric", "physics/relperm", "physics/fracflow"},
 	"physics/ride":      {"physics/units", "physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
-	"physics/reservoir": {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
+	"physics/pattern":   {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
+	"physics/reservoir": {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace", "physics/pattern"},
 
 	"physics/evidence": {
 		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
 		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
-		"physics/ride", "physics/regime", "physics/spread",
+		"physics/ride", "physics/regime", "physics/spread", "physics/pattern",
 	},
 	"physics/study": {
 		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
 		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
-		"physics/ride", "physics/regime", "physics/spread",
+		"physics/ride", "physics/regime", "physics/spread", "physics/pattern",
 	},
 	"physics/report": {"physics/ref", "physics/units", "physics/study"},
 

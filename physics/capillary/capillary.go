@@ -11,7 +11,8 @@ package capillary
 type Curve interface {
 	// At returns Pc (Pa) and its slope dPc/dSw (Pa) at sw; one-sided from the right
 	// at a knot. Towards an end Pc and slope may grow without bound; at and beyond such
-	// an end they are infinite, beyond a finite end the end value holds with slope 0.
+	// an end they are infinite, beyond a finite end the end value holds with slope 0. A
+	// finite end may be met with an infinite slope (van Genuchten at full saturation).
 	At(sw float64) (pc, slope float64)
 	// Ends returns the range of saturations on which the curve is defined.
 	Ends() (low, high float64)

@@ -4,6 +4,8 @@ package ref
 const (
 	AbramowitzStegun1964 ID = "abramowitz-stegun-1964"
 	Ahmed2001            ID = "ahmed-2001"
+	Amott1959            ID = "amott-1959"
+	ArcherWall1986       ID = "archer-wall-1986"
 	Bertsekas1982        ID = "bertsekas-1982"
 	BatzleWang1992       ID = "batzle-wang-1992"
 	BrooksCorey1964      ID = "brooks-corey-1964"
@@ -16,6 +18,7 @@ const (
 	Dake1978             ID = "dake-1978"
 	DawsonLantz1972      ID = "dawson-lantz-1972"
 	Dietz1953            ID = "dietz-1953"
+	Donaldson1969        ID = "donaldson-1969"
 	Fayers1962           ID = "fayers-1962"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
 	Godunov1959          ID = "godunov-1959"
@@ -29,6 +32,7 @@ const (
 	Lake1989             ID = "lake-1989"
 	Land1968             ID = "land-1968"
 	LeVeque2002          ID = "leveque-2002"
+	Leverett1941         ID = "leverett-1941"
 	Levenberg1944        ID = "levenberg-1944"
 	Lomeland2005         ID = "lomeland-2005"
 	Marquardt1963        ID = "marquardt-1963"
@@ -50,7 +54,10 @@ const (
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SeberWild1989        ID = "seber-wild-1989"
 	ShuOsher1988         ID = "shu-osher-1988"
+	Skjaeveland2000      ID = "skjaeveland-2000"
 	Sweby1984            ID = "sweby-1984"
+	TakahasiMori1974     ID = "takahasi-mori-1974"
+	VanGenuchten1980     ID = "van-genuchten-1980"
 	VanLeer1974          ID = "van-leer-1974"
 	VanLeer1979          ID = "van-leer-1979"
 	Welge1952            ID = "welge-1952"
@@ -59,6 +66,8 @@ const (
 var sources = map[ID]Source{
 	AbramowitzStegun1964: {Authors: "Abramowitz & Stegun", Year: 1964, Title: "Handbook of Mathematical Functions", Where: "National Bureau of Standards, table 25.4"},
 	Ahmed2001:            {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing"},
+	Amott1959:            {Authors: "Amott", Year: 1959, Title: "Observations relating to the wettability of porous rock", Where: "Trans. AIME 216, 156-162"},
+	ArcherWall1986:       {Authors: "Archer & Wall", Year: 1986, Title: "Petroleum Engineering: Principles and Practice", Where: "Graham & Trotman, London"},
 	Bertsekas1982:        {Authors: "Bertsekas", Year: 1982, Title: "Projected Newton methods for optimization problems with simple constraints", Where: "SIAM J. Control Optim. 20(2), 221-246"},
 	BatzleWang1992:       {Authors: "Batzle & Wang", Year: 1992, Title: "Seismic properties of pore fluids", Where: "Geophysics 57(11), 1396-1408"},
 	BrooksCorey1964:      {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
@@ -79,8 +88,10 @@ var sources = map[ID]Source{
 	Dake1978:             {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier"},
 	DawsonLantz1972:      {Authors: "Dawson & Lantz", Year: 1972, Title: "Inaccessible pore volume in polymer flooding", Where: "SPE J. 12(5), 448-452"},
 	Dietz1953:            {Authors: "Dietz", Year: 1953, Title: "A theoretical approach to the problem of encroaching and by-passing edge water", Where: "Proc. Koninkl. Ned. Akad. Wetensch. B 56, 83-92"},
+	Donaldson1969:        {Authors: "Donaldson, Thomas & Lorenz", Year: 1969, Title: "Wettability determination and its effect on recovery efficiency", Where: "SPE Journal 9(1), 13-20"},
 	Fayers1962:           {Authors: "Fayers", Year: 1962, Title: "Some theoretical results concerning the displacement of a viscous oil by a hot fluid in a porous medium", Where: "J. Fluid Mech. 13(1), 65-76"},
 	FritschCarlson1980:   {Authors: "Fritsch & Carlson", Year: 1980, Title: "Monotone piecewise cubic interpolation", Where: "SIAM J. Numer. Anal. 17(2), 238-246"},
+	Leverett1941:         {Authors: "Leverett", Year: 1941, Title: "Capillary behavior in porous solids", Where: "Trans. AIME 142, 152-169"},
 	Levenberg1944:        {Authors: "Levenberg", Year: 1944, Title: "A method for the solution of certain non-linear problems in least squares", Where: "Quart. Appl. Math. 2(2), 164-168"},
 	Marquardt1963:        {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
 	McCain1991:           {Authors: "McCain", Year: 1991, Title: "Reservoir-fluid property correlations: state of the art", Where: "SPE Reserv. Eng. 6(2), 266-272"},
@@ -106,7 +117,10 @@ var sources = map[ID]Source{
 	PerthameShu1996:      {Authors: "Perthame & Shu", Year: 1996, Title: "On positivity preserving finite volume schemes for Euler equations", Where: "Numer. Math. 73(1), 119-130"},
 	Roe1986:              {Authors: "Roe", Year: 1986, Title: "Characteristic-based schemes for the Euler equations", Where: "Ann. Rev. Fluid Mech. 18, 337-365"},
 	ShuOsher1988:         {Authors: "Shu & Osher", Year: 1988, Title: "Efficient implementation of essentially non-oscillatory shock-capturing schemes", Where: "J. Comput. Phys. 77(2), 439-471"},
+	Skjaeveland2000:      {Authors: "Skjaeveland, Siqveland, Kjosavik, Hammervold Thomas & Virnovsky", Year: 2000, Title: "Capillary pressure correlation for mixed-wet reservoirs", Where: "SPE Reservoir Evaluation & Engineering 3(1), 60-67"},
 	Sweby1984:            {Authors: "Sweby", Year: 1984, Title: "High resolution schemes using flux limiters for hyperbolic conservation laws", Where: "SIAM J. Numer. Anal. 21(5), 995-1011"},
+	TakahasiMori1974:     {Authors: "Takahasi & Mori", Year: 1974, Title: "Double exponential formulas for numerical integration", Where: "Publ. Res. Inst. Math. Sci. 9(3), 721-741"},
+	VanGenuchten1980:     {Authors: "van Genuchten", Year: 1980, Title: "A closed-form equation for predicting the hydraulic conductivity of unsaturated soils", Where: "Soil Sci. Soc. Am. J. 44(5), 892-898"},
 	VanLeer1974:          {Authors: "van Leer", Year: 1974, Title: "Towards the ultimate conservative difference scheme. II. Monotonicity and conservation combined in a second-order scheme", Where: "J. Comput. Phys. 14(4), 361-370"},
 	VanLeer1979:          {Authors: "van Leer", Year: 1979, Title: "Towards the ultimate conservative difference scheme. V. A second-order sequel to Godunov's method", Where: "J. Comput. Phys. 32(1), 101-136"},
 }

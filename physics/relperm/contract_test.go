@@ -46,6 +46,8 @@ func models(t testing.TB) []model {
 		{"table with level stretch", table([]float64{0, 0.3, 0.4, 1}, []float64{0, 0, 0.1, 0.1}, []float64{1, 1, 0, 0}, MonotoneCubic), 0},
 		{"scaled corey", Scaled{corey, 0.63}, 0},
 		{"scaled table", Scaled{table(sw, krw, kro, MonotoneCubic), 1 / 0.91}, 0},
+		{"stretched corey", Stretched{corey, 0.71}, 0},
+		{"stretched table", Stretched{table(sw, krw, kro, MonotoneCubic), 0.86}, 0},
 	}
 }
 

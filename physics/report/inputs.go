@@ -34,7 +34,7 @@ func Label(st *study.Study, path string) string {
 
 var choiceLabels = map[string]string{
 	"rock.reference": "Permeability that kr refers to", "rock.curve": "Curve used", "rock.weights": "Weights of the fit",
-	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along",
+	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "front.ending": "The displacement ends",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -83,6 +83,9 @@ func choices(st study.Study) *Table {
 		add("rock.weights", st.Rock.Weights, study.Weightings)
 	}
 	add("fluids.pair", st.Fluids.Pair, study.Pairs)
+	if st.Rock.Land != nil {
+		add("front.ending", st.Front.Ending, study.Endings)
+	}
 	add("front.rider.kind", st.Front.Rider.Kind, study.Riders)
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)

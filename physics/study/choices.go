@@ -40,6 +40,14 @@ var Pairs = func() []Choice {
 	return list
 }()
 
+// Endings are the ways to say how much of a resident phase that is trapped stays.
+var Endings = []Choice{
+	{"curve", "where the curve ends"},
+	{byLand, "by Land's law, the curve stretched to it"},
+}
+
+const byLand = "land"
+
 // Drives are the ways the flood is driven.
 var Drives = []Choice{
 	{"rate", "constant injection rate"},
@@ -72,9 +80,19 @@ var choiceFields = []choiceField{
 	{"rock.curve", CurveKinds, func(s *Study) *string { return &s.Rock.Curve }},
 	{"rock.weights", Weightings, func(s *Study) *string { return &s.Rock.Weights }},
 	{"fluids.pair", Pairs, func(s *Study) *string { return &s.Fluids.Pair }},
+	{"front.ending", Endings, func(s *Study) *string { return &s.Front.Ending }},
 	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
+}
+
+// usual is a study in which every choice stands at the first of its list.
+func usual() Study {
+	var st Study
+	for _, f := range choiceFields {
+		*f.at(&st) = f.list[0].Value
+	}
+	return st
 }
 
 // Choices lists what the enumerated field at a path may hold; nil when the path

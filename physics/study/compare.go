@@ -35,8 +35,8 @@ func runCompare(st *Study, base evaluation) Part {
 		}
 	}
 	if slices.ContainsFunc(all, outcome.rides) {
-		s.note(Note{ID: "compare.ride", Level: "remark", Text: "Recovery after 1 PV and its curve count what rides along; the arrival of water and all that is told in time are those of water alone.",
-			Cause: "What rides along is answered on the Front sheet.", Do: "Read the arrival of its front and bank there.", Paths: []string{"front.rider.kind"}})
+		s.note(Note{ID: "compare.ride", Level: "remark", Text: "Arrival, recovery and its curve count what rides along; all that is told in time is of water alone.",
+			Cause: "What rides along is answered on the Front sheet, in pore volumes.", Do: "Read the arrival of its front and bank there.", Paths: []string{"front.rider.kind"}})
 	}
 	compareFigures(s, all)
 	compareCharts(s, all)
@@ -153,7 +153,11 @@ func (o outcome) places(paths []string) []string {
 }
 
 // counted is the figure that counts what rides along, by that of water alone.
-var counted = map[string]string{"front.recoveryAtOne": "front.ride.recoveryAtOne"}
+var counted = map[string]string{
+	"front.breakthrough":           "front.ride.breakthrough",
+	"front.recoveryAtBreakthrough": "front.ride.recoveryAtBreakthrough",
+	"front.recoveryAtOne":          "front.ride.recoveryAtOne",
+}
 
 // rides reports whether something rides along that the outcome's recovery counts.
 func (o outcome) rides() bool {

@@ -228,6 +228,8 @@ func TestCaseOfPolymer(t *testing.T) {
 	row := comparedRow(t, p, "compare.figures", "polymer")
 	near(t, "recovery after 1 PV", row["R1"], polymer.Value, 0)
 	near(t, "what the polymer adds", row["ΔR1"], polymer.Value-water.Value, 0)
+	first, _ := with.Figure("front.ride.breakthrough")
+	near(t, "arrival of water ahead of the polymer", row["Qbt"], first.Value, 0)
 	line := must(t, p, "compare.recovery", "case1")
 	near(t, "recovery in the picture", interpolate(line.X, line.Y, 1), polymer.Value, 1e-9)
 	if !slices.ContainsFunc(p.Notes, func(n Note) bool { return n.ID == "compare.ride" }) {

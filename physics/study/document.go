@@ -114,6 +114,8 @@ type Front struct {
 	Dip      *Input `json:"dip,omitempty"`      // of the layer along the flow, positive when water moves up-dip; nil: 0
 	Velocity *Input `json:"velocity,omitempty"` // total Darcy velocity; nil: rate over width and thickness of the field
 
+	Ending string `json:"ending,omitempty"` // where the resident phase stops moving, for pairs that trap it: see Endings; empty: the curve's end
+
 	Rider Rider `json:"rider,omitzero"` // what rides along with the injected water
 }
 

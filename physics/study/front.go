@@ -35,6 +35,7 @@ func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, 
 	s.await(rockPart)
 	f := s.fluids()
 	if rock != nil {
+		rock = s.ending(f.pair, rock)
 		f.flow.Curves, f.curve = rock.curves, rock.inputs
 		f.swi, f.swj = s.states(rock)
 		if f.rider != nil && s.standing() == Ready {
@@ -193,7 +194,9 @@ func (f *front) figures(s *sheet, rock *rock) {
 	d := f.displacement
 	f.brineFigures(s)
 	f.dipFigures(s)
-	f.stateFigures(s)
+	f.initialFigure(s)
+	f.trappedFigure(s, rock)
+	f.injectedFigure(s)
 	behind, ahead, shock := d.Front()
 	if !shock {
 		behind = ahead // the foremost state of a fan arrives first
@@ -212,7 +215,6 @@ func (f *front) figures(s *sheet, rock *rock) {
 	f.stabilityFigures(s)
 	f.apartFigure(s)
 	f.capillaryFigure(s)
-	f.trappedFigure(s, rock)
 }
 
 // arriving says which state it is that arrives first.
@@ -280,32 +282,38 @@ func (f *front) stepFigure(s *sheet) {
 			value("v2", "speed of the step", next.SpeedAhead, units.Number).on("front.speed"))
 }
 
-func (f *front) stateFigures(s *sheet) {
-	for _, state := range []struct {
-		id, path, label, symbol, end, endSymbol, default_ string
-		value                                             float64
-	}{
-		{"front.initialWater", "front.initialWater", "Initial water saturation", "Swi", "rock.swc", "{Swi} = {Swc}", "The connate water saturation of the curve, since none is typed.", f.swi},
-		{"front.injectedWater", "front.injectedWater", "Saturation held at the inlet", "Swj", "rock.sor", "{Swj} = 1 - {Sor}", "The largest water saturation of the curve, since none is typed.", f.swj},
-	} {
-		figure := Figure{ID: state.id, Label: state.label, Symbol: state.symbol, Value: state.value, Quantity: units.Fraction}
-		face, _ := f.displacement.InletFace()
-		spec, _ := Find(state.path)
-		typed := spec.Get(s.st) != nil
-		switch {
-		case state.id == "front.injectedWater" && math.Abs(face-f.swj) > backward:
-			figure.Label, figure.Value = "Saturation at the inlet face", face
-			w := s.by("", "Where the fractional flow is largest: the states from here up to Sw = "+units.Format(f.swj, 4)+", held at the inlet, run back and never enter.", ref.BuckleyLeverett1942).onFlow(f.curve)
-			if typed {
-				w.rests(state.path)
-			}
-			s.figure(figure, w)
-		case typed:
-			s.figure(figure, s.by("", "As typed.").rests(state.path))
-		default:
-			s.figure(figure, s.by(state.endSymbol, state.default_).term(state.end))
-		}
+func (f *front) initialFigure(s *sheet) {
+	w := s.by("{Swi} = {Swc}", "The connate water saturation of the curve, since none is typed.").term("rock.swc")
+	if given(s.st, "front.initialWater") {
+		w = s.by("", "As typed.").rests("front.initialWater")
 	}
+	s.figure(Figure{ID: "front.initialWater", Label: "Initial water saturation", Symbol: "Swi", Value: f.swi, Quantity: units.Fraction}, w)
+}
+
+func (f *front) injectedFigure(s *sheet) {
+	figure := Figure{ID: "front.injectedWater", Label: "Saturation held at the inlet", Symbol: "Swj", Value: f.swj, Quantity: units.Fraction}
+	face, _ := f.displacement.InletFace()
+	typed := given(s.st, figure.ID)
+	w := s.by("{Swj} = 1 - {Sor}", "The largest water saturation of the curve, since none is typed.").term("rock.sor")
+	switch {
+	case math.Abs(face-f.swj) > backward:
+		figure.Label, figure.Value = "Saturation at the inlet face", face
+		w = s.by("", "Where the fractional flow is largest: the states from here up to Sw = "+units.Format(f.swj, 4)+", held at the inlet, run back and never enter.", ref.BuckleyLeverett1942).onFlow(f.curve)
+		if typed {
+			w.rests(figure.ID)
+		}
+	case typed:
+		w = s.by("", "As typed.").rests(figure.ID)
+	case f.stretched():
+		w = s.by("{Swj} = 1 - {Sor,L}", "The curve is stretched to what Land's law leaves, since none is typed.", ref.Land1968).term("front.trapped").rests("front.ending")
+	}
+	s.figure(figure, w)
+}
+
+// given reports whether an input is typed.
+func given(st *Study, path string) bool {
+	spec, _ := Find(path)
+	return spec.Get(st) != nil
 }
 
 func (f *front) speedWorking(s *sheet, behind, ahead float64, shock bool) *working {

@@ -185,14 +185,3 @@ func (f *front) capillaryFigure(s *sheet) {
 		s.by("{Nc} = {u} {µw} / {σ}", "Viscous over capillary forces, with the Darcy velocity; authors who divide it by porosity get larger numbers.", ref.SaffmanTaylor1958, ref.Lake1989).
 			term("front.velocity").property(viscosities(f.pair)[0]).input("fluids.tension"))
 }
-
-// trappedFigure is what Land's law leaves of a trapped phase.
-func (f *front) trappedFigure(s *sheet, rock *rock) {
-	c, given := s.input("rock.land")
-	if !given || !f.pair.Land {
-		return
-	}
-	s.figure(Figure{ID: "front.trapped", Label: "Trapped oil by Land's law", Symbol: "Sor,L", Value: land(c, rock.swc).Trapped(1 - f.swi), Quantity: units.Fraction},
-		s.by("{Sor,L} = 1 / (1 / (1 - {Swi}) + {C} / (1 - {Swc}))", "What stays of the oil that was there at first.", ref.Land1968).
-			term("front.initialWater").input("rock.land").term("rock.swc"))
-}

@@ -5,11 +5,8 @@ import (
 
 	"brinefront/physics/ref"
 	"brinefront/physics/regime"
-	"brinefront/physics/relperm"
 	"brinefront/physics/units"
 )
-
-func land(c, swc float64) relperm.Land { return relperm.Land{C: c, Swc: swc} }
 
 // said is a verdict as a note tells it: the sentence with its number, the range it was
 // held against and where that stands.
@@ -126,23 +123,6 @@ func (f *front) capillarity(s *sheet) {
 	v := release.Judge(nc, "oil")
 	s.note(Note{ID: "front.capillarity", Level: level(v.Class != regime.Trapped), Text: said(v),
 		Cause: "The end points of the curves hold for capillary numbers at which residual oil stays trapped.", Do: "Where the number lies higher, look whether the laboratory flood had the same one.", Paths: []string{"fluids.tension", "front.velocity"}})
-}
-
-// trapping holds Land's law against the end of the curve.
-func (f *front) trapping(s *sheet) {
-	trapped := s.number("front.trapped")
-	if math.IsNaN(trapped) {
-		return
-	}
-	const apart = 0.03
-	sor := s.number("rock.sor")
-	far := math.Abs(trapped-sor) > apart
-	do := "Nothing: the curve and the law agree."
-	if far {
-		do = "Use curves that end at the trapped saturation, or another C; the displacement here ends where the curve does."
-	}
-	s.note(Note{ID: "front.land", Level: level(far), Text: "Land's law leaves " + units.Format(trapped, 3) + " of the pore space trapped; the curve ends at " + units.Format(sor, 3) + " (" + ref.Get(ref.Land1968).Short() + ").",
-		Cause: "What stays behind decides the recovery, and it depends on how much was there at first.", Do: do, Paths: []string{"rock.land"}})
 }
 
 // level is that of a note which warns when something holds.

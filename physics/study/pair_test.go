@@ -193,3 +193,39 @@ func TestCapillaryNumber(t *testing.T) {
 		t.Errorf("a capillary number of %g without a velocity", f.Value)
 	}
 }
+
+// Land (1968), by hand as above, from 0.72 of gas: 1/(1/0.72 + 2/0.8) = 0.72/2.8. The curve
+// stretched to that is a Corey curve with that residual, so that both answer alike.
+func TestCurveEndsByLandsLaw(t *testing.T) {
+	const trapped = 0.72 / 2.8
+	st := typed([6]float64{0.2, 0.1, 0.3, 0.9, 2.4, 1.9}, 0.4e-3, 0.02e-3)
+	st.Fluids.Pair, st.Front.Ending = string(fluid.BrineGas), byLand
+	put(&st, "front.initialWater", 0.28, "fraction")
+	if missing := Run(st).Parts[SheetFront].Missing; len(missing) != 1 || missing[0] != "rock.land" {
+		t.Fatalf("without Land's coefficient the front waits for %v", missing)
+	}
+	put(&st, "rock.land", 2, "")
+	is := Run(st)
+	st.Front.Ending = "curve"
+	put(&st, "rock.corey.sor", trapped, "fraction")
+	like := Run(st)
+	want := map[string]float64{}
+	for _, id := range []string{"front.breakthrough", "front.recoveryAtOne", "front.shockSaturation", "front.injectedWater"} {
+		f, ok := like.Parts[SheetFront].Figure(id)
+		if !ok {
+			t.Fatalf("no %s", id)
+		}
+		want[id] = f.Value
+	}
+	expect(t, is, 1e-9, want)
+	near(t, "held at the inlet", want["front.injectedWater"], 1-trapped, 1e-12)
+	if _, ok := noteOf(is.Parts[SheetFront], "front.stretched"); !ok {
+		t.Error("nothing says that the curve is stretched")
+	}
+	st.Front.Ending = byLand
+	put(&st, "rock.land", 0, "")
+	put(&st, "front.initialWater", 0.2, "fraction")
+	if problems := Run(st).Problems; len(problems) != 1 || problems[0].Path != "rock.land" {
+		t.Errorf("all gas trapped: %+v", problems)
+	}
+}

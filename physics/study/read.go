@@ -7,7 +7,6 @@ import (
 	"strconv"
 	"strings"
 
-	"brinefront/physics/fluid"
 	"brinefront/physics/units"
 )
 
@@ -41,7 +40,7 @@ func Read(text string) (Study, error) {
 		return Study{}, err
 	}
 	// Of files from before these could be chosen.
-	st := Study{Fluids: Fluids{Pair: string(fluid.BrineOil)}, Front: Front{Rider: Rider{Kind: noRider}}}
+	st := usual()
 	if err := lay(root, reflect.ValueOf(&st).Elem(), ""); err != nil {
 		return Study{}, err
 	}

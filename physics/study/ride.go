@@ -94,6 +94,14 @@ func (r *rider) retention() ride.Retention {
 	return ride.Retention{Reversible: d}
 }
 
+// rear is the pivot that the rear of a slug feels: rock gives back all heat.
+func (r *rider) rear() ride.Pivot {
+	if r.kind == riderOfHeat {
+		return r.pivot
+	}
+	return r.retention().Rear()
+}
+
 // reach refuses an inaccessible pore volume beyond the water at rest, beside which only
 // what the rock holds as well may be out of reach; the rear of a slug finds nothing held.
 func (r *rider) reach(s *sheet, swc float64) {
@@ -139,7 +147,7 @@ func (r *rider) solve(f *front) {
 	}
 	r.flood = flood
 	if size := r.size(); r.kind != tracer && !math.IsInf(size, 1) {
-		r.slug, r.unfollows = ride.NewSlug(flood, f.flow, f.swj, r.retention().Rear(), size)
+		r.slug, r.unfollows = ride.NewSlug(flood, f.flow, f.swj, r.rear(), size)
 	}
 }
 

@@ -234,6 +234,39 @@ func TestFrontOfHeat(t *testing.T) {
 	expect(t, Run(st), 1e-3, map[string]float64{"front.ride.waterViscosity": 2 * 326.1e-6}) // four digits printed, both sources within 0.1 %
 }
 
+// The rear of a slug of heat feels what the front does: all heat is given back, so that no
+// slug is ever spent, a larger one adds more, and one as long as all that is drawn adds what
+// heat without end does.
+func TestSlugOfHeat(t *testing.T) {
+	st := ridden(riderOfHeat)
+	added := func(part Part) (q, gain float64) {
+		line := must(t, part, "front.ride.recovery", "added")
+		return line.X[len(line.X)-1], line.Y[len(line.Y)-1]
+	}
+	end, most := added(Run(st).Parts[SheetFront])
+	last := 0.0
+	for _, size := range []float64{0.1, 0.4, 0.9, 5} {
+		put(&st, "front.rider.slug", size, "PV")
+		part := Run(st).Parts[SheetFront]
+		if note, unfollowed := noteOf(part, "front.ride.slugUnfollowed"); unfollowed {
+			t.Fatal(note.Text)
+		}
+		q, gain := added(part)
+		if q != end || gain <= last {
+			t.Errorf("a slug of %g PV adds %g after %g PV, a smaller one %g after %g PV", size, gain, q, last, end)
+		}
+		last = gain
+		if _, spent := part.Figure("front.ride.spent"); spent {
+			t.Errorf("%g PV of heat are spent", size)
+		}
+		front, _ := part.Figure("front.ride.arrival")
+		if rear, arrives := part.Figure("front.ride.rearArrival"); !arrives || rear.Value <= front.Value {
+			t.Errorf("the rear of %g PV arrives after %g, the front after %g", size, rear.Value, front.Value)
+		}
+	}
+	near(t, "a slug longer than all that is injected", last, most, 1e-12)
+}
+
 // A passenger that changes nothing adds nothing.
 func TestIdlePassengers(t *testing.T) {
 	st := ridden(polymer)

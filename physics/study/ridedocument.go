@@ -95,6 +95,6 @@ var riderSpecs = []Spec{
 		at: func(s *Study) **Input { return &s.Front.Rider.Inaccessible }, when: riding(polymer)},
 	{Path: "front.rider.peclet", Sheet: SheetFront, Group: riderGroup, Label: "Péclet number over the length", Symbol: "Pe", Quantity: units.Number, Min: 0, OpenMin: true, Max: 1e9, Optional: true, Default: "nothing spreads", Help: "Length over dispersivity.",
 		at: func(s *Study) **Input { return &s.Front.Rider.Peclet }, when: riding(tracer)},
-	{Path: "front.rider.slug", Sheet: SheetFront, Group: riderGroup, Label: "Slug", Symbol: "Qs", Quantity: units.PoreVolumes, Min: 0, OpenMin: true, Max: 1e3, Optional: true, Default: "injected without end", Help: "Pore volumes after which plain water follows.",
-		at: func(s *Study) **Input { return &s.Front.Rider.Slug }, when: riding(polymer, salt, tracer)},
+	{Path: "front.rider.slug", Sheet: SheetFront, Group: riderGroup, Label: "Slug", Symbol: "Qs", Quantity: units.PoreVolumes, Min: 0, OpenMin: true, Max: 1e3, Optional: true, Default: "injected without end", Help: "Pore volumes after which plain water follows, at the temperature of the reservoir.",
+		at: func(s *Study) **Input { return &s.Front.Rider.Slug }, when: riding(polymer, salt, tracer, riderOfHeat)},
 }

@@ -140,6 +140,13 @@ func (f *front) bankFigures(s *sheet) {
 // gainFigures set recovery with what rides along beside that of water alone.
 func (f *front) gainFigures(s *sheet) {
 	r := f.rider
+	first := r.flood.Breakthrough()
+	if with, ok := r.after(first); ok {
+		s.figure(Figure{ID: "front.ride.breakthrough", Label: "Water arrives, with the " + r.name + ", after", Symbol: "Qbt,r", Value: first, Quantity: units.PoreVolumes},
+			s.by("", "The fastest of all waves, those of the bank included.", append([]ref.ID{ref.Welge1952}, r.sources()...)...).onRider(f))
+		s.recovery("front.ride.recoveryAtBreakthrough", "Recovery at breakthrough with the "+r.name, "Rbt,r", with.Recovery, false,
+			s.by("{Rbt,r} = {Sav} - {Swi}", "", ref.Welge1952).value("Sav", "average saturation then", with.Average, units.Fraction).term("front.initialWater").on("front.ride.breakthrough"))
+	}
 	with, ok := r.after(1)
 	if !ok {
 		return
@@ -186,7 +193,7 @@ func (f *front) slugFigures(s *sheet) {
 		}
 		return
 	}
-	least := r.flood.LeastSlug(r.retention().Rear(), 1)
+	least := r.flood.LeastSlug(r.rear(), 1)
 	inlet := r.flood.InletFace().F
 	s.figure(Figure{ID: "front.ride.leastSlug", Label: "Least slug to reach the producer", Symbol: "Qs,min", Value: least, Quantity: units.PoreVolumes},
 		s.by("{Qs,min} = {D} / {fwj}", "What the rock keeps for good over the whole length; the rear catches up with the front at the producer.", ref.Pope1980).

@@ -89,7 +89,7 @@ func (f *front) slugNotes(s *sheet) {
 		Cause: "Plain water that moves more easily than the slug fingers through it, so that the rear comes earlier.", Do: "Take the times of the rear as the latest, recovery as an upper bound; grade the viscosity down at the rear.", Paths: path})
 	if _, x := r.slug.Spent(); r.short() {
 		s.note(Note{ID: "front.ride.slugSmall", Level: "caution", Text: "The slug is too small: it is spent at " + units.Format(x, 3) + " of the way to the producer.",
-			Cause: "The rock keeps what the slug carries; from there on plain water leads, which is not followed here.", Do: "Inject " + units.Format(r.flood.LeastSlug(r.retention().Rear(), 1), 3) + " PV or more, and some for fingers.", Paths: append(path, riderPath("retention"))})
+			Cause: "The rock keeps what the slug carries; from there on plain water leads, which is not followed here.", Do: "Inject " + units.Format(r.flood.LeastSlug(r.rear(), 1), 3) + " PV or more, and some for fingers.", Paths: append(path, riderPath("retention"))})
 	}
 }
 

@@ -1,17 +1,11 @@
 package study
 
-import "brinefront/physics/fluid"
-
 // Empty is a new study: choices at their usual values, nothing given.
 func Empty() Study {
-	return Study{
-		Type: Type, Version: Version, Program: Program,
-		System: "field",
-		Rock:   Rock{Reference: "absolute", Curve: "corey-fit", Weights: "relative"},
-		Fluids: Fluids{Pair: string(fluid.BrineOil)},
-		Front:  Front{Rider: Rider{Kind: noRider}},
-		Field:  Field{Drive: "rate", Limit: "waterCut"},
-	}
+	st := usual()
+	st.Type, st.Version, st.Program = Type, Version, Program
+	st.Rock.Curve = "corey-fit"
+	return st
 }
 
 // Invented is the source note of every number of the demonstration.

@@ -1,0 +1,99 @@
+package reservoir
+
+import (
+	"math"
+
+	"brinefront/physics/numeric"
+)
+
+// Member is a body of a bundle. Bodies of one kind may share a Body: only its size and its
+// pace differ.
+type Member struct {
+	Body       Body
+	PoreVolume float64 // m3, > 0
+	Pace       float64 // 1/(PoreVolume Impedance): clock of the body over that of the bundle; >= 0
+}
+
+// Bundle is a number of bodies between the same wells without crossflow: the pressure
+// difference is common, and each goes at its own pace. Its clock tau is the integral of
+// the pressure difference over time (Pa s), which is all that its state depends on:
+// whatever the history of rates was, a total rate or a total volume is one equation in tau.
+//
+// Source: Dykstra & Parsons (1950), generalised to any displacement in each layer.
+type Bundle []Member
+
+var _ Body = Bundle{}
+
+// PoreVolume is that of all members together.
+func (b Bundle) PoreVolume() float64 {
+	sum := 0.0
+	for _, m := range b {
+		sum += m.PoreVolume
+	}
+	return sum
+}
+
+// At implements Body, in pore volumes of the whole bundle.
+func (b Bundle) At(tau float64) Outflow {
+	var o Outflow
+	for _, m := range b {
+		s := m.Body.At(tau * m.Pace)
+		o.Injected += m.PoreVolume * s.Injected
+		o.Oil += m.PoreVolume * s.Oil
+		o.Rate += m.PoreVolume * m.Pace * s.Rate
+		o.OilRate += m.PoreVolume * m.Pace * s.OilRate
+	}
+	pv := b.PoreVolume()
+	return Outflow{o.Injected / pv, o.Oil / pv, o.Rate / pv, o.OilRate / pv}
+}
+
+// Breakthrough implements Body.
+func (b Bundle) Breakthrough() float64 {
+	first := math.Inf(1)
+	for _, m := range b {
+		if m.Pace > 0 {
+			first = math.Min(first, m.Body.Breakthrough()/m.Pace)
+		}
+	}
+	return first
+}
+
+// Clock is the clock at which a body has taken in q pore volumes; near is where to look
+// first, any number from 0. +Inf for a q beyond what the body ever takes.
+func Clock(b Body, q, near float64) float64 {
+	if !(q > 0) {
+		return 0
+	}
+	x := near
+	o := b.At(x)
+	if !(x > 0) {
+		x = q / o.Rate
+		o = b.At(x)
+	}
+	low, high := 0.0, math.Inf(1)
+	for range 200 {
+		if o.Injected > q {
+			high = x
+		} else {
+			low = x
+		}
+		next := x - (o.Injected-q)/o.Rate
+		if !(next > low && next < high) {
+			if next = low + (high-low)/2; math.IsInf(high, 1) {
+				next = 2 * x
+			}
+		}
+		if math.Abs(next-x) <= 1e-15*x || next == low || next == high || math.IsInf(next, 1) {
+			return next
+		}
+		x, o = next, b.At(next)
+	}
+	return x
+}
+
+// crossing is the clock between low and high at which a quantity of a body, less a limit,
+// changes sign.
+func crossing(b Body, low, high float64, excess func(Outflow) float64) float64 {
+	f := func(x float64) float64 { return excess(b.At(x)) }
+	return numeric.Zero(f, low, high, f(low), f(high))
+}

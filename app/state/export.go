@@ -64,7 +64,7 @@ func (m Model) sheetsOf(ending string, list func(p study.Part, add func(title, c
 		}
 		b.WriteString(`"` + strings.ReplaceAll(title, `"`, `""`) + "\"\r\n" + csv)
 	}
-	for _, sheet := range []study.Sheet{study.SheetRock, study.SheetFront, study.SheetField, study.SheetCompare} {
+	for _, sheet := range study.Sheets() {
 		list(m.Result.Parts[sheet], add)
 	}
 	return Download{ending, "text/csv", b.String()}

@@ -83,7 +83,7 @@ func TestOilLeavingAtTheInjector(t *testing.T) {
 	dips(&st, -30)
 	put(&st, "field.rate", 1, "m3/d")
 	p := Run(st).Parts[SheetFront]
-	e := (*Memory)(nil).evaluate(&st)
+	e := evaluated(st)
 	face, inlet := e.front.displacement.InletFace()
 	if inlet <= 1 {
 		t.Fatalf("no oil leaves: f = %g", inlet)
@@ -207,7 +207,7 @@ func TestIntegralOfTheResistanceIsATerm(t *testing.T) {
 	st.Field.Drive = "pressure"
 	put(&st, "field.pressure", 50, "bar")
 	p := Run(st).Parts[SheetField]
-	l := (*Memory)(nil).evaluate(&st).front.linear
+	l := evaluated(st).front.linear
 	for id, volume := range map[string]string{"field.breakthrough": "field.injectedAtBreakthrough", "field.limitTime": "field.limitInjected"} {
 		f, _ := p.Figure(id)
 		sum, n, q := 0.0, 20000, value(t, p, volume)

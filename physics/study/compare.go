@@ -6,9 +6,12 @@ import (
 	"strings"
 )
 
+// compared are the sheets whose answers are set side by side.
+var compared = []Sheet{SheetRock, SheetFront, SheetField}
+
 // outcome is the base, or one case, with what became of it.
 type outcome struct {
-	evaluation
+	*Evaluation
 	id      string // "base", "case1", ...
 	name    string
 	index   int      // of the case; -1 for the base
@@ -19,16 +22,17 @@ type outcome struct {
 // own that goes through the same sheets as the base; only a rock that no change
 // touches is not computed twice. A case that cannot answer says why, and the
 // others are shown.
-func runCompare(st *Study, base evaluation) Part {
-	s := newSheet(st)
-	s.await(base.frontPart)
+func runCompare(base *Evaluation) Part {
+	s := newSheet(base.st)
+	front := base.parts[SheetFront]
+	s.await(front)
 	if base.front == nil {
-		return s.close(base.frontPart.Status)
+		return s.close(front.Status)
 	}
-	all := []outcome{{evaluation: base, id: "base", name: BaseCase, index: -1}}
-	for i, c := range st.Cases {
+	all := []outcome{{Evaluation: base, id: "base", name: BaseCase, index: -1}}
+	for i, c := range base.st.Cases {
 		o := outcome{id: "case" + strconv.Itoa(i+1), name: standIn(i), index: i, changed: c.Changes()}
-		o.evaluation = base.with(c)
+		o.Evaluation = base.with(c)
 		s.cautions(o, base)
 		if o.front != nil {
 			all = append(all, o)
@@ -42,7 +46,7 @@ func runCompare(st *Study, base evaluation) Part {
 	compareCharts(s, all)
 	compareTables(s, all)
 	compareAnswer(s, all)
-	return s.close(base.frontPart.Status)
+	return s.close(front.Status)
 }
 
 // standIn stands for the name of a case until all else is told in the words of the
@@ -60,19 +64,20 @@ func caseNames(cases []Case) *words {
 }
 
 // with evaluates a case of the study that was evaluated.
-func (e evaluation) with(c Case) evaluation {
-	st := c.On(*e.st)
-	if slices.ContainsFunc(c.Changes(), func(path string) bool { return strings.HasPrefix(path, "rock.") }) {
-		return (*Memory)(nil).evaluate(&st)
+func (e *Evaluation) with(c Case) *Evaluation {
+	of := (*Memory)(nil).Begin(c.On(*e.st))
+	if !slices.ContainsFunc(c.Changes(), func(path string) bool { return strings.HasPrefix(path, "rock.") }) {
+		of.parts[SheetRock], of.rock = e.parts[SheetRock], e.rock
 	}
-	of := evaluation{st: &st, rockPart: e.rockPart, rock: e.rock}
-	of.answer()
+	for _, sheet := range compared {
+		of.through(sheet)
+	}
 	return of
 }
 
 // cautions says why a case has no answer, or what it brings up that the base
 // does not.
-func (s *sheet) cautions(o outcome, base evaluation) {
+func (s *sheet) cautions(o outcome, base *Evaluation) {
 	id, says := "compare."+o.id+".", "“"+o.name+"”: "
 	if len(o.changed) == 0 {
 		s.note(Note{ID: id + "unchanged", Level: "remark", Text: says + "nothing is changed yet, so it is the base case once more.", Do: "Change an input of the case.", Paths: []string{CasePath(o.index, "name")}})
@@ -81,18 +86,18 @@ func (s *sheet) cautions(o outcome, base evaluation) {
 		s.note(o.unanswered(id, says))
 		return
 	}
-	if base.fieldPart.ends() && !o.fieldPart.ends() {
+	if base.parts[SheetField].ends() && !o.parts[SheetField].ends() {
 		why := o.unanswered(id, says)
 		why.ID, why.Text = id+"noField", says+"no forecast to set beside that of the base. "+strings.TrimPrefix(why.Text, says)
 		s.note(why)
 	}
 	known := func(n Note) bool {
-		return slices.ContainsFunc([]Part{base.rockPart, base.frontPart, base.fieldPart}, func(p Part) bool {
-			return slices.ContainsFunc(p.Notes, func(m Note) bool { return m.ID == n.ID })
+		return slices.ContainsFunc(compared, func(sheet Sheet) bool {
+			return slices.ContainsFunc(base.parts[sheet].Notes, func(m Note) bool { return m.ID == n.ID })
 		})
 	}
-	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
-		for _, n := range p.Notes {
+	for _, sheet := range compared {
+		for _, n := range o.parts[sheet].Notes {
 			if n.Level == "caution" && !known(n) {
 				n.ID, n.Text, n.Paths = id+n.ID, says+n.Text, o.places(n.Paths)
 				s.note(n)
@@ -108,14 +113,14 @@ func (p Part) ends() bool { return p.Status == Ready || p.Status == Stopped && l
 func (o outcome) unanswered(id, says string) Note {
 	n := Note{ID: id + "unanswered", Level: "caution", Cause: "Its changes do not go together with the rest of the study.", Do: "Change the case, or what it shares with the study."}
 	var reasons, paths []string
-	for _, p := range o.problems {
+	for _, p := range Whole(o.parts).Problems {
 		reasons, paths = append(reasons, named(p.Path)+" cannot be used: read "+p.Read+"; allowed: "+p.Allowed), append(paths, p.Path)
 	}
-	for _, path := range o.fieldPart.Missing {
+	for _, path := range o.parts[SheetField].Missing {
 		reasons, paths = append(reasons, named(path)+" is not given"), append(paths, path)
 	}
-	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
-		for _, stop := range p.Notes {
+	for _, sheet := range compared {
+		for _, stop := range o.parts[sheet].Notes {
 			if len(reasons) == 0 && strings.HasSuffix(stop.ID, ".numerics") {
 				reasons, paths = append(reasons, strings.TrimSuffix(stop.Text, ".")), append(paths, stop.Paths...)
 			}
@@ -161,18 +166,18 @@ var counted = map[string]string{
 
 // rides reports whether something rides along that the outcome's recovery counts.
 func (o outcome) rides() bool {
-	_, ok := o.frontPart.Figure(counted["front.recoveryAtOne"])
+	_, ok := o.parts[SheetFront].Figure(counted["front.recoveryAtOne"])
 	return ok
 }
 
 // figure is a figure of an outcome, found on the sheet its ID names, with what
 // rides along where that is answered.
 func (o outcome) figure(id string) (Figure, bool) {
-	if f, ok := o.frontPart.Figure(counted[id]); ok {
+	if f, ok := o.parts[SheetFront].Figure(counted[id]); ok {
 		return f, true
 	}
-	for _, p := range []Part{o.rockPart, o.frontPart, o.fieldPart} {
-		if f, ok := p.Figure(id); ok {
+	for _, sheet := range compared {
+		if f, ok := o.parts[sheet].Figure(id); ok {
 			return f, true
 		}
 	}

@@ -113,7 +113,7 @@ func cutOverlay(all []outcome) (Chart, bool) {
 	c := Chart{ID: "compare.waterCut", Title: "Water cut in time"}
 	var names []string
 	for _, o := range all {
-		for _, own := range o.fieldPart.Charts {
+		for _, own := range o.parts[SheetField].Charts {
 			if own.ID != "field.waterCut" {
 				continue
 			}

@@ -18,7 +18,7 @@ type field struct {
 }
 
 // runField answers the Field sheet.
-func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part {
+func runField(st *Study, frontPart Part, front *front) Part {
 	s := newSheet(st, frontPart)
 	s.await(frontPart)
 	s.layer(front)
@@ -27,7 +27,6 @@ func runField(st *Study, problems *[]Problem, frontPart Part, front *front) Part
 	if p := CheckStart(st.Field.Start); p != nil {
 		s.problems = append(s.problems, *p)
 	}
-	s.hand(problems)
 	standing := s.standing()
 	if frontPart.Status == Refused {
 		standing = Refused

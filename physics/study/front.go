@@ -30,7 +30,7 @@ type front struct {
 }
 
 // runFront answers the Front sheet; nil when there is no displacement to build on.
-func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, *front) {
+func runFront(st *Study, rockPart Part, rock *rock) (Part, *front) {
 	s := newSheet(st, rockPart)
 	s.await(rockPart)
 	f := s.fluids()
@@ -45,7 +45,6 @@ func runFront(st *Study, problems *[]Problem, rockPart Part, rock *rock) (Part, 
 		s.input("front.initialWater")
 		s.input("front.injectedWater")
 	}
-	s.hand(problems)
 	standing := s.standing()
 	if rockPart.Status == Refused {
 		standing = Refused

@@ -20,13 +20,17 @@ const (
 
 // Result is everything that one evaluation of a study yields, in SI.
 type Result struct {
-	Problems []Problem      `json:"problems"` // inputs that cannot be used; every one of them
+	Problems []Problem      `json:"problems"` // inputs that cannot be used; every one of them, once
 	Parts    map[Sheet]Part `json:"parts"`
 }
 
 // Part is the result of one sheet.
 type Part struct {
-	Status  Status   `json:"status"`
+	Status   Status    `json:"status"`
+	Problems []Problem `json:"problems,omitempty"` // of the inputs that this sheet reads
+	// Left is the share of the computation that is still to come, of a part that is
+	// shown while it grows; 0: it is whole.
+	Left    float64  `json:"left,omitempty"`
 	Missing []string `json:"missing"` // paths of inputs still to be given before this sheet can answer
 	Answer  []Phrase `json:"answer"`  // the answer as a sentence
 	Figures []Figure `json:"figures"`

@@ -28,7 +28,7 @@ type rock struct {
 }
 
 // runRock answers the Rock sheet; nil when there is no curve to build on.
-func runRock(st *Study, problems *[]Problem, m *Memory) (Part, *rock) {
+func runRock(st *Study, m *Memory) (Part, *rock) {
 	s := newSheet(st)
 	r := &rock{memory: m, factor: 1, origins: map[string]string{}}
 	if st.Rock.Reference == "oil" {
@@ -46,7 +46,6 @@ func runRock(st *Study, problems *[]Problem, m *Memory) (Part, *rock) {
 	default:
 		r.measured(s)
 	}
-	s.hand(problems)
 	if status := s.standing(); status != Ready {
 		return s.close(status), nil
 	}

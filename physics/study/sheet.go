@@ -68,16 +68,6 @@ func (s *sheet) problem(path, read, allowed string) {
 	s.problems = append(s.problems, Problem{Path: path, Read: read, Allowed: allowed})
 }
 
-// hand passes the sheet's problems on, each once: an input that two sheets read is not
-// refused twice.
-func (s *sheet) hand(problems *[]Problem) {
-	for _, p := range s.problems {
-		if !slices.Contains(*problems, p) {
-			*problems = append(*problems, p)
-		}
-	}
-}
-
 // typed is an input as the person wrote it, for a message.
 func (s *sheet) typed(path string) string {
 	spec, _ := Find(path)
@@ -104,8 +94,9 @@ func (s *sheet) await(earlier Part) {
 	}
 }
 
-// close ends the sheet with the status it has come to.
+// close ends the sheet with the status it has come to, and the problems it has met.
 func (s *sheet) close(status Status) Part {
+	s.part.Problems = once(nil, s.problems)
 	s.part.Status = status
 	return s.part
 }

@@ -140,12 +140,11 @@ func faults(r Result) []string {
 			blame("problem %+v", p)
 		}
 	}
-	sheets := []Sheet{SheetRock, SheetFront, SheetField}
-	if _, compared := r.Parts[SheetCompare]; compared {
-		sheets = append(sheets, SheetCompare)
-	}
-	for _, sheet := range sheets {
+	for _, sheet := range Sheets() {
 		part, ok := r.Parts[sheet]
+		if !ok && sheet == SheetCompare {
+			continue // the study has no cases
+		}
 		if !ok {
 			blame("no part %s", sheet)
 		}

@@ -1,28 +1,26 @@
 package study
 
-import "brinefront/physics/fluid"
+import (
+	"slices"
 
-// told is a result in the words of a pair, with what is to be said of the pair itself.
-// Nothing of the result given is changed: parts may be shared with other results.
-func told(r Result, pair fluid.Pair) Result {
-	w := wordsOf(pair)
-	out := Result{Problems: r.Problems, Parts: map[Sheet]Part{}}
-	if w != nil {
-		out.Problems = each(r.Problems, func(p Problem) Problem {
-			p.Read, p.Allowed = w.tell(p.Read), w.tell(p.Allowed)
-			return p
-		})
+	"brinefront/physics/fluid"
+)
+
+// tell is the part of a sheet in the words of the study's pair, with what is to be said
+// of the pair itself, and the cases by their names. Nothing of the part given is
+// changed: it may be shared with other results.
+func (e *Evaluation) tell(sheet Sheet, part Part) Part {
+	pair := pairOf(e.st)
+	if w := wordsOf(pair); w != nil {
+		part = w.part(part)
 	}
-	for sheet, part := range r.Parts {
-		if w != nil {
-			part = w.part(part)
-		}
-		if sheet == SheetFront && part.Status == Ready {
-			part.Notes = append(each(part.Notes, func(n Note) Note { return n }), pairNotes(pair)...)
-		}
-		out.Parts[sheet] = part
+	switch {
+	case sheet == SheetFront && part.Status == Ready:
+		part.Notes = append(slices.Clone(part.Notes), pairNotes(pair)...)
+	case sheet == SheetCompare:
+		part = caseNames(e.st.Cases).part(part)
 	}
-	return out
+	return part
 }
 
 // pairNotes are the cautions of a pair, written in its own words.
@@ -53,6 +51,9 @@ func each[T any](list []T, change func(T) T) []T {
 }
 
 func (w *words) part(p Part) Part {
+	if p.Problems != nil {
+		p.Problems = each(p.Problems, func(q Problem) Problem { q.Read, q.Allowed = w.tell(q.Read), w.tell(q.Allowed); return q })
+	}
 	p.Answer = each(p.Answer, func(a Phrase) Phrase { a.Text = w.tell(a.Text); return a })
 	p.Figures = each(p.Figures, w.figure)
 	p.Charts = each(p.Charts, w.chart)

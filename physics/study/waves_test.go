@@ -66,7 +66,7 @@ func TestReadingsAreArrivals(t *testing.T) {
 		part := Run(st).Parts[SheetFront]
 		flow := must(t, part, "front.fractionalFlow", "reservoir")
 		arrives, travels, slope := reading(t, flow, "Arrives, injected"), reading(t, flow, "How it travels"), reading(t, flow, "Slope of the curve")
-		e := (*Memory)(nil).evaluate(&st)
+		e := evaluated(st)
 		d := e.front.displacement
 		fans := 0
 		for i, sw := range flow.X {
@@ -123,7 +123,7 @@ func TestWaveTable(t *testing.T) {
 		if len(behind) == 0 || len(time.Values) != len(behind) {
 			t.Fatalf("%s: %d waves, %d times", name, len(behind), len(time.Values))
 		}
-		injected := (*Memory)(nil).evaluate(&st).front.swj // of which the inlet face may hold less
+		injected := evaluated(st).front.swj // of which the inlet face may hold less
 		initial, _ := part.Figure("front.initialWater")
 		breakthrough, _ := part.Figure("front.breakthrough")
 		last := len(behind) - 1

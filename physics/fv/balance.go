@@ -11,7 +11,11 @@ type Balance struct {
 
 // Balance of the run so far.
 func (r *Run) Balance() Balance {
-	b := Balance{In: r.in.value(), Out: r.out.value(), Stored: mean(r.Cells()) - r.stored}
+	return balance(r.in.value(), r.out.value(), mean(r.Cells())-r.stored)
+}
+
+func balance(in, out, stored float64) Balance {
+	b := Balance{In: in, Out: out, Stored: stored}
 	if scale := max(math.Abs(b.In), math.Abs(b.Out), math.Abs(b.Stored)); scale > 0 {
 		b.Error = (b.In - b.Out - b.Stored) / scale
 	}

@@ -1,5 +1,6 @@
-// Package fv steps a scalar conservation law on the unit length by explicit finite
-// volumes. It knows flux functions, not rocks.
+// Package fv steps a scalar conservation law on the unit length by finite volumes: explicit
+// ones in a Run, implicit ones, with capillary diffusion where there is any, in an Implicit. It
+// knows flux functions, not rocks.
 //
 //	dS/dQ + df(S)/dx = 0,  0 < x < 1,  S(0, Q) injected, S(x, 0) initial
 //

@@ -22,11 +22,13 @@ type Function interface {
 // It may serve many runs at once.
 type Law struct {
 	lo, hi  float64
-	fill    func(f, s []float64) // f at each s
+	fill    func(f, s []float64)              // f at each s
+	at      func(s float64) (f, dfds float64) // as fn, perhaps from a table
 	fn      Function
 	extrema []point
-	slopes  []point // |df/ds| at samples, the peaks between them included
-	rising  bool    // f never falls: every face takes its value from the left
+	slopes  []point   // |df/ds| at samples, the peaks between them included
+	bends   []float64 // where |df/ds| peaks: inflections, most of them, and corners
+	rising  bool      // f never falls: every face takes its value from the left
 }
 
 type point struct{ s, y float64 }
@@ -42,7 +44,7 @@ func NewLaw(fn Function, a, b float64) (*Law, error) {
 	if !(hi-lo > 0) || math.IsInf(hi-lo, 0) {
 		return nil, fmt.Errorf("fv: a law between the states %.6g and %.6g; allowed: two different finite states", a, b)
 	}
-	law := &Law{lo: lo, hi: hi, fn: fn, rising: true}
+	law := &Law{lo: lo, hi: hi, at: fn.At, fn: fn, rising: true}
 	law.fill = func(f, s []float64) {
 		for i, x := range s {
 			f[i], _ = fn.At(x)
@@ -70,14 +72,9 @@ func NewLaw(fn Function, a, b float64) (*Law, error) {
 // examine adds what is found in one smooth piece. heading is the last slope below it that
 // was not zero; it returns that at its upper end.
 func (l *Law) examine(from, to, heading float64, inside int) (float64, error) {
-	n := inside + 2
-	s, v := make([]float64, n), make([]float64, n)
-	for i := range s {
-		// Even in ln(u/(1-u)): where a mobility is a power law its features are as wide there.
-		u := 1 / (1 + math.Exp(60*(0.5-float64(i)/float64(n-1))))
-		s[i] = from + (to-from)*u
-	}
-	s[0], s[n-1] = from, to
+	s := crowded(from, to, inside)
+	n := len(s)
+	v := make([]float64, n)
 	for i, x := range s {
 		f, slope := l.fn.At(x)
 		if v[i] = slope; i == n-1 {
@@ -104,7 +101,8 @@ func (l *Law) examine(from, to, heading float64, inside int) (float64, error) {
 			heading = v[i]
 		}
 		if i > 0 && i < n-1 && math.Abs(v[i]) >= math.Abs(v[i-1]) && math.Abs(v[i]) >= math.Abs(v[i+1]) {
-			l.slopes = append(l.slopes, l.peak(s[i-1], s[i+1]))
+			top := l.peak(s[i-1], s[i+1])
+			l.slopes, l.bends = append(l.slopes, top), append(l.bends, top.s)
 		}
 	}
 	return heading, nil

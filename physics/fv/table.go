@@ -26,7 +26,8 @@ func (l *Law) Tabulated(n int) (*Law, error) {
 		low, high = math.Min(low, f), math.Max(high, f)
 	}
 	copied := *l
-	copied.fill = newTable(l.fn, l.lo, l.hi, tableError*(high-low), n, 0).fill
+	t := newTable(l.fn, l.lo, l.hi, tableError*(high-low), n, 0)
+	copied.fill, copied.at = t.fill, t.value
 	return &copied, nil
 }
 
@@ -72,6 +73,20 @@ func newTable(fn Function, lo, hi, allowed float64, n, depth int) *table {
 }
 
 func (p *piece) at(t float64) float64 { return p.c0 + t*(p.c1+t*(p.c2+t*p.c3)) }
+
+// value is f and its slope at x: in the finest piece that holds, else by asking f itself.
+func (t *table) value(x float64) (f, dfds float64) {
+	u := (x - t.lo) * t.scale
+	k := min(max(int(u), 0), len(t.pieces)-1)
+	p := &t.pieces[k]
+	switch v := u - float64(k); {
+	case p.c0 == p.c0:
+		return p.at(v), (p.c1 + v*(2*p.c2+v*3*p.c3)) * t.scale
+	case p.cut != nil:
+		return p.cut.value(x)
+	}
+	return t.fn.At(x)
+}
 
 func (t *table) fill(f, s []float64) {
 	f = f[:len(s)]

@@ -78,12 +78,15 @@ func Clock(b Body, q, near float64) float64 {
 			low = x
 		}
 		next := x - (o.Injected-q)/o.Rate
+		if math.Abs(next-x) <= 1e-8*x {
+			return next // Newton's step doubles the digits
+		}
 		if !(next > low && next < high) {
 			if next = low + (high-low)/2; math.IsInf(high, 1) {
 				next = 2 * x
 			}
 		}
-		if math.Abs(next-x) <= 1e-15*x || next == low || next == high || math.IsInf(next, 1) {
+		if next == low || next == high || math.IsInf(next, 1) {
 			return next
 		}
 		x, o = next, b.At(next)

@@ -168,10 +168,13 @@ func (p Path) Injected(clock float64) float64 {
 			low = q
 		}
 		next := q - (s.t-clock)/s.r
+		if math.Abs(next-q) <= 1e-8*q {
+			return next // Newton's step doubles the digits
+		}
 		if !(next > low && next < high) {
 			next = low + (high-low)/2
 		}
-		if math.Abs(next-q) <= 4e-16*q || next == low || next == high {
+		if next == low || next == high {
 			return next
 		}
 		q = next

@@ -12,11 +12,32 @@ import (
 // slopes of those cubics, so that what has flowed is always the integral of what flows.
 // Beyond its last node water alone flows, at the last rate.
 type Table struct {
-	clocks       []float64
-	inflow, oils []numeric.Cell
-	jumps        []float64 // clocks at which a rate jumps: arrivals of fronts
-	arrival      float64
-	Worst        float64 // largest error seen between nodes, as a part of the tolerance's measure
+	clocks  []float64
+	cells   []cell
+	last    Outflow   // at the last of the clocks
+	jumps   []float64 // clocks at which a rate jumps: arrivals of fronts
+	arrival float64
+	Worst   float64 // largest error seen between nodes, in the measure of the tolerance
+}
+
+// cell holds two cubics in x, the clock since its start: inflow and oil, by rising powers.
+type cell struct{ in, oil [4]float64 }
+
+// newCell joins two states by the cubics that have their values and slopes.
+func newCell(a, b Outflow, h float64) cell {
+	join := func(y0, y1, d0, d1 float64) [4]float64 {
+		rise := (y1 - y0) / h
+		return [4]float64{y0, d0, (3*rise - 2*d0 - d1) / h, (d0 + d1 - 2*rise) / (h * h)}
+	}
+	return cell{join(a.Injected, b.Injected, a.Rate, b.Rate), join(a.Oil, b.Oil, a.OilRate, b.OilRate)}
+}
+
+func (c *cell) at(x float64) Outflow {
+	a, b := &c.in, &c.oil
+	return Outflow{
+		Injected: a[0] + x*(a[1]+x*(a[2]+x*a[3])), Rate: a[1] + x*(2*a[2]+x*3*a[3]),
+		Oil: b[0] + x*(b[1]+x*(b[2]+x*b[3])), OilRate: b[1] + x*(2*b[2]+x*3*b[3]),
+	}
 }
 
 var _ Body = (*Table)(nil)
@@ -106,25 +127,27 @@ func (t *Table) fill(stops []float64, tolerance float64, exact func(float64) (fl
 		_, just := exact(end * (1 - 0x1p-50)) // on this side of a jump
 		before.Rate, before.OilRate = just.Rate, just.OilRate
 		t.refine(start, before, tolerance, 24, at)
+		t.last = before.Outflow
+		t.last.OilRate = 0
+		if i+2 == len(stops) {
+			t.clocks = append(t.clocks, before.clock)
+		}
 	}
-	t.clocks = append(t.clocks, t.inflow[len(t.inflow)-1].X1)
 }
 
 // refine adds the cell from a to b, or its parts.
 func (t *Table) refine(a, b knot, tolerance float64, depth int, at func(float64) knot) {
-	in := numeric.Cell{X0: a.clock, X1: b.clock, Y0: a.Injected, Y1: b.Injected, D0: a.Rate, D1: b.Rate}
-	oil := numeric.Cell{X0: a.clock, X1: b.clock, Y0: a.Oil, Y1: b.Oil, D0: a.OilRate, D1: b.OilRate}
-	if !(in.X1 > in.X0) {
+	if !(b.clock > a.clock) {
 		return
 	}
+	c := newCell(a.Outflow, b.Outflow, b.clock-a.clock)
 	middle := a.x + (b.x-a.x)/2
 	if b.x > 4*a.x && a.x > 0 {
 		middle = math.Sqrt(a.x * b.x)
 	}
 	off := func(k knot) float64 {
-		q, _ := in.Cubic(k.clock)
-		n, _ := oil.Cubic(k.clock)
-		return math.Max(math.Abs(q-k.Injected), math.Abs(n-k.Oil)) / math.Max(1, k.Injected)
+		o := c.at(k.clock - a.clock)
+		return math.Max(math.Abs(o.Injected-k.Injected), math.Abs(o.Oil-k.Oil)) / math.Max(1, k.Injected)
 	}
 	half := at(middle)
 	worst := off(half)
@@ -137,23 +160,20 @@ func (t *Table) refine(a, b knot, tolerance float64, depth int, at func(float64)
 		return
 	}
 	t.Worst = math.Max(t.Worst, worst)
-	t.clocks = append(t.clocks, in.X0)
-	t.inflow, t.oils = append(t.inflow, in), append(t.oils, oil)
+	t.clocks, t.cells = append(t.clocks, a.clock), append(t.cells, c)
 }
 
 // At implements Body.
 func (t *Table) At(clock float64) Outflow {
-	last := len(t.clocks) - 1
-	if clock >= t.clocks[last] {
-		end := t.inflow[last-1]
-		return Outflow{Injected: end.Y1 + (clock-end.X1)*end.D1, Oil: t.oils[last-1].Y1, Rate: end.D1}
+	end := t.clocks[len(t.cells)]
+	if clock >= end {
+		o := t.last
+		o.Injected += (clock - end) * o.Rate
+		return o
 	}
-	i := numeric.Locate(t.clocks, clock)
-	var o Outflow
 	clock = math.Max(0, clock)
-	o.Injected, o.Rate = t.inflow[i].Cubic(clock)
-	o.Oil, o.OilRate = t.oils[i].Cubic(clock)
-	return o
+	i := numeric.Locate(t.clocks, clock)
+	return t.cells[i].at(clock - t.clocks[i])
 }
 
 // Breakthrough implements Body.

@@ -36,15 +36,18 @@ func (b Bundle) PoreVolume() float64 {
 // At implements Body, in pore volumes of the whole bundle.
 func (b Bundle) At(tau float64) Outflow {
 	var o Outflow
+	pv := b.PoreVolume()
 	for _, m := range b {
 		s := m.Body.At(tau * m.Pace)
-		o.Injected += m.PoreVolume * s.Injected
-		o.Oil += m.PoreVolume * s.Oil
-		o.Rate += m.PoreVolume * m.Pace * s.Rate
-		o.OilRate += m.PoreVolume * m.Pace * s.OilRate
+		volume, rate := m.PoreVolume/pv, m.PoreVolume/pv*m.Pace
+		o.Injected += volume * s.Injected
+		o.Oil += volume * s.Oil
+		o.Held += volume * s.Held
+		o.Rate += rate * s.Rate
+		o.OilRate += rate * s.OilRate
+		o.HoldingRate += rate * s.HoldingRate
 	}
-	pv := b.PoreVolume()
-	return Outflow{o.Injected / pv, o.Oil / pv, o.Rate / pv, o.OilRate / pv}
+	return o
 }
 
 // Breakthrough implements Body.

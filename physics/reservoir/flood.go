@@ -79,12 +79,43 @@ type Path struct {
 
 // Outflow is what has passed a body, in pore volumes, and how fast, per unit of its clock.
 type Outflow struct {
-	Injected, Oil float64 // cumulative: total fluid in, oil out
-	Rate, OilRate float64 // their slopes in the clock, 1/(Pa s); Rate is 1/R
+	Injected, Oil, Held        float64 // cumulative: total fluid in, oil out, what stayed in gas-filled space
+	Rate, OilRate, HoldingRate float64 // their slopes in the clock, 1/(Pa s); Rate is 1/R
 }
 
-// Cut is the water cut at reservoir conditions.
-func (o Outflow) Cut() float64 { return 1 - o.OilRate/o.Rate }
+// Cut is the water cut at reservoir conditions; 0 while nothing flows out.
+func (o Outflow) Cut() float64 {
+	if out := o.Rate - o.HoldingRate; out > 0 {
+		return 1 - o.OilRate/out
+	}
+	return 0
+}
+
+// Filling is a body part of whose pore volume, Gas < the volume at which its foremost
+// front arrives, holds gas at the start. Until as much is injected the oil displaced
+// refills that space and nothing flows out; from then on the body is as it would be
+// without gas. The gas has no resistance and none is produced.
+//
+// Source: Craig (1971), fill-up of the gas space before a flood responds.
+type Filling struct {
+	Body Body
+	Gas  float64 // pore volumes
+}
+
+var _ Body = Filling{}
+
+// At implements Body.
+func (f Filling) At(clock float64) Outflow {
+	o := f.Body.At(clock)
+	if o.Injected < f.Gas {
+		return Outflow{Injected: o.Injected, Rate: o.Rate, Held: o.Injected, HoldingRate: o.Rate}
+	}
+	o.Oil, o.Held = o.Oil-f.Gas, f.Gas
+	return o
+}
+
+// Breakthrough implements Body.
+func (f Filling) Breakthrough() float64 { return f.Body.Breakthrough() }
 
 // Body answers with what has passed it when its clock (Pa s) stands at a value.
 type Body interface {

@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"brinefront/physics/fluid"
+	"brinefront/physics/units"
 )
 
 // textsOf are all texts of a part that a reader sees, those that the pair itself says
@@ -227,5 +228,31 @@ func TestCurveEndsByLandsLaw(t *testing.T) {
 	put(&st, "front.initialWater", 0.2, "fraction")
 	if problems := Run(st).Problems; len(problems) != 1 || problems[0].Path != "rock.land" {
 		t.Errorf("all gas trapped: %+v", problems)
+	}
+}
+
+// Gas at surface is told as gas: by hand, 1 rb/Mscf is 5.614583e-3, so that water at equal
+// rates of flow in the reservoir and Bw = 1 comes with 5.614583e-3 volumes a volume of gas.
+func TestGasIsToldInGasUnits(t *testing.T) {
+	for id, want := range map[string]map[string]units.Quantity{
+		"brine-gas": {"field.oilAtLimit": units.GasVolume, "field.waterAtLimit": units.Volume, "field.startOilRate": units.GasRate, "field.waterOilRatioAtLimit": units.WaterGasRatio, "field.poreVolume": units.Volume},
+		"gas-oil":   {"field.oilAtLimit": units.Volume, "field.waterAtLimit": units.GasVolume, "field.startOilRate": units.Rate, "field.waterOilRatioAtLimit": units.GasOilRatio, "field.startRate": units.Rate},
+	} {
+		st := Demo()
+		st.Fluids.Pair = id
+		put(&st, "fluids.waterFormationFactor", 1, "m3/m3")
+		put(&st, "fluids.oilFormationFactor", 1, "rb/Mscf")
+		put(&st, "field.waterCut", 0.99, "fraction")
+		part := Run(st).Parts[SheetField]
+		for figure, quantity := range want {
+			if f, ok := part.Figure(figure); !ok || f.Quantity != quantity {
+				t.Errorf("%s: %s is a %s, want %s", id, figure, f.Quantity, quantity)
+			}
+		}
+		if id == "brine-gas" {
+			cut, _ := part.Figure("field.limitCut")
+			ratio, _ := part.Figure("field.waterOilRatioAtLimit")
+			near(t, "water-gas ratio", ratio.Value, 5.614583e-3*cut.Value/(1-cut.Value), 1e-6*ratio.Value)
+		}
 	}
 }

@@ -69,9 +69,11 @@ func (w *words) part(p Part) Part {
 }
 
 func (w *words) figure(f Figure) Figure {
+	f.Quantity = w.quantity(f.Symbol, f.Quantity)
 	f.Label, f.Symbol = w.tell(f.Label), w.symbol(f.Symbol)
 	f.Working.Formula, f.Working.Method = w.tell(f.Working.Formula), w.tell(f.Working.Method)
 	f.Working.Terms = each(f.Working.Terms, func(t Term) Term {
+		t.Quantity = w.quantity(t.Symbol, t.Quantity)
 		t.Symbol, t.Label = w.symbol(t.Symbol), w.tell(t.Label)
 		return t
 	})
@@ -99,11 +101,13 @@ func (w *words) chart(c Chart) Chart {
 }
 
 func (w *words) axis(a Axis) Axis {
+	a.Quantity = w.quantity(a.Symbol, a.Quantity)
 	a.Label, a.Symbol = w.tell(a.Label), w.symbol(a.Symbol)
 	return a
 }
 
 func (w *words) column(c Column) Column {
+	c.Quantity = w.quantity(c.Symbol, c.Quantity)
 	c.Label, c.Symbol = w.tell(c.Label), w.symbol(c.Symbol)
 	if c.Words != nil {
 		c.Words = each(c.Words, w.tell)

@@ -20,6 +20,7 @@ type words struct {
 	list  map[string]string
 	alone map[string]string // symbols that are words elsewhere, such as the exponent no
 	order []string          // of list, the longest first
+	gas   [2]bool           // whether the displacing and the resident phase are gas, told in volumes at standard conditions
 }
 
 // wordsOf are the words of a pair; nil for the pair that texts are written for.
@@ -37,7 +38,7 @@ var vocabulary = sync.OnceValue(func() map[fluid.PairID]*words {
 
 func newWords(p fluid.Pair) *words {
 	d, r := p.Displacing, p.Resident
-	w := &words{list: map[string]string{}}
+	w := &words{list: map[string]string{}, gas: [2]bool{d.Symbol == "g", r.Symbol == "g"}}
 	for from, to := range map[string]string{
 		"water": d.Name, "oil": r.Name, "connate water": d.ImmobileName, "residual oil": r.ImmobileName,
 	} {

@@ -21,8 +21,12 @@ const (
 	Length          Quantity = "length"
 	Area            Quantity = "area"
 	Volume          Quantity = "volume"
+	GasVolume       Quantity = "gasVolume" // of gas at standard conditions
 	Pressure        Quantity = "pressure"
-	Rate            Quantity = "rate" // volume per time
+	Rate            Quantity = "rate"          // volume per time
+	GasRate         Quantity = "gasRate"       // of gas at standard conditions
+	GasOilRatio     Quantity = "gasOilRatio"   // gas at standard conditions over liquid at surface
+	WaterGasRatio   Quantity = "waterGasRatio" // liquid at surface over gas at standard conditions
 	Velocity        Quantity = "velocity"
 	Duration        Quantity = "duration"
 	Density         Quantity = "density"
@@ -76,7 +80,11 @@ var catalogue = []Unit{
 	{"%", Share, 0.01, 0}, {"fraction", Share, 1, 0},
 	{"PV", PoreVolumes, 1, 0}, {"%PV", PoreVolumes, 0.01, 0},
 	{"", MobilityRatio, 1, 0},
-	{"rb/stb", FormationFactor, 1, 0}, {"m3/m3", FormationFactor, 1, 0},
+	{"rb/stb", FormationFactor, 1, 0}, {"m3/m3", FormationFactor, 1, 0}, {"rb/Mscf", FormationFactor, barrel / (1e3 * foot * foot * foot), 0}, {"ft3/scf", FormationFactor, 1, 0},
+	{"Mscf", GasVolume, 1e3 * foot * foot * foot, 0}, {"MMscf", GasVolume, 1e6 * foot * foot * foot, 0}, {"m3", GasVolume, 1, 0},
+	{"Mscf/d", GasRate, 1e3 * foot * foot * foot / day, 0}, {"m3/d", GasRate, 1 / day, 0},
+	{"scf/bbl", GasOilRatio, foot * foot * foot / barrel, 0}, {"m3/m3", GasOilRatio, 1, 0},
+	{"bbl/MMscf", WaterGasRatio, barrel / (1e6 * foot * foot * foot), 0}, {"m3/m3", WaterGasRatio, 1, 0},
 	{"bbl/bbl", WaterOilRatio, 1, 0}, {"m3/m3", WaterOilRatio, 1, 0},
 	{"cp", Viscosity, 1e-3, 0}, {"mPa.s", Viscosity, 1e-3, 0}, {"Pa.s", Viscosity, 1, 0},
 	{"md", Permeability, darcy / 1000, 0}, {"D", Permeability, darcy, 0}, {"um2", Permeability, 1e-12, 0}, {"m2", Permeability, 1, 0},

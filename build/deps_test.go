@@ -32,6 +32,7 @@ var arrows = map[string][]string{
 	"physics/fit":       {"physics/units", "physics/numeric", "physics/relperm"},
 	"physics/fracflow":  {"physics/numeric", "physics/relperm"},
 	"physics/displace":  {"physics/numeric", "physics/relperm", "physics/fracflow"},
+	"physics/gridding":  {"physics/numeric", "physics/fracflow", "physics/displace", "physics/fv"},
 	"physics/ride":      {"physics/units", "physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
 	"physics/pattern":   {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
 	"physics/reservoir": {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace", "physics/pattern"},

@@ -107,6 +107,8 @@ func NewImplicit(m Medium, s ImplicitSettings) (*Implicit, error) {
 		return nil, fmt.Errorf("fv: an initial profile of %d values; allowed: %d, one to each cell", len(s.Profile), n)
 	case m.Law == nil && m.Potential == nil:
 		return nil, fmt.Errorf("fv: a medium without flow and without capillarity")
+	case m.Law != nil && m.Law.chained > 0:
+		return nil, fmt.Errorf("fv: an implicit run with a law of its own for each cell; allowed: one law")
 	case !(s.Through >= 0) || math.IsInf(s.Through, 0) || s.Through > 0 && m.Law == nil:
 		return nil, fmt.Errorf("fv: a total flux of %g; allowed: 0 or above, and above 0 only with a law", s.Through)
 	case !(s.Step >= 0) || !(s.Error >= 0):

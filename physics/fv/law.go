@@ -29,6 +29,11 @@ type Law struct {
 	slopes  []point   // |df/ds| at samples, the peaks between them included
 	bends   []float64 // where |df/ds| peaks: inflections, most of them, and corners
 	rising  bool      // f never falls: every face takes its value from the left
+
+	phases   Phases  // faces take each phase from where it comes; nil: Godunov's flux
+	gravity  float64 // of phases
+	swiftest float64 // exchange of phases
+	chained  int     // the number of cells that have laws of their own; 0: all have this one
 }
 
 type point struct{ s, y float64 }
@@ -149,7 +154,7 @@ func (l *Law) Ends() (lo, hi float64) { return l.lo, l.hi }
 func (l *Law) Fastest(a, b float64) float64 {
 	lo, hi := math.Min(a, b), math.Max(a, b)
 	from := sort.Search(len(l.slopes), func(i int) bool { return l.slopes[i].s > lo })
-	most := 0.0
+	most := l.swiftest
 	for i := max(0, from-1); i < len(l.slopes); i++ {
 		most = math.Max(most, l.slopes[i].y)
 		if l.slopes[i].s >= hi {

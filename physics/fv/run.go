@@ -59,6 +59,8 @@ func New(law *Law, s Settings) (*Run, error) {
 		return nil, fmt.Errorf("fv: %d cells; allowed: 1 to 1000000", s.Cells)
 	case !(s.CFL > 0 && s.CFL <= most):
 		return nil, fmt.Errorf("fv: the CFL number is %g; allowed: above 0 up to %g with this scheme", s.CFL, most)
+	case law.chained != 0 && (law.chained != s.Cells || s.Limiter != None):
+		return nil, fmt.Errorf("fv: %d cells, limiter %q, with laws for %d cells; allowed: that number, at first order", s.Cells, s.Limiter, law.chained)
 	case s.Profile != nil && len(s.Profile) != s.Cells:
 		return nil, fmt.Errorf("fv: an initial profile of %d values; allowed: %d, one to each cell", len(s.Profile), s.Cells)
 	}
@@ -187,6 +189,10 @@ func (r *Run) faces() []float64 {
 	}
 	if r.law.rising {
 		return fl
+	}
+	if r.law.phases != nil {
+		r.law.byPhase(r.flux, left, right)
+		return r.flux
 	}
 	for i := range r.flux {
 		r.flux[i] = r.law.godunov(left[i], right[i], fl[i], fr[i])

@@ -1,0 +1,109 @@
+package imbibe
+
+import "math"
+
+// Block is what a block soaks up against time.
+type Block struct {
+	Recovery
+	Shape    Shape
+	Error    float64   // estimated, the largest, in shares of what can be soaked up
+	Balance  float64   // what is in the block less what passed its open faces, over the former: rounding
+	Finished bool      // whether the times reach to 99% of what can be soaked up
+	Profiles []Profile // of a block of one axis
+}
+
+// Profile is water saturation against the distance from the open face inwards, m.
+type Profile struct {
+	Time, Share  float64 // s; of what can be soaked up, by then
+	Distance, Sw []float64
+}
+
+// profileShares are the shares of what can be soaked up at which profiles are kept.
+var profileShares = [...]float64{0.1, 0.3, 0.5, 0.7, 0.9}
+
+const (
+	// Before firstShare the grid is too coarse, and the rate that of a half space.
+	firstShare = 0.005
+	// A run ends at lastShare, or at lateSpan times the time of half of it: where Dc
+	// vanishes at S0 the last percent may take for ever.
+	lastShare, lateSpan = 0.99, 1000.0
+	maxSpread           = 2
+)
+
+// accuracy of the runs of one axis.
+type accuracy struct {
+	cells     int     // of the coarser grid
+	tolerance float64 // of a time step, over what has soaked in by then
+}
+
+// usual keeps the recovery of one axis within about 5e-5 of what can be soaked up.
+var usual = accuracy{32, 1e-4}
+
+// Soak fills a block of the rock. A block of one axis is solved on two grids with the same
+// times, n and 2n cells, and extrapolated, R = (4 R_2n - R_n)/3, the scheme being of second
+// order; one of several axes as a crossing. err says when steps had to be made too small
+// to go on.
+func (m *Matrix) Soak(shape Shape) (*Block, error) {
+	for _, a := range shape {
+		if m.axes[a.Spread] == nil {
+			run, err := m.axis(a.Spread, usual)
+			if err != nil {
+				return nil, err
+			}
+			m.axes[a.Spread] = run
+		}
+	}
+	if len(shape) > 1 {
+		return m.cross(shape)
+	}
+	run, reach := m.axes[shape[0].Spread], shape[0].Reach
+	b := &Block{Recovery: run.stretched(reach * reach), Shape: shape, Error: run.err, Balance: run.balance, Finished: run.finished}
+	for _, p := range run.profiles {
+		stretched := Profile{Time: p.Time * reach * reach, Share: p.Share, Sw: p.Sw, Distance: make([]float64, len(p.Distance))}
+		for i, x := range p.Distance {
+			stretched.Distance[i] = x * reach
+		}
+		b.Profiles = append(b.Profiles, stretched)
+	}
+	return b, nil
+}
+
+// axisBlock is a block of one axis with a reach of 1 m. What any other soaks up follows from
+// it: only the time over the square of the reach counts.
+type axisBlock struct {
+	Recovery
+	err, balance float64
+	finished     bool
+	profiles     []Profile
+}
+
+func (m *Matrix) axis(spread int, acc accuracy) (*axisBlock, error) {
+	coarse := newAxisRun(m, Axis{1, spread}, acc.cells, acc.tolerance)
+	fine := newAxisRun(m, Axis{1, spread}, 2*acc.cells, acc.tolerance)
+	b := &axisBlock{}
+	middle := math.Inf(1)
+	for share := 0.0; share < lastShare && coarse.time < lateSpan*middle; {
+		if err := coarse.advance(math.Inf(1), true); err != nil {
+			return nil, err
+		}
+		if share = coarse.mean() / m.width; share < firstShare {
+			continue
+		}
+		if share >= 0.5 {
+			middle = math.Min(middle, coarse.time)
+		}
+		if err := fine.advance(coarse.time, false); err != nil {
+			return nil, err
+		}
+		finer := fine.mean() / m.width
+		b.err = math.Max(b.err, math.Abs(finer-share)/3)
+		b.add(coarse.time*m.porosity, (4*finer-share)/3, (4*fine.rate-coarse.rate)/(3*m.width*m.porosity))
+		if k := len(b.profiles); k < len(profileShares) && share >= profileShares[k] {
+			b.profiles = append(b.profiles, fine.profile())
+		}
+		b.finished = share >= lastShare
+	}
+	soaked := fine.mean()
+	b.balance = (soaked - fine.inflow) / soaked
+	return b, nil
+}

@@ -34,7 +34,7 @@ var arrows = map[string][]string{
 	"physics/displace":  {"physics/numeric", "physics/relperm", "physics/fracflow"},
 	"physics/gridding":  {"physics/numeric", "physics/fracflow", "physics/displace", "physics/fv"},
 	"physics/ride":      {"physics/units", "physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
-	"physics/pattern":   {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace"},
+	"physics/pattern":   {"physics/numeric"},
 	"physics/reservoir": {"physics/numeric", "physics/relperm", "physics/fracflow", "physics/displace", "physics/pattern"},
 
 	"physics/evidence": {

@@ -150,7 +150,7 @@ func job(t *testing.T, p *Page) {
 
 	p.sheet("report")
 	text := p.printed()
-	for _, needed := range []string{"Summary", "Inputs and where they come from", "Workings", "Cautions", "fracture pressure", "0.52 cp", "Water arrives after"} {
+	for _, needed := range []string{"Summary", "Inputs and where they come from", "Workings", "Cautions", "fracture pressure", "0.52 cp", "Water arrives after", "Printed", time.Now().Format(time.DateOnly)} {
 		if !strings.Contains(text, needed) {
 			t.Errorf("the printed report lacks %q", needed)
 		}

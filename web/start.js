@@ -12,6 +12,12 @@ self.goappOnAppInstallChange = () => {};
 self.goappIsAppInstallable = () => false;
 self.goappIsAppInstalled = () => false;
 
+// A sheet of paper says which day it is of.
+addEventListener("beforeprint", () => {
+  const day = document.getElementById("printed");
+  if (day) day.textContent = new Date().toLocaleDateString("sv"); // year, month, day
+});
+
 const boot = self.brinefrontBoot;
 const compiled = compile(self.brinefrontInterfaceProgram);
 delete self.brinefrontInterfaceProgram; // megabytes of text that nobody reads again

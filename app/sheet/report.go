@@ -56,6 +56,7 @@ func about(pairs [][2]string) app.UI {
 	for _, pair := range pairs {
 		list = append(list, app.Dt().Text(pair[0]), app.Dd().Text(pair[1]))
 	}
+	list = append(list, app.Dt().Class("printed").Text("Printed"), app.Dd().Class("printed").ID("printed")) // start.js writes the day
 	return app.Dl().Class("about").Body(list...)
 }
 

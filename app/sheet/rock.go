@@ -40,7 +40,9 @@ func (r *Rock) curve() app.UI {
 	choice := widget.Choice(d, "rock.curve", "Curve used", m.Study.Rock.Curve, study.CurveKinds, "A curve either follows the laboratory points, is fitted to them, or is typed.")
 	body := []app.UI{app.H3().Text("Curve"), choice}
 	if strings.HasSuffix(m.Study.Rock.Curve, "-fit") {
-		body = append(body, widget.Choice(d, "rock.weights", "Weights of the fit", m.Study.Rock.Weights, study.Weightings, "Relative permeability spans decades; relative weights respect its small values."))
+		body = append(body,
+			widget.Choice(d, "rock.ends", "Swc and Sor of the fit", m.Study.Rock.Ends, study.FitEnds, "Points that stop short of both ends may tell them all the same."),
+			widget.Choice(d, "rock.weights", "Weights of the fit", m.Study.Rock.Weights, study.Weightings, "Relative permeability spans decades; relative weights respect its small values."))
 	}
 	for _, group := range []string{"Corey", "LET"} { // the curve chosen asks for one, or none
 		body = append(body, widget.Fields(d, m, study.SheetRock, group)...)

@@ -34,7 +34,7 @@ func Label(st *study.Study, path string) string {
 
 var choiceLabels = map[string]string{
 	"rock.reference": "Permeability that kr refers to", "rock.curve": "Curve used", "rock.weights": "Weights of the fit",
-	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "front.ending": "The displacement ends",
+	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -80,6 +80,7 @@ func choices(st study.Study) *Table {
 	add("rock.reference", st.Rock.Reference, study.References)
 	add("rock.curve", st.Rock.Curve, study.CurveKinds)
 	if strings.HasSuffix(st.Rock.Curve, "-fit") {
+		add("rock.ends", st.Rock.Ends, study.FitEnds)
 		add("rock.weights", st.Rock.Weights, study.Weightings)
 	}
 	add("fluids.pair", st.Fluids.Pair, study.Pairs)

@@ -31,6 +31,14 @@ var Weightings = []Choice{
 	{"absolute", "absolute: large values dominate"},
 }
 
+// FitEnds are the ways a fit finds Swc and Sor.
+var FitEnds = []Choice{
+	{"table", "first and last row of the table"},
+	{freeEnds, "fitted with the rest"},
+}
+
+const freeEnds = "free"
+
 // Pairs are the pairs of phases of which one displaces the other.
 var Pairs = func() []Choice {
 	var list []Choice
@@ -79,6 +87,7 @@ var choiceFields = []choiceField{
 	{"rock.reference", References, func(s *Study) *string { return &s.Rock.Reference }},
 	{"rock.curve", CurveKinds, func(s *Study) *string { return &s.Rock.Curve }},
 	{"rock.weights", Weightings, func(s *Study) *string { return &s.Rock.Weights }},
+	{"rock.ends", FitEnds, func(s *Study) *string { return &s.Rock.Ends }},
 	{"fluids.pair", Pairs, func(s *Study) *string { return &s.Fluids.Pair }},
 	{"front.ending", Endings, func(s *Study) *string { return &s.Front.Ending }},
 	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},

@@ -52,6 +52,7 @@ type Rock struct {
 	Corey   Corey  `json:"corey,omitzero"`  // typed parameters, used when Curve is "corey"
 	LET     LET    `json:"let,omitzero"`    // typed parameters, used when Curve is "let"
 	Weights string `json:"weights"`         // how a fit weighs the points: see Weightings
+	Ends    string `json:"ends,omitempty"`  // where Swc and Sor of a fit come from: see FitEnds; empty: the table's rows
 
 	Land *Input `json:"land,omitempty"` // Land's trapping coefficient C; used by pairs whose resident phase is trapped
 }

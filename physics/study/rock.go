@@ -121,7 +121,7 @@ func (r *rock) measured(s *sheet) {
 	if !s.inspect(points, true) {
 		return
 	}
-	options := fit.Options{}
+	options := fit.Options{FreeSaturations: s.st.Rock.Ends == freeEnds}
 	if s.st.Rock.Weights == "absolute" {
 		options.Weights = fit.Absolute
 	}
@@ -142,7 +142,7 @@ func (r *rock) measured(s *sheet) {
 }
 
 func (r *rock) fit(s *sheet, f family, points fit.Points, options fit.Options) {
-	r.inputs = append(r.inputs, "rock.weights")
+	r.inputs = append(r.inputs, "rock.weights", "rock.ends")
 	r.sources = []ref.ID{f.source}
 	fitted, err := r.memory.through(f, points, options)
 	if err != nil {

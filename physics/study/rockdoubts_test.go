@@ -5,6 +5,7 @@ import (
 	"testing"
 
 	"brinefront/physics/ref"
+	"brinefront/physics/relperm"
 )
 
 func answerOf(p Part) string {
@@ -119,4 +120,34 @@ func TestMethodsCiteWhatTheyRestOn(t *testing.T) {
 			t.Errorf("time cites %v", f.Working.Sources)
 		}
 	}
+}
+
+// Points that stop short of both ends: the fit tells them where it may, and the figures say
+// whether they are ends or rows.
+func TestEndsBeyondThePoints(t *testing.T) {
+	const swc, sor = 0.18, 0.24
+	st := typed([6]float64{swc, sor, 0.35, 0.9, 2.6, 2.1}, 0.5e-3, 2e-3)
+	curve := relperm.Corey{Swc: swc, Sor: sor, Krw0: 0.35, Kro0: 0.9, Nw: 2.6, No: 2.1}
+	st.Rock.Table = &Table{}
+	for i := range 12 {
+		sw := swc + 0.03 + (1-sor-swc-0.07)*float64(i)/11
+		p := curve.At(sw)
+		st.Rock.Table.Sw, st.Rock.Table.Krw, st.Rock.Table.Kro = append(st.Rock.Table.Sw, sw), append(st.Rock.Table.Krw, p.Krw), append(st.Rock.Table.Kro, p.Kro)
+	}
+	st.Rock.Curve = "table"
+	rows := Run(st).Parts[SheetRock]
+	if f, _ := rows.Figure("rock.swc"); f.Label != "Water saturation of the first row" {
+		t.Errorf("the first row is called %q", f.Label)
+	}
+	if f, _ := rows.Figure("rock.sor"); f.Label != "Oil saturation of the last row" {
+		t.Errorf("the last row is called %q", f.Label)
+	}
+	st.Rock.Curve, st.Rock.Ends = "corey-fit", freeEnds
+	fitted := Run(st)
+	expect(t, fitted, 1e-5, map[string]float64{"rock.swc": swc, "rock.sor": sor})
+	if f, _ := fitted.Parts[SheetRock].Figure("rock.swc"); f.Label != "Connate water" {
+		t.Errorf("the fitted end is called %q", f.Label)
+	}
+	st.Rock.Ends = "table"
+	expect(t, Run(st), 1e-12, map[string]float64{"rock.swc": swc + 0.03, "rock.sor": sor + 0.04})
 }

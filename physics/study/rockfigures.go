@@ -11,13 +11,21 @@ import (
 
 func (r *rock) figures(s *sheet) {
 	first, last := r.reported.At(r.swc), r.reported.At(r.swmax)
+	connate, residual := "Connate water", "Residual oil"
+	water, oil := flowAtEnds(r.reported)
+	if water {
+		connate = "Water saturation of the first row"
+	}
+	if oil {
+		residual = "Oil saturation of the last row"
+	}
 	for _, end := range []struct {
 		id, label, symbol string
 		reported          float64
 		kr                bool
 	}{
-		{"rock.swc", "Connate water", "Swc", r.swc, false},
-		{"rock.sor", "Residual oil", "Sor", 1 - r.swmax, false},
+		{"rock.swc", connate, "Swc", r.swc, false},
+		{"rock.sor", residual, "Sor", 1 - r.swmax, false},
 		{"rock.krw0", "krw at Sor", "krw0", last.Krw, true},
 		{"rock.kro0", "kro at Swc", "kro0", first.Kro, true},
 	} {

@@ -22,8 +22,12 @@ type Profile struct {
 var profileShares = [...]float64{0.1, 0.3, 0.5, 0.7, 0.9}
 
 const (
-	// Before firstShare the grid is too coarse, and the rate that of a half space.
-	firstShare = 0.005
+	// Nodes begin at firstShare for each time that a shape's axes count their reach in
+	// its open area: before it the water stands in the first few cells.
+	firstShare = 0.01
+	// The start of all blocks is that of a slab, which is a half space until its end is
+	// met: with no diffusivity does it feel that by this share.
+	halfSpaceShare = 0.1
 	// A run ends at lastShare, or at lateSpan times the time of half of it: where Dc
 	// vanishes at S0 the last percent may take for ever.
 	lastShare, lateSpan = 0.99, 1000.0
@@ -44,13 +48,17 @@ var usual = accuracy{32, 1e-4}
 // order; one of several axes as a crossing. err says when steps had to be made too small
 // to go on.
 func (m *Matrix) Soak(shape Shape) (*Block, error) {
-	for _, a := range shape {
+	for _, a := range append(Shape{{1, 0}}, shape...) {
 		if m.axes[a.Spread] == nil {
 			run, err := m.axis(a.Spread, usual)
 			if err != nil {
 				return nil, err
 			}
-			m.axes[a.Spread] = run
+			if m.axes[a.Spread] = run; a.Spread == 0 {
+				time := run.TimeAt(halfSpaceShare)
+				m.early = halfSpaceShare / math.Sqrt(time)
+			}
+			run.cells[0].D0 = m.early * float64(a.Spread+1)
 		}
 	}
 	if len(shape) > 1 {
@@ -86,7 +94,7 @@ func (m *Matrix) axis(spread int, acc accuracy) (*axisBlock, error) {
 		if err := coarse.advance(math.Inf(1), true); err != nil {
 			return nil, err
 		}
-		if share = coarse.mean() / m.width; share < firstShare {
+		if share = coarse.mean() / m.width; share < firstShare*float64(spread+1) {
 			continue
 		}
 		if share >= 0.5 {

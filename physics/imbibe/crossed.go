@@ -125,11 +125,7 @@ func (m *Matrix) cross(shape Shape) (*Block, error) {
 	c := newCrossing(m, shape, cells)
 	b := &Block{Shape: shape, Error: crossingError}
 	var times, shifts []float64
-	early := 0.0 // of the product, share over sqrt(t)
-	for _, a := range shape {
-		early += m.axes[a.Spread].early / a.Reach
-	}
-	start := math.Pow(firstShare/early, 2)
+	start := math.Pow(firstShare/(m.early*shape.OpenArea()), 2)
 	middle, before := math.Inf(1), 0.0
 	for t, share := start, 0.0; share < lastShare && t < lateSpan*middle; t *= growth {
 		if err := c.step((t - before) / m.porosity); err != nil {
@@ -149,6 +145,7 @@ func (m *Matrix) cross(shape Shape) (*Block, error) {
 		j, k := max(0, i-1), min(len(times)-1, i+1)
 		b.add(t, share+shifts[i], math.Max(0, rate+(shifts[k]-shifts[j])/(times[k]-times[j])))
 	}
+	b.cells[0].D0 = m.early * shape.OpenArea()
 	soaked := c.mean()
 	b.Balance = (soaked - c.inflow) / soaked
 	return b, nil

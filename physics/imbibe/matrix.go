@@ -19,6 +19,7 @@ type Matrix struct {
 	nodes                    []float64
 	cells                    []numeric.Cell // the potential against u = S - Si, with Dc as its slope
 	opened                   float64        // int_Si^S0 Dc dS: the potential is -opened at Si, 0 at S0
+	early                    float64        // share over sqrt(t), s^-1/2, of a half space for each 1/m of open area
 	axes                     [maxSpread + 1]*axisBlock
 }
 

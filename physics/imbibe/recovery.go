@@ -6,53 +6,51 @@ import (
 	"brinefront/physics/numeric"
 )
 
-// Recovery is the share of what can be soaked up, S0 - Si, against time. Between its nodes
-// it is a Hermite cubic in sqrt(t), in which soaking starts as a straight line; before the
-// first it is that line; after the last it nears 1 exponentially, at the last rate.
+// Recovery is the share of what can be soaked up, S0 - Si, against time: a Hermite cubic in
+// sqrt(t), in which soaking starts as a straight line, through its nodes and the origin. After
+// the last node it nears 1 exponentially, at the last rate.
 type Recovery struct {
-	times, roots []float64 // s, and their square roots
+	times, roots []float64 // s, and 0 followed by their square roots
 	cells        []numeric.Cell
-	early, late  float64 // share over sqrt(t), and rate of the tail, 1/s
-	last, slope  float64 // share at the last node and its slope against sqrt(t)
+	late, last   float64 // rate of the tail, 1/s, and the share where it begins
 }
 
 // add appends a node: a time above the last, share and rate of share, 1/s.
 func (r *Recovery) add(time, share, rate float64) {
 	root := math.Sqrt(time)
 	slope := 2 * root * rate
-	if n := len(r.times); n == 0 {
-		r.early = share / root
+	if len(r.times) == 0 {
+		r.roots = append(r.roots, 0)
+		r.cells = append(r.cells, numeric.Cell{X1: root, Y1: share, D0: slope, D1: slope})
 	} else {
-		r.cells = append(r.cells, numeric.Cell{X0: r.roots[n-1], X1: root, Y0: r.last, Y1: share, D0: r.slope, D1: slope})
+		before := r.cells[len(r.cells)-1]
+		r.cells = append(r.cells, numeric.Cell{X0: before.X1, X1: root, Y0: before.Y1, Y1: share, D0: before.D1, D1: slope})
 	}
 	r.times, r.roots = append(r.times, time), append(r.roots, root)
-	r.last, r.slope = share, slope
-	r.late = rate / (1 - share)
+	r.last, r.late = share, rate/(1-share)
 }
+
+// Early is the share over sqrt(t) at the start, s^-1/2.
+func (r *Recovery) Early() float64 { return r.cells[0].D0 }
 
 // stretched is the same recovery with every time a factor longer.
 func (r *Recovery) stretched(factor float64) Recovery {
 	root := math.Sqrt(factor)
-	out := Recovery{early: r.early / root, late: r.late / factor, last: r.last, slope: r.slope / root,
-		times: make([]float64, len(r.times)), roots: make([]float64, len(r.roots)), cells: make([]numeric.Cell, len(r.cells))}
-	for i := range r.times {
-		out.times[i], out.roots[i] = r.times[i]*factor, r.roots[i]*root
-	}
+	out := Recovery{late: r.late / factor, last: r.last, roots: []float64{0},
+		times: make([]float64, len(r.times)), cells: make([]numeric.Cell, len(r.cells))}
 	for i, c := range r.cells {
-		out.cells[i] = numeric.Cell{X0: out.roots[i], X1: out.roots[i+1], Y0: c.Y0, Y1: c.Y1, D0: c.D0 / root, D1: c.D1 / root}
+		out.times[i] = r.times[i] * factor
+		out.roots = append(out.roots, c.X1*root)
+		out.cells[i] = numeric.Cell{X0: c.X0 * root, X1: c.X1 * root, Y0: c.Y0, Y1: c.Y1, D0: c.D0 / root, D1: c.D1 / root}
 	}
 	return out
 }
 
-// At returns the share soaked up at a time from 0 on, and its rate, 1/s.
+// At returns the share soaked up at a time from 0 on, and its rate, 1/s: +Inf at 0.
 func (r *Recovery) At(t float64) (share, rate float64) {
-	n := len(r.times)
 	root := math.Sqrt(t)
-	switch {
-	case t <= r.times[0]:
-		return r.early * root, r.early / (2 * root)
-	case t >= r.times[n-1]:
-		left := (1 - r.last) * math.Exp(-r.late*(t-r.times[n-1]))
+	if end := r.times[len(r.times)-1]; t >= end {
+		left := (1 - r.last) * math.Exp(-r.late*(t-end))
 		return 1 - left, r.late * left
 	}
 	share, slope := r.cells[numeric.Locate(r.roots, root)].Cubic(root)

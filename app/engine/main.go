@@ -8,7 +8,8 @@ import (
 )
 
 func main() {
+	var desk serve.Desk
 	port.Listen(func(text string, reply func(string)) {
-		serve.Serve([]byte(text), func(answer []byte) { reply(string(answer)) })
-	})
+		desk.Take([]byte(text), func(answer []byte) { reply(string(answer)) })
+	}, desk.Work)
 }

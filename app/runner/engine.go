@@ -2,12 +2,14 @@ package runner
 
 import (
 	"encoding/json"
+	"errors"
 	"maps"
 	"slices"
 
 	"brinefront/app/browser"
 	"brinefront/app/state"
 	"brinefront/app/wire"
+	"brinefront/physics/study"
 )
 
 // requests are what the engine was asked and has not answered.
@@ -17,31 +19,59 @@ type requests struct {
 	newest int             // ID of the newest request
 	open   map[int]request
 
-	running bool       // an evaluation is under way: it is not interrupted
-	next    *state.Run // the newest one asked for meanwhile
+	revision int                        // of the study that the engine has; 0: none
+	parts    map[study.Sheet]study.Part // as the engine last sent them
+
+	// unheard is the evaluation asked for while an earlier one was under way, until
+	// there is a reply to it: what stops the engine meanwhile is not its fault.
+	unheard *state.Run
 }
 
 // request is what is remembered of a request.
 type request struct {
 	kind     string
-	revision int    // of the study, for wire.Run; else 0
+	revision int    // of the study, for wire.Pieces; else 0
 	checkID  string // for wire.Check
 }
 
-func (q *requests) pending() bool { return len(q.open) > 0 || q.next != nil }
+func (q *requests) pending() bool { return len(q.open) > 0 }
 
-// evaluate has a study computed, at once or after the evaluation under way. Of
-// those that wait, only the newest is.
+// evaluate has a study computed. The engine leaves one that is under way; a study that
+// it has already it goes on with.
 func (r *Runner) evaluate(run state.Run) {
+	posted := wire.Request{Kind: wire.Pieces, First: run.First}
 	r.mu.Lock()
-	if r.requests.running {
-		r.requests.next = &run
-		r.mu.Unlock()
-		return
+	if q := &r.requests; q.revision != run.Revision {
+		posted.Study, q.revision, q.unheard = &run.Study, run.Revision, nil
+		if q.forget(wire.Pieces) {
+			q.unheard = &run
+		}
 	}
-	r.requests.running = true
 	r.mu.Unlock()
-	r.ask(request{kind: wire.Run, revision: run.Revision}, wire.Request{Kind: wire.Run, Study: &run.Study, Packed: true})
+	r.ask(request{kind: wire.Pieces, revision: run.Revision}, posted)
+}
+
+// forget drops what is open of a kind, and reports whether something was.
+func (q *requests) forget(kind string) bool {
+	before := len(q.open)
+	maps.DeleteFunc(q.open, func(_ int, r request) bool { return r.kind == kind })
+	return len(q.open) < before
+}
+
+// filled puts the parts that did not change where the engine left them out.
+func (q *requests) filled(pieces []wire.Piece) (map[study.Sheet]study.Part, error) {
+	parts := map[study.Sheet]study.Part{}
+	for _, piece := range pieces {
+		if piece.Part != nil {
+			q.parts[piece.Sheet] = *piece.Part
+		}
+		part, known := q.parts[piece.Sheet]
+		if !known {
+			return nil, errors.New("it leaves out a part that it never sent")
+		}
+		parts[piece.Sheet] = part
+	}
+	return parts, nil
 }
 
 func (r *Runner) listEvidence() {
@@ -92,47 +122,61 @@ func (r *Runner) startEngine() *browser.Engine {
 func (r *Runner) replied(born int, text string) {
 	reply, err := wire.Read([]byte(text))
 	r.mu.Lock()
-	asked, known := r.requests.open[reply.ID]
-	if born != r.requests.born || err == nil && !known {
+	q := &r.requests
+	if born != q.born {
+		r.mu.Unlock()
+		return
+	}
+	var parts map[study.Sheet]study.Part
+	if err == nil {
+		parts, err = q.filled(reply.Pieces) // of an earlier study too: the engine counts on them
+	}
+	asked, known := q.open[reply.ID]
+	if err == nil && !known {
 		r.mu.Unlock()
 		return
 	}
 	r.atWork++
-	delete(r.requests.open, reply.ID)
-	next := r.advance(asked)
+	if err == nil {
+		q.heard(reply, asked)
+	}
 	r.mu.Unlock()
 	defer r.rest()
 
-	switch {
-	case err != nil:
+	if err != nil {
 		r.stopEngine(born, "The engine's reply cannot be read: "+err.Error())
-	case next != nil:
-		r.evaluate(*next) // the answer is to an earlier study: it is dropped
-	default:
-		r.tell(asked, reply)
+		return
 	}
+	r.tell(asked, reply, parts)
 }
 
-// advance returns the evaluation that waited for one to end; nil when none did, or
-// when something else has ended. The lock is held.
-func (r *Runner) advance(ended request) *state.Run {
-	if ended.kind != wire.Run {
-		return nil
+// heard notes that a request is answered, in part or to the end. Requests for pieces
+// of one study end together, and a failure makes the engine let go of the study.
+func (q *requests) heard(reply wire.Reply, asked request) {
+	if asked.kind == wire.Pieces {
+		q.unheard = nil
 	}
-	next := r.requests.next
-	r.requests.running, r.requests.next = false, nil
-	return next
+	if reply.Failure != "" {
+		q.revision = 0
+	}
+	switch {
+	case reply.More:
+	case asked.kind == wire.Pieces:
+		q.forget(wire.Pieces)
+	default:
+		delete(q.open, reply.ID)
+	}
 }
 
 // tell delivers an answer.
-func (r *Runner) tell(asked request, reply wire.Reply) {
+func (r *Runner) tell(asked request, reply wire.Reply, parts map[study.Sheet]study.Part) {
 	switch {
 	case asked.kind == wire.Check && reply.Failure != "":
 		r.deliver(state.EvidenceDone{Check: wire.Evidence{ID: asked.checkID, Failure: reply.Failure}})
 	case reply.Failure != "":
 		r.deliver(state.EngineFailed{Revision: asked.revision, Reason: reply.Failure})
-	case asked.kind == wire.Run && reply.Result != nil:
-		r.deliver(state.Answered{Revision: asked.revision, Result: *reply.Result})
+	case asked.kind == wire.Pieces && reply.Kind == wire.Pieces:
+		r.deliver(state.Answered{Revision: asked.revision, Parts: parts, More: reply.More})
 	case asked.kind == wire.Checks:
 		r.deliver(state.EvidenceListed{Checks: reply.Checks})
 	case asked.kind == wire.Check && len(reply.Checks) == 1:
@@ -154,7 +198,7 @@ func (r *Runner) stopEngine(born int, reason string) {
 }
 
 // died tells that every open request has failed. The next request starts another
-// engine; an evaluation that already waits is that.
+// engine; an evaluation that was waiting is that.
 func (r *Runner) died(born int, reason string) {
 	r.mu.Lock()
 	if born != r.requests.born {
@@ -162,8 +206,12 @@ func (r *Runner) died(born int, reason string) {
 		return
 	}
 	r.atWork++
-	lost, next := r.requests.open, r.requests.next
-	r.requests = requests{born: born + 1, newest: r.requests.newest, open: map[int]request{}}
+	next := r.requests.unheard
+	if next != nil {
+		r.requests.forget(wire.Pieces)
+	}
+	lost := r.requests.open
+	r.requests = requests{born: born + 1, newest: r.requests.newest, open: map[int]request{}, parts: map[study.Sheet]study.Part{}}
 	r.mu.Unlock()
 	defer r.rest()
 

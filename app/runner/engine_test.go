@@ -18,27 +18,95 @@ func TestRunsTheNewest(t *testing.T) {
 	b.act(title("a"))
 	b.act(title("ab"))
 	b.wait(runWait)
-	if got := b.asked(); len(got) != before+1 || got[before].Study.Title != "ab" {
-		t.Fatalf("asked are %d runs, want one of the newest study", len(got)-before)
+	if got := b.asked(); len(got) != before+1 || got[before].Study.Title != "ab" || got[before].First != study.SheetFront {
+		t.Fatalf("asked are %d runs, want one of the newest study, the sheet looked at first", len(got)-before)
 	}
 	old := b.last()
 	b.act(title("abc"))
 	b.wait(runWait)
-	b.act(title("abcd"))
-	b.wait(runWait)
-	if len(b.asked()) != before+1 {
-		t.Fatal("the engine is asked while it computes")
+	if got := b.asked(); len(got) != before+2 || got[before+1].Study.Title != "abc" {
+		t.Fatalf("then asked are %d runs, want the newer study at once", len(got)-before)
 	}
-	b.answer(wire.Reply{ID: old.ID, Kind: old.Kind, Result: &study.Result{}})
-	if count[state.Answered](b) != 0 {
+	b.answer(wire.Reply{ID: old.ID, Kind: old.Kind, Pieces: whole(study.Empty()), More: true})
+	if count[state.Answered](b) != 0 || !b.model.Computing {
 		t.Error("the answer to an earlier study is delivered")
 	}
-	if got := b.asked(); len(got) != before+2 || got[before+1].Study.Title != "abcd" {
-		t.Fatalf("then asked are %d runs, want one of the newest study", len(got)-before)
-	}
 	b.reply()
-	if count[state.Answered](b) != 1 || b.model.Computing {
+	b.wait(time.Second)
+	if count[state.Answered](b) != 1 || b.model.Computing || !b.runner.Idle() {
 		t.Error("the newest answer is not delivered")
+	}
+}
+
+// Pieces are told as they come, and there is rest only after the last. A part that the
+// engine leaves out is as it last sent it, be it with the answer to another study.
+func TestPieces(t *testing.T) {
+	b := started(t)
+	was := b.model.Result.Parts[study.SheetRock]
+	b.act(title("One"))
+	b.wait(runWait)
+	one := b.last()
+	b.act(state.Edited{Path: "field.porosity", Text: "0.2", Unit: "fraction"})
+	b.wait(runWait)
+	two := b.last()
+	changed := study.Part{Status: study.Stopped}
+	b.answer(wire.Reply{ID: one.ID, Kind: wire.Pieces, More: true, Pieces: []wire.Piece{{Sheet: study.SheetField, Part: &changed}}})
+	b.answer(wire.Reply{ID: two.ID, Kind: wire.Pieces, More: true, Pieces: []wire.Piece{{Sheet: study.SheetRock}}})
+	if b.runner.Idle() || !b.model.Computing || b.model.Updating(study.SheetRock) || !b.model.Updating(study.SheetFront) {
+		t.Error("after the first piece the others are not awaited")
+	}
+	b.answer(wire.Reply{ID: two.ID, Kind: wire.Pieces, Pieces: []wire.Piece{{Sheet: study.SheetFront}, {Sheet: study.SheetField}}})
+	b.wait(time.Second)
+	if !b.runner.Idle() || b.model.Computing {
+		t.Error("after the last piece something is awaited")
+	}
+	if got := b.model.Result.Parts; len(got[study.SheetRock].Figures) != len(was.Figures) || len(was.Figures) == 0 || got[study.SheetField].Status != study.Stopped {
+		t.Errorf("the parts left out are %d figures of rock and a field that is %s", len(got[study.SheetRock].Figures), got[study.SheetField].Status)
+	}
+}
+
+// Another sheet looked at meanwhile is asked for without the study, and the pieces of
+// the request before still count.
+func TestAnotherSheetMeanwhile(t *testing.T) {
+	b := started(t)
+	b.act(title("One"))
+	b.wait(runWait)
+	one := b.last()
+	b.act(state.Routed{Fragment: "/field"})
+	b.wait(runWait)
+	two := b.last()
+	if two.ID == one.ID || two.Study != nil || two.First != study.SheetField || two.Kind != wire.Pieces {
+		t.Fatalf("asked is %+v", two)
+	}
+	b.answer(wire.Reply{ID: one.ID, Kind: wire.Pieces, More: true, Pieces: []wire.Piece{{Sheet: study.SheetFront}}})
+	b.answer(wire.Reply{ID: two.ID, Kind: wire.Pieces, Pieces: []wire.Piece{{Sheet: study.SheetField}, {Sheet: study.SheetRock}}})
+	b.wait(time.Second)
+	if b.model.Computing || !b.runner.Idle() || len(b.model.Result.Parts) != 3 {
+		t.Errorf("computing %t, idle %t, %d parts", b.model.Computing, b.runner.Idle(), len(b.model.Result.Parts))
+	}
+	b.act(state.Routed{Fragment: "/rock"})
+	b.wait(runWait)
+	if b.last().ID != two.ID {
+		t.Error("a sheet that is answered is asked for again")
+	}
+}
+
+// After a failure the engine has let go of the study, and another engine never had it.
+func TestTheStudyIsSentAgain(t *testing.T) {
+	for name, fail := range map[string]func(*bench){
+		"a bug":   func(b *bench) { b.answer(wire.Reply{ID: b.last().ID, Kind: wire.Pieces, Failure: "a bug"}) },
+		"a death": func(b *bench) { b.engine().Die("gone") },
+	} {
+		b := started(t)
+		b.act(title("One"))
+		b.wait(runWait)
+		fail(b)
+		revision := b.model.Revision
+		b.runner.Do([]state.Effect{state.Run{Revision: revision, Study: b.model.Study}})
+		b.wait(runWait)
+		if b.last().Study == nil {
+			t.Errorf("after %s the study is not sent", name)
+		}
 	}
 }
 
@@ -57,7 +125,7 @@ func TestEngineDies(t *testing.T) {
 		t.Fatal("the next run starts no other engine")
 	}
 	first.Die("again")
-	first.Reply(`{"id": 3, "kind": "run", "failure": "from the grave"}`)
+	first.Reply(`{"id": 3, "kind": "pieces", "failure": "from the grave"}`)
 	b.reply()
 	if b.model.Failure != "" || b.model.ResultRevision != b.model.Revision {
 		t.Errorf("after the restart: failure %q", b.model.Failure)
@@ -82,9 +150,11 @@ func TestEngineDiesWithARunWaiting(t *testing.T) {
 
 func TestEngineSpeaksNonsense(t *testing.T) {
 	for name, reply := range map[string]string{
-		"no JSON":   "hello",
-		"no answer": `{"id": 2, "kind": "run"}`,
-		"a bug":     `{"id": 2, "kind": "run", "failure": "a bug"}`,
+		"no JSON":    "hello",
+		"no answer":  `{"id": 2, "kind": "run"}`,
+		"a bug":      `{"id": 2, "kind": "pieces", "failure": "a bug"}`,
+		"no numbers": `{"id": 2, "kind": "pieces", "pieces": [{"sheet": "rock", "part": {}, "numbers": {"bytes": "AAAA"}}]}`,
+		"no part":    `{"id": 2, "kind": "pieces", "pieces": [{"sheet": "attic"}]}`,
 	} {
 		t.Run(name, func(t *testing.T) {
 			b := started(t)
@@ -102,7 +172,7 @@ func TestEngineSpeaksNonsense(t *testing.T) {
 		})
 	}
 	b := started(t)
-	b.answer(wire.Reply{ID: 77, Kind: wire.Run})
+	b.answer(wire.Reply{ID: 77, Kind: wire.Pieces})
 	if len(b.came) > 0 || !b.runner.Idle() {
 		t.Error("an answer to nothing is delivered")
 	}

@@ -42,7 +42,7 @@ func newWith(deliver func(state.Msg), after func(time.Duration, func())) *Runner
 	return &Runner{
 		deliver: deliver, after: after,
 		run: later{wait: runWait}, keep: later{wait: keepWait}, print: later{wait: printWait},
-		requests: requests{open: map[int]request{}},
+		requests: requests{open: map[int]request{}, parts: map[study.Sheet]study.Part{}},
 	}
 }
 

@@ -128,11 +128,20 @@ func (b *bench) reply() {
 	b.t.Helper()
 	asked := b.last()
 	answer := wire.Reply{ID: asked.ID, Kind: asked.Kind}
-	if asked.Kind == wire.Run {
-		result := study.Run(*asked.Study)
-		answer.Result = &result
+	if asked.Kind == wire.Pieces {
+		answer.Pieces = whole(*asked.Study)
 	}
 	b.answer(answer)
+}
+
+// whole are the pieces of a study, all of them.
+func whole(st study.Study) []wire.Piece {
+	var pieces []wire.Piece
+	for sheet, part := range study.Run(st).Parts {
+		rest, numbers := wire.Pack(part)
+		pieces = append(pieces, wire.Piece{Sheet: sheet, Part: &rest, Numbers: numbers})
+	}
+	return pieces
 }
 
 func (b *bench) answer(reply wire.Reply) {

@@ -69,7 +69,11 @@ func (b *Bench) Await() {
 
 // announce lets a screen reader say the answer when it has changed.
 func (b *Bench) announce() {
-	part := b.model.Result.Parts[study.Sheet(b.model.Route.Sheet)]
+	sheet := study.Sheet(b.model.Route.Sheet)
+	part := b.model.Result.Parts[sheet]
+	if b.model.Updating(sheet) {
+		return
+	}
 	if said := report.Sentence(part, b.model.System); said != "" && said != b.sentence {
 		b.sentence = said
 		browser.Announce(said)

@@ -22,7 +22,7 @@ type Compare struct {
 func (c *Compare) Render() app.UI {
 	d, m := c.Desk, c.Model
 	part, stale := m.Part(study.SheetCompare)
-	return app.Article().Class("sheet").DataSet("sheet", "compare").Aria("busy", strconv.FormatBool(m.Computing)).Body(
+	return app.Article().Class("sheet").DataSet("sheet", "compare").Aria("busy", strconv.FormatBool(m.Updating(study.SheetCompare))).Body(
 		app.Div().Class("told").Body(
 			heading("compare"),
 			app.A().Class("jump").Href("#inputs").Text("To the cases"),

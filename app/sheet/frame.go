@@ -148,6 +148,9 @@ func standing(m state.Model, sheet string) string {
 		return "✕ input refused"
 	}
 	part := m.Result.Parts[study.Sheet(sheet)]
+	if part.Left > 0 {
+		return "… " + widget.Done(part) + " computed"
+	}
 	switch part.Status {
 	case study.Waiting:
 		return "○ waiting for input"

@@ -15,7 +15,7 @@ import (
 // tables, and beside them the inputs.
 func laid(d widget.Desk, m state.Model, sheet study.Sheet, forms ...app.UI) app.UI {
 	part, stale := m.Part(sheet)
-	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Computing)).Body(
+	return app.Article().Class("sheet").DataSet("sheet", string(sheet)).Aria("busy", strconv.FormatBool(m.Updating(sheet))).Body(
 		app.Div().Class("told").Body(
 			heading(string(sheet)),
 			app.A().Class("jump").Href("#inputs").Text("To the inputs"),

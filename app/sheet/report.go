@@ -22,7 +22,7 @@ type Report struct {
 // Render draws the document and, above it, what only the screen shows.
 func (r *Report) Render() app.UI {
 	d, m := r.Desk, r.Model
-	doc := report.Build(m.Study, m.Result, m.System)
+	doc := report.Build(m.Study, m.Whole, m.System)
 	return app.Article().Class("sheet paper").DataSet("sheet", "report").Body(
 		heading("report"),
 		app.Section().Class("inputs").ID("inputs").TabIndex(-1).Aria("label", "Particulars").Body(

@@ -33,7 +33,7 @@ func after(messages ...state.Msg) state.Model {
 	for _, msg := range messages {
 		m, _ = state.Update(m, msg)
 	}
-	m, _ = state.Update(m, state.Answered{Revision: m.Revision, Result: study.Run(m.Study)})
+	m, _ = state.Update(m, state.Answered{Revision: m.Revision, Parts: study.Run(m.Study).Parts})
 	return m
 }
 

@@ -17,7 +17,7 @@ func contradicted(sheet string) state.Model {
 	for _, msg := range []state.Msg{typed("swc", "0.8"), state.Left{}, typed("sor", "0.3")} {
 		m, _ = state.Update(m, msg)
 	}
-	m, _ = state.Update(m, state.Answered{Revision: m.Revision, Result: study.Run(m.Study)})
+	m, _ = state.Update(m, state.Answered{Revision: m.Revision, Parts: study.Run(m.Study).Parts})
 	return on(sheet, m)
 }
 

@@ -7,10 +7,13 @@ import "brinefront/physics/study"
 type Effect interface{ effect() }
 
 type (
-	// Run evaluates a study; replies Answered or EngineFailed.
+	// Run evaluates a study, the sheet First before the others; replies Answered, once
+	// or more often, or EngineFailed. Under the same Revision as before, only what is
+	// still to come is computed.
 	Run struct {
 		Revision int
 		Study    study.Study
+		First    study.Sheet
 	}
 	// Keep writes the autosave; replies Kept or NotKept.
 	Keep struct{ Study study.Study }

@@ -36,7 +36,7 @@ func (m Model) exported(what string) (Model, []Effect) {
 // exports write a file of the answers; the Name they give is its ending.
 var exports = map[string]func(Model) Download{
 	"report-text": func(m Model) Download {
-		return Download{"-report.txt", "text/plain", report.Text(report.Build(m.Study, m.Result, m.System))}
+		return Download{"-report.txt", "text/plain", report.Text(report.Build(m.Study, m.Whole, m.System))}
 	},
 	"charts-csv": func(m Model) Download {
 		return m.sheetsOf("-curves.csv", func(p study.Part, add func(title, csv string)) {
@@ -65,7 +65,7 @@ func (m Model) sheetsOf(ending string, list func(p study.Part, add func(title, c
 		b.WriteString(`"` + strings.ReplaceAll(title, `"`, `""`) + "\"\r\n" + csv)
 	}
 	for _, sheet := range study.Sheets() {
-		list(m.Result.Parts[sheet], add)
+		list(m.Whole.Parts[sheet], add)
 	}
 	return Download{ending, "text/csv", b.String()}
 }

@@ -1,6 +1,7 @@
 package state
 
 import (
+	"reflect"
 	"strings"
 	"testing"
 
@@ -196,12 +197,65 @@ func TestAsked(t *testing.T) {
 
 // answer is a computed model.
 func answer(m Model) Model {
-	return after(m, Answered{m.Revision, study.Run(m.Study)})
+	return after(m, Answered{Revision: m.Revision, Parts: study.Run(m.Study).Parts})
+}
+
+// A sheet shows what it showed until its own part comes; only the whole is printed.
+func TestAnsweredInPieces(t *testing.T) {
+	m := answer(New())
+	before := m.Result
+	m = after(m, Edited{"field.porosity", "0.3", "fraction"}, Routed{"/rock"})
+	parts := study.Run(m.Study).Parts
+	only := func(sheet study.Sheet) map[study.Sheet]study.Part {
+		return map[study.Sheet]study.Part{sheet: parts[sheet]}
+	}
+	m = after(m, Answered{Revision: m.Revision, Parts: only(study.SheetField), More: true})
+	if !m.Computing || m.Updating(study.SheetField) || !m.Updating(study.SheetFront) {
+		t.Error("after the first piece the others are not awaited")
+	}
+	if got := m.Result.Parts[study.SheetField]; !reflect.DeepEqual(got, parts[study.SheetField]) || reflect.DeepEqual(got, before.Parts[study.SheetField]) {
+		t.Error("the piece that came is not shown")
+	}
+	if !reflect.DeepEqual(m.Result.Parts[study.SheetFront], before.Parts[study.SheetFront]) || !reflect.DeepEqual(m.Whole, before) {
+		t.Error("what has not come yet is no longer as it was")
+	}
+	_, asked := Update(m, Routed{"/front"})
+	if runs := of[Run](asked); len(runs) != 1 || runs[0].First != study.SheetFront || runs[0].Revision != m.Revision {
+		t.Errorf("another sheet that is still to come asks for %v", runs)
+	}
+	for _, answered := range []string{"/field", "/report"} {
+		if _, asked := Update(m, Routed{answered}); len(asked) > 0 {
+			t.Errorf("%s asks for %v", answered, asked)
+		}
+	}
+	grows := parts[study.SheetFront]
+	grows.Left = 0.4
+	m = after(m, Answered{Revision: m.Revision, Parts: map[study.Sheet]study.Part{study.SheetFront: grows}, More: true})
+	if !m.Updating(study.SheetFront) || m.Result.Parts[study.SheetFront].Left != 0.4 {
+		t.Error("a part that grows is not shown, or taken for whole")
+	}
+	m = after(m, Answered{Revision: m.Revision, Parts: only(study.SheetFront), More: true})
+	m = after(m, Answered{Revision: m.Revision, Parts: only(study.SheetRock)})
+	if m.Computing || !reflect.DeepEqual(m.Whole, study.Run(m.Study)) || !reflect.DeepEqual(m.Whole, m.Result) {
+		t.Error("the pieces together are not the whole")
+	}
+}
+
+// A sheet that is no longer asked of the study is gone with the last piece.
+func TestCasesGone(t *testing.T) {
+	m := answer(after(New(), CaseAdded{}))
+	if _, there := m.Result.Parts[study.SheetCompare]; !there {
+		t.Fatal("the cases are not compared")
+	}
+	m = answer(after(m, CaseRemoved{}))
+	if _, there := m.Result.Parts[study.SheetCompare]; there {
+		t.Error("cases that are gone are compared")
+	}
 }
 
 func TestAnswered(t *testing.T) {
 	m := after(New(), Edited{oil, "4", "cp"})
-	old := after(m, Answered{m.Revision - 1, study.Result{}})
+	old := after(m, Answered{Revision: m.Revision - 1})
 	if !old.Computing || old.ResultRevision != 0 {
 		t.Error("the answer to an earlier study was taken")
 	}
@@ -264,11 +318,11 @@ func TestExportWaitsForItsAnswers(t *testing.T) {
 	if len(of[Download](effects)) > 0 {
 		t.Fatal("answers to an earlier study are handed over with this one")
 	}
-	m, effects = Update(m, Answered{m.Revision, study.Run(m.Study)})
+	m, effects = Update(m, Answered{Revision: m.Revision, Parts: study.Run(m.Study).Parts})
 	if len(of[Download](effects)) != 1 {
 		t.Errorf("the export that is owed is not handed over: %v", effects)
 	}
-	if _, effects = Update(m, Answered{m.Revision, m.Result}); len(effects) > 0 {
+	if _, effects = Update(m, Answered{Revision: m.Revision, Parts: m.Result.Parts}); len(effects) > 0 {
 		t.Errorf("it is handed over twice: %v", effects)
 	}
 }

@@ -176,7 +176,7 @@ func TestRouted(t *testing.T) {
 		"/attic":               {Sheet: "front"},
 		"/rock?colour=red&&=&": {Sheet: "rock"},
 	} {
-		m, effects := Update(New(), Routed{fragment})
+		m, effects := Update(answer(New()), Routed{fragment})
 		if m.Route != want || len(effects) > 0 {
 			t.Errorf("%q leads to %v and asks for %v, want %v", fragment, m.Route, effects, want)
 		}

@@ -88,9 +88,12 @@ type (
 	Kept        struct{} // the autosave is written
 	NotKept     struct{ Reason string }
 
+	// Answered: parts of the answer to a study have come; More of them are to come, or
+	// these were the last.
 	Answered struct {
 		Revision int
-		Result   study.Result
+		Parts    map[study.Sheet]study.Part
+		More     bool
 	}
 	EngineFailed struct {
 		Revision int

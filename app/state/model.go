@@ -20,10 +20,11 @@ type Model struct {
 	Messages map[string]string // what is wrong with an input and what is allowed, by path
 	Rows     []Row             // the laboratory table as typed: what the grid shows; Study.Rock.Table is the last good reading of it
 
-	Result         study.Result
-	ResultRevision int    // the Study.Revision that Result answers
-	Computing      bool   // an answer to Revision is still to come
-	Failure        string // the engine's own failure, a bug to report; empty otherwise
+	Result         study.Result // the newest part of each sheet: while Computing, some still answer what stood before
+	Whole          study.Result // the last result that had come whole: what is printed and exported
+	ResultRevision int          // the Study.Revision that Whole answers
+	Computing      bool         // some part of the answer to Revision is still to come
+	Failure        string       // the engine's own failure, a bug to report; empty otherwise
 
 	// LastGood is the last answer of each sheet to inputs that stood before the step
 	// under way: what is shown, marked, while the newest ones contradict each other.
@@ -44,6 +45,7 @@ type Model struct {
 	Evidence []wire.Evidence // the published checks, in order
 	Checking bool            // some of them are still to be computed
 
+	answered   map[study.Sheet]bool // the sheets whose whole part answers Revision
 	history    history
 	opened     *study.Study // the study as it was opened
 	formerKept *study.Study // the former study that the browser keeps

@@ -89,9 +89,11 @@ func (m Model) show(p page) (Model, []Effect) {
 
 // compute asks for the answers to the study.
 func (m Model) compute() (Model, []Effect) {
-	m.Computing = true
-	return m, []Effect{Run{m.Revision, m.Study}}
+	m.Computing, m.answered = true, nil
+	return m, []Effect{m.run()}
 }
+
+func (m Model) run() Run { return Run{m.Revision, m.Study, study.Sheet(m.Route.Sheet)} }
 
 func (p page) same(q page) bool {
 	return p.former == q.former && maps.Equal(p.drafts, q.drafts) && maps.Equal(p.messages, q.messages) &&

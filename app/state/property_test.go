@@ -56,7 +56,7 @@ func random(r *rand.Rand, m Model) Msg {
 	case 21:
 		return []Msg{Routed{"/rock"}, Routed{"/front?embed"}, Routed{"/field?study=" + text}, Kept{}, NotKept{text}}[r.IntN(5)]
 	case 22:
-		return []Msg{Answered{m.Revision - r.IntN(2), study.Result{}}, EngineFailed{m.Revision, text}, EngineFailed{0, text}}[r.IntN(3)]
+		return []Msg{Answered{Revision: m.Revision - r.IntN(2), Parts: map[study.Sheet]study.Part{study.Sheets()[r.IntN(3)]: {Left: float64(r.IntN(2)) / 2}}, More: r.IntN(2) == 0}, EngineFailed{m.Revision, text}, EngineFailed{0, text}}[r.IntN(3)]
 	case 23, 24:
 		return []Msg{CaseAdded{}, CaseAdded{text}, CaseRemoved{r.IntN(7) - 1}, CaseNamed{r.IntN(3), text}, CaseInputRemoved{r.IntN(3), path}}[r.IntN(5)]
 	case 25:

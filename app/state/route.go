@@ -3,18 +3,21 @@ package state
 import (
 	"slices"
 	"strings"
+
+	"brinefront/physics/study"
 )
 
 const firstSheet = "front"
 
-var sheets = []string{"rock", firstSheet, "field", "compare", "report", "evidence"}
+// sheets are those of the study, and two besides.
+var sheets = append(study.Sheets(), "report", "evidence")
 
 // readFragment reads an address: "/field", "/front?embed&study=...". A sheet that
 // does not exist is the first one; names that mean nothing here are passed over.
 func readFragment(fragment string) (route Route, link string) {
 	path, query, _ := strings.Cut(strings.TrimPrefix(fragment, "#"), "?")
 	route.Sheet = strings.Trim(path, "/")
-	if !slices.Contains(sheets, route.Sheet) {
+	if !slices.Contains(sheets, study.Sheet(route.Sheet)) {
 		route.Sheet = firstSheet
 	}
 	for _, item := range strings.Split(query, "&") {
@@ -40,9 +43,13 @@ func (r Route) fragment() string {
 // which undo leads back; the autosave is not written until the study is changed.
 func (m Model) routed(msg Routed) (Model, []Effect) {
 	route, link := readFragment(msg.Fragment)
+	elsewhere := m.Route.Sheet != route.Sheet
 	m.Route = route
 	if link == "" {
 		m.linked = false
+		if elsewhere {
+			return m, m.hurried()
+		}
 		return m, nil
 	}
 	st, err := readLink(link)
@@ -61,6 +68,14 @@ func (m Model) routed(msg Routed) (Model, []Effect) {
 	}
 	m.Saved = Saving{}
 	return m, unkept(effects)
+}
+
+// hurried has the sheet that is looked at answered next, while answers are to come.
+func (m Model) hurried() []Effect {
+	if sheet := study.Sheet(m.Route.Sheet); slices.Contains(study.Sheets(), sheet) && m.Updating(sheet) {
+		return []Effect{m.run()}
+	}
+	return nil
 }
 
 // unkept are the effects without what the browser is to keep.

@@ -90,7 +90,7 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 		m.Saved = Saving{Reason: msg.Reason}
 		return m, nil
 	case Answered:
-		return m.answered(msg)
+		return m.answeredBy(msg)
 	case EngineFailed:
 		return m.engineFailed(msg), nil
 	case EvidenceAsked:

@@ -41,6 +41,8 @@ func (a *Answers) Render() app.UI {
 	return all.Body(
 		app.P().Class("stopped").Hidden(!a.Stale).
 			Text("◌ Answer to the inputs before. The inputs as they stand have none; figures, pictures and tables below are of those before."),
+		app.P().Class("stopped").Hidden(a.Part.Left == 0).
+			Text("… "+Done(a.Part)+" computed. Figures, pictures and tables below are on their way and stand for what there is."),
 		app.P().Class("sentence").ID("answer-"+string(a.Sheet)).Body(a.sentence()...),
 		app.P().Class("stopped").Hidden(a.Part.Status != study.Stopped).
 			Text("◐ The computation stopped short. What it reached is shown; treat it as provisional."),
@@ -52,6 +54,9 @@ func (a *Answers) Render() app.UI {
 		),
 	)
 }
+
+// Done is how much there is of a part that grows.
+func Done(p study.Part) string { return strconv.Itoa(int(100*(1-p.Left))) + " %" }
 
 func (a *Answers) sentence() []app.UI {
 	var words []app.UI

@@ -3,27 +3,26 @@ package wire
 import (
 	"encoding/binary"
 	"errors"
-	"maps"
 	"math"
 	"slices"
 
 	"brinefront/physics/study"
 )
 
-// Numbers are the series of a result's charts and tables: nine tenths of a reply.
+// Numbers are the series of a part's charts and tables: nine tenths of a reply.
 // As digits between commas they would take longer to read than to compute; as
 // bytes they are read at once and lose no bit. A series that is there twice, as the
 // saturations below several curves, is sent once.
 type Numbers struct {
-	Place   []int  `json:"place"`   // of every series of the result, among the distinct ones; -1: it has none
+	Place   []int  `json:"place"`   // of every series of the part, among the distinct ones; -1: it has none
 	Lengths []int  `json:"lengths"` // of the distinct series
 	Bytes   []byte `json:"bytes"`   // these end to end: IEEE 754 doubles, little-endian
 }
 
 const doubleSize = 8 // bytes
 
-// Pack parts a result into numbers and the rest. The result itself is left alone.
-func Pack(whole study.Result) (rest study.Result, numbers Numbers) {
+// Pack takes a part apart into numbers and the rest. The part itself is left alone.
+func Pack(whole study.Part) (rest study.Part, numbers Numbers) {
 	rest = own(whole)
 	places := map[string]int{} // by the bytes of a series
 	for _, series := range all(rest) {
@@ -48,8 +47,8 @@ func Pack(whole study.Result) (rest study.Result, numbers Numbers) {
 }
 
 // Unpack puts the numbers back where Pack took them from. A series that was empty
-// comes back as nil. Errors: the numbers belong to another result.
-func Unpack(rest study.Result, numbers Numbers) (study.Result, error) {
+// comes back as nil. Errors: the numbers belong to another part.
+func Unpack(rest study.Part, numbers Numbers) (study.Part, error) {
 	whole := own(rest)
 	left := numbers.Bytes
 	distinct := make([][]float64, len(numbers.Lengths))
@@ -78,39 +77,32 @@ func Unpack(rest study.Result, numbers Numbers) (study.Result, error) {
 	return whole, nil
 }
 
-var errForeign = errors.New("the packed numbers do not fit the result they came with")
+var errForeign = errors.New("the packed numbers do not fit the part they came with")
 
 // own is a copy whose series can be exchanged.
-func own(r study.Result) study.Result {
-	r.Parts = maps.Clone(r.Parts)
-	for sheet, part := range r.Parts {
-		part.Charts, part.Tables = slices.Clone(part.Charts), slices.Clone(part.Tables)
-		for i := range part.Charts {
-			part.Charts[i].Lines = slices.Clone(part.Charts[i].Lines)
-		}
-		for i := range part.Tables {
-			part.Tables[i].Columns = slices.Clone(part.Tables[i].Columns)
-		}
-		r.Parts[sheet] = part
+func own(p study.Part) study.Part {
+	p.Charts, p.Tables = slices.Clone(p.Charts), slices.Clone(p.Tables)
+	for i := range p.Charts {
+		p.Charts[i].Lines = slices.Clone(p.Charts[i].Lines)
 	}
-	return r
+	for i := range p.Tables {
+		p.Tables[i].Columns = slices.Clone(p.Tables[i].Columns)
+	}
+	return p
 }
 
-// all lists the series of a result, always in the same order.
-func all(r study.Result) []*[]float64 {
+// all lists the series of a part, always in the same order.
+func all(p study.Part) []*[]float64 {
 	var list []*[]float64
-	for _, sheet := range slices.Sorted(maps.Keys(r.Parts)) {
-		part := r.Parts[sheet]
-		for _, chart := range part.Charts {
-			for i := range chart.Lines {
-				l := &chart.Lines[i]
-				list = append(list, &l.X, &l.Y, &l.Low)
-			}
+	for _, chart := range p.Charts {
+		for i := range chart.Lines {
+			l := &chart.Lines[i]
+			list = append(list, &l.X, &l.Y, &l.Low)
 		}
-		for _, table := range part.Tables {
-			for i := range table.Columns {
-				list = append(list, &table.Columns[i].Values)
-			}
+	}
+	for _, table := range p.Tables {
+		for i := range table.Columns {
+			list = append(list, &table.Columns[i].Values)
 		}
 	}
 	return list

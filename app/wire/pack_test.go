@@ -10,31 +10,35 @@ import (
 	"brinefront/physics/study"
 )
 
-// over is a result with one chart and one table.
-func over(lines []study.Line, columns []study.Column) study.Result {
-	return study.Result{Parts: map[study.Sheet]study.Part{
-		study.SheetRock:  {Charts: []study.Chart{{ID: "a", Lines: lines}}},
-		study.SheetField: {Tables: []study.Grid{{ID: "b", Columns: columns}}},
-	}}
+// over is a part with one chart and one table.
+func over(lines []study.Line, columns []study.Column) study.Part {
+	return study.Part{Charts: []study.Chart{{ID: "a", Lines: lines}}, Tables: []study.Grid{{ID: "b", Columns: columns}}}
 }
 
-// A result comes back to the last bit, and packing leaves the original alone.
+// A part comes back to the last bit, and packing leaves the original alone.
 func TestPackedAndBack(t *testing.T) {
 	shared := []float64{0, 1.0 / 3, math.MaxFloat64}
 	odd := over(
 		[]study.Line{{ID: "x", X: shared, Y: []float64{math.Copysign(0, -1), 5e-324, math.Pi}}, {ID: "y", X: shared, Y: shared, Low: shared[:2]}, {ID: "again", X: slices.Clone(shared)}, {ID: "none"}},
 		[]study.Column{{Values: shared}, {Words: []string{"word"}}})
-	for name, whole := range map[string]study.Result{"demo": study.Run(study.Demo()), "empty": study.Run(study.Empty()), "odd": odd} {
+	parts := map[string]study.Part{"odd": odd, "empty": study.Run(study.Empty()).Parts[study.SheetFront]}
+	for sheet, part := range study.Run(study.Demo()).Parts {
+		parts[string(sheet)] = part
+	}
+	for name, whole := range parts {
 		before := text(t, whole)
 		rest, numbers := Pack(whole)
 		if text(t, whole) != before {
 			t.Errorf("%s: packing changed the original", name)
 		}
-		reply, err := Read([]byte(text(t, Reply{Result: &rest, Numbers: &numbers})))
+		reply, err := Read([]byte(text(t, Reply{Pieces: []Piece{{Sheet: "x"}, {Sheet: "y", Part: &rest, Numbers: numbers}}})))
 		if err != nil {
 			t.Fatalf("%s: %v", name, err)
 		}
-		got := *reply.Result
+		if same := reply.Pieces[0]; same.Sheet != "x" || same.Part != nil {
+			t.Errorf("%s: a part that is as it was came as %+v", name, same)
+		}
+		got := *reply.Pieces[1].Part
 		for i, series := range all(whole) {
 			if again := *all(got)[i]; len(again) != len(*series) {
 				t.Errorf("%s: series %d of %d numbers, had %d", name, i, len(again), len(*series))
@@ -50,8 +54,8 @@ func TestPackedAndBack(t *testing.T) {
 			t.Errorf("%s: the rest came back changed", name)
 		}
 	}
-	// The field's table comes first: its shared column, then the lines of the rock.
-	if _, numbers := Pack(odd); !reflect.DeepEqual(numbers.Place, []int{0, -1, 0, 1, -1, 0, 0, 2, 0, -1, -1, -1, -1, -1}) {
+	// The lines of the chart come first, then the column of the table.
+	if _, numbers := Pack(odd); !reflect.DeepEqual(numbers.Place, []int{0, 1, -1, 0, 0, 2, 0, -1, -1, -1, -1, -1, 0, -1}) {
 		t.Errorf("shared series lie at %v", numbers.Place)
 	}
 }
@@ -69,10 +73,13 @@ func TestForeignNumbers(t *testing.T) {
 		if _, err := Unpack(rest, bad); err == nil {
 			t.Errorf("%s: taken", name)
 		}
+		if _, err := Read([]byte(text(t, Reply{Pieces: []Piece{{Part: &rest, Numbers: bad}}}))); err == nil {
+			t.Errorf("%s: read", name)
+		}
 	}
 }
 
-func text(t *testing.T, v any) string {
+func text(t testing.TB, v any) string {
 	t.Helper()
 	b, err := json.Marshal(v)
 	if err != nil {
@@ -81,16 +88,12 @@ func text(t *testing.T, v any) string {
 	return string(b)
 }
 
-// BenchmarkReply is what the interface does with a reply: plain and packed.
+// BenchmarkReply is what the interface does with a reply of one sheet.
 func BenchmarkReply(b *testing.B) {
-	whole := study.Run(study.Demo())
-	rest, numbers := Pack(whole)
-	for name, reply := range map[string]Reply{"plain": {Result: &whole}, "packed": {Result: &rest, Numbers: &numbers}} {
-		sent, err := json.Marshal(reply)
-		if err != nil {
-			b.Fatal(err)
-		}
-		b.Run(name, func(b *testing.B) {
+	for sheet, whole := range study.Run(study.Demo()).Parts {
+		rest, numbers := Pack(whole)
+		sent := []byte(text(b, Reply{Pieces: []Piece{{Sheet: sheet, Part: &rest, Numbers: numbers}}}))
+		b.Run(string(sheet), func(b *testing.B) {
 			b.ReportMetric(float64(len(sent))/1e3, "kB")
 			for b.Loop() {
 				if _, err := Read(sent); err != nil {

@@ -11,6 +11,7 @@ import (
 // Kinds of request.
 const (
 	Run    = "run"    // evaluate Study; one reply with Result
+	Pieces = "pieces" // evaluate Study, the sheet First before the others; replies with Pieces, More in all but the last. A newer request of this kind makes an end of it
 	Checks = "checks" // list the evidence; one reply with Checks, nothing computed
 	Check  = "check"  // compute the evidence named CheckID; one reply with one of Checks
 )
@@ -19,9 +20,9 @@ const (
 type Request struct {
 	ID      int          `json:"id"`
 	Kind    string       `json:"kind"`
-	Study   *study.Study `json:"study,omitempty"`
+	Study   *study.Study `json:"study,omitempty"` // none in a request for pieces: go on with the study of the last one
+	First   study.Sheet  `json:"first,omitempty"`
 	CheckID string       `json:"checkId,omitempty"`
-	Packed  bool         `json:"packed,omitempty"` // the reply may come as Pack has it
 }
 
 // Reply is what the engine answers. Failure is the engine's own bug in words;
@@ -30,23 +31,36 @@ type Reply struct {
 	ID      int           `json:"id"`
 	Kind    string        `json:"kind"`
 	Result  *study.Result `json:"result,omitempty"`
-	Numbers *Numbers      `json:"numbers,omitempty"` // of Result, when it was asked for packed
+	Pieces  []Piece       `json:"pieces,omitempty"`
+	More    bool          `json:"more,omitempty"` // another reply follows
 	Checks  []Evidence    `json:"checks,omitempty"`
 	Failure string        `json:"failure,omitempty"`
 }
 
-// Read reads a reply, packed or not.
+// Piece is the part of one sheet.
+type Piece struct {
+	Sheet   study.Sheet `json:"sheet"`
+	Part    *study.Part `json:"part,omitempty"` // nil: as it was last sent by this engine
+	Numbers Numbers     `json:"numbers,omitzero"`
+}
+
+// Read reads a reply and puts the numbers of its pieces in their places.
 func Read(text []byte) (Reply, error) {
 	var r Reply
 	if err := json.Unmarshal(text, &r); err != nil {
 		return r, err
 	}
-	if r.Result == nil || r.Numbers == nil {
-		return r, nil
+	for i, piece := range r.Pieces {
+		if piece.Part == nil {
+			continue
+		}
+		whole, err := Unpack(*piece.Part, piece.Numbers)
+		if err != nil {
+			return r, err
+		}
+		r.Pieces[i].Part, r.Pieces[i].Numbers = &whole, Numbers{}
 	}
-	whole, err := Unpack(*r.Result, *r.Numbers)
-	r.Result, r.Numbers = &whole, nil
-	return r, err
+	return r, nil
 }
 
 // Evidence is one published check, computed or not yet.

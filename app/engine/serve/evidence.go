@@ -6,7 +6,7 @@ import (
 )
 
 // checks lists the evidence, nothing computed.
-func checks(_ wire.Request, send func(wire.Reply)) {
+func checks(_ *Desk, _ wire.Request, send func(wire.Reply, ...[]byte), _ func()) {
 	var list []wire.Evidence
 	for _, c := range evidence.All() {
 		list = append(list, stated(c))
@@ -15,7 +15,7 @@ func checks(_ wire.Request, send func(wire.Reply)) {
 }
 
 // check computes one piece of evidence.
-func check(asked wire.Request, send func(wire.Reply)) {
+func check(_ *Desk, asked wire.Request, send func(wire.Reply, ...[]byte), _ func()) {
 	c, known := evidence.Find(asked.CheckID)
 	if !known {
 		panic("a request for the unknown check " + asked.CheckID)

@@ -1,29 +1,23 @@
 package serve
 
-import (
-	"brinefront/app/wire"
-	"brinefront/physics/study"
-)
+import "brinefront/app/wire"
 
-// kinds are the requests that are answered. A handler sends one reply or more.
-var kinds = map[string]func(asked wire.Request, send func(wire.Reply)){
+// handler answers a request with one reply or more; pieces are written already. turn
+// lets further requests come in.
+type handler func(d *Desk, asked wire.Request, send func(answer wire.Reply, pieces ...[]byte), turn func())
+
+// kinds are the requests that are answered.
+var kinds = map[string]handler{
 	wire.Run:    run,
+	wire.Pieces: pieces,
 	wire.Checks: checks,
 	wire.Check:  check,
 }
 
-// memory keeps fits from one edit to the next. A worker answers one request at a time.
-var memory study.Memory
-
-func run(asked wire.Request, send func(wire.Reply)) {
+func run(d *Desk, asked wire.Request, send func(wire.Reply, ...[]byte), _ func()) {
 	if asked.Study == nil {
 		panic("a request to run that holds no study")
 	}
-	result := memory.Run(*asked.Study)
-	if !asked.Packed {
-		send(wire.Reply{Result: &result})
-		return
-	}
-	rest, numbers := wire.Pack(result)
-	send(wire.Reply{Result: &rest, Numbers: &numbers})
+	result := d.memory.Run(*asked.Study)
+	send(wire.Reply{Result: &result})
 }

@@ -6,24 +6,91 @@ import (
 	"encoding/json"
 	"fmt"
 	"runtime/debug"
+	"slices"
+	"sync"
 
 	"brinefront/app/wire"
+	"brinefront/physics/study"
 )
 
-// Serve answers one request, a JSON text as app/wire has it. Whatever happens,
-// reply is called at least once: what goes wrong in here is the program's own
-// mistake and is answered as a Failure that says what to send us.
-func Serve(request []byte, reply func([]byte)) {
-	var asked wire.Request
+// Desk answers requests one after another, in the order they come. What it computes
+// in pieces it lays aside for a newer request of that kind. The zero value is ready.
+type Desk struct {
+	mu    sync.Mutex
+	queue []order // not begun yet
+
+	memory     study.Memory      // of fits, from one edit to the next
+	evaluation *study.Evaluation // of the last request for pieces
+	sent       map[study.Sheet]string
+}
+
+// order is a request that waits, and where its replies go.
+type order struct {
+	asked request
+	fault error // why it cannot be read
+	reply func([]byte)
+}
+
+// request is one whose study is not read until its turn comes: many never have one.
+type request struct {
+	wire.Request
+	Study json.RawMessage `json:"study"`
+}
+
+// Take puts a request, a JSON text as app/wire has it, in the queue. Of the requests
+// for pieces that wait there, only the newest is ever begun.
+func (d *Desk) Take(text []byte, reply func([]byte)) {
+	o := order{reply: reply}
+	o.fault = json.Unmarshal(text, &o.asked)
+	d.mu.Lock()
+	defer d.mu.Unlock()
+	if o.asked.Kind == wire.Pieces {
+		d.queue = slices.DeleteFunc(d.queue, func(old order) bool {
+			if old.asked.Kind == wire.Pieces && o.asked.Study == nil {
+				o.asked.Study = old.asked.Study // which this one goes on with
+			}
+			return old.asked.Kind == wire.Pieces
+		})
+	}
+	d.queue = append(d.queue, o)
+}
+
+// Work answers all that is asked. In between it calls turn, which lets further
+// requests come in.
+func (d *Desk) Work(turn func()) {
+	for {
+		d.mu.Lock()
+		if len(d.queue) == 0 {
+			d.mu.Unlock()
+			return
+		}
+		o := d.queue[0]
+		d.queue = d.queue[1:]
+		d.mu.Unlock()
+		d.serve(o, turn)
+	}
+}
+
+// superseded reports whether another request for pieces has come.
+func (d *Desk) superseded() bool {
+	d.mu.Lock()
+	defer d.mu.Unlock()
+	return slices.ContainsFunc(d.queue, func(o order) bool { return o.asked.Kind == wire.Pieces })
+}
+
+// serve answers a request. Whatever happens, there is at least one reply: what goes
+// wrong in here is the program's own mistake and is answered as a Failure that says
+// what to send us.
+func (d *Desk) serve(o order, turn func()) {
 	answered := false
-	send := func(answer wire.Reply) {
-		answer.ID, answer.Kind = asked.ID, asked.Kind
+	send := func(answer wire.Reply, pieces ...[]byte) {
+		answer.ID, answer.Kind = o.asked.ID, o.asked.Kind
 		text, err := json.Marshal(answer)
 		if err != nil {
 			panic(err) // a result that holds what JSON cannot say, as NaN
 		}
 		answered = true
-		reply(text)
+		o.reply(with(text, pieces))
 	}
 	defer func() {
 		cause := recover()
@@ -31,19 +98,41 @@ func Serve(request []byte, reply func([]byte)) {
 			return
 		}
 		if cause == nil {
-			cause = fmt.Sprintf("a request of kind %q was not answered", asked.Kind)
+			cause = fmt.Sprintf("a request of kind %q was not answered", o.asked.Kind)
 		}
+		d.evaluation = nil
 		send(wire.Reply{Failure: bug(cause)})
 	}()
 
-	if err := json.Unmarshal(request, &asked); err != nil {
-		panic(fmt.Errorf("a request that cannot be read: %w", err))
+	if o.fault != nil {
+		panic(fmt.Errorf("a request that cannot be read: %w", o.fault))
 	}
-	kind, known := kinds[asked.Kind]
+	if o.asked.Study != nil {
+		if err := json.Unmarshal(o.asked.Study, &o.asked.Request.Study); err != nil {
+			panic(fmt.Errorf("a request whose study cannot be read: %w", err))
+		}
+	}
+	kind, known := kinds[o.asked.Kind]
 	if !known {
-		panic(fmt.Sprintf("a request of the unknown kind %q", asked.Kind))
+		panic(fmt.Sprintf("a request of the unknown kind %q", o.asked.Kind))
 	}
-	kind(asked, send)
+	kind(d, o.asked.Request, send, turn)
+}
+
+// with is a reply with pieces that are written already.
+func with(reply []byte, pieces [][]byte) []byte {
+	if len(pieces) == 0 {
+		return reply
+	}
+	text := append([]byte(nil), `{"pieces":[`...)
+	for i, piece := range pieces {
+		if i > 0 {
+			text = append(text, ',')
+		}
+		text = append(text, piece...)
+	}
+	text = append(text, "],"...)
+	return append(text, reply[1:]...) // after its brace
 }
 
 // bug is a failure in words.

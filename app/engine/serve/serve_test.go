@@ -11,18 +11,32 @@ import (
 	"brinefront/physics/study"
 )
 
-// answers serves a request and reads what comes back.
+// answers serves a request at a new desk and reads what comes back.
 func answers(t *testing.T, request string) []wire.Reply {
 	t.Helper()
+	var d Desk
+	return at(t, &d, request)
+}
+
+// at serves a request at a desk.
+func at(t testing.TB, d *Desk, request string) []wire.Reply {
+	t.Helper()
 	var replies []wire.Reply
-	Serve([]byte(request), func(text []byte) {
-		var r wire.Reply
-		if err := json.Unmarshal(text, &r); err != nil {
-			t.Fatalf("a reply that is no JSON: %v", err)
-		}
-		replies = append(replies, r)
-	})
+	d.Take([]byte(request), heardBy(t, &replies))
+	d.Work(func() {})
 	return replies
+}
+
+// heardBy reads replies into a list.
+func heardBy(t testing.TB, replies *[]wire.Reply) func([]byte) {
+	return func(text []byte) {
+		t.Helper()
+		r, err := wire.Read(text)
+		if err != nil {
+			t.Fatalf("a reply that cannot be read: %v", err)
+		}
+		*replies = append(*replies, r)
+	}
 }
 
 func written(t testing.TB, r wire.Request) string {
@@ -56,30 +70,6 @@ func TestRunAnswersWithTheResult(t *testing.T) {
 	}
 	if compared == 0 {
 		t.Error("the demonstration study has no figure")
-	}
-}
-
-// What is asked for packed says the same.
-func TestPackedAnswer(t *testing.T) {
-	demo := study.Demo()
-	var reply wire.Reply
-	Serve([]byte(written(t, wire.Request{ID: 1, Kind: wire.Run, Study: &demo, Packed: true})), func(text []byte) {
-		var err error
-		if reply, err = wire.Read(text); err != nil {
-			t.Fatal(err)
-		}
-	})
-	plain := answers(t, written(t, wire.Request{ID: 1, Kind: wire.Run, Study: &demo}))[0]
-	got, err := json.Marshal(reply)
-	if err != nil {
-		t.Fatal(err)
-	}
-	want, err := json.Marshal(plain)
-	if err != nil {
-		t.Fatal(err)
-	}
-	if string(got) != string(want) {
-		t.Errorf("packed and read: %.300s, plain: %.300s", got, want)
 	}
 }
 
@@ -124,6 +114,8 @@ func TestOwnMistakesAreReportedAsBugs(t *testing.T) {
 		"no JSON":       {`{"id":`, 0, "cannot be read"},
 		"unknown kind":  {`{"id": 4, "kind": "guess"}`, 4, `"guess"`},
 		"no study":      {`{"id": 5, "kind": "run"}`, 5, "holds no study"},
+		"none before":   {`{"id": 9, "kind": "pieces"}`, 9, "follows none"},
+		"no such study": {`{"id": 9, "kind": "pieces", "study": 3}`, 9, "cannot be read"},
 		"unknown check": {`{"id": 6, "kind": "check", "checkId": "none-such"}`, 6, "none-such"},
 	} {
 		replies := answers(t, c.request)
@@ -134,7 +126,7 @@ func TestOwnMistakesAreReportedAsBugs(t *testing.T) {
 }
 
 func TestResultThatJSONCannotSayIsReported(t *testing.T) {
-	kinds["not a number"] = func(_ wire.Request, send func(wire.Reply)) {
+	kinds["not a number"] = func(_ *Desk, _ wire.Request, send func(wire.Reply, ...[]byte), _ func()) {
 		zero := 0.0
 		send(wire.Reply{Checks: []wire.Evidence{{Items: []wire.Item{{Computed: zero / zero}}}}})
 	}

@@ -7,63 +7,9 @@ import (
 	"path/filepath"
 	"testing"
 
+	"brinefront/physics/capillary"
 	"brinefront/physics/relperm"
 )
-
-// Small capillary curves with the formulas of the independent cases; the models of
-// the product have tests of their own.
-
-type vanGenuchten struct{ P0, N, Swr, Snr float64 }
-
-func (c vanGenuchten) Ends() (low, high float64) { return c.Swr, 1 - c.Snr }
-func (c vanGenuchten) Knots() []float64          { return nil }
-func (c vanGenuchten) At(sw float64) (pc, slope float64) {
-	low, high := c.Ends()
-	switch {
-	case sw <= low:
-		return math.Inf(1), math.Inf(-1)
-	case sw > high:
-		return 0, 0
-	}
-	m, s := 1-1/c.N, (sw-low)/(high-low)
-	// Se^(-1/m) - 1 next to Se = 1 by way of the distance from it.
-	inner := math.Expm1(-math.Log1p(-(high-sw)/(high-low)) / m)
-	if s < 0.5 {
-		inner = math.Pow(s, -1/m) - 1
-	}
-	pc = c.P0 * math.Pow(inner, 1/c.N)
-	return pc, -c.P0 / c.N * math.Pow(inner, 1/c.N-1) / m * math.Pow(s, -1/m-1) / (high - low)
-}
-
-type brooksCorey struct{ Pe, Lambda, Swr, Snr float64 }
-
-func (c brooksCorey) Ends() (low, high float64) { return c.Swr, 1 - c.Snr }
-func (c brooksCorey) Knots() []float64          { return nil }
-func (c brooksCorey) At(sw float64) (pc, slope float64) {
-	low, high := c.Ends()
-	if sw > high {
-		return c.Pe, 0
-	}
-	s := max(0, (sw-low)/(high-low))
-	return c.Pe * math.Pow(s, -1/c.Lambda), -c.Pe / c.Lambda * math.Pow(s, -1/c.Lambda-1) / (high - low)
-}
-
-type skjaeveland struct{ Cw, Aw, Co, Ao, Swr, Sor float64 }
-
-func (c skjaeveland) Ends() (low, high float64) { return c.Swr, 1 - c.Sor }
-func (c skjaeveland) Knots() []float64          { return nil }
-func (c skjaeveland) At(sw float64) (pc, slope float64) {
-	low, high := c.Ends()
-	switch {
-	case sw <= low:
-		return math.Inf(1), math.Inf(-1)
-	case sw >= high:
-		return math.Inf(-1), math.Inf(-1)
-	}
-	w, o := (sw-c.Swr)/(1-c.Swr), (high-sw)/(1-c.Sor)
-	water, oil := c.Cw*math.Pow(w, -c.Aw), c.Co*math.Pow(o, -c.Ao)
-	return water + oil, -c.Aw*water/(w*(1-c.Swr)) + c.Ao*oil/(o*(1-c.Sor))
-}
 
 // independentCase is a case of testdata/independent/selfsimilar.json.
 type independentCase struct {
@@ -94,11 +40,11 @@ func (c independentCase) span(t *testing.T) *Span {
 	must(t, json.Unmarshal(in.Pc, &kind))
 	switch kind.Type {
 	case "van_genuchten":
-		var pc vanGenuchten
+		var pc struct{ P0, N, Swr, Snr float64 }
 		must(t, json.Unmarshal(in.Pc, &pc))
-		rock.Pc = pc
+		rock.Pc = capillary.VanGenuchten{Swr: pc.Swr, Snr: pc.Snr, P0: pc.P0, N: pc.N, M: 1 - 1/pc.N}
 	case "skjaeveland":
-		var pc skjaeveland
+		var pc capillary.Skjaeveland
 		must(t, json.Unmarshal(in.Pc, &pc))
 		rock.Pc = pc
 	default:

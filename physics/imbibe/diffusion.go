@@ -98,7 +98,10 @@ type edge struct{ at, value float64 }
 // edgeShare is the distance, as a share of the span, at which the power laws take over.
 // Curves of the trade differ from their leading power by about that share; nearer, too few
 // floating point numbers are left between S and its end.
-const edgeShare = 0x1p-30
+const edgeShare = 0x1p-40
+
+// leastWidth is the narrowest span of saturations that can be told from none.
+const leastWidth = 1e-9
 
 // NewSpan checks the rock and the two saturations. An Inlet of NaN stands for Rock.Inlet.
 // Errors are *InputError.
@@ -123,29 +126,35 @@ func NewSpan(rock Rock, initial, inlet float64) (*Span, error) {
 	if !(initial >= low && initial < high) {
 		return nil, &InputError{"initial water saturation", initial, fmt.Sprintf("from %.6g, where the curves begin, to below %.6g", low, high)}
 	}
-	if initial >= stop {
+	if initial >= stop-leastWidth {
 		return nil, &InputError{"initial water saturation", initial, fmt.Sprintf("below %.6g, where the capillary pressure is zero: above it the rock does not soak", stop)}
 	}
-	if !(inlet > initial && inlet <= high) {
+	if !(inlet-initial > leastWidth && inlet <= high) {
 		return nil, &InputError{"water saturation at the open face", inlet, fmt.Sprintf("above the initial %.6g, at most %.6g", initial, high)}
 	}
 	s := &Span{Rock: rock, Initial: initial, Inlet: inlet}
 	s.start, s.startSlope = rock.FractionalFlow(initial)
-	near := edgeShare * (inlet - initial)
+	near := max(edgeShare*(inlet-initial), 0x1p-48) // some floating point numbers away at least
 	s.low, s.LowPower = power(near, func(u float64) (float64, float64) { sw := initial + u; return rock.Diffusion(sw), sw - initial })
 	s.high, s.HighPower = power(near, func(t float64) (float64, float64) { sw := inlet - t; return rock.Diffusion(sw), inlet - sw })
+	if d := rock.Diffusion(initial); d > 0 && !math.IsInf(d, 1) {
+		s.LowPower = 0
+	}
 	return s, nil
 }
 
-// power measures the leading power of a function at distance 0 from its values at near and
-// 16 near; the function also returns at what distance it really looked.
+// power measures the leading power of a function at distance 0 from its values at near, 16
+// near and 256 near, of which the function also returns where it really looked. What the
+// local power owes to the distance is taken to grow with it.
 func power(near float64, at func(float64) (value, distance float64)) (edge, float64) {
 	v0, d0 := at(near)
 	v1, d1 := at(16 * near)
-	if v0 == 0 || v1 == 0 {
+	v2, d2 := at(256 * near)
+	if v0 == 0 || v1 == 0 || v2 == 0 {
 		return edge{near, 0}, math.Inf(1)
 	}
 	p := math.Log(v1/v0) / math.Log(d1/d0)
+	p -= (math.Log(v2/v1)/math.Log(d2/d1) - p) / 15
 	if math.Abs(p) < 1e-6 {
 		p = 0
 	}

@@ -6,6 +6,7 @@ import (
 	"strings"
 	"testing"
 
+	"brinefront/physics/capillary"
 	"brinefront/physics/relperm"
 )
 
@@ -32,7 +33,7 @@ func TestDiffusionOfIndependentCases(t *testing.T) {
 func wet() Rock {
 	return Rock{Permeability: 3.7e-14, Porosity: 0.227, WaterViscosity: 0.00093, OilViscosity: 0.00217,
 		Kr: relperm.Corey{Swc: 0.193, Sor: 0.247, Krw0: 0.263, Kro0: 0.847, Nw: 3.4, No: 2.3},
-		Pc: vanGenuchten{P0: 21300, N: 2.9, Swr: 0.193, Snr: 0.247}}
+		Pc: capillary.VanGenuchten{Swr: 0.193, Snr: 0.247, P0: 21300, N: 2.9, M: 1 - 1/2.9}}
 }
 
 // TestEndsOfDiffusion holds the powers of Dc at both ends to the leading terms of the
@@ -65,7 +66,7 @@ func TestEndsOfDiffusion(t *testing.T) {
 
 	rock := wet()
 	rock.Kr = relperm.Corey{Swc: 0.193, Sor: 0.247, Krw0: 0.263, Kro0: 0.847, Nw: 1.2, No: 2.3}
-	rock.Pc = brooksCorey{Pe: 5000, Lambda: 2, Swr: 0.193, Snr: 0.247}
+	rock.Pc = capillary.BrooksCorey{Swr: 0.193, Snr: 0.247, Entry: 5000, Lambda: 2}
 	singular, err := NewSpan(rock, 0.193, math.NaN())
 	must(t, err)
 	within(t, "power of a singular Dc", singular.LowPower, 1.2-1-0.5, 1e-7)
@@ -77,7 +78,7 @@ func TestEndsOfDiffusion(t *testing.T) {
 // TestSpanRefuses names the input that cannot be used.
 func TestSpanRefuses(t *testing.T) {
 	mixed := wet()
-	mixed.Pc = skjaeveland{Cw: 3100, Aw: 0.72, Co: -5700, Ao: 0.61, Swr: 0.193, Sor: 0.247}
+	mixed.Pc = capillary.Skjaeveland{Cw: 3100, Aw: 0.72, Co: -5700, Ao: 0.61, Swr: 0.193, Sor: 0.247}
 	stop := mixed.Inlet()
 	for _, c := range []struct {
 		name           string

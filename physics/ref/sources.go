@@ -38,6 +38,7 @@ const (
 	Marquardt1963        ID = "marquardt-1963"
 	McCain1991           ID = "mccain-1991"
 	McPhee2015           ID = "mcphee-2015"
+	McWhorterSunada1990  ID = "mcwhorter-sunada-1990"
 	More1978             ID = "more-1978"
 	Neumaier1974         ID = "neumaier-1974"
 	NISTStRD             ID = "nist-strd"
@@ -48,10 +49,12 @@ const (
 	Osher1984            ID = "osher-1984"
 	PerthameShu1996      ID = "perthame-shu-1996"
 	Perry2019            ID = "perry-2019"
+	Philip1960           ID = "philip-1960"
 	Phillips1981         ID = "phillips-1981"
 	Pope1980             ID = "pope-1980"
 	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
+	SchmidGeiger2012     ID = "schmid-geiger-2012"
 	SeberWild1989        ID = "seber-wild-1989"
 	ShuOsher1988         ID = "shu-osher-1988"
 	Skjaeveland2000      ID = "skjaeveland-2000"
@@ -61,6 +64,7 @@ const (
 	VanLeer1974          ID = "van-leer-1974"
 	VanLeer1979          ID = "van-leer-1979"
 	Welge1952            ID = "welge-1952"
+	Wright1997           ID = "wright-1997"
 )
 
 var sources = map[ID]Source{
@@ -96,17 +100,21 @@ var sources = map[ID]Source{
 	Marquardt1963:        {Authors: "Marquardt", Year: 1963, Title: "An algorithm for least-squares estimation of nonlinear parameters", Where: "J. SIAM 11(2), 431-441"},
 	McCain1991:           {Authors: "McCain", Year: 1991, Title: "Reservoir-fluid property correlations: state of the art", Where: "SPE Reserv. Eng. 6(2), 266-272"},
 	McPhee2015:           {Authors: "McPhee, Reed & Zubizarreta", Year: 2015, Title: "Core Analysis: A Best Practice Guide", Where: "Elsevier"},
+	McWhorterSunada1990:  {Authors: "McWhorter & Sunada", Year: 1990, Title: "Exact integral solutions for two-phase flow", Where: "Water Resour. Res. 26(3), 399-413"},
 	More1978:             {Authors: "Moré", Year: 1978, Title: "The Levenberg-Marquardt algorithm: implementation and theory", Where: "in Watson (ed.) Numerical Analysis, Springer, 105-116"},
 	NISTStRD:             {Authors: "National Institute of Standards and Technology", Year: 1998, Title: "Statistical Reference Datasets: nonlinear regression", Where: "NIST Standard Reference Database 140"},
 	Nielsen1999:          {Authors: "Nielsen", Year: 1999, Title: "Damping parameter in Marquardt's method", Where: "Report IMM-REP-1999-05, Technical University of Denmark"},
 	Lomeland2005:         {Authors: "Lomeland, Ebeltoft & Thomas", Year: 2005, Title: "A new versatile relative permeability correlation", Where: "SCA2005-32"},
 	Oleinik1957:          {Authors: "Oleinik", Year: 1957, Title: "Discontinuous solutions of non-linear differential equations", Where: "Uspekhi Mat. Nauk 12(3), 3-73"},
 	Perry2019:            {Authors: "Green & Southard (eds.)", Year: 2019, Title: "Perry's Chemical Engineers' Handbook", Where: "9th ed., McGraw-Hill"},
+	Philip1960:           {Authors: "Philip", Year: 1960, Title: "General method of exact solution of the concentration-dependent diffusion equation", Where: "Aust. J. Phys. 13, 1-12"},
 	Phillips1981:         {Authors: "Phillips, Igbene, Fair, Ozbek & Tavana", Year: 1981, Title: "A technical databook for geothermal energy utilization", Where: "Report LBL-12810, Lawrence Berkeley Laboratory"},
 	Pope1980:             {Authors: "Pope", Year: 1980, Title: "The application of fractional flow theory to enhanced oil recovery", Where: "SPE J. 20(3), 191-205"},
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
+	SchmidGeiger2012:     {Authors: "Schmid & Geiger", Year: 2012, Title: "Universal scaling of spontaneous imbibition for water-wet systems", Where: "Water Resour. Res. 48, W03507"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
+	Wright1997:           {Authors: "Wright", Year: 1997, Title: "Primal-Dual Interior-Point Methods", Where: "SIAM, Philadelphia"},
 	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},
 	Godunov1959:          {Authors: "Godunov", Year: 1959, Title: "A difference method for numerical calculation of discontinuous solutions of the equations of hydrodynamics", Where: "Mat. Sbornik 47(89)(3), 271-306"},
 	GolubVanLoan2013:     {Authors: "Golub & Van Loan", Year: 2013, Title: "Matrix Computations", Where: "4th ed., Johns Hopkins University Press, secs. 4.2, 8.5"},

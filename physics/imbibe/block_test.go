@@ -8,6 +8,7 @@ import (
 	"path/filepath"
 	"testing"
 
+	"brinefront/physics/capillary"
 	"brinefront/physics/relperm"
 )
 
@@ -191,7 +192,7 @@ func TestRandomBlocks(t *testing.T) {
 		swc, sor := between(0.05, 0.3), between(0.05, 0.35)
 		rock := Rock{Permeability: math.Exp(between(-38, -28)), Porosity: between(0.05, 0.4), WaterViscosity: between(2e-4, 2e-3), OilViscosity: math.Exp(between(-8, -2)),
 			Kr: relperm.Corey{Swc: swc, Sor: sor, Krw0: between(0.05, 1), Kro0: between(0.3, 1), Nw: between(1.5, 6), No: between(1, 6)},
-			Pc: skjaeveland{Cw: between(1e3, 1e5), Aw: between(0.2, 1), Co: between(-1e5, -1e2), Ao: between(0.2, 1), Swr: swc, Sor: sor}}
+			Pc: capillary.Skjaeveland{Cw: between(1e3, 1e5), Aw: between(0.2, 1), Co: between(-1e5, -1e2), Ao: between(0.2, 1), Swr: swc, Sor: sor}}
 		initial := swc + math.Max(0, between(-0.05, 0.05))
 		if !(initial < rock.Inlet()-0.01) {
 			continue

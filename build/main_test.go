@@ -39,16 +39,40 @@ func TestNamesAreReadAndStripped(t *testing.T) {
 	if err != nil || !reflect.DeepEqual(names, []string{"a.b"}) {
 		t.Errorf("names %q, %v", names, err)
 	}
-	stripped, err := stripWasm(named)
+	stripped, err := packWasm(named)
 	if err != nil || !reflect.DeepEqual(stripped, bare) {
 		t.Errorf("stripped to %q, %v", stripped, err)
 	}
 	for _, broken := range []string{"", "\x00asm", "no module at all", "\x00asm\x01\x00\x00\x00\x01\x7f"} {
-		if _, err := stripWasm([]byte(broken)); err == nil {
+		if _, err := packWasm([]byte(broken)); err == nil {
 			t.Errorf("%q passed for a module", broken)
 		}
 	}
 	if _, err := functionNames(bare); err == nil {
 		t.Error("a module without names passed for one that links nothing")
+	}
+}
+
+// Data sections by hand, after section 5.5.14: a count, then {0, i32.const address,
+// end, size, bytes}. 0x40 alone would be a negative address, so 64 takes two bytes.
+func TestDataIsJoinedAcrossFewZeros(t *testing.T) {
+	const header = "\x00asm\x01\x00\x00\x00\x0b"
+	for _, c := range []struct{ what, from, to string }{
+		{"neighbours", "\x0e\x02" + "\x00\x41\x04\x0b\x02ab" + "\x00\x41\x08\x0b\x01c", "\x0b\x01" + "\x00\x41\x04\x0b\x05ab\x00\x00c"},
+		{"far apart", "\x0f\x02" + "\x00\x41\xc0\x00\x0b\x01a" + "\x00\x41\x80\x10\x0b\x01b", "\x0f\x02" + "\x00\x41\xc0\x00\x0b\x01a" + "\x00\x41\x80\x10\x0b\x01b"},
+		{"out of order", "\x0d\x02" + "\x00\x41\x08\x0b\x01a" + "\x00\x41\x04\x0b\x01b", "\x0d\x02" + "\x00\x41\x08\x0b\x01a" + "\x00\x41\x04\x0b\x01b"},
+	} {
+		got, err := packWasm([]byte(header + c.from))
+		if err != nil || string(got) != header+c.to {
+			t.Errorf("%s: packed to %q, %v; want %q", c.what, got, err, header+c.to)
+		}
+	}
+	for what, broken := range map[string]string{
+		"passive":         "\x04\x01\x01\x01a",
+		"shorter than it": "\x07\x01\x00\x41\x04\x0b\x09a",
+	} {
+		if _, err := packWasm([]byte(header + broken)); err == nil {
+			t.Errorf("a segment that is %s passed", what)
+		}
 	}
 }

@@ -23,7 +23,7 @@ type program struct {
 var programs = []program{
 	// The interface computes nothing: without inlined copies of small functions it
 	// is a twentieth smaller to download and as quick to the hand.
-	{"./app", "interface-program.js", "brinefrontInterfaceProgram", []string{"-gcflags=all=-l"}},
+	{"./app", "interface-program.js", "brinefrontInterfaceProgram", []string{"-modfile=" + slimMod, "-gcflags=all=-l"}},
 	// So is the part of the engine that words and orders its results.
 	{"./app/engine", "engine-program.js", "brinefrontEngineProgram", []string{"-gcflags=brinefront/physics/study=-l"}},
 }
@@ -39,6 +39,9 @@ var siteFiles = []string{
 // folder works wherever it is copied.
 func buildSite() error {
 	if err := errors.Join(os.RemoveAll(siteFolder), os.MkdirAll(siteFolder, 0o755), os.MkdirAll(outFolder, 0o755)); err != nil {
+		return err
+	}
+	if err := slimGoApp(); err != nil {
 		return err
 	}
 	for _, p := range programs {
@@ -103,7 +106,7 @@ func (p program) build() error {
 	if err != nil {
 		return err
 	}
-	code, err := stripWasm(whole)
+	code, err := packWasm(whole)
 	if err != nil {
 		return err
 	}

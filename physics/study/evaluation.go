@@ -19,8 +19,8 @@ type job struct {
 // answers false nobody waits any more: the job returns at once, with any part.
 type growing func(Part) bool
 
-// jobs are the sheets in the order of the job. A new sheet is a line here and the
-// function it names. It is no variable, since cases go through it too.
+// jobs are the sheets in the order of the job. A new sheet is a line here and in
+// Sheets, and the function it names. It is no variable, since cases go through it too.
 func jobs() []job {
 	return []job{
 		{sheet: SheetRock, run: func(e *Evaluation, _ growing) (p Part) {
@@ -39,14 +39,9 @@ func jobs() []job {
 	}
 }
 
-// Sheets are the sheets that a study is taken through, in the order of the job.
-func Sheets() []Sheet {
-	var list []Sheet
-	for _, j := range jobs() {
-		list = append(list, j.sheet)
-	}
-	return list
-}
+// Sheets are the sheets that a study is taken through, in the order of the job: the
+// names of jobs once more, for the interface, which would link every solver with them.
+func Sheets() []Sheet { return []Sheet{SheetRock, SheetFront, SheetField, SheetCompare} }
 
 // Evaluation is a study on its way through the sheets: each is computed when it is
 // first wanted, after those it needs.

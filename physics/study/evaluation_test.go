@@ -137,3 +137,13 @@ func TestALongSheetGrows(t *testing.T) {
 		t.Errorf("gone on with, came %v after %d steps", order, *steps)
 	}
 }
+
+func TestSheetsAreThoseOfTheJobs(t *testing.T) {
+	var want []Sheet
+	for _, j := range jobs() {
+		want = append(want, j.sheet)
+	}
+	if !slices.Equal(Sheets(), want) {
+		t.Errorf("Sheets are %q, the jobs are for %q", Sheets(), want)
+	}
+}

@@ -29,7 +29,7 @@ var arrows = map[string][]string{
 	"physics/fv":        {"physics/numeric"},
 	"physics/spread":    {"physics/numeric"},
 	"physics/imbibe":    {"physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid"},
-	"physics/fit":       {"physics/units", "physics/numeric", "physics/relperm"},
+	"physics/fit":       {"physics/units", "physics/numeric", "physics/relperm", "physics/capillary"},
 	"physics/fracflow":  {"physics/numeric", "physics/relperm"},
 	"physics/displace":  {"physics/numeric", "physics/relperm", "physics/fracflow"},
 	"physics/gridding":  {"physics/numeric", "physics/fracflow", "physics/displace", "physics/fv"},

@@ -275,7 +275,7 @@ func (c confidence) size(j int) float64 {
 	if j < iKrw0 {
 		return 1 - c.values[iSwc] - c.values[iSor]
 	}
-	return c.values[j]
+	return math.Abs(c.values[j])
 }
 
 // strongest returns the parameter that j is most correlated with.

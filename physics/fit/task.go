@@ -164,17 +164,7 @@ func (t *task) blocks() []block {
 // solve fits block after block. Starts are tried on a thinned table; the best is
 // then fitted to all rows.
 func (t *task) solve() {
-	all := make([]int, len(t.points.Sw))
-	for i := range all {
-		all[i] = i
-	}
-	few := all
-	if len(all) > thinnedRows {
-		few = make([]int, thinnedRows)
-		for i := range few {
-			few[i] = i * (len(all) - 1) / (thinnedRows - 1)
-		}
-	}
+	all, few := thinned(len(t.points.Sw))
 	for _, b := range t.blocks() {
 		if len(b.free) == 0 {
 			continue
@@ -197,6 +187,22 @@ func (t *task) solve() {
 			t.status = IterationLimit
 		}
 	}
+}
+
+// thinned lists all rows of a table, and those few of them that starts are tried on.
+func thinned(rows int) (all, few []int) {
+	all = make([]int, rows)
+	for i := range all {
+		all[i] = i
+	}
+	if rows <= thinnedRows {
+		return all, all
+	}
+	few = make([]int, thinnedRows)
+	for i := range few {
+		few[i] = i * (rows - 1) / (thinnedRows - 1)
+	}
+	return all, few
 }
 
 // starts are the vectors that a block starts from: every shape of the family, and

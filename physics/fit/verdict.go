@@ -31,7 +31,7 @@ func (t *task) verdict(f Fit, off []row) []string {
 		said = append(said, "The points determine every fitted parameter.")
 	}
 	if len(off) > 0 {
-		said = append(said, listOff(off))
+		said = append(said, listOff(off, phaseNames))
 	}
 	if len(f.state.active) > 0 {
 		said = append(said, t.suppositions(f)...)
@@ -71,11 +71,11 @@ func (t *task) doubt(f Fit, j int) string {
 }
 
 // listOff names points that lie off the curve, the first few.
-func listOff(off []row) string {
+func listOff(off []row, curves [2]string) string {
 	const most = 5
 	var names []string
 	for _, r := range off[:min(len(off), most)] {
-		names = append(names, fmt.Sprintf("%s at Sw = %.4g", phaseNames[r.phase], r.sw))
+		names = append(names, fmt.Sprintf("%s at Sw = %.4g", curves[r.phase], r.sw))
 	}
 	if more := len(off) - most; more > 0 {
 		names = append(names, fmt.Sprintf("%d more", more))

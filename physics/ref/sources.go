@@ -15,6 +15,7 @@ const (
 	Corey1954            ID = "corey-1954"
 	Craig1971            ID = "craig-1971"
 	CrandallMajda1980    ID = "crandall-majda-1980"
+	Cuiec1984            ID = "cuiec-1984"
 	Dake1978             ID = "dake-1978"
 	DawsonLantz1972      ID = "dawson-lantz-1972"
 	Dietz1953            ID = "dietz-1953"
@@ -89,6 +90,7 @@ var sources = map[ID]Source{
 	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
 	Corey1954:            {Authors: "Corey", Year: 1954, Title: "The interrelation between gas and oil relative permeabilities", Where: "Producers Monthly 19(1), 38-41"},
 	Craig1971:            {Authors: "Craig", Year: 1971, Title: "The Reservoir Engineering Aspects of Waterflooding", Where: "SPE Monograph 3"},
+	Cuiec1984:            {Authors: "Cuiec", Year: 1984, Title: "Rock/crude-oil interactions and wettability: an attempt to understand their interrelation", Where: "SPE 13211, 59th Annual Technical Conference, Houston"},
 	Dake1978:             {Authors: "Dake", Year: 1978, Title: "Fundamentals of Reservoir Engineering", Where: "Elsevier"},
 	DawsonLantz1972:      {Authors: "Dawson & Lantz", Year: 1972, Title: "Inaccessible pore volume in polymer flooding", Where: "SPE J. 12(5), 448-452"},
 	Dietz1953:            {Authors: "Dietz", Year: 1953, Title: "A theoretical approach to the problem of encroaching and by-passing edge water", Where: "Proc. Koninkl. Ned. Akad. Wetensch. B 56, 83-92"},

@@ -79,6 +79,16 @@ func (c CraigSigns) Summary() Verdict {
 	return v
 }
 
+// AmottHarvey says what the index of Amott and Harvey, from -1 to 1, is a sign of.
+//
+// Source: Cuiec (1984), from memory.
+func AmottHarvey(index float64) Verdict {
+	says := func(w Class) string { return "a sign of " + string(w) + " rock" }
+	return judge("The Amott-Harvey index", index, []band{
+		{-0.3, true, OilWet, says(OilWet)}, {0.3, false, IntermediateWet, says(IntermediateWet)}, {class: WaterWet, means: says(WaterWet)},
+	}, "oil-wet up to −0.3, water-wet from 0.3 (from memory)", ref.Cuiec1984)
+}
+
 // exponents are Corey exponents by wettability: McPhee, Reed & Zubizarreta (2015) and
 // other handbooks of core analysis, from memory. The ranges overlap.
 var exponents = []struct {

@@ -17,14 +17,11 @@ func Label(st *study.Study, path string) string {
 	if spec, ok := study.Find(path); ok {
 		return spec.For(st).Label
 	}
-	if rest, ok := strings.CutPrefix(path, "rock.table"); ok {
-		if cell := strings.Split(strings.TrimPrefix(rest, "."), "."); len(cell) == 2 {
-			row, err := strconv.Atoi(cell[0])
-			if err == nil {
-				return "Laboratory points, row " + strconv.Itoa(row+1) + ", " + cell[1]
-			}
+	if t, ok := study.FindTable(path); ok {
+		if row, column, ok := t.At(path); ok {
+			return t.Label + ", row " + strconv.Itoa(row+1) + ", " + t.Columns[column].Path
 		}
-		return "Laboratory points"
+		return t.Label
 	}
 	if label, ok := choiceLabels[path]; ok {
 		return label
@@ -34,6 +31,8 @@ func Label(st *study.Study, path string) string {
 
 var choiceLabels = map[string]string{
 	"rock.reference": "Permeability that kr refers to", "rock.curve": "Curve used", "rock.weights": "Weights of the fit",
+	"rock.capillary.curve": "Capillary pressure", "rock.capillary.at": "Pc was measured at", "rock.capillary.ends": "Ends of the Pc fit",
+	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"title": "Title", "author": "Author", "note": "Note",
@@ -59,8 +58,10 @@ func inputs(st study.Study, s units.System) Section {
 		}
 	}
 	section.Blocks = append(section.Blocks, Block{Table: choices(st)}, Block{Table: table})
-	if points := laboratory(st, s); points != nil {
-		section.Blocks = append(section.Blocks, Block{Table: points})
+	for _, t := range study.LabTables() {
+		if points := laboratory(t, st, s); points != nil {
+			section.Blocks = append(section.Blocks, Block{Table: points})
+		}
 	}
 	if changes := cases(st); changes != nil {
 		section.Blocks = append(section.Blocks, Block{Table: changes})
@@ -83,6 +84,18 @@ func choices(st study.Study) *Table {
 		add("rock.ends", st.Rock.Ends, study.FitEnds)
 		add("rock.weights", st.Rock.Weights, study.Weightings)
 	}
+	pc := st.Rock.Capillary
+	add("rock.capillary.curve", pc.Curve, study.PcKinds)
+	if pc.ByTable() {
+		add("rock.capillary.unit", pc.Unit, study.PcUnits)
+	}
+	if pc.Fitted() {
+		add("rock.capillary.ends", pc.Ends, study.PcEnds)
+		add("rock.capillary.weights", pc.Weights, study.Weightings)
+	}
+	if pc.Scalable() {
+		add("rock.capillary.at", pc.At, study.PcConditions)
+	}
 	add("fluids.pair", st.Fluids.Pair, study.Pairs)
 	if st.Rock.Land != nil {
 		add("front.ending", st.Front.Ending, study.Endings)
@@ -96,16 +109,15 @@ func choices(st study.Study) *Table {
 	return table
 }
 
-func laboratory(st study.Study, s units.System) *Table {
-	t := st.Rock.Table
-	if t == nil {
+func laboratory(t study.LabTable, st study.Study, s units.System) *Table {
+	columns, source := t.Get(&st)
+	if columns == nil {
 		return nil
 	}
-	grid := study.Grid{Title: "Laboratory points. Source: " + orNone(t.Source), Columns: []study.Column{
-		{Label: "Sw", Quantity: units.Fraction, Values: t.Sw},
-		{Label: "krw", Quantity: units.Fraction, Values: t.Krw},
-		{Label: "kro", Quantity: units.Fraction, Values: t.Kro},
-	}}
+	grid := study.Grid{Title: t.Label + ". Source: " + orNone(source)}
+	for i, c := range t.Columns {
+		grid.Columns = append(grid.Columns, study.Column{Label: c.Label, Quantity: c.Quantity, Values: columns[i]})
+	}
 	table := Print(grid, s)
 	return &table
 }

@@ -136,8 +136,8 @@ func named(path string) string {
 	if spec, ok := Find(path); ok {
 		return spec.Label
 	}
-	if strings.HasPrefix(path, "rock.table") {
-		return "The laboratory table"
+	if t, ok := FindTable(path); ok {
+		return t.Label
 	}
 	return path
 }

@@ -54,6 +54,8 @@ type Rock struct {
 	Weights string `json:"weights"`         // how a fit weighs the points: see Weightings
 	Ends    string `json:"ends,omitempty"`  // where Swc and Sor of a fit come from: see FitEnds; empty: the table's rows
 
+	Capillary Capillary `json:"capillary,omitzero"`
+
 	Land *Input `json:"land,omitempty"` // Land's trapping coefficient C; used by pairs whose resident phase is trapped
 }
 

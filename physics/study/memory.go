@@ -17,26 +17,31 @@ import (
 type Memory struct{ last map[string]remembered }
 
 type remembered struct {
-	points  fit.Points
-	options fit.Options
-	fit     fit.Fit
-	err     error
+	points, options any
+	fit             any
+	err             error
 }
 
 // through draws a family through the points, or remembers that it did.
 func (m *Memory) through(f family, points fit.Points, options fit.Options) (fit.Fit, error) {
+	kept := points // the caller's columns may be written to
+	kept.Sw, kept.Krw, kept.Kro = slices.Clone(points.Sw), slices.Clone(points.Krw), slices.Clone(points.Kro)
+	return recall(m, f.kind, kept, options, func() (fit.Fit, error) { return f.through(points, options) })
+}
+
+// recall is what run gives, or gave the last time this kind was asked for with the same
+// points and options. They are kept as they are, and not to be written to.
+func recall[F any](m *Memory, kind string, points, options any, run func() (F, error)) (F, error) {
 	if m == nil {
-		return f.through(points, options)
+		return run()
 	}
-	if was, ok := m.last[f.kind]; ok && reflect.DeepEqual(was.points, points) && reflect.DeepEqual(was.options, options) {
-		return was.fit, was.err
+	if was, ok := m.last[kind]; ok && reflect.DeepEqual(was.points, points) && reflect.DeepEqual(was.options, options) {
+		return was.fit.(F), was.err
 	}
-	is := remembered{points: points, options: options}
-	is.points.Sw, is.points.Krw, is.points.Kro = slices.Clone(points.Sw), slices.Clone(points.Krw), slices.Clone(points.Kro)
-	is.fit, is.err = f.through(points, options)
+	f, err := run()
 	if m.last == nil {
 		m.last = map[string]remembered{}
 	}
-	m.last[f.kind] = is
-	return is.fit, is.err
+	m.last[kind] = remembered{points, options, f, err}
+	return f, err
 }

@@ -89,6 +89,12 @@ func randomStudy(r *rand.Rand) Study {
 		}
 	}
 	st.Rock.Table = randomTable(r)
+	if table := randomTable(r); r.IntN(3) > 0 {
+		st.Rock.Capillary.Table = &PcTable{Sw: table.Sw, Pc: table.Kro}
+		for i := range table.Kro {
+			table.Kro[i] = 100*table.Kro[i] - 10*r.Float64()
+		}
+	}
 	randomCases(r, &st)
 	return st
 }

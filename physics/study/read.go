@@ -227,8 +227,27 @@ func lawful(st *Study) error {
 	if err := lawfulCases(st); err != nil {
 		return err
 	}
-	if t := st.Rock.Table; t != nil && (len(t.Krw) != len(t.Sw) || len(t.Kro) != len(t.Sw)) {
-		return refuse("rock.table", "read "+strconv.Itoa(len(t.Sw))+" values of sw, "+strconv.Itoa(len(t.Krw))+" of krw and "+strconv.Itoa(len(t.Kro))+" of kro, allowed: columns of equal length")
+	for _, t := range labTables {
+		columns, _ := t.get(st)
+		read, equal := "", true
+		for i, c := range columns {
+			between := ", "
+			switch {
+			case i == 0:
+				between = "read "
+			case i == len(columns)-1:
+				between = " and "
+			}
+			read += between + strconv.Itoa(len(c))
+			if i == 0 {
+				read += " values"
+			}
+			read += " of " + t.Columns[i].Path
+			equal = equal && len(c) == len(columns[0])
+		}
+		if !equal {
+			return refuse(t.Path, read+", allowed: columns of equal length")
+		}
 	}
 	return nil
 }

@@ -25,6 +25,8 @@ type rock struct {
 	fitted     *fit.Fit          // nil unless fitted
 	memory     *Memory           // of fits
 	others     []candidate       // other families through the same points
+	suction    *suction          // capillary pressure; nil: none, see pcWants
+	pcWants    []string          // what has to be given before there is one
 }
 
 // runRock answers the Rock sheet; nil when there is no curve to build on.
@@ -58,6 +60,7 @@ func runRock(st *Study, m *Memory) (Part, *rock) {
 	s.part.Charts = append(s.part.Charts, r.chart(s))
 	r.tables(s)
 	r.notes(s)
+	r.soak(s)
 	begins, stops := "Water begins to flow at Swc = {rock.swc}", "oil stops at Sor = {rock.sor}"
 	water, oil := flowAtEnds(r.reported)
 	if water {
@@ -67,9 +70,9 @@ func runRock(st *Study, m *Memory) (Part, *rock) {
 		stops = "oil still flows in the last row, with {rock.sor} of it left"
 	}
 	s.answer(begins+" and "+stops,
-		"; the curves cross at Sw = {rock.crossover}", "; krw ends at {rock.krw0} of the absolute permeability", ".")
+		"; the curves cross at Sw = {rock.crossover}", "; krw ends at {rock.krw0} of the absolute permeability", "; rock soaks up water by itself to Sw = {rock.pcZero}", ".")
 	status := Ready
-	if r.fitted != nil && r.fitted.Status != fit.Converged {
+	if r.fitted != nil && r.fitted.Status != fit.Converged || r.suction != nil && r.suction.stopped() {
 		status = Stopped
 	}
 	return s.close(status), r

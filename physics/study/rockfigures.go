@@ -46,7 +46,7 @@ func (r *rock) figures(s *sheet) {
 	for _, p := range r.parameters {
 		id := "rock." + strings.ToLower(p.Symbol)
 		if _, done := s.find(id); !done {
-			s.figure(Figure{ID: id, Label: p.Label, Symbol: p.Symbol, Value: p.Value, Quantity: units.Number, Strip: p.Symbol == "nw" || p.Symbol == "no"},
+			s.figure(Figure{ID: id, Label: p.Label, Symbol: p.Symbol, Value: p.Value, Quantity: units.Number, Strip: (p.Symbol == "nw" || p.Symbol == "no") && !withCapillary(s.st)},
 				s.by("", r.origins[p.Symbol], r.sources...).rests(r.inputs...))
 		}
 	}

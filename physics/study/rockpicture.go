@@ -84,6 +84,19 @@ func (r *rock) pointTable(points fit.Points) Grid {
 	}}
 }
 
+// foundHow says in a word how a fit found a parameter.
+func foundHow(p fit.Parameter) string {
+	switch {
+	case p.Held:
+		return "held"
+	case p.AtBound:
+		return "at its bound"
+	case !p.Determined:
+		return "not determined by the points"
+	}
+	return "fitted"
+}
+
 // fitTable lists the parameters of a fit as the laboratory's kr has them.
 func (r *rock) fitTable() Grid {
 	name, symbol := Column{Label: "Parameter", Quantity: units.Number}, Column{Label: "Symbol", Quantity: units.Number}
@@ -91,14 +104,9 @@ func (r *rock) fitTable() Grid {
 	low, high := Column{Label: "95 % interval, from", Quantity: units.Number}, Column{Label: "to", Quantity: units.Number}
 	how := Column{Label: "Found", Quantity: units.Number}
 	for _, p := range r.fitted.Parameters {
-		found := "fitted"
-		switch {
-		case p.Held:
+		found := foundHow(p)
+		if p.Held {
 			found = "held at the points' end"
-		case p.AtBound:
-			found = "at its bound"
-		case !p.Determined:
-			found = "not determined by the points"
 		}
 		name.Words, symbol.Words, how.Words = append(name.Words, p.Label), append(symbol.Words, p.Symbol), append(how.Words, found)
 		value.Values, low.Values, high.Values = append(value.Values, p.Value), append(low.Values, p.Low), append(high.Values, p.High)

@@ -42,6 +42,32 @@ func variants() map[string]Study {
 			})
 		}
 	}
+	for _, kind := range PcKinds {
+		for _, at := range PcConditions {
+			for _, unit := range []string{"psi", inJ} {
+				add(strings.Join([]string{"pc", kind.Value, at.Value, unit}, " "), func(st *Study) {
+					withPc(st, kind.Value)
+					st.Rock.Capillary.At, st.Rock.Capillary.Unit = at.Value, unit
+				})
+			}
+		}
+		for _, spec := range capillarySpecs {
+			if asked := (&Study{Rock: Rock{Capillary: Capillary{Curve: kind.Value, At: inLaboratory}}}); !spec.Applies(asked) || spec.Group == amottGroup && kind.Value != "table" {
+				continue
+			}
+			for name, si := range map[string]float64{"lowest": spec.Min, "highest": spec.Max} {
+				add(strings.Join([]string{kind.Value, name, spec.Path}, " "), func(st *Study) {
+					withPc(st, kind.Value)
+					st.Rock.Capillary.At = inLaboratory
+					unit := units.Of(spec.Quantity)[0]
+					if in := (&Input{Value: unit.FromSI(si), Unit: unit.Symbol}); Check(spec, in.Value, unit) == nil {
+						spec.Set(st, in)
+					}
+				})
+				add(strings.Join([]string{kind.Value, "without", spec.Path}, " "), func(st *Study) { withPc(st, kind.Value); spec.Set(st, nil) })
+			}
+		}
+	}
 	add("no table", func(st *Study) { st.Rock.Table = nil })
 	add("empty table", func(st *Study) { st.Rock.Table = &Table{} })
 	add("no table, typed", func(st *Study) { st.Rock.Table = nil; st.Rock.Curve = "let" })
@@ -324,7 +350,8 @@ func knownPath(path string) bool {
 	if _, ok := Find(path); ok || path == "name" {
 		return true
 	}
-	return Choices(path) != nil || path == "rock.table" || path == "field.start" || strings.HasPrefix(path, "rock.table.")
+	_, tabled := FindTable(path)
+	return tabled || Choices(path) != nil || path == "field.start"
 }
 
 func TestForecastNeverRunsBack(t *testing.T) {

@@ -19,10 +19,13 @@ func Write(st Study) string {
 // Clone copies a study so that changing one leaves the other alone.
 func (s Study) Clone() Study {
 	c := s
-	if s.Rock.Table != nil {
-		t := *s.Rock.Table
-		t.Sw, t.Krw, t.Kro = column(t.Sw), column(t.Krw), column(t.Kro)
-		c.Rock.Table = &t
+	for _, t := range labTables {
+		if columns, source := t.get(&s); columns != nil {
+			for i := range columns {
+				columns[i] = column(columns[i])
+			}
+			t.set(&c, columns, source)
+		}
 	}
 	c.Cases = cloneCases(s.Cases)
 	for _, spec := range specs {

@@ -43,8 +43,8 @@ func (r *Recovery) FitExponential(times []float64) Exponential {
 // fitted.
 func (r *Recovery) FitRootExponential(times []float64) RootExponential {
 	best, least := RootExponential{}, math.Inf(1)
-	for k := range 40 {
-		root := (0.02 + 0.9*float64(k)/39) / r.Early()
+	for k := range 24 {
+		root := (0.02 + 0.9*float64(k)/23) / r.Early()
 		e := RootExponential{Early: r.Early(), Turn: root * root}
 		e.Rate = r.fitRate(times, func(rate float64) Uptake { e.Rate = rate; return e })
 		if m := Compare(e, r, times); m.RMS < least {
@@ -62,7 +62,7 @@ func (r *Recovery) fitRate(times []float64, with func(rate float64) Uptake) floa
 	a, b := middle-5, middle+5
 	c, d := b-golden*(b-a), a+golden*(b-a)
 	mc, md := miss(c), miss(d)
-	for b-a > 1e-6 {
+	for b-a > 1e-5 {
 		if mc < md {
 			b, d, md = d, c, mc
 			c = b - golden*(b-a)
@@ -92,4 +92,10 @@ func (b *Block) Equivalent(porosity float64) float64 {
 // constant diffusion that starts the block the same: rate phi/D.
 func (b *Block) ShapeFactor(rate, porosity float64) float64 {
 	return rate * porosity / b.Equivalent(porosity)
+}
+
+// Uptake is the coefficient A, m/s^1/2, of the faces of the block at the start, from
+// share = 2 A a sqrt(t)/(phi (S0-Si)), a the open area over the volume.
+func (b *Block) Uptake(porosity float64, m *Matrix) float64 {
+	return b.Early() * porosity * m.Capacity() / (2 * b.Shape.OpenArea())
 }

@@ -4,8 +4,10 @@ package ref
 const (
 	AbramowitzStegun1964 ID = "abramowitz-stegun-1964"
 	Ahmed2001            ID = "ahmed-2001"
+	Alexander1977        ID = "alexander-1977"
 	Amott1959            ID = "amott-1959"
 	ArcherWall1986       ID = "archer-wall-1986"
+	Aronofsky1958        ID = "aronofsky-1958"
 	Bertsekas1982        ID = "bertsekas-1982"
 	BatzleWang1992       ID = "batzle-wang-1992"
 	BrooksCorey1964      ID = "brooks-corey-1964"
@@ -18,6 +20,7 @@ const (
 	Cuiec1984            ID = "cuiec-1984"
 	Dake1978             ID = "dake-1978"
 	DawsonLantz1972      ID = "dawson-lantz-1972"
+	DeSwaan1978          ID = "de-swaan-1978"
 	Dietz1953            ID = "dietz-1953"
 	Donaldson1969        ID = "donaldson-1969"
 	Fayers1962           ID = "fayers-1962"
@@ -28,6 +31,8 @@ const (
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
 	JohansenWinther1988  ID = "johansen-winther-1988"
+	Kazemi1976           ID = "kazemi-1976"
+	Kazemi1992           ID = "kazemi-gilman-elsharkawy-1992"
 	KreftZuber1978       ID = "kreft-zuber-1978"
 	Kuznetsov1976        ID = "kuznetsov-1976"
 	Lake1989             ID = "lake-1989"
@@ -35,8 +40,11 @@ const (
 	LeVeque2002          ID = "leveque-2002"
 	Leverett1941         ID = "leverett-1941"
 	Levenberg1944        ID = "levenberg-1944"
+	LimAziz1995          ID = "lim-aziz-1995"
 	Lomeland2005         ID = "lomeland-2005"
+	MaMorrowZhang1997    ID = "ma-morrow-zhang-1997"
 	Marquardt1963        ID = "marquardt-1963"
+	MattaxKyte1962       ID = "mattax-kyte-1962"
 	McCain1991           ID = "mccain-1991"
 	McPhee2015           ID = "mcphee-2015"
 	McWhorterSunada1990  ID = "mcwhorter-sunada-1990"
@@ -53,6 +61,7 @@ const (
 	Philip1960           ID = "philip-1960"
 	Phillips1981         ID = "phillips-1981"
 	Pope1980             ID = "pope-1980"
+	RapoportLeas1953     ID = "rapoport-leas-1953"
 	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SchmidGeiger2012     ID = "schmid-geiger-2012"
@@ -64,6 +73,7 @@ const (
 	VanGenuchten1980     ID = "van-genuchten-1980"
 	VanLeer1974          ID = "van-leer-1974"
 	VanLeer1979          ID = "van-leer-1979"
+	WarrenRoot1963       ID = "warren-root-1963"
 	Welge1952            ID = "welge-1952"
 	Wright1997           ID = "wright-1997"
 )
@@ -71,20 +81,28 @@ const (
 var sources = map[ID]Source{
 	AbramowitzStegun1964: {Authors: "Abramowitz & Stegun", Year: 1964, Title: "Handbook of Mathematical Functions", Where: "National Bureau of Standards, table 25.4"},
 	Ahmed2001:            {Authors: "Ahmed", Year: 2001, Title: "Reservoir Engineering Handbook", Where: "2nd ed., Gulf Professional Publishing"},
+	Alexander1977:        {Authors: "Alexander", Year: 1977, Title: "Diagonally implicit Runge-Kutta methods for stiff O.D.E.'s", Where: "SIAM J. Numer. Anal. 14(6), 1006-1021"},
 	Amott1959:            {Authors: "Amott", Year: 1959, Title: "Observations relating to the wettability of porous rock", Where: "Trans. AIME 216, 156-162"},
 	ArcherWall1986:       {Authors: "Archer & Wall", Year: 1986, Title: "Petroleum Engineering: Principles and Practice", Where: "Graham & Trotman, London"},
+	Aronofsky1958:        {Authors: "Aronofsky, Masse & Natanson", Year: 1958, Title: "A model for the mechanism of oil recovery from the porous matrix due to water invasion in fractured reservoirs", Where: "Trans. AIME 213, 17-19"},
 	Bertsekas1982:        {Authors: "Bertsekas", Year: 1982, Title: "Projected Newton methods for optimization problems with simple constraints", Where: "SIAM J. Control Optim. 20(2), 221-246"},
 	BatzleWang1992:       {Authors: "Batzle & Wang", Year: 1992, Title: "Seismic properties of pore fluids", Where: "Geophysics 57(11), 1396-1408"},
 	BrooksCorey1964:      {Authors: "Brooks & Corey", Year: 1964, Title: "Hydraulic properties of porous media", Where: "Hydrology Paper 3, Colorado State University"},
 	Chandrupatla1997:     {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
 	Chaudhry2004:         {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
+	DeSwaan1978:          {Authors: "de Swaan", Year: 1978, Title: "Theory of waterflooding in fractured reservoirs", Where: "SPE J. 18(2), 117-122"},
 	IAPWSIF97:            {Authors: "IAPWS", Year: 2012, Title: "Revised Release on the IAPWS Industrial Formulation 1997 for the Thermodynamic Properties of Water and Steam", Where: "IAPWS R7-97"},
 	IAPWSR12:             {Authors: "IAPWS", Year: 2008, Title: "Release on the IAPWS Formulation 2008 for the Viscosity of Ordinary Water Substance", Where: "IAPWS R12-08"},
 	JohansenWinther1988:  {Authors: "Johansen & Winther", Year: 1988, Title: "The solution of the Riemann problem for a hyperbolic system of conservation laws modeling polymer flooding", Where: "SIAM J. Math. Anal. 19(3), 541-566"},
+	Kazemi1976:           {Authors: "Kazemi, Merrill, Porterfield & Zeman", Year: 1976, Title: "Numerical simulation of water-oil flow in naturally fractured reservoirs", Where: "SPE J. 16(6), 317-326"},
+	Kazemi1992:           {Authors: "Kazemi, Gilman & Elsharkawy", Year: 1992, Title: "Analytical and numerical solution of oil recovery from fractured reservoirs with empirical transfer functions", Where: "SPE Reserv. Eng. 7(2), 219-227"},
 	KreftZuber1978:       {Authors: "Kreft & Zuber", Year: 1978, Title: "On the physical meaning of the dispersion equation and its solutions for different initial and boundary conditions", Where: "Chem. Eng. Sci. 33(11), 1471-1480"},
 	Lake1989:             {Authors: "Lake", Year: 1989, Title: "Enhanced Oil Recovery", Where: "Prentice Hall"},
 	Land1968:             {Authors: "Land", Year: 1968, Title: "Calculation of imbibition relative permeability for two- and three-phase flow from rock properties", Where: "SPE J. 8(2), 149-156"},
 	LeVeque2002:          {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press"},
+	LimAziz1995:          {Authors: "Lim & Aziz", Year: 1995, Title: "Matrix-fracture transfer shape factors for dual-porosity simulators", Where: "J. Pet. Sci. Eng. 13(3-4), 169-178"},
+	MaMorrowZhang1997:    {Authors: "Ma, Morrow & Zhang", Year: 1997, Title: "Generalized scaling of spontaneous imbibition data for strongly water-wet systems", Where: "J. Pet. Sci. Eng. 18(3-4), 165-178"},
+	MattaxKyte1962:       {Authors: "Mattax & Kyte", Year: 1962, Title: "Imbibition oil recovery from fractured, water-drive reservoir", Where: "SPE J. 2(2), 177-184"},
 	NISTSP811:            {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811"},
 	OgataBanks1961:       {Authors: "Ogata & Banks", Year: 1961, Title: "A solution of the differential equation of longitudinal dispersion in porous media", Where: "Professional Paper 411-A, U.S. Geological Survey"},
 	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
@@ -112,9 +130,11 @@ var sources = map[ID]Source{
 	Philip1960:           {Authors: "Philip", Year: 1960, Title: "General method of exact solution of the concentration-dependent diffusion equation", Where: "Aust. J. Phys. 13, 1-12"},
 	Phillips1981:         {Authors: "Phillips, Igbene, Fair, Ozbek & Tavana", Year: 1981, Title: "A technical databook for geothermal energy utilization", Where: "Report LBL-12810, Lawrence Berkeley Laboratory"},
 	Pope1980:             {Authors: "Pope", Year: 1980, Title: "The application of fractional flow theory to enhanced oil recovery", Where: "SPE J. 20(3), 191-205"},
+	RapoportLeas1953:     {Authors: "Rapoport & Leas", Year: 1953, Title: "Properties of linear waterfloods", Where: "Trans. AIME 198, 139-148"},
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
 	SchmidGeiger2012:     {Authors: "Schmid & Geiger", Year: 2012, Title: "Universal scaling of spontaneous imbibition for water-wet systems", Where: "Water Resour. Res. 48, W03507"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
+	WarrenRoot1963:       {Authors: "Warren & Root", Year: 1963, Title: "The behavior of naturally fractured reservoirs", Where: "SPE J. 3(3), 245-255"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 	Wright1997:           {Authors: "Wright", Year: 1997, Title: "Primal-Dual Interior-Point Methods", Where: "SIAM, Philadelphia"},
 	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},

@@ -77,6 +77,9 @@ func TextLimit(path string) int {
 	if path == "note" {
 		return MaxNote
 	}
+	if path == layerTable.path || path == scheduleTable.path {
+		return maxTableText
+	}
 	if _, inner, ok := AtCase(path); ok && inner == "name" {
 		return MaxCaseName
 	}

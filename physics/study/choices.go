@@ -66,6 +66,7 @@ var Drives = []Choice{
 var Limits = []Choice{
 	{"waterCut", "water cut at surface"},
 	{"oilRate", "oil rate at surface"},
+	{"cash", "net cash of prices and costs"},
 }
 
 // Systems are the unit systems a study may be shown in.
@@ -98,6 +99,7 @@ var choiceFields = []choiceField{
 	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
+	{"field.layers.crossflow", Crossflows, func(s *Study) *string { return &s.Field.Layers.Crossflow }},
 }
 
 // usual is a study in which every choice stands at the first of its list.

@@ -122,7 +122,7 @@ type Front struct {
 	Rider Rider `json:"rider,omitzero"` // what rides along with the injected water
 }
 
-// Field is the linear, single-layer flood in the ground.
+// Field is the flood in the ground: a straight block of one layer or many.
 type Field struct {
 	Drive string `json:"drive"` // see Drives
 	Limit string `json:"limit"` // see Limits
@@ -139,4 +139,8 @@ type Field struct {
 	WaterCut     *Input `json:"waterCut,omitempty"`     // economic limit, at surface
 	OilRate      *Input `json:"oilRate,omitempty"`      // economic limit, at surface
 	Horizon      *Input `json:"horizon,omitempty"`      // how long the forecast runs; nil: to the limit
+
+	Layers Layers `json:"layers,omitzero"`
+	Wells  Wells  `json:"wells,omitzero"`
+	Money  Money  `json:"money,omitzero"`
 }

@@ -221,8 +221,10 @@ func lawful(st *Study) error {
 			return err
 		}
 	}
-	if p := CheckStart(st.Field.Start); p != nil {
-		return asFileError(p)
+	for path, text := range map[string]string{"field.start": st.Field.Start, layerTable.path: st.Field.Layers.Table, scheduleTable.path: st.Field.Wells.Schedule} {
+		if p := CheckText(st, path, text); p != nil {
+			return asFileError(p)
+		}
 	}
 	if err := lawfulCases(st); err != nil {
 		return err

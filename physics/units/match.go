@@ -44,6 +44,10 @@ var names = map[string][]string{
 	"wt%":      {"%", "wtpercent", "percent", "pct"},
 	"ppm":      {"mg/kg"},
 	"dyn/cm":   {"dyne/cm", "dynes/cm"},
+	"per bbl":  {"perbbl"},
+	"per m3":   {"perm3"},
+	"per d":    {"perd", "perday"},
+	"per yr":   {"peryr", "peryear"},
 }
 
 // spelled writes a unit in one plain way: no spaces, no superscripts, and the time

@@ -36,6 +36,10 @@ const (
 	Salinity           Quantity = "salinity"           // mass of salt in the mass of brine
 	InterfacialTension Quantity = "interfacialTension" // force per length between two phases
 	HeatCapacity       Quantity = "heatCapacity"       // heat per volume and degree of temperature
+
+	PressureGradient Quantity = "pressureGradient" // pressure over depth
+	Price            Quantity = "price"            // money, of any one currency, per volume
+	CostRate         Quantity = "costRate"         // money per time
 )
 
 // Unit is one way to write a quantity: SI = (number + Zero) Factor.
@@ -100,6 +104,9 @@ var catalogue = []Unit{
 	{"degC", Temperature, 1, 273.15}, {"degF", Temperature, 5.0 / 9, 459.67}, {"K", Temperature, 1, 0},
 	{"wt%", Salinity, 0.01, 0}, {"g/kg", Salinity, 1e-3, 0}, {"ppm", Salinity, 1e-6, 0},
 	{"mN/m", InterfacialTension, 1e-3, 0}, {"dyn/cm", InterfacialTension, 1e-3, 0}, {"N/m", InterfacialTension, 1, 0},
+	{"psi/ft", PressureGradient, psi / foot, 0}, {"kPa/m", PressureGradient, 1e3, 0}, {"bar/m", PressureGradient, 1e5, 0},
+	{"per bbl", Price, 1 / barrel, 0}, {"per m3", Price, 1, 0},
+	{"per d", CostRate, 1 / day, 0}, {"per yr", CostRate, 1 / year, 0},
 	{"MJ/(m3.K)", HeatCapacity, 1e6, 0}, {"kJ/(m3.K)", HeatCapacity, 1e3, 0}, {"J/(m3.K)", HeatCapacity, 1, 0}, {"Btu/(ft3.degF)", HeatCapacity, btu * 1.8 / (foot * foot * foot), 0},
 }
 

@@ -22,12 +22,12 @@ var defaults = map[System]map[Quantity]string{
 	},
 	Metric: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "m", Area: "ha",
-		Volume: "m3", Pressure: "bar", Rate: "m3/d", Velocity: "m/d", Duration: "d", Density: "kg/m3",
+		Volume: "m3", Pressure: "bar", Rate: "m3/d", Velocity: "m/d", Duration: "d", Density: "kg/m3", PressureGradient: "bar/m", Price: "per m3",
 		GasVolume: "m3", GasRate: "m3/d", GasOilRatio: "m3/m3", WaterGasRatio: "m3/m3",
 	},
 	Lab: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "cm", Area: "cm2",
-		Volume: "cm3", Pressure: "kPa", Rate: "cm3/min", Velocity: "cm/h", Duration: "h", Density: "g/cm3",
+		Volume: "cm3", Pressure: "kPa", Rate: "cm3/min", Velocity: "cm/h", Duration: "h", Density: "g/cm3", PressureGradient: "kPa/m", Price: "per m3",
 		GasVolume: "m3", GasRate: "m3/d", GasOilRatio: "m3/m3", WaterGasRatio: "m3/m3",
 	},
 }

@@ -1,0 +1,185 @@
+package study
+
+import (
+	"strconv"
+	"strings"
+	"time"
+
+	"brinefront/physics/units"
+)
+
+// Limits of the tables that are kept as text.
+const (
+	MaxLayers    = 200 // of a forecast
+	maxTableText = 400000
+)
+
+// Two tables of the field are kept as they were pasted: the first line names the unit of
+// each column, every further line is a row. Cells are parted by tabs, semicolons or spaces;
+// a dash or nothing is an empty cell. A cell may carry a unit of its own.
+
+// textColumn is a column of such a table.
+type textColumn struct {
+	name     string
+	quantity units.Quantity
+	min, max float64 // SI; min is exclusive unless the column may be empty
+	optional bool
+}
+
+// textTable is what a text at a path must hold.
+type textTable struct {
+	path, example string
+	columns       []textColumn
+}
+
+var layerTable = textTable{"field.layers.table", "ft md fraction", []textColumn{
+	{"thickness", units.Length, 0, 5e3, false},
+	{"permeability", units.Permeability, 0, 1e-9, false},
+	{"porosity", units.Fraction, 0, 1, false},
+}}
+
+var scheduleTable = textTable{"field.wells.schedule", "d bbl/d psi", []textColumn{
+	{"time or date", units.Duration, 0, 1e11, true},
+	{"injection rate", units.Rate, 0, 100, true},
+	{"pressure difference", units.Pressure, 0, 1e9, true},
+}}
+
+func (t textTable) refuse(line int, read, allowed string) *Problem {
+	return &Problem{Path: t.path, Read: "in line " + strconv.Itoa(line) + ", " + read, Allowed: allowed}
+}
+
+// read returns the rows in SI, a column after another; empty optional cells are 0. Dates
+// count from start.
+func (t textTable) read(text, start string) (columns [][]float64, problem *Problem) {
+	columns = make([][]float64, len(t.columns))
+	unit := make([]units.Unit, len(t.columns))
+	head := true
+	for i, line := range strings.Split(text, "\n") {
+		cells := cellsOf(line)
+		if len(cells) == 0 {
+			continue
+		}
+		if len(cells) > len(t.columns) {
+			return nil, t.refuse(i+1, strconv.Itoa(len(cells))+" cells", "up to "+strconv.Itoa(len(t.columns)))
+		}
+		for c, column := range t.columns {
+			cell := ""
+			if c < len(cells) {
+				cell = cells[c]
+			}
+			if head {
+				var ok bool
+				if unit[c], ok = unitIn(column.quantity, cell); !ok && !(c >= len(cells) && column.optional) {
+					return nil, t.refuse(i+1, quoted(cell)+" over the column of "+column.name, "a first line with the units, such as "+t.example)
+				}
+				continue
+			}
+			value, problem := t.cell(column, cell, unit[c], start, i+1)
+			if problem != nil {
+				return nil, problem
+			}
+			columns[c] = append(columns[c], value)
+		}
+		head = false
+	}
+	if len(columns[0]) > MaxRows {
+		return nil, &Problem{Path: t.path, Read: strconv.Itoa(len(columns[0])) + " rows", Allowed: "up to " + strconv.Itoa(MaxRows)}
+	}
+	return columns, nil
+}
+
+func (t textTable) cell(column textColumn, cell string, unit units.Unit, start string, line int) (float64, *Problem) {
+	allowed := "a " + column.name + " above 0"
+	if cell == "" {
+		if column.optional {
+			return 0, nil
+		}
+		return 0, t.refuse(line, "no "+column.name, allowed)
+	}
+	if column.quantity == units.Duration {
+		if day, err := time.Parse(time.DateOnly, cell); err == nil {
+			first, err := time.Parse(time.DateOnly, start)
+			if err != nil || day.Before(first) {
+				return 0, t.refuse(line, quoted(cell), "a date from the first day of injection on, which must be given")
+			}
+			return day.Sub(first).Seconds(), nil
+		}
+		allowed = "a time since the start, or a date such as 2027-03-01"
+	}
+	number, own, err := units.Parse(column.quantity, cell, unit)
+	if err != nil {
+		return 0, t.refuse(line, quoted(cell), allowed)
+	}
+	si := own.ToSI(number)
+	if !(si <= column.max && (si > column.min || column.optional && si == column.min)) {
+		return 0, t.refuse(line, withUnit(units.Exact(number), own)+" for "+column.name, withUnit("above 0 to "+units.Format(own.FromSI(column.max), 6), own))
+	}
+	return si, nil
+}
+
+// cellsOf parts a line; a dash is an empty cell.
+func cellsOf(line string) []string {
+	var cells []string
+	switch line = strings.TrimRight(line, " \t\r"); {
+	case strings.Contains(line, "\t"):
+		cells = strings.Split(line, "\t")
+	case strings.Contains(line, ";"):
+		cells = strings.Split(line, ";")
+	default:
+		cells = strings.Fields(line)
+	}
+	for i, cell := range cells {
+		if cells[i] = strings.TrimSpace(cell); cells[i] == "-" || cells[i] == "–" {
+			cells[i] = ""
+		}
+	}
+	return cells
+}
+
+// unitIn finds a unit in the heading of a column: "ft", "h (ft)", "k, md".
+func unitIn(q units.Quantity, heading string) (units.Unit, bool) {
+	for _, word := range strings.FieldsFunc(heading, func(r rune) bool { return strings.ContainsRune(" ()[],", r) }) {
+		if _, u, err := units.Parse(q, "1 "+word, units.Unit{}); err == nil && u.Quantity == q {
+			return u, true
+		}
+	}
+	return units.Of(q)[0], q == units.Duration && strings.Contains(strings.ToLower(heading), "date")
+}
+
+// CheckText says whether a text of the study that means something may stand at a path:
+// the first day of injection, the layers, the schedule.
+func CheckText(st *Study, path, text string) *Problem {
+	switch path {
+	case "field.start":
+		return CheckStart(text)
+	case layerTable.path:
+		_, problem := layerTable.rows(text, "")
+		return problem
+	case scheduleTable.path:
+		_, problem := scheduleTable.rows(text, st.Field.Start)
+		return problem
+	}
+	return nil
+}
+
+// rows reads a table that has rows, in rising order where its first column is time.
+func (t textTable) rows(text, start string) ([][]float64, *Problem) {
+	if strings.TrimSpace(text) == "" {
+		return nil, nil
+	}
+	columns, problem := t.read(text, start)
+	if problem != nil {
+		return nil, problem
+	}
+	if len(columns[0]) == 0 {
+		return nil, &Problem{Path: t.path, Read: "no rows", Allowed: "a first line with the units, such as " + t.example + ", and rows below it"}
+	}
+	if t.columns[0].quantity == units.Duration {
+		for i, time := range columns[0] {
+			if i == 0 && time != 0 || i > 0 && time <= columns[0][i-1] {
+				return nil, &Problem{Path: t.path, Read: "row " + strconv.Itoa(i+1) + " out of order", Allowed: "times that rise, the first of them 0 or the first day"}
+			}
+		}
+	}
+	return columns, nil
+}

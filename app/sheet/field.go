@@ -22,10 +22,18 @@ func (f *Field) Render() app.UI {
 	in := m.Study.Field
 	return laid(d, m, study.SheetField,
 		widget.Group(d, m, study.SheetField, "Block", "Block between the wells"),
+		widget.Group(d, m, study.SheetField, "Layers", "Layers, or a permeability log",
+			widget.Block(d, m, "field.layers.table", "Thickness, permeability and porosity", in.Layers.Table, "A first line with the units, such as “ft md fraction”, then a row for each layer or each sample of a log, from the top down. Empty: one even layer."),
+			widget.Choice(d, "field.layers.crossflow", "Flow between the layers", in.Layers.Crossflow, study.Crossflows, "What the forecast is for; the other is drawn beside it.")),
 		widget.Group(d, m, study.SheetField, "Drive", "What drives the flood",
 			widget.Radios(d, "field.drive", "Held constant", in.Drive, study.Drives)),
+		&widget.Fold{Desk: d, Model: m, Sheet: study.SheetField, Group: "Wells", Title: "Wells: limits, skin, gas, fracture pressure"},
+		app.Section().Class("group").Body(
+			widget.Block(d, m, "field.wells.schedule", "Schedule, instead of the one drive", in.Wells.Schedule, "A first line with the units, such as “d bbl/d psi”, then a row from each time or date on: time, injection rate, pressure difference. A rate with a pressure is held as long as it takes no more than that; neither is shut in. Empty: the drive above."),
+		),
 		widget.Group(d, m, study.SheetField, "Limit", "When it stops paying",
 			widget.Radios(d, "field.limit", "Economic limit", in.Limit, study.Limits),
 			widget.Words(d, m, "field.start", "First day of injection", in.Start, "YYYY-MM-DD", "Turns times into dates. Optional.")),
+		&widget.Fold{Desk: d, Model: m, Sheet: study.SheetField, Group: "Money", Title: "Prices and costs"},
 	)
 }

@@ -172,8 +172,8 @@ func amount(spec study.Spec, number float64, symbol string) string {
 	return units.Exact(number)
 }
 
-// written takes a text of the study: its title, author and note, and the first
-// day of injection.
+// written takes a text of the study: its title, author and note, the first day of
+// injection, and the tables of the field that are kept as they were pasted.
 func (m Model) written(msg Written) (Model, []Effect) {
 	return m.amend(msg.Path, func(p *page) {
 		text := clean(msg.Text)
@@ -184,18 +184,22 @@ func (m Model) written(msg Written) (Model, []Effect) {
 		delete(p.drafts, msg.Path)
 		delete(p.messages, msg.Path)
 		problem := tooLong(msg.Path, text)
-		if msg.Path == "field.start" && problem == nil {
-			problem = study.CheckStart(strings.TrimSpace(text))
+		meant := strings.HasPrefix(msg.Path, "field.")
+		if meant && problem == nil {
+			problem = study.CheckText(&p.study, msg.Path, strings.TrimSpace(text))
 		}
 		if problem != nil {
 			use := ""
-			if msg.Path == "field.start" && *at != "" {
-				use = " In use: " + *at + "."
+			if meant && *at != "" {
+				use = " In use: the last good one."
+				if !strings.Contains(*at, "\n") {
+					use = " In use: " + *at + "."
+				}
 			}
 			p.refuse(msg.Path, Draft{Text: text}, problem, use)
 			return
 		}
-		if msg.Path == "field.start" {
+		if meant {
 			p.keep(msg.Path, Draft{Text: text}, strings.TrimSpace(text))
 			text = strings.TrimSpace(text)
 		}
@@ -214,6 +218,10 @@ func textAt(st *study.Study, path string) *string {
 		return &st.Note
 	case "field.start":
 		return &st.Field.Start
+	case "field.layers.table":
+		return &st.Field.Layers.Table
+	case "field.wells.schedule":
+		return &st.Field.Wells.Schedule
 	}
 	return nil
 }

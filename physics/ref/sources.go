@@ -23,10 +23,13 @@ const (
 	DeSwaan1978          ID = "de-swaan-1978"
 	Dietz1953            ID = "dietz-1953"
 	Donaldson1969        ID = "donaldson-1969"
+	DykstraParsons1950   ID = "dykstra-parsons-1950"
+	Fanchi2016           ID = "fanchi-christiansen-2016"
 	Fayers1962           ID = "fayers-1962"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
 	Godunov1959          ID = "godunov-1959"
 	GolubVanLoan2013     ID = "golub-van-loan-2013"
+	Hearn1971            ID = "hearn-1971"
 	Hovdan1986           ID = "hovdan-1986"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
@@ -49,6 +52,7 @@ const (
 	McPhee2015           ID = "mcphee-2015"
 	McWhorterSunada1990  ID = "mcwhorter-sunada-1990"
 	More1978             ID = "more-1978"
+	Muskat1937           ID = "muskat-1937"
 	Neumaier1974         ID = "neumaier-1974"
 	NISTStRD             ID = "nist-strd"
 	Nielsen1999          ID = "nielsen-1999"
@@ -65,9 +69,11 @@ const (
 	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SchmidGeiger2012     ID = "schmid-geiger-2012"
+	SchmalzRahme1950     ID = "schmalz-rahme-1950"
 	SeberWild1989        ID = "seber-wild-1989"
 	ShuOsher1988         ID = "shu-osher-1988"
 	Skjaeveland2000      ID = "skjaeveland-2000"
+	Stiles1949           ID = "stiles-1949"
 	Sweby1984            ID = "sweby-1984"
 	TakahasiMori1974     ID = "takahasi-mori-1974"
 	VanGenuchten1980     ID = "van-genuchten-1980"
@@ -91,6 +97,9 @@ var sources = map[ID]Source{
 	Chandrupatla1997:     {Authors: "Chandrupatla", Year: 1997, Title: "A new hybrid quadratic/bisection algorithm for finding the zero of a nonlinear function without using derivatives", Where: "Adv. Eng. Software 28(3), 145-149"},
 	Chaudhry2004:         {Authors: "Chaudhry", Year: 2004, Title: "Oil Well Testing Handbook", Where: "Gulf Professional Publishing"},
 	DeSwaan1978:          {Authors: "de Swaan", Year: 1978, Title: "Theory of waterflooding in fractured reservoirs", Where: "SPE J. 18(2), 117-122"},
+	DykstraParsons1950:   {Authors: "Dykstra & Parsons", Year: 1950, Title: "The prediction of oil recovery by water flood", Where: "Secondary Recovery of Oil in the United States, 2nd ed., API, 160-174"},
+	Fanchi2016:           {Authors: "Fanchi & Christiansen", Year: 2016, Title: "Introduction to Petroleum Engineering", Where: "Wiley, eq. 4.23-4.25"},
+	Hearn1971:            {Authors: "Hearn", Year: 1971, Title: "Simulation of stratified waterflooding by pseudo relative permeability curves", Where: "J. Pet. Technol. 23(7), 805-813"},
 	IAPWSIF97:            {Authors: "IAPWS", Year: 2012, Title: "Revised Release on the IAPWS Industrial Formulation 1997 for the Thermodynamic Properties of Water and Steam", Where: "IAPWS R7-97"},
 	IAPWSR12:             {Authors: "IAPWS", Year: 2008, Title: "Release on the IAPWS Formulation 2008 for the Viscosity of Ordinary Water Substance", Where: "IAPWS R12-08"},
 	JohansenWinther1988:  {Authors: "Johansen & Winther", Year: 1988, Title: "The solution of the Riemann problem for a hyperbolic system of conservation laws modeling polymer flooding", Where: "SIAM J. Math. Anal. 19(3), 541-566"},
@@ -103,6 +112,7 @@ var sources = map[ID]Source{
 	LimAziz1995:          {Authors: "Lim & Aziz", Year: 1995, Title: "Matrix-fracture transfer shape factors for dual-porosity simulators", Where: "J. Pet. Sci. Eng. 13(3-4), 169-178"},
 	MaMorrowZhang1997:    {Authors: "Ma, Morrow & Zhang", Year: 1997, Title: "Generalized scaling of spontaneous imbibition data for strongly water-wet systems", Where: "J. Pet. Sci. Eng. 18(3-4), 165-178"},
 	MattaxKyte1962:       {Authors: "Mattax & Kyte", Year: 1962, Title: "Imbibition oil recovery from fractured, water-drive reservoir", Where: "SPE J. 2(2), 177-184"},
+	Muskat1937:           {Authors: "Muskat", Year: 1937, Title: "The Flow of Homogeneous Fluids through Porous Media", Where: "McGraw-Hill"},
 	NISTSP811:            {Authors: "Thompson & Taylor", Year: 2008, Title: "Guide for the Use of the International System of Units", Where: "NIST Special Publication 811"},
 	OgataBanks1961:       {Authors: "Ogata & Banks", Year: 1961, Title: "A solution of the differential equation of longitudinal dispersion in porous media", Where: "Professional Paper 411-A, U.S. Geological Survey"},
 	BuckleyLeverett1942:  {Authors: "Buckley & Leverett", Year: 1942, Title: "Mechanism of fluid displacement in sands", Where: "Trans. AIME 146, 107-116"},
@@ -133,8 +143,10 @@ var sources = map[ID]Source{
 	RapoportLeas1953:     {Authors: "Rapoport & Leas", Year: 1953, Title: "Properties of linear waterfloods", Where: "Trans. AIME 198, 139-148"},
 	SaffmanTaylor1958:    {Authors: "Saffman & Taylor", Year: 1958, Title: "The penetration of a fluid into a porous medium or Hele-Shaw cell containing a more viscous liquid", Where: "Proc. R. Soc. Lond. A 245, 312-329"},
 	SchmidGeiger2012:     {Authors: "Schmid & Geiger", Year: 2012, Title: "Universal scaling of spontaneous imbibition for water-wet systems", Where: "Water Resour. Res. 48, W03507"},
+	SchmalzRahme1950:     {Authors: "Schmalz & Rahme", Year: 1950, Title: "The variation in water flood performance with variation in permeability profile", Where: "Producers Monthly 15(9), 9-12"},
 	SeberWild1989:        {Authors: "Seber & Wild", Year: 1989, Title: "Nonlinear Regression", Where: "Wiley, ch. 5"},
 	WarrenRoot1963:       {Authors: "Warren & Root", Year: 1963, Title: "The behavior of naturally fractured reservoirs", Where: "SPE J. 3(3), 245-255"},
+	Stiles1949:           {Authors: "Stiles", Year: 1949, Title: "Use of permeability distribution in water flood calculations", Where: "Trans. AIME 186, 9-13"},
 	Welge1952:            {Authors: "Welge", Year: 1952, Title: "A simplified method for computing oil recovery by gas or water drive", Where: "Trans. AIME 195, 91-98"},
 	Wright1997:           {Authors: "Wright", Year: 1997, Title: "Primal-Dual Interior-Point Methods", Where: "SIAM, Philadelphia"},
 	CrandallMajda1980:    {Authors: "Crandall & Majda", Year: 1980, Title: "Monotone difference approximations for scalar conservation laws", Where: "Math. Comp. 34(149), 1-21"},

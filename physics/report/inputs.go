@@ -35,6 +35,7 @@ var choiceLabels = map[string]string{
 	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
 	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
+	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule",
 	"title": "Title", "author": "Author", "note": "Note",
 }
 
@@ -103,8 +104,13 @@ func choices(st study.Study) *Table {
 	add("front.rider.kind", st.Front.Rider.Kind, study.Riders)
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
-	if st.Field.Start != "" {
-		table.Rows = append(table.Rows, []string{Label(&st, "field.start"), st.Field.Start})
+	if st.Field.Layers.Table != "" {
+		add("field.layers.crossflow", st.Field.Layers.Crossflow, study.Crossflows)
+	}
+	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.start", st.Field.Start}} {
+		if text.text != "" {
+			table.Rows = append(table.Rows, []string{Label(&st, text.path), strings.Join(strings.Split(text.text, "\n"), "; ")})
+		}
 	}
 	return table
 }

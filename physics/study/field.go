@@ -17,8 +17,11 @@ type field struct {
 	history []reservoir.State
 }
 
-// runField answers the Field sheet.
+// runField answers the Field sheet; what is more than an even block is for runMany.
 func runField(st *Study, frontPart Part, front *front) Part {
+	if manyfold(st) {
+		return runMany(st, frontPart, front)
+	}
 	s := newSheet(st, frontPart)
 	s.await(frontPart)
 	s.layer(front)

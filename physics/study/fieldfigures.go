@@ -218,8 +218,11 @@ func injectedOil(inlet float64) string {
 }
 
 func limitPath(st *Study) string {
-	if st.Field.Limit == "oilRate" {
+	switch st.Field.Limit {
+	case "oilRate":
 		return "field.oilRate"
+	case "cash":
+		return "field.money.oil"
 	}
 	return "field.waterCut"
 }

@@ -19,16 +19,20 @@ var steps = func() []float64 {
 // forecastRows is how long a forecast table may get.
 const forecastRows = 24
 
+// stepFor is the interval that a forecast of some length is told in.
+func stepFor(last float64) float64 {
+	for _, s := range steps {
+		if last/s <= forecastRows {
+			return s
+		}
+	}
+	return steps[len(steps)-1]
+}
+
 // forecast is the flood at even steps of time, years where that suits, to the end.
 func (f *field) forecast(start string) Grid {
 	last := f.linear.TimeAt(f.end)
-	step := steps[len(steps)-1]
-	for _, s := range steps {
-		if last/s <= forecastRows {
-			step = s
-			break
-		}
-	}
+	step := stepFor(last)
 	columns := []Column{
 		{Label: "Time", Symbol: "t", Quantity: units.Duration},
 		{Label: "Injected", Symbol: "Q", Quantity: units.PoreVolumes},

@@ -95,9 +95,12 @@ func (s *sheet) fluids() *front {
 	return f
 }
 
-// flood is the field's flood when all of it is given, for the times at which the waves
+// flood is the field's flood when that is of one even block and all of it is given, for the times at which the waves
 // arrive. What the field misses or cannot use is for its own sheet to say.
 func (s *sheet) flood(f *front) (*reservoir.Linear, error) {
+	if manyfold(s.st) {
+		return nil, nil
+	}
 	quiet := newSheet(s.st)
 	layer := quiet.layer(f)
 	if quiet.standing() != Ready {

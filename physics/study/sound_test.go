@@ -126,6 +126,33 @@ func variants() map[string]Study {
 	})
 	add("swapped", func(st *Study) { t := st.Rock.Table; t.Krw, t.Kro = t.Kro, t.Krw })
 	add("turned", func(st *Study) { st.Rock.Table.Krw[5] = 0.001; st.Rock.Curve = "table" })
+	for _, limit := range Limits {
+		for _, crossflow := range Crossflows {
+			for _, drive := range Drives {
+				add("layers "+limit.Value+" "+crossflow.Value+" "+drive.Value, func(st *Study) {
+					st.Field.Limit, st.Field.Layers.Crossflow, st.Field.Drive = limit.Value, crossflow.Value, drive.Value
+					st.Field.Layers.Table = "ft md frac\n7 137 .21\n13 63 0.19\n5 412 24.7%\n10 22 0.163\n9 231 0.228\n"
+					put(st, "field.money.oil", 61, "per bbl")
+				})
+			}
+		}
+	}
+	add("layers lumped, wells, gas", func(st *Study) {
+		st.Field.Layers.Table = "m;md;frac\n2,3;137;0,21\n4;63;.19\n1;412;.25\n3;22;.16\n3;231;.23\n2;97;.2"
+		put(st, "field.layers.groups", 3, "")
+		put(st, "field.wells.radius", 0.35, "ft")
+		put(st, "field.wells.injectorSkin", -1, "")
+		put(st, "field.wells.producerSkin", 4, "")
+		put(st, "field.wells.gas", 0.05, "fraction")
+		put(st, "field.wells.pressureLimit", 900, "psi")
+		put(st, "field.wells.producerPressure", 600, "psi")
+		put(st, "field.wells.depth", 2900, "ft")
+		put(st, "field.wells.fractureGradient", 0.7, "psi/ft")
+	})
+	add("schedule", func(st *Study) {
+		st.Field.Wells.Schedule = "date bbl/d psi\n2027-03-01 500 -\n2028-03-01 - -\n2028-09-01 1200 1500\n2035-01-01 - 1100"
+	})
+	add("schedule, shut in", func(st *Study) { st.Field.Wells.Schedule = "d bbl/d\n0 500\n90 0" })
 	add("not a number", func(st *Study) { st.Rock.Table.Krw[5] = math.NaN() })
 	add("plug", func(st *Study) {
 		st.Field.Length = &Input{Value: 7.31, Unit: "cm"}
@@ -351,7 +378,7 @@ func knownPath(path string) bool {
 		return true
 	}
 	_, tabled := FindTable(path)
-	return tabled || Choices(path) != nil || path == "field.start"
+	return tabled || Choices(path) != nil || path == "field.start" || path == layerTable.path || path == scheduleTable.path
 }
 
 func TestForecastNeverRunsBack(t *testing.T) {

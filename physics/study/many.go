@@ -1,0 +1,266 @@
+package study
+
+import (
+	"math"
+	"slices"
+	"strconv"
+
+	"brinefront/physics/displace"
+	"brinefront/physics/relperm"
+	"brinefront/physics/reservoir"
+)
+
+// many is the flood of a block of layers, of wells that are more than its two ends, or of
+// money: everything that one even block under one drive is not.
+type many struct {
+	*sheet
+	front         *front
+	length, width float64
+	uptime, gas   float64
+	samples       []reservoir.Sample // as typed
+	layers        []reservoir.Sample // as flooded
+	pores         float64            // m3
+	bundle        reservoir.Bundle   // the layers apart
+	fullReason    string             // why there is no answer for full crossflow
+	steps         []reservoir.Step
+	purse         purse
+
+	run         *reservoir.Run // what the answer is about
+	apart, full *reservoir.Run // without and with crossflow; full is nil where there is no answer
+	pistons     *reservoir.Run
+	limit       reservoir.Limit // Final is not told
+	end         float64         // s
+	moments     []instant
+}
+
+// tabulated is how near the answers of a layer come to its exact solution, pore volumes.
+const tabulated = 1e-10
+
+// runMany answers the Field sheet for what manyfold describes.
+func runMany(st *Study, frontPart Part, front *front) Part {
+	m := &many{sheet: newSheet(st, frontPart), front: front}
+	m.await(frontPart)
+	m.read()
+	standing := m.standing()
+	if frontPart.Status == Refused {
+		standing = Refused
+	}
+	if standing != Ready || front == nil {
+		if standing == Ready {
+			standing = frontPart.Status
+		}
+		return m.close(standing)
+	}
+	if front.flow.Gravity != 0 {
+		m.note(Note{ID: "field.dipping", Level: "caution", Text: "There is no forecast: layers, wells with a skin or a schedule, and cash are answered for a level bed only.",
+			Cause: "With a dip the share of gravity in the flow changes with the rate in each layer, and fronts are no longer self-similar.", Do: "Leave the dip empty, or leave the table of layers, the wells and the money empty.", Paths: []string{"front.dip"}})
+		return m.close(Stopped)
+	}
+	if bt := front.displacement.Breakthrough(); m.gas >= bt {
+		m.problem("field.wells.gas", m.typed("field.wells.gas"), "less than what is injected when the front arrives in an even layer")
+		return m.close(Refused)
+	}
+	if !m.lay() {
+		return m.close(Stopped)
+	}
+	m.find()
+	m.figures()
+	m.charts()
+	m.tables()
+	m.notes()
+	m.say()
+	return m.close(frontPart.Status)
+}
+
+// read takes the inputs in.
+func (m *many) read() {
+	st := m.st
+	m.length, m.width, m.uptime = m.need("field.length"), m.need("field.width"), m.or("field.uptime", 1)
+	if unlayered(st) {
+		m.samples = []reservoir.Sample{{Thickness: m.need("field.thickness"), Permeability: m.need("field.permeability"), Porosity: m.need("field.porosity")}}
+	} else if columns, problem := layerTable.rows(st.Field.Layers.Table, ""); problem != nil {
+		m.problems = append(m.problems, *problem)
+	} else {
+		for i := range columns[0] {
+			m.samples = append(m.samples, reservoir.Sample{Thickness: columns[0][i], Permeability: columns[1][i], Porosity: columns[2][i]})
+		}
+	}
+	groups := m.or("field.layers.groups", math.Inf(1))
+	m.layers = m.samples
+	switch {
+	case float64(len(m.samples)) > groups:
+		m.layers = reservoir.Grouped(m.samples, int(groups))
+	case len(m.samples) > MaxLayers:
+		m.problem(layerTable.path, strconv.Itoa(len(m.samples))+" rows", "up to "+strconv.Itoa(MaxLayers)+" layers, or a number of layers to lump them into")
+	}
+	m.gas = m.or("field.wells.gas", 0)
+	if p := CheckStart(st.Field.Start); p != nil {
+		m.problems = append(m.problems, *p)
+	}
+	m.readSteps()
+	m.readMoney()
+	m.input("field.horizon")
+	for _, path := range []string{"field.wells.producerPressure", "field.wells.depth", "field.wells.fractureGradient"} {
+		m.input(path)
+	}
+	switch st.Field.Limit {
+	case "oilRate":
+		m.need("field.oilRate")
+	case "waterCut":
+		m.need("field.waterCut")
+	}
+}
+
+// readSteps takes the schedule, or the drive as a schedule of one step.
+func (m *many) readSteps() {
+	st := m.st
+	most := math.Inf(1)
+	if heldRate(st) {
+		most = m.or("field.wells.pressureLimit", most)
+	}
+	bounded := func(s reservoir.Step) reservoir.Step {
+		if s.Rate > 0 && !math.IsInf(most, 1) && (s.Pressure == 0 || s.Pressure > most) {
+			s.Pressure = most
+		}
+		return s
+	}
+	if !scheduled(st) {
+		if heldRate(st) {
+			m.steps = []reservoir.Step{bounded(reservoir.Step{Rate: m.need("field.rate")})}
+		} else {
+			m.steps = []reservoir.Step{{Pressure: m.need("field.pressure")}}
+		}
+		return
+	}
+	columns, problem := scheduleTable.rows(st.Field.Wells.Schedule, st.Field.Start)
+	if problem != nil {
+		m.problems = append(m.problems, *problem)
+		return
+	}
+	moves := false
+	for i := range columns[0] {
+		s := reservoir.Step{From: columns[0][i], Rate: columns[1][i], Pressure: columns[2][i]}
+		moves = moves || s.Rate > 0 || s.Pressure > 0
+		m.steps = append(m.steps, bounded(s))
+	}
+	if !moves {
+		m.problem(scheduleTable.path, "no rate and no pressure difference", "a rate or a pressure difference in at least one row")
+	}
+}
+
+// lay builds the bodies and their runs; false when they leave no flow.
+func (m *many) lay() bool {
+	f := m.front
+	radius := m.or("field.wells.radius", 0)
+	shape := reservoir.Even
+	ends := func(skin string) float64 {
+		if radius == 0 && m.or(skin, 0) == 0 {
+			return 0
+		}
+		return reservoir.EndResistance(m.length, m.width, radius, m.or(skin, 0))
+	}
+	shape.In, shape.Out = ends("field.wells.injectorSkin"), ends("field.wells.producerSkin")
+	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: shape, Flood: reservoir.NewFlood(f.flow, f.displacement)}
+	for _, at := range []float64{0, f.displacement.Breakthrough(), 2, 1e4} {
+		if r := path.Resistance(at); !(r > 0) {
+			m.note(Note{ID: "field.skin", Level: "caution", Text: "There is no forecast: the skins take away more resistance than the block has.", Cause: "A negative skin stands for rock that does not resist; here it is more than all of the block.",
+				Do: "Look at the skins, the well radius and the length of the block.", Paths: []string{"field.wells.injectorSkin", "field.wells.producerSkin", "field.length"}})
+			return false
+		}
+	}
+	var strata []reservoir.Stratum
+	var pistons reservoir.Bundle
+	body := m.filling(path) // one layer alone is answered exactly
+	if len(m.layers) > 1 {
+		body = m.filling(path.Tabulate(tabulated))
+	}
+	ahead, behind := f.flow.Curves.At(f.swi), f.flow.Curves.At(f.swj)
+	piston := reservoir.Piston{Water: behind.Krw / f.flow.MuW, Oil: ahead.Kro / f.flow.MuO, Change: f.swj - f.swi}
+	for _, l := range m.layers {
+		pv := l.Porosity * l.Thickness * m.width * m.length
+		pace := l.Permeability / (l.Porosity * m.length * m.length)
+		m.pores += pv
+		m.bundle = append(m.bundle, reservoir.Member{Body: body, PoreVolume: pv, Pace: pace})
+		pistons = append(pistons, reservoir.Member{Body: piston, PoreVolume: pv, Pace: pace})
+		strata = append(strata, reservoir.Stratum{Thickness: l.Thickness, Permeability: l.Permeability, Porosity: l.Porosity, Before: f.swi, After: f.swj, Ahead: ahead, Behind: behind})
+	}
+	m.apart = m.plan(m.bundle)
+	if len(m.layers) > 1 {
+		m.crossflow(strata, shape)
+		if shape.In == 0 && shape.Out == 0 && m.gas == 0 && piston.Change > 0 && f.oneOnEachSide() {
+			m.pistons = m.plan(pistons)
+		}
+	}
+	m.run = m.apart
+	if m.st.Field.Layers.Crossflow != "none" && m.full != nil {
+		m.run = m.full
+	}
+	return true
+}
+
+// filling puts the gas at the start before a body, where there is any.
+func (m *many) filling(b reservoir.Body) reservoir.Body {
+	if m.gas == 0 {
+		return b
+	}
+	return reservoir.Filling{Body: b, Gas: m.gas}
+}
+
+// crossflow floods the layers as one, in vertical equilibrium.
+func (m *many) crossflow(strata []reservoir.Stratum, shape reservoir.Shape) {
+	f := m.front
+	if m.st.Field.Layers.Crossflow == "gravity" && len(m.layers) == len(m.samples) {
+		slices.Reverse(strata) // typed from the top down
+	} else {
+		strata = reservoir.Fastest(strata)
+	}
+	curves, err := reservoir.Equilibrium(strata)
+	if err != nil || f.swj <= f.swi {
+		m.fullReason = "The initial state holds more water than the injected one."
+		return
+	}
+	path, err := thick(f, curves, shape)
+	switch {
+	case err != nil:
+		m.fullReason = "The averaged curves could not be flooded: " + err.Error() + "."
+		return
+	case m.gas > 0 && m.gas >= path.Flood.Displacement.Breakthrough():
+		m.fullReason = "Water would arrive before the gas-filled space is full."
+		return
+	}
+	capacity := 0.0
+	for _, l := range m.layers {
+		capacity += l.Permeability * l.Thickness
+	}
+	pace := capacity * m.width / m.length / m.pores
+	m.full = m.plan(reservoir.Bundle{{Body: m.filling(path.Tabulate(tabulated)), PoreVolume: m.pores, Pace: pace}})
+}
+
+// thick is the flood along a bed of averaged curves.
+func thick(f *front, curves relperm.Curves, shape reservoir.Shape) (reservoir.Path, error) {
+	flow := f.flow
+	flow.Curves = curves
+	lo, hi := curves.Ends()
+	d, err := displace.New(flow, hi, lo)
+	if err != nil {
+		return reservoir.Path{}, err
+	}
+	return reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: shape, Flood: reservoir.NewFlood(flow, d)}, nil
+}
+
+// plan lays the steps out for a body, to well past whatever is told of it.
+func (m *many) plan(b reservoir.Bundle) *reservoir.Run {
+	last := m.steps[len(m.steps)-1]
+	end := last.From + m.or("field.horizon", 0)
+	clock := reservoir.Clock(b, furthest, 0)
+	if last.Rate > 0 {
+		end += furthest * m.pores / (last.Rate * m.uptime)
+	}
+	if last.Pressure > 0 {
+		end += clock / (last.Pressure * m.uptime)
+	}
+	return reservoir.NewRun(b, m.pores, m.uptime, m.steps, end*(1+aside)+1)
+}
+
+// furthest is how far a limit is looked for, pore volumes.
+const furthest = 50

@@ -13,7 +13,7 @@ func TestLayersInTheBrowser(t *testing.T) {
 	const table = "ft;md;fraction\n7;137;0.21\n13;63;0.19\n5;412;0.247\n10;22;0.163\n9;231;0.228"
 	p := OpenFile(t, At("#/field"))
 	p.WaitIdle()
-	p.write("#field-field-layers-table", table)
+	p.write("#in-field-layers-table", table)
 	p.WaitIdle()
 	st := study.Demo()
 	st.Field.Layers.Table = table
@@ -21,15 +21,15 @@ func TestLayersInTheBrowser(t *testing.T) {
 	if said := p.Text("#answer-field"); !strings.Contains(said, "with full crossflow") {
 		t.Errorf("the answer is %q", said)
 	}
-	p.write("#field-field-layers-table", table+"\n3;much;0.2")
+	p.write("#in-field-layers-table", table+"\n3;much;0.2")
 	p.WaitIdle()
 	if said := p.Text("#msg-field-layers-table"); !strings.Contains(said, "much") || !strings.Contains(said, "last good") {
 		t.Errorf("beside a bad table stands %q", said)
 	}
 	p.compare(study.Run(st).Parts[study.SheetField])
-	p.write("#field-field-layers-table", table)
-	p.write("#field-field-wells-schedule", "d bbl/d psi\n0 700 2500\n900 1400 3000")
-	p.pick("#field-field-layers-crossflow", "viscous")
+	p.write("#in-field-layers-table", table)
+	p.write("#in-field-wells-schedule", "d bbl/d psi\n0 700 2500\n900 1400 3000")
+	p.pick("#in-field-layers-crossflow", "viscous")
 	p.WaitIdle()
 	st.Field.Wells.Schedule = "d bbl/d psi\n0 700 2500\n900 1400 3000"
 	st.Field.Layers.Crossflow = "viscous"

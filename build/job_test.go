@@ -53,11 +53,11 @@ var typed = []struct{ sheet, path, text, unit string }{
 // expected is the study of the job, filled without the interface.
 func expected(t testing.TB) study.Study {
 	st := study.Empty()
-	sw, krw, kro, ok := paste.Read(plug).Table()
+	columns, _, ok := paste.Read(plug, paste.RelativePermeability).Table()
 	if !ok {
 		t.Fatal("the plug's table cannot be read")
 	}
-	st.Rock.Table = &study.Table{Sw: sw, Krw: krw, Kro: kro}
+	st.Rock.Table = &study.Table{Sw: columns[0], Krw: columns[1], Kro: columns[2]}
 	st.Rock.Curve = "table"
 	for _, in := range typed {
 		spec, ok := study.Find(in.path)

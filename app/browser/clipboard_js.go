@@ -37,16 +37,20 @@ func copyByCommand(text string) error {
 }
 
 // OnPaste offers every text of more than one cell that is pasted within an
-// element marked data-paste="table". Where it is used, the field beneath does
-// not get it.
-func OnPaste(use func(text string) (used bool)) {
+// element marked data-paste, with what the mark says. Where it is used, the field
+// beneath does not get it.
+func OnPaste(use func(into, text string) (used bool)) {
 	listen(document(), "paste", func(event js.Value) {
 		target, data := event.Get("target"), event.Get("clipboardData")
-		if !data.Truthy() || !target.Get("closest").Truthy() || !target.Call("closest", `[data-paste="table"]`).Truthy() {
+		if !data.Truthy() || !target.Get("closest").Truthy() {
+			return
+		}
+		marked := target.Call("closest", "[data-paste]")
+		if !marked.Truthy() {
 			return
 		}
 		text := data.Call("getData", "text/plain").String()
-		if severalCells(text) && use(text) {
+		if severalCells(text) && use(marked.Get("dataset").Get("paste").String(), text) {
 			event.Call("preventDefault")
 		}
 	})

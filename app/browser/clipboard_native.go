@@ -11,7 +11,7 @@ func Copy(text string, done func(err error)) {
 }
 
 // OnPaste waits for Pretend.Paste.
-func OnPaste(use func(text string) (used bool)) {
+func OnPaste(use func(into, text string) (used bool)) {
 	Pretend.mu.Lock()
 	defer Pretend.mu.Unlock()
 	Pretend.pasted = use

@@ -22,7 +22,7 @@ type Bench struct {
 	chosen     func(name, data string)
 	dropped    func(name, data string)
 	copied     string
-	pasted     func(text string) bool
+	pasted     func(into, text string) bool
 	fragment   string
 	moved      func(fragment string)
 	prints     int
@@ -104,11 +104,11 @@ func (b *Bench) Copied() string {
 }
 
 // Paste plays a paste into a table and reports whether the program used it.
-func (b *Bench) Paste(text string) bool {
+func (b *Bench) Paste(into, text string) bool {
 	b.mu.Lock()
 	pasted := b.pasted
 	b.mu.Unlock()
-	return pasted != nil && severalCells(text) && pasted(text)
+	return pasted != nil && severalCells(text) && pasted(into, text)
 }
 
 // Go plays a move to another address of the page.

@@ -50,8 +50,8 @@ func newWith(deliver func(state.Msg), after func(time.Duration, func())) *Runner
 func (r *Runner) Start() {
 	browser.OnFragment(func(fragment string) { r.deliver(state.Routed{Fragment: fragment}) })
 	browser.OnDropFile(study.MaxBytes, r.fileCame)
-	browser.OnPaste(func(text string) bool {
-		r.deliver(state.Pasted{Text: text})
+	browser.OnPaste(func(into, text string) bool {
+		r.deliver(state.Pasted{Table: into, Text: text})
 		return true
 	})
 	browser.OnShortcut(func(key string) bool {

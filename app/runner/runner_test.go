@@ -207,7 +207,7 @@ func TestWhatThePersonDoes(t *testing.T) {
 	if b.model.Route.Sheet != "rock" {
 		t.Error("a move to another address goes nowhere")
 	}
-	if !browser.Pretend.Paste("sw\tkrw\tkro\n0.2\t0\t1\n0.5\t0.1\t0.3\n0.7\t0.3\t0\n") || b.model.Paste == nil {
+	if !browser.Pretend.Paste("rock.table", "sw\tkrw\tkro\n0.2\t0\t1\n0.5\t0.1\t0.3\n0.7\t0.3\t0\n") || b.model.Paste == nil {
 		t.Error("a paste is not used")
 	}
 	b.act(title("One"))

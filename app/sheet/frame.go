@@ -183,7 +183,7 @@ func refusesText(m state.Model, sheet string) bool {
 		for _, about := range []string{".low", ".high", ".source"} {
 			path = strings.TrimSuffix(path, about)
 		}
-		if path != "rock.table" && sheetOf(path) == sheet {
+		if t, _ := study.FindTable(path); t.Path != path && sheetOf(path) == sheet {
 			return true
 		}
 	}
@@ -216,8 +216,10 @@ func invented(st study.Study) (n int, all bool) {
 			count(in.Source)
 		}
 	}
-	if st.Rock.Table != nil {
-		count(st.Rock.Table.Source)
+	for _, t := range study.LabTables() {
+		if columns, source := t.Get(&st); columns != nil {
+			count(source)
+		}
 	}
 	return n, all
 }

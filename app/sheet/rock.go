@@ -21,17 +21,50 @@ type Rock struct {
 // Render draws the sheet.
 func (r *Rock) Render() app.UI {
 	d, m := r.Desk, r.Model
-	return laid(d, m, study.SheetRock, r.points(), r.curve(), r.plug())
+	return laid(d, m, study.SheetRock, r.points(), r.curve(), r.plug(), r.capillary())
 }
 
 func (r *Rock) points() app.UI {
 	d, m := r.Desk, r.Model
-	return app.Section().Class("group").Body(
-		app.H3().Text("Laboratory points"),
-		widget.Pasting(d, m),
-		&widget.Points{Desk: d, Model: m},
-		widget.TableSource(d, m),
-	)
+	return app.Section().Class("group").Body(append([]app.UI{app.H3().Text("Laboratory points")}, table(d, m, "rock.table",
+		"Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row.")...)...)
+}
+
+// table is where a laboratory table is pasted and typed.
+func table(d widget.Desk, m state.Model, path, help string) []app.UI {
+	t, _ := study.FindTable(path)
+	return []app.UI{
+		widget.Pasting(d, m, t, help),
+		&widget.Points{Desk: d, Model: m, Table: t},
+		widget.TableSource(d, m, t),
+	}
+}
+
+// capillary is the rock's capillary pressure: which curve, its points or parameters, what
+// it was measured at, and the end states of a wettability test.
+func (r *Rock) capillary() app.UI {
+	d, m := r.Desk, r.Model
+	c := m.Study.Rock.Capillary
+	choice := func(name, label, value string, list []study.Choice, help string) app.UI {
+		return widget.Choice(d, "rock.capillary."+name, label, value, list, help)
+	}
+	body := []app.UI{app.H3().Text("Capillary pressure"), choice("curve", "Capillary pressure", c.Curve, study.PcKinds, "Pc = Po − Pw. Needed for what rock soaks up; the other sheets do without.")}
+	if c.ByTable() {
+		body = append(body, choice("unit", "Unit of Pc in the table", c.Unit, study.PcUnits, ""))
+		body = append(body, table(d, m, "rock.capillary.table", "Columns Sw and Pc, with psi, kPa, bar, MPa or Pa in the heading, or Sw and J.")...)
+	}
+	if c.Fitted() {
+		body = append(body, choice("ends", "Ends of the fit", c.Ends, study.PcEnds, ""), choice("weights", "Weights of the fit", c.Weights, study.Weightings, ""))
+	}
+	body = append(body, widget.Fields(d, m, study.SheetRock, "Capillary pressure")...)
+	if c.Scalable() {
+		body = append(body, choice("at", "Measured at", c.At, study.PcConditions, ""))
+	}
+	body = append(body, widget.Fields(d, m, study.SheetRock, "Capillary laboratory")...)
+	if c.Given() {
+		body = append(body, app.H4().Text("Wettability test of Amott"))
+	}
+	return app.Section().Class("group").Body(append(body, widget.Fields(d, m, study.SheetRock, "Amott")...)...)
 }
 
 // curve is which curve the study uses, with the parameters typed for it.

@@ -50,7 +50,7 @@ func refused(sheet string) state.Model {
 
 // pasted is an empty study with a table being looked at.
 func pasted() state.Model {
-	return on("rock", after(state.StartedEmpty{}, state.Pasted{Text: "Sw\tkrw\tkro\n0.2\t0\t1\n0.4\t0.1\t0.4\n0.6\t0.2\t0.1\n0.7\t0.3\t0\n"}))
+	return on("rock", after(state.StartedEmpty{}, state.Pasted{Table: "rock.table", Text: "Sw\tkrw\tkro\n0.2\t0\t1\n0.4\t0.1\t0.4\n0.6\t0.2\t0.1\n0.7\t0.3\t0\n"}))
 }
 
 func evidenced() state.Model {
@@ -66,9 +66,23 @@ func evidenced() state.Model {
 	return m
 }
 
+// capillary gives the demonstration a capillary pressure table, in use by a kind of curve.
+func capillary(kind string) []state.Msg {
+	return []state.Msg{
+		state.Chosen{Path: "rock.capillary.curve", Value: kind},
+		state.Pasted{Table: "rock.capillary.table", Text: "Sw\tPc, kPa\n0.24\t90\n0.3\t20\n0.4\t6\n0.5\t1\n0.55\t-2\n0.6\t-6\n0.66\t-17\n0.7\t-80\n"},
+		state.PasteAccepted{},
+	}
+}
+
 // models are the states of the screen that every rule below must hold in.
 func models() map[string]state.Model {
 	all := map[string]state.Model{"paste preview": pasted(), "evidence": evidenced()}
+	for _, kind := range study.PcKinds {
+		all["capillary "+kind.Value] = on("rock", after(capillary(kind.Value)...))
+		all["capillary laboratory "+kind.Value] = on("rock", after(append(capillary(kind.Value), state.Chosen{Path: "rock.capillary.at", Value: "laboratory"})...))
+	}
+	all["capillary preview"] = on("rock", after(capillary("table")[:2]...))
 	for _, s := range sheets {
 		all["cases, "+s.name] = compared(s.name)
 		all["demonstration, "+s.name] = on(s.name, after())

@@ -72,7 +72,7 @@ func TestRailTellsARefusedText(t *testing.T) {
 			}
 		}
 	}
-	if said := rendered(t, on("rock", after(state.RowAdded{After: 1}, state.Edited{Path: "rock.table.2.krw", Text: "0.1"}))).text(t, "tab-rock"); strings.Contains(said, "refused") {
+	if said := rendered(t, on("rock", after(state.RowAdded{Table: "rock.table", After: 1}, state.Edited{Path: "rock.table.2.krw", Text: "0.1"}))).text(t, "tab-rock"); strings.Contains(said, "refused") {
 		t.Errorf("of a row that is not filled yet the rail says %q", said)
 	}
 }

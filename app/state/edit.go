@@ -14,8 +14,10 @@ import (
 // one is kept as typed, with what was read and what is allowed, and the last good
 // value stays in use.
 func (m Model) edited(msg Edited) (Model, []Effect) {
-	if row, column, ok := cellAt(msg.Path); ok {
-		return m.cellEdited(row, column, msg)
+	if t, ok := study.FindTable(msg.Path); ok {
+		if row, column, ok := t.At(msg.Path); ok {
+			return m.cellEdited(t, row, column, msg)
+		}
 	}
 	spec, ok := study.Find(msg.Path)
 	if !ok || !m.has(msg.Path) {
@@ -238,10 +240,10 @@ func (m Model) sourced(msg Sourced) (Model, []Effect) {
 			p.refuse(path, Draft{Text: text}, problem, "")
 			return
 		}
-		if t := p.study.Rock.Table; msg.Path == tablePath && t != nil {
-			changed := *t
-			changed.Source = text
-			p.study.Rock.Table = &changed
+		if t, ok := study.FindTable(msg.Path); ok && t.Path == msg.Path {
+			if columns, _ := t.Get(&p.study); columns != nil {
+				t.Set(&p.study, columns, text)
+			}
 		}
 		if spec, ok := study.Find(msg.Path); ok && spec.Get(&p.study) != nil {
 			changed := *spec.Get(&p.study)

@@ -92,8 +92,8 @@ func TestUpdateLeavesTheModelBeforeAlone(t *testing.T) {
 	m := after(New(), Edited{oil, "bad", "cp"})
 	before, drafts := study.Write(m.Study), len(m.Drafts)
 	after(m, Edited{oil, "7", "cp"}, Edited{"rock.table.0.sw", "0.1", ""}, Ranged{oil, "1", "9"}, Sourced{oil, "x"},
-		Written{"title", "y"}, Chosen{"rock.curve", "let"}, RowRemoved{2}, Undone{}, Edited{oil, "8", "cp"})
-	if study.Write(m.Study) != before || len(m.Drafts) != drafts || m.Rows[0].Text[0] != "0.227" {
+		Written{"title", "y"}, Chosen{"rock.curve", "let"}, RowRemoved{tablePath, 2}, Undone{}, Edited{oil, "8", "cp"})
+	if study.Write(m.Study) != before || len(m.Drafts) != drafts || m.Rows(tablePath)[0].Text[0] != "0.227" {
 		t.Error("a message changed the model it was given")
 	}
 }
@@ -198,7 +198,7 @@ func TestSwitchingUnitsChangesNoValue(t *testing.T) {
 		if study.Write(same) != study.Write(before) {
 			t.Errorf("switching to %s changed the study", system)
 		}
-		if m.Drafts[oil].Text != "bad" || m.Rows[3].Text[1] != "x" {
+		if m.Drafts[oil].Text != "bad" || m.Rows(tablePath)[3].Text[1] != "x" {
 			t.Errorf("switching to %s lost what was typed", system)
 		}
 	}

@@ -19,7 +19,7 @@ func mine() string {
 func TestFileOpens(t *testing.T) {
 	before := after(New(), Edited{oil, "thick", "cp"})
 	m, effects := play(before, FileChosen{"mine.json", mine()})
-	if study.Write(m.Study) != mine() || len(m.Drafts) > 0 || len(m.Rows) > 0 {
+	if study.Write(m.Study) != mine() || len(m.Drafts) > 0 || len(m.Rows(tablePath)) > 0 {
 		t.Errorf("open is %q with drafts %v", m.Study.Title, m.Drafts)
 	}
 	if len(of[Run](effects)) != 1 || len(of[Keep](effects)) != 1 {
@@ -67,7 +67,7 @@ func TestNewAndDemo(t *testing.T) {
 	m, effects := play(New(), Chosen{"system", "metric"}, StartedEmpty{})
 	want := study.Empty()
 	want.System = "metric"
-	if study.Write(m.Study) != study.Write(want) || len(m.Rows) > 0 {
+	if study.Write(m.Study) != study.Write(want) || len(m.Rows(tablePath)) > 0 {
 		t.Error("a new study is not empty, or not in the units in use")
 	}
 	if len(of[Run](effects)) != 2 {

@@ -15,7 +15,7 @@ type (
 	// Left: a field that was typed in lost the keyboard. What is typed next is a
 	// step of its own, and what is in use then is the last good value.
 	Left struct{}
-	// Sourced: the source note of an input changed ("rock.table" included).
+	// Sourced: the source note of an input changed (the tables included).
 	Sourced struct{ Path, Text string }
 	// Ranged: the optional range of an input changed.
 	Ranged struct{ Path, Low, High string }
@@ -25,10 +25,16 @@ type (
 	// Written: a text field changed: "title", "author", "note", "field.start".
 	Written struct{ Path, Text string }
 
-	// RowAdded adds an empty row to the table after row After (-1: first).
-	RowAdded struct{ After int }
-	// RowRemoved removes a row of the table.
-	RowRemoved struct{ Row int }
+	// RowAdded adds an empty row to a table after row After (-1: first).
+	RowAdded struct {
+		Table string // path
+		After int
+	}
+	// RowRemoved removes a row of a table.
+	RowRemoved struct {
+		Table string
+		Row   int
+	}
 
 	// CaseAdded adds a case at the end; without a name it gets a number.
 	CaseAdded struct{ Name string }
@@ -57,9 +63,9 @@ type (
 	}
 
 	// Pasted: a text was pasted where a table is expected.
-	Pasted struct{ Text string }
+	Pasted struct{ Table, Text string }
 	// PasteMapped: the person says what a column of the pasted table is:
-	// "sw", "krw", "kro" or "" for none.
+	// one of the table's, "so" or "" for none.
 	PasteMapped struct {
 		Column int
 		As     string

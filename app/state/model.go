@@ -18,7 +18,6 @@ type Model struct {
 
 	Drafts   map[string]Draft  // what the person typed, by path, while it differs from the study; ends of a range at path+".low" and ".high"
 	Messages map[string]string // what is wrong with an input and what is allowed, by path
-	Rows     []Row             // the laboratory table as typed: what the grid shows; Study.Rock.Table is the last good reading of it
 
 	Result         study.Result // the newest part of each sheet: while Computing, some still answer what stood before
 	Whole          study.Result // the last result that had come whole: what is printed and exported
@@ -46,6 +45,7 @@ type Model struct {
 	Checking bool            // some of them are still to be computed
 
 	answered   map[study.Sheet]bool // the sheets whose whole part answers Revision
+	rows       map[string][]Row     // of the laboratory tables, see Rows
 	history    history
 	opened     *study.Study // the study as it was opened
 	formerKept *study.Study // the former study that the browser keeps
@@ -65,6 +65,7 @@ type Route struct {
 
 // PasteDraft is a pasted text and how it was read.
 type PasteDraft struct {
+	Table   string // path of the table it is for
 	Text    string
 	Reading paste.Reading
 }

@@ -17,17 +17,17 @@ type page struct {
 	study    study.Study
 	drafts   map[string]Draft
 	messages map[string]string
-	rows     []Row
-	former   *study.Study // another study that this one took the place of, and that can be brought back; nil: none
-	opened   *study.Study // the study as it was opened: tells whose page this is
+	rows     map[string][]Row // of the laboratory tables as typed, by path
+	former   *study.Study     // another study that this one took the place of, and that can be brought back; nil: none
+	opened   *study.Study     // the study as it was opened: tells whose page this is
 }
 
 // fresh is the page of a study that nobody has typed into yet.
 func fresh(st study.Study) page {
-	return page{study: st, drafts: map[string]Draft{}, messages: map[string]string{}, rows: rowsOf(st.Rock.Table), opened: &st}
+	return page{study: st, drafts: map[string]Draft{}, messages: map[string]string{}, rows: rowsOf(&st), opened: &st}
 }
 
-func (m Model) page() page { return page{m.Study, m.Drafts, m.Messages, m.Rows, m.Former, m.opened} }
+func (m Model) page() page { return page{m.Study, m.Drafts, m.Messages, m.rows, m.Former, m.opened} }
 
 // amend makes one undo step of a change to the page. Successive changes under
 // one key, as the keystrokes in one field, are one step; "" is a key of its own.
@@ -61,7 +61,7 @@ func (m Model) show(p page) (Model, []Effect) {
 	if m.opened != p.opened {
 		m.LastGood = nil // the answers to another study are none to this one
 	}
-	m.Study, m.Drafts, m.Messages, m.Rows, m.Former, m.opened = p.study, p.drafts, p.messages, p.rows, p.former, p.opened
+	m.Study, m.Drafts, m.Messages, m.rows, m.Former, m.opened = p.study, p.drafts, p.messages, p.rows, p.former, p.opened
 	m.System = units.System(m.Study.System)
 	m.CanUndo, m.CanRedo = m.history.has()
 	if !changed {
@@ -97,21 +97,23 @@ func (m Model) run() Run { return Run{m.Revision, m.Study, study.Sheet(m.Route.S
 
 func (p page) same(q page) bool {
 	return p.former == q.former && maps.Equal(p.drafts, q.drafts) && maps.Equal(p.messages, q.messages) &&
-		slices.EqualFunc(p.rows, q.rows, func(a, b Row) bool { return a.Text == b.Text }) &&
+		maps.EqualFunc(p.rows, q.rows, func(a, b []Row) bool {
+			return slices.EqualFunc(a, b, func(a, b Row) bool { return a.Text == b.Text })
+		}) &&
 		sameStudy(p.study, q.study)
 }
 
-// sameStudy compares the table apart from the rest, which is quick, so that a
+// sameStudy compares the tables apart from the rest, which is quick, so that a
 // keystroke in a table of ten thousand rows is.
 func sameStudy(a, b study.Study) bool {
-	s, t := a.Rock.Table, b.Rock.Table
-	a.Rock.Table, b.Rock.Table = nil, nil
-	return sameTable(s, t) && reflect.DeepEqual(a, b)
-}
-
-func sameTable(s, t *study.Table) bool {
-	if s == nil || t == nil {
-		return s == t
+	for _, t := range study.LabTables() {
+		columns, source := t.Get(&a)
+		others, other := t.Get(&b)
+		if source != other || (columns == nil) != (others == nil) || !slices.EqualFunc(columns, others, slices.Equal) {
+			return false
+		}
+		t.Set(&a, nil, "")
+		t.Set(&b, nil, "")
 	}
-	return s.Source == t.Source && slices.Equal(s.Sw, t.Sw) && slices.Equal(s.Krw, t.Krw) && slices.Equal(s.Kro, t.Kro)
+	return reflect.DeepEqual(a, b)
 }

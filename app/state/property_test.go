@@ -19,32 +19,34 @@ func random(r *rand.Rand, m Model) Msg {
 	texts := []string{"", " ", "5", "0.2", "0.95", "20 %", "-1", "1e999", "abc", "2,5", "1,234", "NaN", "100", "3 cp", "\xff", "<b>", "1e-320"}
 	text := texts[r.IntN(len(texts))]
 	symbols := []string{"", "cp", "Pa.s", "fraction", "%", "ft", "m", "md", "stone"}
-	row := r.IntN(len(m.Rows)+3) - 1
+	tables := study.LabTables()
+	tabled := tables[r.IntN(len(tables))].Path
+	row := r.IntN(len(m.Rows(tabled))+3) - 1
 	switch r.IntN(27) {
 	case 0, 1, 2, 3:
 		return Edited{path, text, symbols[r.IntN(len(symbols))]}
 	case 4, 5, 6:
-		return Edited{fmt.Sprintf("rock.table.%d.%s", row, []string{"sw", "krw", "kro", "sg"}[r.IntN(4)]), text, ""}
+		return Edited{fmt.Sprintf("%s.%d.%s", tabled, row, []string{"sw", "krw", "kro", "pc", "sg"}[r.IntN(5)]), text, ""}
 	case 7:
 		return Ranged{path, text, texts[r.IntN(len(texts))]}
 	case 8:
-		return Sourced{[]string{path, "rock.table"}[r.IntN(2)], text}
+		return Sourced{[]string{path, tabled}[r.IntN(2)], text}
 	case 9:
 		return Written{[]string{"title", "author", "note", "field.start", "colour"}[r.IntN(5)], []string{text, "2027-01-31"}[r.IntN(2)]}
 	case 10, 11:
-		field := []string{"system", "rock.reference", "rock.curve", "rock.weights", "field.drive", "field.limit", "colour"}[r.IntN(7)]
+		field := []string{"system", "rock.reference", "rock.curve", "rock.weights", "rock.capillary.curve", "rock.capillary.unit", "field.drive", "field.limit", "colour"}[r.IntN(9)]
 		if list := study.Choices(field); list != nil && r.IntN(5) > 0 {
 			return Chosen{field, list[r.IntN(len(list))].Value}
 		}
 		return Chosen{field, text}
 	case 12:
-		return RowAdded{row}
+		return RowAdded{tabled, row}
 	case 13:
-		return RowRemoved{row}
+		return RowRemoved{tabled, row}
 	case 14:
-		return Pasted{[]string{text, pastedTable, "0.2 0 0.9\n0.5 x 0.3\n0.7 0.3 0\n"}[r.IntN(3)]}
+		return Pasted{tabled, []string{text, pastedTable, "0.2 0 0.9\n0.5 x 0.3\n0.7 0.3 0\n", "Sw Pc,kPa\n0.2 9\n0.4 1\n0.7 -3\n"}[r.IntN(4)]}
 	case 15:
-		return []Msg{PasteAccepted{}, PasteDropped{}, PasteMapped{r.IntN(5) - 1, []string{"sw", "krw", "kro", "so", "", "?"}[r.IntN(6)]}}[r.IntN(3)]
+		return []Msg{PasteAccepted{}, PasteDropped{}, PasteMapped{r.IntN(5) - 1, []string{"sw", "krw", "kro", "pc", "so", "", "?"}[r.IntN(7)]}}[r.IntN(3)]
 	case 16, 17:
 		return Undone{}
 	case 18:
@@ -88,10 +90,10 @@ func TestAnySequence(t *testing.T) {
 				t.Fatalf("%s: the revision went from %d to %d", at, before.Revision, m.Revision)
 			}
 			for path := range m.Messages {
-				_, _, cell := cellAt(path)
+				_, ofTable := study.FindTable(path)
 				draft, kept := m.Drafts[path]
 				_, inner, _ := study.AtCase(path) // an empty name is as wrong as any
-				if path != tablePath && !cell && (!kept || draft.Text == "" && inner != caseName) {
+				if !ofTable && (!kept || draft.Text == "" && inner != caseName) {
 					t.Fatalf("%s: %s says %q about a text that is lost", at, path, m.Messages[path])
 				}
 			}
@@ -122,13 +124,13 @@ func undoLeadsBack(t *testing.T, at string, msg Msg, before, m Model) {
 func TestBadTextIsNeverLost(t *testing.T) {
 	bad := []Msg{Edited{oil, "thick", "Pa.s"}, Edited{"rock.table.4.krw", "half", ""}, Written{"field.start", "soon"}, Ranged{"field.length", "", "far"}}
 	held := func(m Model) bool {
-		return m.Drafts[oil] == Draft{"thick", "Pa.s"} && m.Messages[oil] != "" && m.Rows[4].Text[1] == "half" &&
+		return m.Drafts[oil] == Draft{"thick", "Pa.s"} && m.Messages[oil] != "" && m.Rows(tablePath)[4].Text[1] == "half" &&
 			m.Drafts["field.start"].Text == "soon" && m.Drafts["field.length.high"].Text == "far"
 	}
 	elsewhere := func(msg Msg) bool {
 		switch msg := msg.(type) {
 		case Edited:
-			_, _, cell := cellAt(msg.Path)
+			_, cell := study.FindTable(msg.Path)
 			return !cell && msg.Path != oil && msg.Path != "field.length"
 		case Written:
 			return msg.Path != "field.start"

@@ -51,19 +51,23 @@ func (m Model) Said(path string) string {
 // the table that are complete are in the study; while one is bad, an earlier table
 // is, and none of its cells are on the form.
 func (m Model) typedAt(path string) string {
-	of, column, ok := cellAt(path)
+	t, ok := study.FindTable(path)
+	if !ok {
+		return path
+	}
+	of, column, ok := t.At(path)
 	if !ok {
 		return path
 	}
 	at := ""
-	for i, row := range m.Rows {
-		bad, _, complete := row.standing()
+	for i, row := range m.rows[t.Path] {
+		bad, _, complete := row.standing(len(t.Columns))
 		if bad {
 			return ""
 		}
 		if complete {
 			if of == 0 {
-				at = cellPath(i, column)
+				at = t.Cell(i, column)
 			}
 			of--
 		}

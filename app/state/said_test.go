@@ -63,7 +63,7 @@ func TestEngineProblemsAreSaidAtEveryField(t *testing.T) {
 // TestProblemsOfCellsAreSaidWhereTheyStand: rows that are left out of the study stand
 // in the form all the same.
 func TestProblemsOfCellsAreSaidWhereTheyStand(t *testing.T) {
-	m := answer(after(New(), Chosen{"rock.curve", "table"}, RowAdded{-1}, Edited{"rock.table.6.krw", "0.001", ""}))
+	m := answer(after(New(), Chosen{"rock.curve", "table"}, RowAdded{tablePath, -1}, Edited{"rock.table.6.krw", "0.001", ""}))
 	holds(t, "at the cell", m.Said("rock.table.6.krw"), "0.001")
 	for _, path := range []string{"rock.table.5.krw", "rock.table.7.krw", "rock.table.6.sw"} {
 		if said := m.Said(path); said != "" {

@@ -8,6 +8,18 @@ import (
 	"brinefront/physics/study"
 )
 
+const tablePath = "rock.table"
+
+func cellPath(row, column int) string { return labTable(tablePath).Cell(row, column) }
+
+func labTable(path string) study.LabTable {
+	t, ok := study.FindTable(path)
+	if !ok {
+		panic(path)
+	}
+	return t
+}
+
 // cells types a row of the table.
 func cells(row int, texts ...string) []Msg {
 	var msgs []Msg
@@ -21,7 +33,7 @@ func cells(row int, texts ...string) []Msg {
 func threeRows() Model {
 	m := empty()
 	for row, texts := range [][]string{{"0.2", "0", "0.9"}, {"0.5", "0.1", "0.3"}, {"0.7", "0.3", "0"}} {
-		m = after(m, append([]Msg{RowAdded{row - 1}}, cells(row, texts...)...)...)
+		m = after(m, append([]Msg{RowAdded{tablePath, row - 1}}, cells(row, texts...)...)...)
 	}
 	return m
 }
@@ -46,20 +58,20 @@ func TestTable(t *testing.T) {
 	}{
 		{"typed", nil, whole, 3, nil, nil},
 		{"percent", cells(0, "20 %"), whole, 3, nil, nil},
-		{"an empty row is no matter", []Msg{RowAdded{2}}, whole, 4, nil, nil},
-		{"unfinished", append([]Msg{RowAdded{2}}, cells(3, "0.8", "0.4")...), whole, 4, []string{"Row 4 is left out"}, nil},
-		{"finished", append([]Msg{RowAdded{2}}, cells(3, "0.8", "0.4", "0")...), "[0.2 0.5 0.7 0.8] [0 0.1 0.3 0.4] [0.9 0.3 0 0]", 4, nil, nil},
-		{"first", append([]Msg{RowAdded{-1}}, cells(0, "0.1", "0", "1")...), "[0.1 0.2 0.5 0.7] [0 0 0.1 0.3] [1 0.9 0.3 0]", 4, nil, nil},
+		{"an empty row is no matter", []Msg{RowAdded{tablePath, 2}}, whole, 4, nil, nil},
+		{"unfinished", append([]Msg{RowAdded{tablePath, 2}}, cells(3, "0.8", "0.4")...), whole, 4, []string{"Row 4 is left out"}, nil},
+		{"finished", append([]Msg{RowAdded{tablePath, 2}}, cells(3, "0.8", "0.4", "0")...), "[0.2 0.5 0.7 0.8] [0 0.1 0.3 0.4] [0.9 0.3 0 0]", 4, nil, nil},
+		{"first", append([]Msg{RowAdded{tablePath, -1}}, cells(0, "0.1", "0", "1")...), "[0.1 0.2 0.5 0.7] [0 0 0.1 0.3] [1 0.9 0.3 0]", 4, nil, nil},
 		{"an emptied cell", cells(1, ""), "[0.2 0.7] [0 0.3] [0.9 0]", 3, []string{"Row 2 is left out"}, nil},
 		{"letters", cells(1, "half"), whole, 3, []string{"Row 2 cannot be read", "of 3 rows, stays in use"}, map[string]string{"rock.table.1.sw": "half"}},
 		{"percent as fraction", cells(1, "50"), whole, 3, []string{"Row 2"}, map[string]string{"rock.table.1.sw": "50"}},
 		{"negative", cells(2, "0.7", "-0.3"), whole, 3, []string{"Row 3"}, map[string]string{"rock.table.2.krw": "-0.3"}},
 		{"two bad rows", append(cells(0, "a"), cells(2, "b")...), whole, 3, []string{"rows 1, 3"}, map[string]string{"rock.table.0.sw": "a", "rock.table.2.sw": "b"}},
 		{"bad and mended", append(cells(1, "half"), cells(1, "0.6")...), "[0.2 0.6 0.7] [0 0.1 0.3] [0.9 0.3 0]", 3, nil, nil},
-		{"bad and removed", append(cells(1, "half"), RowRemoved{1}), "[0.2 0.7] [0 0.3] [0.9 0]", 2, nil, nil},
-		{"a row above a bad one removed", append(cells(1, "half"), RowRemoved{0}), whole, 2, []string{"Row 1 cannot"}, map[string]string{"rock.table.0.sw": "half"}},
-		{"all removed", []Msg{RowRemoved{0}, RowRemoved{0}, RowRemoved{0}}, "none", 0, nil, nil},
-		{"no such row", []Msg{RowRemoved{7}, RowRemoved{-1}, Edited{"rock.table.9.sw", "0.1", ""}, Edited{"rock.table.0.sg", "0.1", ""}, Edited{"rock.table.-1.sw", "1", ""}}, whole, 3, nil, nil},
+		{"bad and removed", append(cells(1, "half"), RowRemoved{tablePath, 1}), "[0.2 0.7] [0 0.3] [0.9 0]", 2, nil, nil},
+		{"a row above a bad one removed", append(cells(1, "half"), RowRemoved{tablePath, 0}), whole, 2, []string{"Row 1 cannot"}, map[string]string{"rock.table.0.sw": "half"}},
+		{"all removed", []Msg{RowRemoved{tablePath, 0}, RowRemoved{tablePath, 0}, RowRemoved{tablePath, 0}}, "none", 0, nil, nil},
+		{"no such row", []Msg{RowRemoved{tablePath, 7}, RowRemoved{tablePath, -1}, Edited{"rock.table.9.sw", "0.1", ""}, Edited{"rock.table.0.sg", "0.1", ""}, Edited{"rock.table.-1.sw", "1", ""}}, whole, 3, nil, nil},
 	}
 	for _, test := range tests {
 		t.Run(test.name, func(t *testing.T) {
@@ -67,8 +79,8 @@ func TestTable(t *testing.T) {
 			if got := table(m); got != test.table {
 				t.Errorf("in use is %s, want %s", got, test.table)
 			}
-			if len(m.Rows) != test.rows {
-				t.Errorf("%d rows are shown, want %d", len(m.Rows), test.rows)
+			if len(m.Rows(tablePath)) != test.rows {
+				t.Errorf("%d rows are shown, want %d", len(m.Rows(tablePath)), test.rows)
 			}
 			if (m.Messages["rock.table"] != "") != (test.said != nil) {
 				t.Errorf("the table says %q", m.Messages["rock.table"])
@@ -88,7 +100,7 @@ func TestTable(t *testing.T) {
 
 func TestTableShowsWhatComesFromElsewhere(t *testing.T) {
 	m := New()
-	for i, row := range m.Rows {
+	for i, row := range m.Rows(tablePath) {
 		for column, text := range row.Text {
 			want := [3]float64{m.Study.Rock.Table.Sw[i], m.Study.Rock.Table.Krw[i], m.Study.Rock.Table.Kro[i]}[column]
 			if got := after(m, Edited{cellPath(i, column), text, ""}); got.Revision != m.Revision {
@@ -96,18 +108,18 @@ func TestTableShowsWhatComesFromElsewhere(t *testing.T) {
 			}
 		}
 	}
-	if len(m.Rows) != len(m.Study.Rock.Table.Sw) {
-		t.Errorf("%d rows are shown of %d", len(m.Rows), len(m.Study.Rock.Table.Sw))
+	if len(m.Rows(tablePath)) != len(m.Study.Rock.Table.Sw) {
+		t.Errorf("%d rows are shown of %d", len(m.Rows(tablePath)), len(m.Study.Rock.Table.Sw))
 	}
 }
 
 func TestTableKeepsItsSource(t *testing.T) {
-	m := after(New(), Sourced{"rock.table", "plug 7"}, Edited{"rock.table.0.sw", "0.2", ""}, RowRemoved{1})
+	m := after(New(), Sourced{"rock.table", "plug 7"}, Edited{"rock.table.0.sw", "0.2", ""}, RowRemoved{tablePath, 1})
 	if got := m.Study.Rock.Table.Source; got != "plug 7" {
 		t.Errorf("source is %q, want plug 7", got)
 	}
-	for range m.Rows {
-		m = after(m, RowRemoved{0})
+	for range m.Rows(tablePath) {
+		m = after(m, RowRemoved{tablePath, 0})
 	}
 	if m.Study.Rock.Table == nil || m.Study.Rock.Table.Source != "plug 7" {
 		t.Error("the source is lost with the last row")
@@ -121,9 +133,9 @@ func TestTableIsNotEndless(t *testing.T) {
 	st := study.Empty()
 	full := make([]float64, study.MaxRows)
 	st.Rock.Table = &study.Table{Sw: full, Krw: full, Kro: full}
-	m := after(New(), Restored{study.Write(st)}, RowAdded{0})
-	if len(m.Rows) != study.MaxRows || !strings.Contains(lastNotice(m), "as many as it can") {
-		t.Errorf("%d rows, notice %q", len(m.Rows), lastNotice(m))
+	m := after(New(), Restored{study.Write(st)}, RowAdded{tablePath, 0})
+	if len(m.Rows(tablePath)) != study.MaxRows || !strings.Contains(lastNotice(m), "as many as it can") {
+		t.Errorf("%d rows, notice %q", len(m.Rows(tablePath)), lastNotice(m))
 	}
 }
 

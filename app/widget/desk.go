@@ -32,8 +32,8 @@ func dashed(path string) string { return strings.ReplaceAll(path, ".", "-") }
 // FieldID is the id of the element in which the input at a path is given. The
 // table as a whole is given by pasting it.
 func FieldID(path string) string {
-	if path == "rock.table" {
-		return pasteBox
+	if t, ok := study.FindTable(path); ok && t.Path == path {
+		return pasteBox(path)
 	}
 	if i, inner, ok := study.AtCase(path); ok && inner == "name" {
 		return caseID(i, inner)

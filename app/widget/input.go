@@ -60,7 +60,7 @@ func (i *Input) message(text string) state.Msg {
 	case WordsInput, BlockInput:
 		return state.Written{Path: i.Path, Text: text}
 	case PasteInput:
-		return state.Pasted{Text: text}
+		return state.Pasted{Table: i.Path, Text: text}
 	case CaseNameInput:
 		i, _, _ := study.AtCase(i.Path)
 		return state.CaseNamed{Index: i, Text: text}

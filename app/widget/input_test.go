@@ -22,7 +22,7 @@ func TestEverySortOfInputSendsItsMessage(t *testing.T) {
 		{Input{Sort: SourceInput, Path: "field.length"}, state.Sourced{Path: "field.length", Text: "7"}},
 		{Input{Sort: WordsInput, Path: "title"}, state.Written{Path: "title", Text: "7"}},
 		{Input{Sort: BlockInput, Path: "note"}, state.Written{Path: "note", Text: "7"}},
-		{Input{Sort: PasteInput, Path: "rock.table"}, state.Pasted{Text: "7"}},
+		{Input{Sort: PasteInput, Path: "rock.table"}, state.Pasted{Table: "rock.table", Text: "7"}},
 	} {
 		if got := c.in.message("7"); !reflect.DeepEqual(got, c.want) {
 			t.Errorf("%s sends %#v, want %#v", c.in.Sort, got, c.want)
@@ -47,28 +47,9 @@ func TestInputKeepsWhatItWasMadeWith(t *testing.T) {
 	}
 }
 
-func TestCellAt(t *testing.T) {
-	for path, want := range map[string]struct {
-		row    int
-		column string
-		ok     bool
-	}{
-		"rock.table.0.sw":   {0, "sw", true},
-		"rock.table.12.kro": {12, "kro", true},
-		"rock.table":        {0, "", false},
-		"rock.table.x.sw":   {0, "sw", false},
-		"field.length":      {0, "", false},
-	} {
-		row, column, ok := cellAt(path)
-		if ok != want.ok || ok && (row != want.row || column != want.column) {
-			t.Errorf("cellAt(%q) = %d, %q, %v", path, row, column, ok)
-		}
-	}
-}
-
 func TestFieldIDs(t *testing.T) {
 	for path, want := range map[string]string{
-		"fluids.oilViscosity": "in-fluids-oilViscosity", "rock.table.3.sw": "in-rock-table-3-sw", "rock.table": "paste-box",
+		"fluids.oilViscosity": "in-fluids-oilViscosity", "rock.table.3.sw": "in-rock-table-3-sw", "rock.table": "paste-box", "rock.capillary.table": "paste-box-rock-capillary-table",
 	} {
 		if got := FieldID(path); got != want {
 			t.Errorf("FieldID(%q) = %q, want %q", path, got, want)
@@ -80,7 +61,7 @@ func TestFieldIDs(t *testing.T) {
 func TestHandlersOfDifferentMessagesHaveDifferentScopes(t *testing.T) {
 	seen := map[string]state.Msg{}
 	for _, msg := range []state.Msg{
-		state.RowRemoved{Row: 1}, state.RowRemoved{Row: 2}, state.RowAdded{After: 1}, state.Undone{}, state.Redone{},
+		state.RowRemoved{Table: "rock.table", Row: 1}, state.RowRemoved{Table: "rock.table", Row: 2}, state.RowAdded{Table: "rock.table", After: 1}, state.Undone{}, state.Redone{},
 		state.Chosen{Path: "field.drive", Value: "rate"}, state.Chosen{Path: "field.drive", Value: "pressure"}, state.Dismissed{Notice: 1},
 	} {
 		_, scope := does(nil, msg)

@@ -10,8 +10,8 @@ import (
 	"brinefront/physics/study"
 )
 
-// pasteBox is the id of the text area in which a table can be pasted.
-const pasteBox = "paste-box"
+// pasteBox is the id of the text area in which the table at a path can be pasted.
+func pasteBox(table string) string { return tableID(table, "paste-box") }
 
 // What of a pasted table is shown before it is used.
 const (
@@ -23,34 +23,43 @@ const (
 // oilColumn is the role of a column of oil saturation, which serves as Sw = 1 − So.
 const oilColumn = "so"
 
-// columnRoles are what a pasted column may be.
-var columnRoles = []study.Choice{
-	{Value: "", Label: "not used"},
-	{Value: "sw", Label: "Sw"},
-	{Value: oilColumn, Label: "So (oil saturation)"},
-	{Value: "krw", Label: "krw"},
-	{Value: "kro", Label: "kro"},
+// columnRoles are what a pasted column of a table may be.
+func columnRoles(t study.LabTable) []study.Choice {
+	list := []study.Choice{{Value: "", Label: "not used"}}
+	for i, c := range t.Columns {
+		list = append(list, study.Choice{Value: c.Path, Label: c.Label})
+		if i == 0 {
+			list = append(list, study.Choice{Value: oilColumn, Label: "So (oil saturation)"})
+		}
+	}
+	return list
 }
 
 // Pasting is where a table is pasted, and how it was read before it is used.
-func Pasting(d Desk, m state.Model) app.UI {
-	text := ""
-	if m.Paste != nil {
-		text = m.Paste.Text
+func Pasting(d Desk, m state.Model, t study.LabTable, help string) app.UI {
+	draft, text := m.Paste, ""
+	if draft != nil && draft.Table != t.Path {
+		draft = nil
 	}
-	said := m.Said(tablePath)
-	return app.Div().Class("pasting").DataSet("paste", "table").Body(
-		app.Label().For(pasteBox).Text("Paste a table from a spreadsheet or a report"),
-		&Input{Desk: d, ID: pasteBox, Path: tablePath, Sort: PasteInput, Text: text, Told: "paste-help " + messageID(tablePath), Bad: said != ""},
-		app.P().ID("paste-help").Class("help").Text("Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row."),
-		app.P().ID(messageID(tablePath)).Class("message").Text(said),
-		preview(d, m.Paste),
+	if draft != nil {
+		text = draft.Text
+	}
+	said, box := m.Said(t.Path), pasteBox(t.Path)
+	helpID := tableID(t.Path, "paste-help")
+	return app.Div().Class("pasting").DataSet("paste", t.Path).Body(
+		app.Label().For(box).Text("Paste a table from a spreadsheet or a report"),
+		&Input{Desk: d, ID: box, Path: t.Path, Sort: PasteInput, Text: text, Told: helpID + " " + messageID(t.Path), Bad: said != ""},
+		app.P().ID(helpID).Class("help").Text(help),
+		app.P().ID(messageID(t.Path)).Class("message").Text(said),
+		preview(d, t, draft),
 	)
 }
 
-func preview(d Desk, p *state.PasteDraft) app.UI {
+func preview(d Desk, t study.LabTable, p *state.PasteDraft) app.UI {
+	id := func(name string) string { return tableID(t.Path, name) }
+	section := app.Section().ID(id("paste-preview")).Class("paste-preview")
 	if p == nil {
-		return app.Section().ID("paste-preview").Hidden(true)
+		return section.Hidden(true)
 	}
 	r := p.Reading
 	var lines []string
@@ -59,27 +68,27 @@ func preview(d Desk, p *state.PasteDraft) app.UI {
 	}
 	accept, acceptScope := does(d, state.PasteAccepted{})
 	forget, forgetScope := does(d, state.PasteDropped{})
-	return app.Section().ID("paste-preview").Hidden(false).Aria("label", "How the pasted table was read").Body(
+	return section.Hidden(false).Aria("label", "How the pasted table was read").Body(
 		app.H4().Text("How it was read"),
-		app.P().ID("paste-layout").Text(layout(p)),
-		app.Ul().Class("message").ID("paste-problems").Body(items(lines, len(r.Problems))...),
-		app.Ul().Class("help").ID("paste-remarks").Body(items(r.Remarks, len(r.Remarks))...),
+		app.P().ID(id("paste-layout")).Text(layout(p)),
+		app.Ul().Class("message").ID(id("paste-problems")).Body(items(lines, len(r.Problems))...),
+		app.Ul().Class("help").ID(id("paste-remarks")).Body(items(r.Remarks, len(r.Remarks))...),
 		app.Div().Class("scroll").TabIndex(0).Role("group").Aria("label", "First rows of the pasted table").Body(
-			previewTable(d, p),
+			previewTable(d, t, p),
 		),
 		app.Div().Class("actions").Body(
-			button("Use this table").ID("paste-accept").Class("main").Disabled(len(r.Problems) > 0).OnClick(accept, acceptScope),
-			button("Forget it").ID("paste-forget").OnClick(forget, forgetScope),
+			button("Use this table").ID(id("paste-accept")).Class("main").Disabled(len(r.Problems) > 0).OnClick(accept, acceptScope),
+			button("Forget it").ID(id("paste-forget")).OnClick(forget, forgetScope),
 		),
 	)
 }
 
-func previewTable(d Desk, p *state.PasteDraft) app.UI {
+func previewTable(d Desk, t study.LabTable, p *state.PasteDraft) app.UI {
 	r := p.Reading
 	width := min(len(r.Columns), previewColumns)
 	head := make([]app.UI, width)
 	for i := range width {
-		head[i] = app.Th().Scope("col").Body(role(d, i, r.Columns[i].Title, roleOf(r.Columns[i].As, r.Columns[i].Oil)))
+		head[i] = app.Th().Scope("col").Body(role(d, t, i, r.Columns[i].Title, roleOf(r.Columns[i].As, r.Columns[i].Oil)))
 	}
 	var rows []app.UI
 	for _, cells := range r.Cells[:min(len(r.Cells), previewRows)] {
@@ -104,15 +113,16 @@ func roleOf(as string, oil bool) string {
 }
 
 // role is the list that says what a pasted column is.
-func role(d Desk, column int, title, as string) app.UI {
+func role(d Desk, t study.LabTable, column int, title, as string) app.UI {
 	number := strconv.Itoa(column + 1)
-	options := make([]app.UI, len(columnRoles))
-	for i, c := range columnRoles {
+	roles := columnRoles(t)
+	options := make([]app.UI, len(roles))
+	for i, c := range roles {
 		options[i] = option(c.Value, c.Label, c.Value == as)
 	}
 	return app.Div().Body(
 		app.Span().Text(title),
-		app.Select().ID("paste-column-"+number).Aria("label", "What column "+number+" is").
+		app.Select().ID(tableID(t.Path, "paste-column-"+number)).Aria("label", "What column "+number+" is").
 			OnChange(func(ctx app.Context, _ app.Event) {
 				d.Send(state.PasteMapped{Column: column, As: valueOf(ctx)})
 			}, column).

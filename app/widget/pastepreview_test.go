@@ -17,7 +17,7 @@ func TestPreviewSaysOnlyWhatIsKnown(t *testing.T) {
 		"Sw\tkrw\tkro\n0,2\t0\t1\n0,4\tten\t0,5\n0,6\t0,2\t0": {"Columns parted by tabs, decimal commas, header row Sw | krw | kro, 3 rows of numbers.", `Row 2, column 2: read "ten"; allowed: a number`},
 		"0.2\t0\t1\n0.4\t\t0.5\n0.6\t0.2\t0":                  {"Columns parted by tabs, decimal points, no header row, 3 rows of numbers.", "Row 2, column 2: read an empty cell; allowed: a fraction"},
 	} {
-		m, _ := state.Update(state.New(), state.Pasted{Text: text})
+		m, _ := state.Update(state.New(), state.Pasted{Table: "rock.table", Text: text})
 		if got := layout(m.Paste); got != want.layout {
 			t.Errorf("%.20q: %q, want %q", text, got, want.layout)
 		}

@@ -12,13 +12,15 @@ var names = map[string]string{
 	"brinerelativepermeability": Krw, "krwo": Krw, "relpermw": Krw,
 	"kro": Kro, "kroil": Kro, "oilkr": Kro, "oilrelativepermeability": Kro, "relativepermeabilityoil": Kro,
 	"oilrelperm": Kro, "relpermoil": Kro, "krow": Kro, "relpermo": Kro,
+	"pc": Pc, "pcow": Pc, "pcwo": Pc, "pcgw": Pc, "pcgo": Pc, "pcres": Pc, "capillarypressure": Pc, "cappressure": Pc, "capillarypress": Pc,
+	"pcap": Pc, "j": Pc, "jsw": Pc, "jfunction": Pc, "leverettj": Pc, "leverettjfunction": Pc, "jvalue": Pc,
 }
 
 // others are headings of columns that stand beside the three and are never taken
 // for one of them.
 var others = map[string]bool{
 	"no": true, "nr": true, "#": true, "n": true, "i": true, "point": true, "step": true, "row": true, "sample": true,
-	"plug": true, "depth": true, "time": true, "pv": true, "pvi": true, "pc": true, "fw": true, "fo": true, "krg": true,
+	"plug": true, "depth": true, "time": true, "pv": true, "pvi": true, "fw": true, "fo": true, "krg": true,
 	"sg": true, "pressure": true, "dp": true, "rate": true, "ratio": true, "id": true, "index": true,
 }
 
@@ -27,6 +29,9 @@ var units = map[string]float64{
 	"%": 100, "percent": 100, "pct": 100, "perc": 100,
 	"frac": 1, "fraction": 1, "fractional": 1, "dec": 1, "decimal": 1, "dimensionless": 1,
 }
+
+// pressures are words of a heading that tell the unit of a pressure.
+var pressures = map[string]string{"psi": "psi", "psia": "psi", "kpa": "kPa", "bar": "bar", "bars": "bar", "mpa": "MPa", "atm": "atm", "pa": "Pa"}
 
 // fillers are words of a heading that carry nothing.
 var fillers = map[string]bool{
@@ -109,11 +114,25 @@ func unitOf(title string) float64 {
 	return unit
 }
 
+// pressureOf returns the unit that a heading of capillary pressure names; "J" where it
+// is one of Leverett's J, which has none.
+func pressureOf(title string) string {
+	for _, w := range words(title) {
+		if unit := pressures[w]; unit != "" {
+			return unit
+		}
+		if strings.HasPrefix(w, "j") {
+			return "J"
+		}
+	}
+	return ""
+}
+
 // onlyUnit reports whether a heading cell holds a unit and nothing else.
 func onlyUnit(cell string) bool {
 	w := words(cell)
 	for _, word := range w {
-		if units[word] == 0 && word != "pv" {
+		if units[word] == 0 && pressures[word] == "" && word != "pv" {
 			return false
 		}
 	}

@@ -11,7 +11,21 @@ const (
 	Sw  = "sw"
 	Krw = "krw"
 	Kro = "kro"
+	Pc  = "pc"
 	So  = "so" // for With only: the column holds oil saturation and serves as Sw, with sw = 1 - so
+)
+
+// Layout is the table that a text is read for.
+type Layout struct {
+	columns []string // in the order in which columns without headings are taken
+	words   string   // the same in a sentence
+	count   string
+}
+
+// The layouts there are.
+var (
+	RelativePermeability = Layout{[]string{Sw, Krw, Kro}, "water saturation, krw and kro", "three"}
+	CapillaryPressure    = Layout{[]string{Sw, Pc}, "water saturation and capillary pressure", "two"}
 )
 
 // What is refused before it is looked at, and how much is said about a bad text.
@@ -34,6 +48,7 @@ type Reading struct {
 	Remarks   []string   // what was assumed: "column 2 read as percent"
 
 	layout []string // what was assumed while the text was cut into cells; With keeps it
+	want   Layout
 }
 
 // notes gathers what there is to say about a text.
@@ -51,10 +66,11 @@ func (n *notes) remark(text string) { n.remarks = append(n.remarks, text) }
 // Column is what was made of one column of the text.
 type Column struct {
 	Title   string    // its header cell, or ""
-	As      string    // Sw, Krw, Kro, or "" for none
+	As      string    // Sw, Krw, Kro, Pc, or "" for none
+	Unit    string    // of Pc as its heading says: "psi", "kPa", ..., "J"; "" when it says none
 	Percent bool      // values were divided by 100
 	Oil     bool      // the saturation column held oil: sw = 1 - so was taken
-	Values  []float64 // as fractions, in the order of Cells; NaN where a cell could not be read; nil when As is ""
+	Values  []float64 // as fractions, Pc as written, in the order of Cells; NaN where a cell could not be read; nil when As is ""
 }
 
 // Problem is a cell or a column that could not be read. Row and Column are

@@ -27,7 +27,7 @@ func (r Reading) krPercent(roles []role) bool {
 		switch {
 		case role.as == Sw:
 			sw = r.swPercent(i)
-		case role.as != "" && unitOf(r.Columns[i].Title) == 0:
+		case (role.as == Krw || role.as == Kro) && unitOf(r.Columns[i].Title) == 0:
 			bare = append(bare, i)
 		}
 	}

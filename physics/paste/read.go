@@ -18,7 +18,7 @@ import (
 //   - a text in which a comma may be both separator and decimal mark is refused
 //     with a problem, because a guess would move numbers from one column to another
 //   - an empty text has one problem
-func Read(text string) Reading {
+func Read(text string, want Layout) Reading {
 	if len(text) > MaxBytes {
 		return refused(fmt.Sprintf("a text of %.1f MB", float64(len(text))/(1<<20)),
 			"at most 1 MB: copy only the rows of the table")
@@ -29,7 +29,7 @@ func Read(text string) Reading {
 			fmt.Sprintf("at most %s rows: copy only the rows of the table", thousands(MaxRows)))
 	}
 	if len(lines) == 0 {
-		return refused("an empty text", "a table of at least 3 rows with water saturation, krw and kro")
+		return refused("an empty text", "a table of at least 3 rows with "+want.words)
 	}
 
 	sep := findSeparator(lines)
@@ -46,14 +46,14 @@ func Read(text string) Reading {
 		return refused(fmt.Sprintf("a row of %s cells", thousands(widest)), fmt.Sprintf("at most %d columns", MaxColumns))
 	}
 
-	r := Reading{Separator: sep.name}
+	r := Reading{Separator: sep.name, want: want}
 	var said notes
 	heading, data := arrange(upright(rows, widest, &said), &said)
 	if len(data) > MaxRows {
 		return refused(fmt.Sprintf("%s rows", thousands(len(data))), fmt.Sprintf("at most %s rows", thousands(MaxRows)))
 	}
 	if len(data) == 0 {
-		r = refused("no row of numbers", "a table of at least 3 rows with water saturation, krw and kro")
+		r = refused("no row of numbers", "a table of at least 3 rows with "+want.words)
 		r.Separator, r.Cells = sep.name, rows
 		return r
 	}
@@ -65,11 +65,11 @@ func Read(text string) Reading {
 	return r.interpret(roles, remarks)
 }
 
-// With returns the reading with a column put to another use: as is Sw, Krw, Kro,
-// So, or "" for none. The column that had that use before loses it. A column or a
+// With returns the reading with a column put to another use: as is a column of the
+// layout, So, or "" for none. The column that had that use before loses it. A column or a
 // use that does not exist changes nothing.
 func (r Reading) With(column int, as string) Reading {
-	if column < 0 || column >= len(r.Columns) || !slices.Contains([]string{"", Sw, Krw, Kro, So}, as) {
+	if column < 0 || column >= len(r.Columns) || !(as == "" || as == So || slices.Contains(r.want.columns, as)) {
 		return r
 	}
 	roles := make([]role, len(r.Columns))
@@ -89,23 +89,28 @@ func (r Reading) With(column int, as string) Reading {
 	return r.interpret(roles, nil)
 }
 
-// Table returns the table in rising order of water saturation. It is ok when the
-// reading has no problem and each of the three columns was found.
-func (r Reading) Table() (sw, krw, kro []float64, ok bool) {
+// Table returns the columns of the layout, in its order, the rows in rising order of
+// water saturation, and the unit that the heading of Pc names. It is ok when the reading
+// has no problem and every column was found.
+func (r Reading) Table() (columns [][]float64, unit string, ok bool) {
 	if len(r.Problems) > 0 {
-		return nil, nil, nil, false
+		return nil, "", false
 	}
-	sw, krw, kro = r.values(Sw), r.values(Krw), r.values(Kro)
-	if sw == nil || krw == nil || kro == nil {
-		return nil, nil, nil, false
+	turned := falls(r.values(Sw))
+	for _, as := range r.want.columns {
+		values := slices.Clone(r.values(as))
+		if values == nil {
+			return nil, "", false
+		}
+		if turned {
+			slices.Reverse(values)
+		}
+		columns = append(columns, values)
 	}
-	sw, krw, kro = slices.Clone(sw), slices.Clone(krw), slices.Clone(kro)
-	if falls(sw) {
-		slices.Reverse(sw)
-		slices.Reverse(krw)
-		slices.Reverse(kro)
+	for _, c := range r.Columns {
+		unit += c.Unit
 	}
-	return sw, krw, kro, true
+	return columns, unit, true
 }
 
 // values returns the values of the column with a role, nil when there is none.

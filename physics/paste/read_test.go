@@ -10,6 +10,15 @@ import (
 // read in it. A row with no wanted problems must give a table.
 var sw4, krw4, kro4 = []float64{0.2, 0.4, 0.6, 0.75}, []float64{0, 0.05, 0.18, 0.3}, []float64{0.85, 0.4, 0.1, 0}
 
+// kr is a table of relative permeability, column by column.
+func kr(r Reading) (sw, krw, kro []float64, ok bool) {
+	columns, _, ok := r.Table()
+	if !ok {
+		return nil, nil, nil, false
+	}
+	return columns[0], columns[1], columns[2], true
+}
+
 func TestRead(t *testing.T) {
 	tests := []struct {
 		name, text string
@@ -63,7 +72,7 @@ func TestRead(t *testing.T) {
 	}
 	for _, test := range tests {
 		t.Run(test.name, func(t *testing.T) {
-			r := Read(test.text)
+			r := Read(test.text, RelativePermeability)
 			if len(r.Problems) > 0 {
 				t.Fatalf("problems %+v", r.Problems)
 			}
@@ -81,7 +90,7 @@ func TestRead(t *testing.T) {
 			if test.remarks == nil && len(r.Remarks) > 0 {
 				t.Errorf("remarks %q, want none", r.Remarks)
 			}
-			sw, krw, kro, ok := r.Table()
+			sw, krw, kro, ok := kr(r)
 			if !ok || !same(sw, sw4) || !same(krw, krw4) || !same(kro, kro4) {
 				t.Errorf("table %v %v %v %v", sw, krw, kro, ok)
 			}
@@ -156,8 +165,8 @@ func TestReadProblems(t *testing.T) {
 	}
 	for _, test := range tests {
 		t.Run(test.name, func(t *testing.T) {
-			r := Read(test.text)
-			if _, _, _, ok := r.Table(); ok {
+			r := Read(test.text, RelativePermeability)
+			if _, _, _, ok := kr(r); ok {
 				t.Error("the table is offered for use")
 			}
 			for _, p := range r.Problems {
@@ -172,7 +181,7 @@ func TestReadProblems(t *testing.T) {
 
 // TestBadCellKeepsTheRest: one bad cell is one problem; what else was read stays.
 func TestBadCellKeepsTheRest(t *testing.T) {
-	r := Read("Sw\tkrw\tkro\n0.2\t0\t0.85\n0.4\t1.2\toops\n0.6\t0.18\t0.1")
+	r := Read("Sw\tkrw\tkro\n0.2\t0\t0.85\n0.4\t1.2\toops\n0.6\t0.18\t0.1", RelativePermeability)
 	if len(r.Problems) != 2 {
 		t.Fatalf("problems %+v, want two", r.Problems)
 	}
@@ -189,11 +198,11 @@ func TestBadCellKeepsTheRest(t *testing.T) {
 
 // TestFalling: values stay beside their cells; only the table is turned.
 func TestFalling(t *testing.T) {
-	r := Read("Sw\tkrw\tkro\n0.7\t0.3\t0\n0.5\t0.1\t0.2\n0.2\t0\t0.8")
+	r := Read("Sw\tkrw\tkro\n0.7\t0.3\t0\n0.5\t0.1\t0.2\n0.2\t0\t0.8", RelativePermeability)
 	if r.Columns[0].Values[0] != 0.7 || r.Cells[0][0] != "0.7" {
 		t.Errorf("values %v do not stand beside their cells", r.Columns[0].Values)
 	}
-	sw, _, kro, ok := r.Table()
+	sw, _, kro, ok := kr(r)
 	if !ok || !same(sw, []float64{0.2, 0.5, 0.7}) || !same(kro, []float64{0.8, 0.2, 0}) {
 		t.Errorf("table %v %v %v", sw, kro, ok)
 	}
@@ -201,21 +210,21 @@ func TestFalling(t *testing.T) {
 
 // TestShapes: named columns are never turned over, only remarked on.
 func TestShapes(t *testing.T) {
-	r := Read("Sw\tkrw\tkro\n0.2\t0.85\t0\n0.4\t0.4\t0.05\n0.6\t0.1\t0.18\n0.75\t0\t0.3")
+	r := Read("Sw\tkrw\tkro\n0.2\t0.85\t0\n0.4\t0.4\t0.05\n0.6\t0.1\t0.18\n0.75\t0\t0.3", RelativePermeability)
 	if got := rolesOf(r); got != "sw krw kro" {
 		t.Errorf("roles %q", got)
 	}
 	if !strings.Contains(strings.Join(r.Remarks, " "), "look swapped") {
 		t.Errorf("remarks %q do not say that the curves look swapped", r.Remarks)
 	}
-	r = Read("Sw\tkrw\tkro\n0.2\t0\t0.85\n0.6\t0.18\t0.1\n0.4\t0.05\t0.4")
+	r = Read("Sw\tkrw\tkro\n0.2\t0\t0.85\n0.6\t0.18\t0.1\n0.4\t0.05\t0.4", RelativePermeability)
 	if !strings.Contains(strings.Join(r.Remarks, " "), "falls from row 2 to row 3") {
 		t.Errorf("remarks %q do not tell the row out of order", r.Remarks)
 	}
 }
 
 func TestWith(t *testing.T) {
-	r := Read("a\tb\tc\td\n0.2\t0\t0.85\t7\n0.4\t0.05\t0.4\t7\n0.6\t0.18\t0.1\t7\n0.75\t0.3\t0\t7")
+	r := Read("a\tb\tc\td\n0.2\t0\t0.85\t7\n0.4\t0.05\t0.4\t7\n0.6\t0.18\t0.1\t7\n0.75\t0.3\t0\t7", RelativePermeability)
 	if got := rolesOf(r); got != "sw krw kro -" {
 		t.Fatalf("roles %q", got)
 	}
@@ -224,7 +233,7 @@ func TestWith(t *testing.T) {
 	if got := rolesOf(moved); got != "sw - krw -" {
 		t.Errorf("roles after moving krw: %q", got)
 	}
-	if _, _, _, ok := moved.Table(); ok || len(moved.Problems) != 1 {
+	if _, _, _, ok := kr(moved); ok || len(moved.Problems) != 1 {
 		t.Errorf("kro has no column, problems %+v", moved.Problems)
 	}
 	if moved = moved.With(1, Kro); rolesOf(moved) != "sw kro krw -" || len(moved.Problems) != 0 {
@@ -240,7 +249,7 @@ func TestWith(t *testing.T) {
 	if sw := oil.Columns[0].Values; !oil.Columns[0].Oil || !same(sw, []float64{0.8, 0.6, 0.4, 0.25}) {
 		t.Errorf("as oil saturation column 1 gives sw %v", sw)
 	}
-	for _, same := range []Reading{r.With(-1, Sw), r.With(4, Sw), r.With(0, "pc"), Read("").With(0, Sw)} {
+	for _, same := range []Reading{r.With(-1, Sw), r.With(4, Sw), r.With(0, "pc"), Read("", RelativePermeability).With(0, Sw)} {
 		if len(same.Columns) != 0 && rolesOf(same) != "sw krw kro -" {
 			t.Errorf("an impossible change gave %q", rolesOf(same))
 		}
@@ -256,7 +265,7 @@ func TestNameOf(t *testing.T) {
 		"So": So, "Oil saturation (fraction)": So,
 		"krw": Krw, "k_rw": Krw, "Kr,w": Krw, "kr water": Krw, "kr (water)": Krw, "Relative permeability to water": Krw, "krw smoothed": Krw,
 		"Kro": Kro, "krow": Kro, "k ro [-]": Kro, "Oil relative permeability": Kro,
-		"krw/kro": "", "Sw*": "", "Sw norm": "", "Swi": "", "krg": "", "Pc": "", "": "", "%": "", "saturation": "", "Sw So": "",
+		"krw/kro": "", "Sw*": "", "Sw norm": "", "Swi": "", "krg": "", "Pc": "pc", "": "", "%": "", "saturation": "", "Sw So": "",
 	} {
 		if got := nameOf(title); got != want {
 			t.Errorf("%q names %q, want %q", title, got, want)
@@ -265,7 +274,7 @@ func TestNameOf(t *testing.T) {
 }
 
 func TestManyProblems(t *testing.T) {
-	r := Read("Sw\tkrw\tkro\n" + strings.Repeat("-1\t2\t3\n", 9000))
+	r := Read("Sw\tkrw\tkro\n"+strings.Repeat("-1\t2\t3\n", 9000), RelativePermeability)
 	if n := len(r.Problems); n != maxProblems+1 || !strings.HasPrefix(r.Problems[n-1].Read, "26,800 more") {
 		t.Errorf("%d problems, the last %+v", n, r.Problems[n-1])
 	}
@@ -273,9 +282,41 @@ func TestManyProblems(t *testing.T) {
 
 // TestLongHeading: a heading of a megabyte is looked at no longer than a short one.
 func TestLongHeading(t *testing.T) {
-	r := Read("Sw" + strings.Repeat(" a", MaxBytes/2-100) + "\tkrw\tkro\n0.2\t0\t0.8\n0.3\t0.1\t0.5\n0.4\t0.2\t0.3")
+	r := Read("Sw"+strings.Repeat(" a", MaxBytes/2-100)+"\tkrw\tkro\n0.2\t0\t0.8\n0.3\t0.1\t0.5\n0.4\t0.2\t0.3", RelativePermeability)
 	if got := rolesOf(r); got != "sw krw kro" || len(r.Problems) > 0 {
 		t.Errorf("roles %q, problems %v", got, r.Problems)
+	}
+}
+
+// TestReadPressure: headings, units and order of capillary pressure tables.
+func TestReadPressure(t *testing.T) {
+	for name, test := range map[string]struct {
+		text   string
+		sw, pc []float64
+		unit   string
+	}{
+		"unit in brackets":    {"Sw\tPc (psi)\n0.2\t9.5\n0.4\t2\n0.7\t-3.5\n", []float64{0.2, 0.4, 0.7}, []float64{9.5, 2, -3.5}, "psi"},
+		"percent, spelled":    {"Water saturation, %\tCapillary pressure, kPa\n20\t95\n40\t20\n70\t-35\n", []float64{0.2, 0.4, 0.7}, []float64{95, 20, -35}, "kPa"},
+		"unit row, turned":    {"Pc\tSw\nbar\tfrac\n-0.3\t0.7\n0.1\t0.4\n0.9\t0.2\n", []float64{0.2, 0.4, 0.7}, []float64{0.9, 0.1, -0.3}, "bar"},
+		"J":                   {"Sw;J(Sw)\n0,2;0,9\n0,4;0,1\n0,7;0,05\n", []float64{0.2, 0.4, 0.7}, []float64{0.9, 0.1, 0.05}, "J"},
+		"oil, kr beside it":   {"So,kro,Pc Pa\n0.8,1,900\n0.6,0.4,100\n0.3,0,50\n", []float64{0.2, 0.4, 0.7}, []float64{900, 100, 50}, "Pa"},
+		"no heading, no unit": {"0.2 900\n0.4 100\n0.7 50\n", []float64{0.2, 0.4, 0.7}, []float64{900, 100, 50}, ""},
+	} {
+		r := Read(test.text, CapillaryPressure)
+		columns, unit, ok := r.Table()
+		if !ok || !same(columns[0], test.sw) || !same(columns[1], test.pc) || unit != test.unit {
+			t.Errorf("%s: %v in %q; problems %+v", name, columns, unit, r.Problems)
+		}
+		if told := strings.Contains(strings.Join(r.Remarks, " "), "No unit stands"); told != (unit == "") {
+			t.Errorf("%s: remarks %q", name, r.Remarks)
+		}
+	}
+	r := Read("Sw\tPc psi\n0.2\t9.5\n0.4\tx\n0.7\t5%\n0.8\n", CapillaryPressure)
+	if len(r.Problems) != 3 {
+		t.Errorf("cells without a number: %+v", r.Problems)
+	}
+	if r = Read("Sw\tkrw\n0.2\t0\n0.4\t0.1\n0.7\t0.2\n", CapillaryPressure); len(r.Problems) != 1 || !strings.Contains(r.Problems[0].Allowed, "two columns") {
+		t.Errorf("no capillary pressure: %+v", r.Problems)
 	}
 }
 
@@ -287,7 +328,7 @@ func FuzzRead(f *testing.F) {
 		f.Add(seed)
 	}
 	f.Fuzz(func(t *testing.T, text string) {
-		r := Read(text)
+		r := Read(text, RelativePermeability)
 		for column := range len(r.Columns) + 1 {
 			for _, as := range []string{"", Sw, Krw, Kro, So} {
 				check(t, r.With(column, as))
@@ -309,7 +350,7 @@ func check(t *testing.T, r Reading) {
 			t.Fatalf("problem %+v", p)
 		}
 	}
-	sw, krw, kro, ok := r.Table()
+	sw, krw, kro, ok := kr(r)
 	if ok != (len(r.Problems) == 0) {
 		t.Fatalf("table is ok: %v, with problems %+v", ok, r.Problems)
 	}
@@ -332,7 +373,7 @@ func BenchmarkRead(b *testing.B) {
 	for _, bench := range []struct{ name, text string }{{"13 rows", plug}, {"10000 rows", long}, {"5 MB", huge}} {
 		b.Run(bench.name, func(b *testing.B) {
 			for b.Loop() {
-				Read(bench.text)
+				Read(bench.text, RelativePermeability)
 			}
 		})
 	}
@@ -340,7 +381,7 @@ func BenchmarkRead(b *testing.B) {
 
 func TestQuoted(t *testing.T) {
 	for text, want := range map[string]string{"Sw krw kro\n0.2 ten 1\n0.4 0.1 0.5\n0.6 0.2 0": `"ten"`, "Sw\tkrw\tkro\n0.2\t\t1\n0.4\t0.1\t0.5\n0.6\t0.2\t0": "an empty cell", "hello": "no row of numbers"} {
-		if got := Read(text).Problems[0].Quoted(); got != want {
+		if got := Read(text, RelativePermeability).Problems[0].Quoted(); got != want {
 			t.Errorf("of %q it says %s, want %s", text, got, want)
 		}
 	}

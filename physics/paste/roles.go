@@ -3,22 +3,21 @@ package paste
 import (
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 )
 
 // role is the use a column is put to.
 type role struct {
-	as  string // Sw, Krw, Kro or ""
+	as  string // a column of the layout, or ""
 	oil bool   // an oil saturation that serves as Sw
 }
 
-var inOrder = []string{Sw, Krw, Kro}
-
-// labels are what the three are called in a sentence.
-var labels = map[string]string{Sw: "water saturation", Krw: "krw", Kro: "kro"}
+// labels are what the columns are called in a sentence.
+var labels = map[string]string{Sw: "water saturation", Krw: "krw", Kro: "kro", Pc: "capillary pressure"}
 
 // assign gives columns their roles: by heading where it names one, else by place,
-// in the order Sw, krw, kro, among columns of numbers that are named nothing else.
+// in the order of the layout, among columns of numbers that are named nothing else.
 func (r Reading) assign() (roles []role, remarks []string) {
 	var said notes
 	roles = make([]role, len(r.Columns))
@@ -27,7 +26,7 @@ func (r Reading) assign() (roles []role, remarks []string) {
 
 	var placed []int
 	next := r.unnamed()
-	for _, as := range inOrder {
+	for _, as := range r.want.columns {
 		if found[as] || len(next) == 0 {
 			continue
 		}
@@ -56,7 +55,7 @@ func (r Reading) byHeading(roles []role, said *notes) (found map[string]bool) {
 	for i, c := range r.Columns {
 		as := nameOf(c.Title)
 		switch {
-		case as == "":
+		case as != So && !slices.Contains(r.want.columns, as):
 		case as == So:
 			if oil < 0 {
 				oil = i
@@ -74,7 +73,7 @@ func (r Reading) byHeading(roles []role, said *notes) (found map[string]bool) {
 }
 
 // unnamed lists the columns of numbers whose heading names nothing of the trade.
-// With more than three, a leading column that counts 1, 2, 3 ... is left out.
+// With more than the layout has, a leading column that counts 1, 2, 3 ... is left out.
 func (r Reading) unnamed() []int {
 	var list []int
 	for i, c := range r.Columns {
@@ -82,7 +81,7 @@ func (r Reading) unnamed() []int {
 			list = append(list, i)
 		}
 	}
-	if len(list) > len(inOrder) && r.counts(list[0]) {
+	if len(list) > len(r.want.columns) && r.counts(list[0]) {
 		list = list[1:]
 	}
 	return list
@@ -119,7 +118,7 @@ func (r Reading) turnSwapped(roles []role, said *notes) {
 			at[role.as] = i
 		}
 	}
-	if len(at) < len(inOrder) {
+	if len(at) < len(r.want.columns) || !slices.Contains(r.want.columns, Krw) {
 		return
 	}
 	sw := r.column(at[Sw])

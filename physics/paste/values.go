@@ -19,6 +19,8 @@ func (r Reading) interpret(roles []role, remarks []string) Reading {
 		case "":
 		case Sw:
 			r.fill(i, &columns[i], r.swPercent(i), &said)
+		case Pc:
+			r.fillPressure(i, &columns[i], &said)
 		default:
 			r.fill(i, &columns[i], krPercent, &said)
 		}
@@ -43,9 +45,9 @@ func pad(values, like []float64) []float64 {
 
 // complete reports missing columns and rows.
 func (r Reading) complete(said *notes) {
-	for _, as := range inOrder {
+	for _, as := range r.want.columns {
 		if r.values(as) == nil {
-			said.problem(-1, -1, "no column for "+labels[as], "three columns: water saturation, krw and kro")
+			said.problem(-1, -1, "no column for "+labels[as], r.want.count+" columns: "+r.want.words)
 		}
 	}
 	if n := len(r.Cells); n < MinRows {
@@ -112,6 +114,26 @@ func (r Reading) fill(i int, c *Column, guess bool, said *notes) {
 	}
 	if c.Oil {
 		said.remark(name + " holds oil saturation; water saturation was taken as 1 − So.")
+	}
+}
+
+// fillPressure reads a column of capillary pressure: any number, in the unit of its
+// heading.
+func (r Reading) fillPressure(i int, c *Column, said *notes) {
+	if c.Unit = pressureOf(c.Title); c.Unit == "" {
+		said.remark(fmt.Sprintf("No unit stands in the heading of column %d; it is read in the unit chosen beside the table.", i+1))
+	}
+	c.Values = make([]float64, len(r.Cells))
+	for row := range r.Cells {
+		v, ok := r.cell(row, i, false)
+		c.Values[row] = v
+		switch {
+		case ok && !hasSign(r.Cells[row][i]):
+		case i >= len(r.Cells[row]) || r.Cells[row][i] == "":
+			said.problem(row, i, emptyCell, "a number")
+		default:
+			said.problem(row, i, clip(r.Cells[row][i]), "a number with a decimal "+r.Decimal+" and no unit")
+		}
 	}
 }
 

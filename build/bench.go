@@ -49,9 +49,9 @@ func bench() error {
 	if err != nil {
 		return err
 	}
-	fmt.Printf("\n%-44s %12s\n", "in Chromium", "median")
+	fmt.Printf("\n%-44s %12s %12s %12s\n", "in Chromium", "first", "median", "90 % within")
 	for _, row := range seen {
-		fmt.Printf("%-44s %9.0f ms\n", row.name, row.values["ms-median"])
+		fmt.Printf("%-44s %9.0f ms %9.0f ms %9.0f ms\n", row.name, row.values["ms-first"], row.values["ms-median"], row.values["ms-p90"])
 	}
 	return nil
 }

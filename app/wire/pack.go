@@ -24,26 +24,35 @@ const doubleSize = 8 // bytes
 // Pack takes a part apart into numbers and the rest. The part itself is left alone.
 func Pack(whole study.Part) (rest study.Part, numbers Numbers) {
 	rest = own(whole)
-	places := map[string]int{} // by the bytes of a series
-	for _, series := range all(rest) {
+	list := all(rest)
+	numbers.Place = make([]int, len(list))
+	distinct := make([][]float64, 0, len(list))
+	size := 0
+	for i, series := range list {
 		place := -1
-		if s := *series; len(s) > 0 {
-			bytes := make([]byte, 0, doubleSize*len(s))
-			for _, v := range s {
-				bytes = binary.LittleEndian.AppendUint64(bytes, math.Float64bits(v))
-			}
-			known := false
-			if place, known = places[string(bytes)]; !known {
-				place = len(numbers.Lengths)
-				places[string(bytes)] = place
-				numbers.Lengths = append(numbers.Lengths, len(s))
-				numbers.Bytes = append(numbers.Bytes, bytes...)
+		if len(*series) > 0 {
+			place = slices.IndexFunc(distinct, func(other []float64) bool { return sameBits(other, *series) })
+			if place < 0 {
+				place = len(distinct)
+				distinct = append(distinct, *series)
+				size += doubleSize * len(*series)
 			}
 		}
-		numbers.Place = append(numbers.Place, place)
-		*series = nil
+		numbers.Place[i], *series = place, nil
+	}
+	numbers.Lengths, numbers.Bytes = make([]int, len(distinct)), make([]byte, 0, size)
+	for i, series := range distinct {
+		numbers.Lengths[i] = len(series)
+		for _, v := range series {
+			numbers.Bytes = binary.LittleEndian.AppendUint64(numbers.Bytes, math.Float64bits(v))
+		}
 	}
 	return rest, numbers
+}
+
+// sameBits reports whether two series are one: 0 and -0 are not.
+func sameBits(a, b []float64) bool {
+	return len(a) == len(b) && (&a[0] == &b[0] || slices.EqualFunc(a, b, func(x, y float64) bool { return math.Float64bits(x) == math.Float64bits(y) }))
 }
 
 // Unpack puts the numbers back where Pack took them from. A series that was empty
@@ -84,6 +93,10 @@ func own(p study.Part) study.Part {
 	p.Charts, p.Tables = slices.Clone(p.Charts), slices.Clone(p.Tables)
 	for i := range p.Charts {
 		p.Charts[i].Lines = slices.Clone(p.Charts[i].Lines)
+		for j := range p.Charts[i].Lines {
+			l := &p.Charts[i].Lines[j]
+			l.Readings = slices.Clone(l.Readings)
+		}
 	}
 	for i := range p.Tables {
 		p.Tables[i].Columns = slices.Clone(p.Tables[i].Columns)
@@ -98,6 +111,9 @@ func all(p study.Part) []*[]float64 {
 		for i := range chart.Lines {
 			l := &chart.Lines[i]
 			list = append(list, &l.X, &l.Y, &l.Low)
+			for j := range l.Readings {
+				list = append(list, &l.Readings[j].Values)
+			}
 		}
 	}
 	for _, table := range p.Tables {

@@ -1,6 +1,7 @@
 package serve
 
 import (
+	"bytes"
 	"encoding/json"
 	"time"
 
@@ -51,20 +52,21 @@ func pieces(d *Desk, asked wire.Request, send func(wire.Reply, ...[]byte), turn 
 // written is a piece as it travels. A part that is as it was last sent does not.
 func (d *Desk) written(p study.Piece) []byte {
 	rest, numbers := wire.Pack(p.Part)
-	text, err := json.Marshal(wire.Piece{Sheet: p.Sheet, Part: &rest, Numbers: numbers})
+	text := encoded(wire.Piece{Sheet: p.Sheet, Part: &rest, Numbers: numbers})
+	if bytes.Equal(d.sent[p.Sheet], text) {
+		return encoded(wire.Piece{Sheet: p.Sheet})
+	}
+	if d.sent == nil {
+		d.sent = map[study.Sheet][]byte{}
+	}
+	d.sent[p.Sheet] = text
+	return text
+}
+
+func encoded(p wire.Piece) []byte {
+	text, err := json.Marshal(p)
 	if err != nil {
 		panic(err) // a part that holds what JSON cannot say, as NaN
-	}
-	if d.sent[p.Sheet] != string(text) {
-		if d.sent == nil {
-			d.sent = map[study.Sheet]string{}
-		}
-		d.sent[p.Sheet] = string(text)
-		return text
-	}
-	text, err = json.Marshal(wire.Piece{Sheet: p.Sheet})
-	if err != nil {
-		panic(err)
 	}
 	return text
 }

@@ -146,3 +146,35 @@ func TestAWholeAnswerIsNotSuperseded(t *testing.T) {
 		t.Errorf("%d replies, the first to %d", len(replies), replies[0].ID)
 	}
 }
+
+// Warming begins after the first answer, ends by itself, and makes way for a request.
+func TestWarmingMakesWay(t *testing.T) {
+	var d Desk
+	turns := 0
+	count := func() { turns++ }
+	if d.Warm(count) || turns > 0 {
+		t.Error("it warms before anything was asked")
+	}
+	empty := study.Empty()
+	at(t, &d, asked(t, 1, &empty, study.SheetFront))
+	var replies []wire.Reply
+	if !d.Warm(func() {
+		if turns++; turns == 2 {
+			d.Take([]byte(asked(t, 2, &empty, study.SheetRock)), heardBy(t, &replies))
+		}
+	}) || turns != 2 {
+		t.Errorf("a request has to wait for %d turns", turns)
+	}
+	d.Work(count)
+	if len(replies) == 0 || replies[len(replies)-1].More {
+		t.Error("the request that it made way for is not answered")
+	}
+	turns = 0
+	if d.Warm(count) || turns == 0 || turns > rounds*len(study.Sheets()) {
+		t.Errorf("it goes on for %d turns", turns)
+	}
+	turns = 0
+	if d.Warm(count) || turns > 0 {
+		t.Error("it never ends")
+	}
+}

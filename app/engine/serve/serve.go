@@ -19,9 +19,10 @@ type Desk struct {
 	mu    sync.Mutex
 	queue []order // not begun yet
 
-	memory     study.Memory      // of fits, from one edit to the next
-	evaluation *study.Evaluation // of the last request for pieces
-	sent       map[study.Sheet]string
+	memory     study.Memory           // of fits, from one edit to the next
+	evaluation *study.Evaluation      // of the last request for pieces
+	sent       map[study.Sheet][]byte // the pieces as they last travelled
+	warmed     int                    // rounds of Warm
 }
 
 // order is a request that waits, and where its replies go.
@@ -69,6 +70,13 @@ func (d *Desk) Work(turn func()) {
 		d.mu.Unlock()
 		d.serve(o, turn)
 	}
+}
+
+// waiting counts the requests that have come and are not begun.
+func (d *Desk) waiting() int {
+	d.mu.Lock()
+	defer d.mu.Unlock()
+	return len(d.queue)
 }
 
 // superseded reports whether another request for pieces has come.
@@ -124,7 +132,11 @@ func with(reply []byte, pieces [][]byte) []byte {
 	if len(pieces) == 0 {
 		return reply
 	}
-	text := append([]byte(nil), `{"pieces":[`...)
+	size := len(reply) + 16
+	for _, piece := range pieces {
+		size += len(piece) + 1
+	}
+	text := append(make([]byte, 0, size), `{"pieces":[`...)
 	for i, piece := range pieces {
 		if i > 0 {
 			text = append(text, ',')

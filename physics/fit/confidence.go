@@ -348,11 +348,11 @@ func (f Fit) Band(sw float64) (krwLow, krwHigh, kroLow, kroHigh float64) {
 	c := f.state
 	at := f.Curves.At(sw)
 	n := len(c.values)
-	slopes := [2][]float64{make([]float64, n), make([]float64, n)}
+	room := make([]float64, 2*n+len(c.active)) // one for all: a picture asks hundreds of times
+	slopes, g := [2][]float64{room[:n], room[n : 2*n]}, room[2*n:]
 	c.family.slopes(c.values, sw, at, slopes[0], slopes[1])
 	var half [2]float64
 	for k := range slopes {
-		g := make([]float64, len(c.active))
 		for p, j := range c.active {
 			g[p] = slopes[k][j]
 		}

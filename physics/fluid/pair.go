@@ -1,5 +1,7 @@
 package fluid
 
+import "sync"
+
 // PairID names a pair of phases in a study.
 type PairID string
 
@@ -77,9 +79,12 @@ func (p Pair) WettingSaturation(s float64) float64 {
 	return s
 }
 
+// listed are the pairs, written down once: they are asked for many times an evaluation.
+var listed = sync.OnceValue(Pairs)
+
 // PairByID returns the pair with the given ID.
 func PairByID(id PairID) (Pair, bool) {
-	for _, p := range Pairs() {
+	for _, p := range listed() {
 		if p.ID == id {
 			return p, true
 		}

@@ -56,7 +56,9 @@ func runField(st *Study, frontPart Part, front *front) Part {
 	if f.limit.Outcome == reservoir.Reached {
 		extra = append(extra, f.limit.PVI*(1-aside), f.limit.PVI*(1+aside))
 	}
-	for _, q := range injections(front.displacement, f.end, extra...) {
+	volumes := injections(front.displacement, f.end, extra...)
+	f.history = make([]reservoir.State, 0, len(volumes))
+	for _, q := range volumes {
 		f.history = append(f.history, f.state(q))
 	}
 	f.figures(s)

@@ -46,9 +46,9 @@ func Find(path string) (Spec, bool) {
 	if i, inner, ok := AtCase(path); ok {
 		return caseSpec(i, inner)
 	}
-	for _, s := range specs {
-		if s.Path == path {
-			return s, true
+	for i := range specs { // not by value: it is asked hundreds of times an evaluation
+		if specs[i].Path == path {
+			return specs[i], true
 		}
 	}
 	return Spec{}, false

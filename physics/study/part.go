@@ -2,9 +2,9 @@ package study
 
 // Figure finds a figure of the part by its ID.
 func (p Part) Figure(id string) (Figure, bool) {
-	for _, f := range p.Figures {
-		if f.ID == id {
-			return f, true
+	for i := range p.Figures {
+		if p.Figures[i].ID == id {
+			return p.Figures[i], true
 		}
 	}
 	return Figure{}, false

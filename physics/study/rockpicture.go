@@ -40,6 +40,9 @@ func (r *rock) chart(s *sheet) Chart {
 func (r *rock) bands(sws []float64) []Line {
 	krw := Line{ID: "krw-band", Label: "95 % band of krw", Role: "water", Kind: "band", X: sws}
 	kro := Line{ID: "kro-band", Label: "95 % band of kro", Role: "oil", Kind: "band", X: sws}
+	for _, of := range []*[]float64{&krw.Low, &krw.Y, &kro.Low, &kro.Y} {
+		*of = make([]float64, 0, len(sws))
+	}
 	for _, sw := range sws {
 		krwLow, krwHigh, kroLow, kroHigh := r.fitted.Band(sw)
 		krw.Low, krw.Y = append(krw.Low, r.factor*krwLow), append(krw.Y, r.factor*krwHigh)

@@ -156,7 +156,7 @@ type working struct {
 // does not say all, a method in words.
 func (s *sheet) by(formula, method string, sources ...ref.ID) *working {
 	return &working{sheet: s, Working: Working{
-		Formula: formula, Method: method, Terms: []Term{}, Sources: append([]ref.ID{}, sources...), Inputs: []string{},
+		Formula: formula, Method: method, Terms: make([]Term, 0, 4), Sources: append([]ref.ID{}, sources...), Inputs: make([]string, 0, 8),
 	}}
 }
 
@@ -206,8 +206,11 @@ func (w *working) on(ids ...string) *working {
 }
 
 func (s *sheet) find(id string) (Figure, bool) {
-	for _, p := range append([]Part{s.part}, s.others...) {
-		if f, ok := p.Figure(id); ok {
+	if f, ok := s.part.Figure(id); ok {
+		return f, true
+	}
+	for i := range s.others {
+		if f, ok := s.others[i].Figure(id); ok {
 			return f, true
 		}
 	}

@@ -8,13 +8,17 @@ func (s Spec) customary(st *Study) bool { return s.usualFor == nil || s.usualFor
 // unusual asks back about every value of a sheet that is lawful but seldom met: a unit
 // or a decimal that slipped is found nowhere else.
 func (p *Part) unusual(st *Study, sheet Sheet) {
-	for _, spec := range specs {
+	for i := range specs {
+		spec := &specs[i]
+		if spec.Sheet != sheet || spec.Usual[1] == 0 {
+			continue
+		}
 		in := spec.Get(st)
-		if spec.Sheet != sheet || spec.Usual[1] == 0 || in == nil || !spec.Applies(st) || !spec.customary(st) {
+		if in == nil || !spec.Applies(st) || !spec.customary(st) {
 			continue
 		}
 		unit, ok := units.Find(spec.Quantity, in.Unit)
-		if !ok || Check(spec, in.Value, unit) != nil {
+		if !ok || Check(*spec, in.Value, unit) != nil {
 			continue // refused as a problem
 		}
 		low, high := unit.FromSI(spec.Usual[0]), unit.FromSI(spec.Usual[1])

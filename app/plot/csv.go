@@ -54,7 +54,7 @@ func (p Picture) columns() []column {
 	for _, l := range p.Lines {
 		data, place := l.Data, p.X.Title
 		if l.Moving {
-			data, place = moved(l.Data, p.Slider.Value), p.X.Title+" at "+p.Slider.Short+" = "+withUnit(p.Slider.Value, p.Slider.Unit)
+			data, place = moved(l.Data, pace(p.Slider.Root, p.Slider.Value)), p.X.Title+" at "+p.Slider.Short+" = "+withUnit(p.Slider.Value, p.Slider.Unit)
 		}
 		if len(list) == 0 || l.Moving || !sameX(last, data) {
 			list = append(list, column{place, cells(data, 0)})
@@ -82,7 +82,7 @@ func (p Picture) columns() []column {
 	return append(list, mark, x, y)
 }
 
-// moved is a moving line's points at a value of the slider.
+// moved is a moving line's points at a pace of the slider.
 func moved(data [][2]float64, value float64) [][2]float64 {
 	list := make([][2]float64, len(data))
 	for i, p := range data {

@@ -28,7 +28,7 @@ const (
 func From(c study.Chart, s units.System) Picture {
 	x := axisUnit(c.X, s, c.Lines, func(l study.Line) float64 {
 		if l.Moving && c.Slider != nil {
-			return largest(l.X) * c.Slider.Max
+			return largest(l.X) * pace(c.Slider.Root, c.Slider.Max)
 		}
 		return largest(l.X)
 	})
@@ -50,7 +50,7 @@ func From(c study.Chart, s units.System) Picture {
 			if c.Slider == nil {
 				panic(errSlider)
 			}
-			along.Factor /= variable.Factor // x for one unit of the slider as shown
+			along.Factor /= pace(c.Slider.Root, variable.Factor) // x for one unit of the slider as shown
 		}
 		p.Lines[i] = lineFrom(l, along, y)
 		p.Lines[i].Readings = readingsFrom(l, s)
@@ -63,9 +63,17 @@ func From(c study.Chart, s units.System) Picture {
 	return p
 }
 
+// pace is what the places of moving lines go with: a slider's variable, or its root.
+func pace(root bool, value float64) float64 {
+	if root {
+		return math.Sqrt(value)
+	}
+	return value
+}
+
 func sliderFrom(c study.Slider, u units.Unit) *Slider {
 	out := &Slider{
-		Label: c.Label, Short: short(c.Label, c.Symbol), Unit: unitText(u),
+		Label: c.Label, Short: short(c.Label, c.Symbol), Unit: unitText(u), Root: c.Root,
 		Min: u.FromSI(c.Min), Max: u.FromSI(c.Max), Value: u.FromSI(c.Value),
 		Stops: make([]Stop, len(c.Marks)),
 	}

@@ -116,7 +116,11 @@ func (s *Slider) append(b []byte) []byte {
 		b = number(append(b, `,"at":`...), stop.At)
 		b = append(b, '}')
 	}
-	return append(b, `]}`...)
+	b = append(b, ']')
+	if s.Root {
+		b = append(b, `,"root":true`...)
+	}
+	return append(b, '}')
 }
 
 func appendPairs(b []byte, data [][2]float64) []byte {

@@ -24,6 +24,7 @@ type Slider struct {
 	Max   float64 `json:"max"`
 	Value float64 `json:"value"` // where it stands at first
 	Stops []Stop  `json:"stops"`
+	Root  bool    `json:"root,omitempty"` // places go with its root
 }
 
 // Stop is a labelled value of a slider.

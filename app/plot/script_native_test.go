@@ -162,6 +162,7 @@ func TestMovingLinesStandWhereTheSliderSays(t *testing.T) {
 		{`stillLine({ data: [[0, 1]], kind: "line" }, 3, 1)`, `{"data":[[0,1]],"kind":"line","own":1}`},
 		{`still(` + picture + `, null).x.max`, `4`}, // nothing limits the axis: as far as the slider brings a line
 		{`still(` + picture + `, 3).lines.map((l) => l.data.at(-1))`, `[[4,0.2],[2,1]]`},
+		{`still({ ...` + picture + `, slider: { ...` + slider + `, root: true } }, 4).lines.map((l) => l.data.at(-1))`, `[[2,0.2],[2,1]]`},
 		{`[null, -1, 2, 9].map((at) => sliderAt(` + slider + `, at))`, `[1,0,2,4]`},
 	})
 }

@@ -5,6 +5,13 @@ import (
 	"math"
 )
 
+// Names of inputs in an InputError that a caller may know as fields of its own.
+const (
+	BadInitial = "initial water saturation"
+	BadInlet   = "water saturation at the open face"
+	BadRatio   = "ratio of total to imbibed flow"
+)
+
 // InputError is an input that cannot be used.
 type InputError struct {
 	Name    string
@@ -124,13 +131,13 @@ func NewSpan(rock Rock, initial, inlet float64) (*Span, error) {
 		inlet = stop
 	}
 	if !(initial >= low && initial < high) {
-		return nil, &InputError{"initial water saturation", initial, fmt.Sprintf("from %.6g, where the curves begin, to below %.6g", low, high)}
+		return nil, &InputError{BadInitial, initial, fmt.Sprintf("from %.6g, where the curves begin, to below %.6g", low, high)}
 	}
 	if initial >= stop-leastWidth {
-		return nil, &InputError{"initial water saturation", initial, fmt.Sprintf("below %.6g, where the capillary pressure is zero: above it the rock does not soak", stop)}
+		return nil, &InputError{BadInitial, initial, fmt.Sprintf("below %.6g, where the capillary pressure is zero: above it the rock does not soak", stop)}
 	}
 	if !(inlet-initial > leastWidth && inlet <= high) {
-		return nil, &InputError{"water saturation at the open face", inlet, fmt.Sprintf("above the initial %.6g, at most %.6g", initial, high)}
+		return nil, &InputError{BadInlet, inlet, fmt.Sprintf("above the initial %.6g, at most %.6g", initial, high)}
 	}
 	s := &Span{Rock: rock, Initial: initial, Inlet: inlet}
 	s.start, s.startSlope = rock.FractionalFlow(initial)

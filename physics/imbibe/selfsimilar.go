@@ -73,12 +73,12 @@ type Solution struct {
 // would take up water without bound.
 func Solve(span *Span, ratio float64) (*Solution, error) {
 	if !(ratio >= 0 && ratio <= 1) {
-		return nil, &InputError{"ratio of total to imbibed flow", ratio, "0, counter-current, to 1, co-current"}
+		return nil, &InputError{BadRatio, ratio, "0, counter-current, to 1, co-current"}
 	}
 	atFace, _ := span.FractionalFlow(span.Inlet)
 	least := 1 - ratio*atFace
 	if !(least >= leastGap) {
-		return nil, &InputError{"ratio of total to imbibed flow", ratio, "below 1 - 1e-6 where the open face is held at residual oil: no oil has to leave there, and nothing limits the rate"}
+		return nil, &InputError{BadRatio, ratio, "below 1 - 1e-6 where the open face is held at residual oil: no oil has to leave there, and nothing limits the rate"}
 	}
 	if !(span.LowPower > -2) {
 		return nil, &InputError{"power with which Dc grows towards the initial water", span.LowPower, "above -2: the rock would soak up water without bound"}

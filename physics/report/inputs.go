@@ -34,7 +34,7 @@ var choiceLabels = map[string]string{
 	"rock.capillary.curve": "Capillary pressure", "rock.capillary.at": "Pc was measured at", "rock.capillary.ends": "Ends of the Pc fit",
 	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
-	"field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
+	"soak.flow": "How the oil leaves", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -102,6 +102,9 @@ func choices(st study.Study) *Table {
 		add("front.ending", st.Front.Ending, study.Endings)
 	}
 	add("front.rider.kind", st.Front.Rider.Kind, study.Riders)
+	if st.Rock.Capillary.Given() {
+		add("soak.flow", st.Soak.Flow, study.SoakFlows)
+	}
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Layers.Table != "" {

@@ -97,6 +97,7 @@ var choiceFields = []choiceField{
 	{"fluids.pair", Pairs, func(s *Study) *string { return &s.Fluids.Pair }},
 	{"front.ending", Endings, func(s *Study) *string { return &s.Front.Ending }},
 	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},
+	{"soak.flow", SoakFlows, func(s *Study) *string { return &s.Soak.Flow }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 	{"field.layers.crossflow", Crossflows, func(s *Study) *string { return &s.Field.Layers.Crossflow }},

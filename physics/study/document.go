@@ -27,6 +27,7 @@ type Study struct {
 	Fluids Fluids `json:"fluids"`
 	Front  Front  `json:"front"`
 	Field  Field  `json:"field"`
+	Soak   Soak   `json:"soak,omitzero"`
 
 	Cases []Case `json:"cases,omitempty"` // named changes on the study; at most MaxCases
 }

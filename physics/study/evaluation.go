@@ -31,6 +31,8 @@ func jobs() []job {
 			p, e.front = runFront(e.st, e.parts[SheetRock], e.rock)
 			return p
 		}},
+		{sheet: SheetSoak, needs: []Sheet{SheetRock}, run: func(e *Evaluation, _ growing) Part { return runSoak(e.st, e.parts[SheetRock], e.rock) },
+			asked: withCapillary},
 		{sheet: SheetField, needs: []Sheet{SheetFront}, run: func(e *Evaluation, _ growing) Part {
 			return runField(e.st, e.parts[SheetFront], e.front)
 		}},
@@ -41,7 +43,7 @@ func jobs() []job {
 
 // Sheets are the sheets that a study is taken through, in the order of the job: the
 // names of jobs once more, for the interface, which would link every solver with them.
-func Sheets() []Sheet { return []Sheet{SheetRock, SheetFront, SheetField, SheetCompare} }
+func Sheets() []Sheet { return []Sheet{SheetRock, SheetFront, SheetSoak, SheetField, SheetCompare} }
 
 // Evaluation is a study on its way through the sheets: each is computed when it is
 // first wanted, after those it needs.

@@ -13,6 +13,10 @@ const (
 	SheetFront Sheet = "front"
 	SheetField Sheet = "field"
 
+	// SheetSoak is rock that takes water up by itself; a result has it only when the
+	// study has a capillary pressure.
+	SheetSoak Sheet = "soak"
+
 	// SheetCompare sets the cases of a study beside it; a result has it only when
 	// the study has cases.
 	SheetCompare Sheet = "compare"
@@ -123,6 +127,9 @@ type Slider struct {
 	Max      float64        `json:"max"`
 	Value    float64        `json:"value"` // where it stands at first, and in print
 	Marks    []Mark         `json:"marks"` // labelled values of the variable, in X; Y is 0
+	// Root says that places go with the root of the variable: a point of a Moving line
+	// is then given for a root of one unit (SI).
+	Root bool `json:"root,omitempty"`
 }
 
 // Axis describes one axis of a chart.

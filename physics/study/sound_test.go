@@ -68,6 +68,23 @@ func variants() map[string]Study {
 			}
 		}
 	}
+	for _, flow := range SoakFlows {
+		for _, kind := range pcTyped {
+			add("soaking "+flow.Value+" "+kind, func(st *Study) {
+				*st = soaking()
+				st.Soak.Flow, st.Rock.Capillary.Curve = flow.Value, kind
+			})
+		}
+	}
+	for _, spec := range soakSpecs {
+		for name, si := range map[string]float64{"lowest": spec.Min, "highest": spec.Max, "low": spec.Min + 0.3*(math.Min(spec.Max, 1)-spec.Min)} {
+			add("soaking "+name+" "+spec.Path, func(st *Study) {
+				*st = soaking()
+				st.Soak.Flow = mixedCurrent
+				put(st, spec.Path, units.Of(spec.Quantity)[0].FromSI(si), units.Of(spec.Quantity)[0].Symbol)
+			})
+		}
+	}
 	add("no table", func(st *Study) { st.Rock.Table = nil })
 	add("empty table", func(st *Study) { st.Rock.Table = &Table{} })
 	add("no table, typed", func(st *Study) { st.Rock.Table = nil; st.Rock.Curve = "let" })
@@ -195,8 +212,8 @@ func faults(r Result) []string {
 	}
 	for _, sheet := range Sheets() {
 		part, ok := r.Parts[sheet]
-		if !ok && sheet == SheetCompare {
-			continue // the study has no cases
+		if !ok && (sheet == SheetCompare || sheet == SheetSoak) {
+			continue // the study has no cases, no capillary pressure
 		}
 		if !ok {
 			blame("no part %s", sheet)

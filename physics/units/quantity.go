@@ -36,6 +36,9 @@ const (
 	Salinity           Quantity = "salinity"           // mass of salt in the mass of brine
 	InterfacialTension Quantity = "interfacialTension" // force per length between two phases
 	HeatCapacity       Quantity = "heatCapacity"       // heat per volume and degree of temperature
+	Sorptivity         Quantity = "sorptivity"         // length over the root of time
+	RootDuration       Quantity = "rootDuration"       // root of time
+	Diffusivity        Quantity = "diffusivity"        // area over time
 
 	PressureGradient Quantity = "pressureGradient" // pressure over depth
 	Price            Quantity = "price"            // money, of any one currency, per volume
@@ -60,18 +63,19 @@ func (u Unit) FromSI(si float64) float64 { return si/u.Factor - u.Zero }
 // 231 in3; millidarcy, from the darcy's own definition (1 cp cm2/(s atm)); the zeros of the
 // Celsius and Fahrenheit scales and the British thermal unit, NIST SP 811 app. B.
 const (
-	foot   = 0.3048
-	inch   = 0.0254
-	pound  = 0.45359237
-	gravSI = 9.80665
-	barrel = 42 * 231 * inch * inch * inch
-	psi    = pound * gravSI / (inch * inch)
-	darcy  = 1e-3 * 1e-4 / 101325
-	day    = 86400.0
-	year   = 365.25 * day
-	acre   = 43560 * foot * foot
-	btu    = 1055.05585262 // International Table
-	degree = 3.14159265358979323846264338327950288 / 180
+	foot              = 0.3048
+	inch              = 0.0254
+	pound             = 0.45359237
+	gravSI            = 9.80665
+	barrel            = 42 * 231 * inch * inch * inch
+	psi               = pound * gravSI / (inch * inch)
+	darcy             = 1e-3 * 1e-4 / 101325
+	day               = 86400.0
+	rootDay, rootHour = 293.9387691339814, 60.0
+	year              = 365.25 * day
+	acre              = 43560 * foot * foot
+	btu               = 1055.05585262 // International Table
+	degree            = 3.14159265358979323846264338327950288 / 180
 )
 
 // StandardGravity is the conventional g, m/s2.
@@ -104,6 +108,9 @@ var catalogue = []Unit{
 	{"degC", Temperature, 1, 273.15}, {"degF", Temperature, 5.0 / 9, 459.67}, {"K", Temperature, 1, 0},
 	{"wt%", Salinity, 0.01, 0}, {"g/kg", Salinity, 1e-3, 0}, {"ppm", Salinity, 1e-6, 0},
 	{"mN/m", InterfacialTension, 1e-3, 0}, {"dyn/cm", InterfacialTension, 1e-3, 0}, {"N/m", InterfacialTension, 1, 0},
+	{"m/√d", Sorptivity, 1 / rootDay, 0}, {"ft/√d", Sorptivity, foot / rootDay, 0}, {"cm/√h", Sorptivity, 0.01 / rootHour, 0}, {"m/√s", Sorptivity, 1, 0},
+	{"√d", RootDuration, rootDay, 0}, {"√h", RootDuration, rootHour, 0}, {"√s", RootDuration, 1, 0},
+	{"m2/s", Diffusivity, 1, 0}, {"m2/d", Diffusivity, 1 / day, 0}, {"ft2/d", Diffusivity, foot * foot / day, 0}, {"cm2/h", Diffusivity, 1e-4 / 3600, 0},
 	{"psi/ft", PressureGradient, psi / foot, 0}, {"kPa/m", PressureGradient, 1e3, 0}, {"bar/m", PressureGradient, 1e5, 0},
 	{"per bbl", Price, 1 / barrel, 0}, {"per m3", Price, 1, 0},
 	{"per d", CostRate, 1 / day, 0}, {"per yr", CostRate, 1 / year, 0},

@@ -18,17 +18,18 @@ var defaults = map[System]map[Quantity]string{
 		FormationFactor: "rb/stb", WaterOilRatio: "bbl/bbl", Viscosity: "cp", Permeability: "md", Length: "ft", Area: "acre",
 		Volume: "bbl", Pressure: "psi", Rate: "bbl/d", Velocity: "ft/d", Duration: "d", Density: "lb/ft3",
 		GasVolume: "Mscf", GasRate: "Mscf/d", GasOilRatio: "scf/bbl", WaterGasRatio: "bbl/MMscf",
-		Temperature: "degF", InterfacialTension: "dyn/cm", HeatCapacity: "Btu/(ft3.degF)",
+		Temperature: "degF", InterfacialTension: "dyn/cm", HeatCapacity: "Btu/(ft3.degF)", Sorptivity: "ft/√d", Diffusivity: "ft2/d",
 	},
 	Metric: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "m", Area: "ha",
 		Volume: "m3", Pressure: "bar", Rate: "m3/d", Velocity: "m/d", Duration: "d", Density: "kg/m3", PressureGradient: "bar/m", Price: "per m3",
-		GasVolume: "m3", GasRate: "m3/d", GasOilRatio: "m3/m3", WaterGasRatio: "m3/m3",
+		GasVolume: "m3", GasRate: "m3/d", GasOilRatio: "m3/m3", WaterGasRatio: "m3/m3", Diffusivity: "m2/d",
 	},
 	Lab: {
 		FormationFactor: "m3/m3", WaterOilRatio: "m3/m3", Viscosity: "mPa.s", Permeability: "md", Length: "cm", Area: "cm2",
 		Volume: "cm3", Pressure: "kPa", Rate: "cm3/min", Velocity: "cm/h", Duration: "h", Density: "g/cm3", PressureGradient: "kPa/m", Price: "per m3",
 		GasVolume: "m3", GasRate: "m3/d", GasOilRatio: "m3/m3", WaterGasRatio: "m3/m3",
+		Sorptivity: "cm/√h", RootDuration: "√h", Diffusivity: "cm2/h",
 	},
 }
 

@@ -2,7 +2,7 @@ import { placeLabels } from "./labels.js";
 import { course, layout } from "./layout.js";
 import { option, slidOption } from "./option.js";
 import { pinMarks } from "./pins.js";
-import { sliderAt, still, stillLine } from "./still.js";
+import { pace, still, stillLine } from "./still.js";
 
 // drawing is everything needed to draw a picture at a size in a palette.
 export function drawing(picture, state, width, height, family, palette) {
@@ -15,7 +15,7 @@ export function drawing(picture, state, width, height, family, palette) {
 // slid is a drawing after a step of the slider: only what moves is found anew. The
 // words of moving things wait until the slider rests, since their places would jump.
 export function slid(drawn, picture, state, palette) {
-  const { x, y, whole } = drawn.lay, value = sliderAt(picture.slider, state.at), max = x.scale.from(whole.x[1]);
+  const { x, y, whole } = drawn.lay, value = pace(picture.slider, state.at), max = x.scale.from(whole.x[1]);
   const moving = (c) => course(stillLine(c.line.origin, value, max), c.shown, x, y);
   const lay = { ...drawn.lay, courses: drawn.lay.courses.map((c) => (c.line.moving ? moving(c) : c)) };
   const pins = pinMarks(state.pins, lay, picture);

@@ -8,19 +8,25 @@ export function sliderAt(slider, at) {
   return Math.min(slider.max, Math.max(slider.min, at ?? slider.value));
 }
 
+// pace is what the points of moving lines are multiplied by: the value, or its root.
+export function pace(slider, at) {
+  const value = sliderAt(slider, at);
+  return slider.root ? Math.sqrt(value) : value;
+}
+
 // still is a picture with its moving lines in place. Each line then says how many of
 // its points are its own: the last may be one that was added at the axis' end.
 export function still(picture, at) {
   const { slider } = picture;
   if (!slider) return { ...picture, lines: picture.lines.map((l) => ({ ...l, own: l.data.length })) };
   const max = picture.x.max ?? furthest(picture);
-  const value = sliderAt(slider, at);
+  const value = pace(slider, at);
   return { ...picture, x: { ...picture.x, max }, lines: picture.lines.map((l) => stillLine(l, value, max)) };
 }
 
 // furthest is as far as any line comes at the slider's end.
 function furthest({ slider, lines }) {
-  const reach = (l) => l.data.filter(Boolean).map((p) => (l.moving ? p[0] * slider.max : p[0]));
+  const reach = (l) => l.data.filter(Boolean).map((p) => (l.moving ? p[0] * pace(slider, slider.max) : p[0]));
   return lines.flatMap(reach).reduce((a, b) => Math.max(a, b), -Infinity);
 }
 

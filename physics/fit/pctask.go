@@ -10,6 +10,7 @@ import (
 const (
 	pcFloor = 0.01 // of the largest |Pc|: smaller ones count as this
 	pcRoom  = 1e-4 // of the points' range: how near to them an end with infinite Pc may come
+	pcTries = 30   // iterations after which starts are compared
 	pcRange = 1e6  // of the largest |Pc|: how large a parameter that Pc is proportional to may be
 )
 
@@ -89,17 +90,18 @@ func newPcTask(f pcFamily, p PcPoints, o PcOptions) *pcTask {
 	return t
 }
 
-// solve tries every start on a thinned table and fits the best to all rows.
+// solve tries every start for a few iterations, on a thinned table, and fits the best to
+// all rows.
 func (t *pcTask) solve() {
 	all, few := thinned(len(t.points.Sw))
 	var best minimum
 	for k, x := range t.starts(few) {
-		if m := t.minimise(few, x); k == 0 || m.sum < best.sum {
+		if m := t.minimise(few, x, min(pcTries, t.options.Iterations)); k == 0 || m.sum < best.sum {
 			best = m
 		}
 	}
-	if len(few) < len(all) {
-		best = t.minimise(all, best.x)
+	if len(few) < len(all) || !best.converged {
+		best = t.minimise(all, best.x, t.options.Iterations)
 	}
 	t.take(best.x)
 	for p, j := range t.free {
@@ -170,7 +172,7 @@ func (t *pcTask) take(x []float64) {
 }
 
 // minimise runs the minimiser on some rows.
-func (t *pcTask) minimise(rows []int, x []float64) minimum {
+func (t *pcTask) minimise(rows []int, x []float64, limit int) minimum {
 	low, high := make([]float64, len(x)), make([]float64, len(x))
 	for p, j := range t.free {
 		low[p], high[p] = t.family.specs[j].inner(t.low[j]), t.family.specs[j].inner(t.high[j])
@@ -190,7 +192,7 @@ func (t *pcTask) minimise(rows []int, x []float64) minimum {
 			}
 		}
 	}
-	return minimise(eval, len(rows), x, low, high, t.options.Iterations)
+	return minimise(eval, len(rows), x, low, high, limit)
 }
 
 // deviation is curve minus point.

@@ -115,6 +115,24 @@ func TestCapillaryConversion(t *testing.T) {
 	}
 }
 
+// TestReleasedCapillaryKeepsItsMeaning: a table in its unit, measured in the laboratory.
+func TestReleasedCapillaryKeepsItsMeaning(t *testing.T) {
+	st := released(t, "v1-capillary.json")
+	c := st.Rock.Capillary
+	if c.Curve != "skjaeveland-fit" || c.Unit != "psi" || c.At != inLaboratory || c.Table == nil || len(c.Table.Sw) != 10 || c.Table.Pc[9] != -9 {
+		t.Errorf("%+v", c)
+	}
+	e := (*Memory)(nil).Begin(st)
+	e.through(SheetRock)
+	if curve, wants := e.rock.capillary(); curve == nil {
+		t.Errorf("no curve; wants %v", wants)
+	}
+	// 27/(480 cos 40°), by hand
+	if ratio, ok := e.parts[SheetRock].Figure("rock.pcRatio"); !ok || math.Abs(ratio.Value-0.0734291) > 1e-6 {
+		t.Errorf("reservoir over laboratory %v", ratio.Value)
+	}
+}
+
 // TestCapillaryWaits: what is missing or bad in capillary pressure keeps it, and nothing
 // else, from being told, and the accessor names it.
 func TestCapillaryWaits(t *testing.T) {

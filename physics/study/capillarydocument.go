@@ -164,6 +164,12 @@ func (s Spec) helped(text string) Spec {
 	return s
 }
 
+// usual sets the range outside which a value is asked back about.
+func (s Spec) usual(low, high float64) Spec {
+	s.Usual = [2]float64{low, high}
+	return s
+}
+
 const largestPc = 1e9 // Pa
 
 var capillarySpecs = []Spec{
@@ -185,7 +191,7 @@ var capillarySpecs = []Spec{
 	pcSpec("angle", pcLabGroup, "Contact angle in the reservoir", "θ,res", units.Angle, 0, math.Pi/2, func(c *Capillary) **Input { return &c.Angle }, func(s *Study) bool {
 		return withCapillary(s) && (s.Rock.Capillary.ByJ() || measuredElsewhere(s))
 	}).or("0").ending().helped("Through the water. From 90° on no scaling holds: give Pc at reservoir conditions."),
-	pcSpec("labTension", pcLabGroup, "Tension in the laboratory", "σ,lab", units.InterfacialTension, 0, 1, func(c *Capillary) **Input { return &c.LabTension }, measuredElsewhere).open(false),
+	pcSpec("labTension", pcLabGroup, "Tension in the laboratory", "σ,lab", units.InterfacialTension, 0, 1, func(c *Capillary) **Input { return &c.LabTension }, measuredElsewhere).open(false).usual(5e-3, 0.5),
 	pcSpec("labAngle", pcLabGroup, "Contact angle in the laboratory", "θ,lab", units.Angle, 0, math.Pi/2, func(c *Capillary) **Input { return &c.LabAngle }, measuredElsewhere).or("0").ending().helped("Through the wetting phase; of mercury, which does not wet, the supplement of its angle."),
 	pcSpec("labPermeability", pcLabGroup, "Permeability of the plug", "k,lab", units.Permeability, 0, 1e-9, func(c *Capillary) **Input { return &c.LabPermeability }, measuredElsewhere).open(false).or("as the reservoir rock: J needs no scaling"),
 	pcSpec("labPorosity", pcLabGroup, "Porosity of the plug", "φ,lab", units.Fraction, 0, 1, func(c *Capillary) **Input { return &c.LabPorosity }, measuredElsewhere).open(true).or("as the reservoir rock: J needs no scaling"),

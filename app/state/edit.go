@@ -175,7 +175,7 @@ func amount(spec study.Spec, number float64, symbol string) string {
 }
 
 // written takes a text of the study: its title, author and note, the first day of
-// injection, and the tables of the field that are kept as they were pasted.
+// injection, and the tables that are kept as they were pasted.
 func (m Model) written(msg Written) (Model, []Effect) {
 	return m.amend(msg.Path, func(p *page) {
 		text := clean(msg.Text)
@@ -186,7 +186,7 @@ func (m Model) written(msg Written) (Model, []Effect) {
 		delete(p.drafts, msg.Path)
 		delete(p.messages, msg.Path)
 		problem := tooLong(msg.Path, text)
-		meant := strings.HasPrefix(msg.Path, "field.")
+		meant := study.HasMeaning(msg.Path)
 		if meant && problem == nil {
 			problem = study.CheckText(&p.study, msg.Path, strings.TrimSpace(text))
 		}
@@ -224,6 +224,8 @@ func textAt(st *study.Study, path string) *string {
 		return &st.Field.Layers.Table
 	case "field.wells.schedule":
 		return &st.Field.Wells.Schedule
+	case "block.sizes":
+		return &st.Block.Sizes
 	}
 	return nil
 }

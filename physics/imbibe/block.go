@@ -1,6 +1,9 @@
 package imbibe
 
-import "math"
+import (
+	"math"
+	"slices"
+)
 
 // Block is what a block soaks up against time.
 type Block struct {
@@ -46,8 +49,23 @@ var usual = accuracy{32, 1e-4}
 // Soak fills a block of the rock. A block of one axis is solved on two grids with the same
 // times, n and 2n cells, and extrapolated, R = (4 R_2n - R_n)/3, the scheme being of second
 // order; one of several axes as a crossing. err says when steps had to be made too small
-// to go on.
+// to go on. The last few blocks are remembered, and not to be written to.
 func (m *Matrix) Soak(shape Shape) (*Block, error) {
+	for _, b := range m.blocks {
+		if slices.Equal(b.Shape, shape) {
+			return b, nil
+		}
+	}
+	b, err := m.fill(shape)
+	if err != nil {
+		return nil, err
+	}
+	const remembered = 6
+	m.blocks = append(m.blocks[max(0, len(m.blocks)+1-remembered):], b)
+	return b, nil
+}
+
+func (m *Matrix) fill(shape Shape) (*Block, error) {
 	for _, a := range append(Shape{{1, 0}}, shape...) {
 		if m.axes[a.Spread] == nil {
 			run, err := m.axis(a.Spread, usual)

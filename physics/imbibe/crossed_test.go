@@ -108,7 +108,7 @@ func TestCrossingAgainstExplicit(t *testing.T) {
 			b, err := m.Soak(c.shape)
 			must(t, err)
 			var times []float64
-			for _, share := range []float64{0.3, 0.5, 0.7, 0.8, 0.9, 0.97} {
+			for _, share := range []float64{0.3, 0.5, 0.7, 0.8, 0.88} {
 				times = append(times, b.TimeAt(share))
 			}
 			half, whole := explicitBlock(m, c.shape, c.cells/2, times), explicitBlock(m, c.shape, c.cells, times)

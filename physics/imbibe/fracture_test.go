@@ -13,7 +13,7 @@ import (
 // (1953) for exchange along a stream, summed here as a series.
 func bessel(a, b float64) float64 {
 	term, below, weight, sum := math.Exp(-a), math.Exp(-a), math.Exp(-b), 0.0
-	for n := 0.0; n < 400; n++ {
+	for n := 0.0; n < 900; n++ {
 		sum += weight * below
 		weight *= b / (n + 1)
 		term *= a / (n + 1)
@@ -23,7 +23,7 @@ func bessel(a, b float64) float64 {
 }
 
 func TestFractureWithExponentialExchange(t *testing.T) {
-	for _, a := range []float64{0.2, 1, 3, 8} {
+	for _, a := range []float64{0.2, 1, 3, 8, 30, 90} {
 		f := FractureFlood{Own: 0.4, Rock: a}
 		s, err := f.Run(Exponential{1}, 0.4+3*a+2)
 		must(t, err)
@@ -32,7 +32,8 @@ func TestFractureWithExponentialExchange(t *testing.T) {
 			worst = math.Max(worst, math.Abs(s.Cut[i]-bessel(a, time-0.4)))
 		}
 		t.Logf("a = %g: off by up to %.1e", a, worst)
-		within(t, "cut, the largest error", worst, 0, 3e-3)
+		// Where rock is far quicker than injection the front is steep, and drawn wider.
+		within(t, "cut, the largest error", worst, 0, map[bool]float64{true: 3e-3, false: 0.03}[a <= 8])
 	}
 }
 

@@ -21,6 +21,7 @@ type Matrix struct {
 	opened                   float64        // int_Si^S0 Dc dS: the potential is -opened at Si, 0 at S0
 	early                    float64        // share over sqrt(t), s^-1/2, of a half space for each 1/m of open area
 	axes                     [maxSpread + 1]*axisBlock
+	blocks                   []*Block
 }
 
 // diffusivity is Dc by the distance from either end, as in Span.

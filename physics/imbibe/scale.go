@@ -86,3 +86,23 @@ func (r *Recovery) Spaced(n int) []float64 {
 	}
 	return times
 }
+
+// TimeOf is when an uptake reaches a share from above 0 to below 1, s.
+func TimeOf(u Uptake, share float64) float64 {
+	low, high := 0.0, 1.0
+	for s, _ := u.At(high); s < share; s, _ = u.At(high) {
+		high *= 4
+	}
+	for s, _ := u.At(high / 4); s > share; s, _ = u.At(high / 4) {
+		high /= 4
+	}
+	for range 60 {
+		middle := (low + high) / 2
+		if s, _ := u.At(middle); s < share {
+			low = middle
+		} else {
+			high = middle
+		}
+	}
+	return high
+}

@@ -34,7 +34,7 @@ var choiceLabels = map[string]string{
 	"rock.capillary.curve": "Capillary pressure", "rock.capillary.at": "Pc was measured at", "rock.capillary.ends": "Ends of the Pc fit",
 	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
-	"soak.flow": "How the oil leaves", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
+	"soak.flow": "How the oil leaves", "block.shape": "Block that soaks", "block.plug.shape": "Plug", "block.sizes": "Sizes of blocks", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule",
 	"title": "Title", "author": "Author", "note": "Note",
 }
@@ -104,13 +104,19 @@ func choices(st study.Study) *Table {
 	add("front.rider.kind", st.Front.Rider.Kind, study.Riders)
 	if st.Rock.Capillary.Given() {
 		add("soak.flow", st.Soak.Flow, study.SoakFlows)
+		if st.Block.Given() {
+			add("block.shape", st.Block.Shape, study.BlockShapes)
+		}
+		if st.Block.Given() && st.Block.Plug.Diameter != nil {
+			add("block.plug.shape", st.Block.Plug.Shape, study.PlugShapes)
+		}
 	}
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Layers.Table != "" {
 		add("field.layers.crossflow", st.Field.Layers.Crossflow, study.Crossflows)
 	}
-	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.start", st.Field.Start}} {
+	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.start", st.Field.Start}, {"block.sizes", st.Block.Sizes}} {
 		if text.text != "" {
 			table.Rows = append(table.Rows, []string{Label(&st, text.path), strings.Join(strings.Split(text.text, "\n"), "; ")})
 		}

@@ -98,6 +98,8 @@ var choiceFields = []choiceField{
 	{"front.ending", Endings, func(s *Study) *string { return &s.Front.Ending }},
 	{"front.rider.kind", Riders, func(s *Study) *string { return &s.Front.Rider.Kind }},
 	{"soak.flow", SoakFlows, func(s *Study) *string { return &s.Soak.Flow }},
+	{"block.shape", BlockShapes, func(s *Study) *string { return &s.Block.Shape }},
+	{"block.plug.shape", PlugShapes, func(s *Study) *string { return &s.Block.Plug.Shape }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 	{"field.layers.crossflow", Crossflows, func(s *Study) *string { return &s.Field.Layers.Crossflow }},

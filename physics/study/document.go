@@ -28,6 +28,7 @@ type Study struct {
 	Front  Front  `json:"front"`
 	Field  Field  `json:"field"`
 	Soak   Soak   `json:"soak,omitzero"`
+	Block  Block  `json:"block,omitzero"`
 
 	Cases []Case `json:"cases,omitempty"` // named changes on the study; at most MaxCases
 }

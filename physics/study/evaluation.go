@@ -31,7 +31,7 @@ func jobs() []job {
 			p, e.front = runFront(e.st, e.parts[SheetRock], e.rock)
 			return p
 		}},
-		{sheet: SheetSoak, needs: []Sheet{SheetRock}, run: func(e *Evaluation, _ growing) Part { return runSoak(e.st, e.parts[SheetRock], e.rock) },
+		{sheet: SheetSoak, needs: []Sheet{SheetRock, SheetFront}, run: func(e *Evaluation, _ growing) Part { return runSoak(e.st, e.parts[SheetRock], e.rock, e.front) },
 			asked: withCapillary},
 		{sheet: SheetField, needs: []Sheet{SheetFront}, run: func(e *Evaluation, _ growing) Part {
 			return runField(e.st, e.parts[SheetFront], e.front)

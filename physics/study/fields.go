@@ -157,7 +157,7 @@ var specs = slices.Concat([]Spec{
 
 	{Path: "front.dip", Sheet: SheetFront, Group: "Dip", Label: "Dip of the layer along the flow", Symbol: "θ", Quantity: units.Angle, Min: -math.Pi / 2, Max: math.Pi / 2, Optional: true, Default: "0, a level layer", Help: "Positive when water moves up-dip, negative when it moves down-dip.", at: func(s *Study) **Input { return &s.Front.Dip }, when: mayDip},
 	{Path: "front.velocity", Sheet: SheetFront, Group: "Dip", Label: "Total Darcy velocity", Symbol: "u", Quantity: units.Velocity, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "rate over width and thickness of the field", Help: "Volume through a unit of cross-section while on; not divided by porosity.", at: func(s *Study) **Input { return &s.Front.Velocity }, when: velocityCounts},
-}, riderSpecs, soakSpecs, []Spec{
+}, riderSpecs, soakSpecs, blockSpecs, []Spec{
 	{Path: "field.length", Sheet: SheetField, Group: "Block", Label: "Length, injector to producer", Symbol: "L", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Length }},
 	{Path: "field.width", Sheet: SheetField, Group: "Block", Label: "Width across the flow", Symbol: "W", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e5, at: func(s *Study) **Input { return &s.Field.Width }},
 	{Path: "field.thickness", Sheet: SheetField, Group: "Block", Label: "Net thickness", Symbol: "h", Quantity: units.Length, Min: 0, OpenMin: true, Max: 5e3, at: func(s *Study) **Input { return &s.Field.Thickness }, when: unlayered},

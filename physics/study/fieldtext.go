@@ -1,6 +1,7 @@
 package study
 
 import (
+	"slices"
 	"strconv"
 	"strings"
 	"time"
@@ -147,7 +148,7 @@ func unitIn(q units.Quantity, heading string) (units.Unit, bool) {
 }
 
 // CheckText says whether a text of the study that means something may stand at a path:
-// the first day of injection, the layers, the schedule.
+// the first day of injection, the layers, the schedule, the sizes of blocks.
 func CheckText(st *Study, path, text string) *Problem {
 	switch path {
 	case "field.start":
@@ -158,8 +159,16 @@ func CheckText(st *Study, path, text string) *Problem {
 	case scheduleTable.path:
 		_, problem := scheduleTable.rows(text, st.Field.Start)
 		return problem
+	case sizeTable.path:
+		_, problem := sizeTable.rows(text, "")
+		return problem
 	}
 	return nil
+}
+
+// HasMeaning reports whether the text at a path is read, not only kept.
+func HasMeaning(path string) bool {
+	return slices.Contains([]string{"field.start", layerTable.path, scheduleTable.path, sizeTable.path}, path)
 }
 
 // rows reads a table that has rows, in rising order where its first column is time.

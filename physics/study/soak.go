@@ -26,7 +26,7 @@ type soak struct {
 const risen = 0.01
 
 // runSoak answers the Soak sheet, of a study that has a capillary pressure.
-func runSoak(st *Study, rockPart Part, rock *rock) Part {
+func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
 	s := newSheet(st, rockPart)
 	s.await(rockPart)
 	var b *brine
@@ -82,6 +82,7 @@ func runSoak(st *Study, rockPart Part, rock *rock) Part {
 	s.part.Tables = append(s.part.Tables, k.table())
 	k.notes(s)
 	k.answer(s)
+	s.blocks(soakingRock{span, k.inputs, rock.memory}, front)
 	if k.Status == imbibe.Stopped {
 		return s.close(Stopped)
 	}

@@ -395,7 +395,7 @@ func knownPath(path string) bool {
 		return true
 	}
 	_, tabled := FindTable(path)
-	return tabled || Choices(path) != nil || path == "field.start" || path == layerTable.path || path == scheduleTable.path
+	return tabled || Choices(path) != nil || HasMeaning(path)
 }
 
 func TestForecastNeverRunsBack(t *testing.T) {

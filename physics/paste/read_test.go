@@ -322,19 +322,21 @@ func TestReadPressure(t *testing.T) {
 
 func FuzzRead(f *testing.F) {
 	for _, seed := range []string{
-		"", "Sw\tkrw\tkro\n0,2\t0\t0,85\n0.4\t5E-2\t0.4\n", "\"Sw, v/v\";krw;kro\n20 %;0;1", "0,2,0,0,0,85\n0,4", "So (%) kr water kr oil\n80 0 1\n1e999 - \u2212",
+		"", "Sw\tkrw\tkro\n0,2\t0\t0,85\n0.4\t5E-2\t0.4\n", "\"Sw, v/v\";krw;kro\n20 %;0;1", "Sw\tPc, kPa\n0.2\t\u22129\n0,4\t1\n0.7\t-3%\n", "0,2,0,0,0,85\n0,4", "So (%) kr water kr oil\n80 0 1\n1e999 - \u2212",
 		"\ufeff;;;\n\"", "1 2 3 4\n2 3 4 5\n3 4 5 6\n4 a b c", "Sw,krw,kro\n25,10,80\n30,20,70\n", "0,25, 0,1, 0,8\r0,3, 0,2, 0,5", "%\n%\n1 %", "\xff\xfe0\x001\x00",
 	} {
 		f.Add(seed)
 	}
 	f.Fuzz(func(t *testing.T, text string) {
-		r := Read(text, RelativePermeability)
-		for column := range len(r.Columns) + 1 {
-			for _, as := range []string{"", Sw, Krw, Kro, So} {
-				check(t, r.With(column, as))
+		for _, layout := range []Layout{RelativePermeability, CapillaryPressure} {
+			r := Read(text, layout)
+			for column := range len(r.Columns) + 1 {
+				for _, as := range []string{"", Sw, Krw, Kro, So, Pc} {
+					check(t, r.With(column, as))
+				}
 			}
+			check(t, r)
 		}
-		check(t, r)
 	})
 }
 
@@ -350,16 +352,16 @@ func check(t *testing.T, r Reading) {
 			t.Fatalf("problem %+v", p)
 		}
 	}
-	sw, krw, kro, ok := kr(r)
+	columns, _, ok := r.Table()
 	if ok != (len(r.Problems) == 0) {
 		t.Fatalf("table is ok: %v, with problems %+v", ok, r.Problems)
 	}
-	for _, values := range [][]float64{sw, krw, kro} {
+	for i, values := range columns {
 		if ok && len(values) < MinRows {
 			t.Fatalf("a table of %d rows", len(values))
 		}
 		for _, v := range values {
-			if !(v >= 0 && v <= 1) {
+			if pressure := r.want.columns[i] == Pc; math.IsNaN(v) || math.IsInf(v, 0) || !pressure && !(v >= 0 && v <= 1) {
 				t.Fatalf("table holds %v", v)
 			}
 		}

@@ -61,9 +61,9 @@ var pcForms = []pcForm{
 	}, []string{"a", "b", "c"}, nil},
 }
 
-// soak answers what the sheet says of capillary pressure. It keeps nothing else from
+// capillaryPressure answers what the sheet says of capillary pressure. It keeps nothing else from
 // answering: what it still wants is told in a note, what it cannot use is a problem.
-func (r *rock) soak(s *sheet) {
+func (r *rock) capillaryPressure(s *sheet) {
 	c := &s.st.Rock.Capillary
 	r.pcWants = []string{"rock.capillary.curve"}
 	if !withCapillary(s.st) {

@@ -60,7 +60,7 @@ func runRock(st *Study, m *Memory) (Part, *rock) {
 	s.part.Charts = append(s.part.Charts, r.chart(s))
 	r.tables(s)
 	r.notes(s)
-	r.soak(s)
+	r.capillaryPressure(s)
 	begins, stops := "Water begins to flow at Swc = {rock.swc}", "oil stops at Sor = {rock.sor}"
 	water, oil := flowAtEnds(r.reported)
 	if water {

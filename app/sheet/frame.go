@@ -57,6 +57,8 @@ func current(d widget.Desk, m state.Model) app.UI {
 	switch m.Route.Sheet {
 	case "rock":
 		return &Rock{Desk: d, Model: m}
+	case "soak":
+		return &Soak{Desk: d, Model: m}
 	case "field":
 		return &Field{Desk: d, Model: m}
 	case "compare":
@@ -87,7 +89,8 @@ func top(d widget.Desk, m state.Model) app.UI {
 			widget.Action(d, "save", "Save", state.SaveAsked{}, true),
 			widget.Action(d, "share", "Copy link", state.ShareAsked{}, true),
 			widget.Action(d, "new", "New", state.StartedEmpty{}, true),
-			widget.Action(d, "demo", "Demo", state.DemoOpened{}, true),
+			widget.Action(d, "demo", "Demo: flood", state.DemoOpened{}, true),
+			widget.Action(d, "demo-fractured", "Demo: soak", state.DemoOpened{Which: study.FracturedDemo}, true),
 		),
 	)
 }
@@ -109,6 +112,7 @@ func kept(s state.Saving) string {
 var sheets = []struct{ name, title, question string }{
 	{"rock", "Rock", "Which curves do the laboratory points support?"},
 	{"front", "Front", "When does water arrive, and how much oil is out by then?"},
+	{"soak", "Soak", "How much water does the rock take up by itself, and how fast?"},
 	{"field", "Field", "What does the flood make in time, and when does it stop paying?"},
 	{"compare", "Compare", "What comes of it when an input is another?"},
 	{"report", "Report", "Everything on paper: inputs, answers, workings, cautions."},
@@ -141,8 +145,11 @@ func standing(m state.Model, sheet string) string {
 	case "evidence":
 		return checked(m.Evidence)
 	}
-	if sheet == string(study.SheetCompare) && len(m.Study.Cases) == 0 {
+	switch {
+	case sheet == string(study.SheetCompare) && len(m.Study.Cases) == 0:
 		return "○ no cases yet"
+	case sheet == string(study.SheetSoak) && !m.Study.Rock.Capillary.Given():
+		return "○ no capillary pressure yet"
 	}
 	if refusesText(m, sheet) {
 		return "✕ input refused"

@@ -86,6 +86,7 @@ func models() map[string]state.Model {
 	for _, s := range sheets {
 		all["cases, "+s.name] = compared(s.name)
 		all["demonstration, "+s.name] = on(s.name, after())
+		all["fractured, "+s.name] = on(s.name, after(state.DemoOpened{Which: "fractured"}))
 		all["empty, "+s.name] = on(s.name, after(state.StartedEmpty{}))
 		all["refused, "+s.name] = refused(s.name)
 		all["embedded, "+s.name] = after(state.Routed{Fragment: "/" + s.name + "?embed"})
@@ -410,11 +411,13 @@ func TestFormsHoldWhatTheStudyAsksFor(t *testing.T) {
 		"absolute reference": {state.Chosen{Path: "rock.reference", Value: "absolute"}},
 		"held pressure":      {state.Chosen{Path: "field.drive", Value: "pressure"}, state.Chosen{Path: "field.limit", Value: "oilRate"}},
 		"dipping, warm":      {state.Edited{Path: "front.dip", Text: "5", Unit: "deg"}, state.Edited{Path: "fluids.temperature", Text: "60", Unit: "degC"}},
+		"soaking":            {state.DemoOpened{Which: "fractured"}},
+		"soaking both ways":  {state.DemoOpened{Which: "fractured"}, state.Chosen{Path: "soak.flow", Value: "mixed"}},
 		"another pair":       {state.Chosen{Path: "fluids.pair", Value: study.Choices("fluids.pair")[2].Value}},
 	} {
 		m := after(choices...)
 		pages := map[study.Sheet]page{}
-		for _, sheet := range []study.Sheet{study.SheetRock, study.SheetFront, study.SheetField} {
+		for _, sheet := range []study.Sheet{study.SheetRock, study.SheetFront, study.SheetSoak, study.SheetField} {
 			pages[sheet] = rendered(t, on(string(sheet), m))
 		}
 		for _, spec := range study.Specs() {

@@ -17,7 +17,7 @@ func (m Model) replaced(st study.Study) page {
 // untouched reports whether a study is one of the program's own as it came, in
 // whichever units.
 func untouched(st study.Study) bool {
-	for _, own := range []study.Study{study.Empty(), study.Demo()} {
+	for _, own := range []study.Study{study.Empty(), study.Demo(), study.Fractured()} {
 		own.System = st.System
 		if sameStudy(own, st) {
 			return true

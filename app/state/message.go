@@ -77,7 +77,7 @@ type (
 	Redone struct{}
 
 	StartedEmpty struct{}                      // a new, empty study
-	DemoOpened   struct{}                      // the invented demonstration study
+	DemoOpened   struct{ Which string }        // an invented demonstration study: see study.DemoOf; empty: the first
 	FileChosen   struct{ Name, Data string }   // a study file was picked or dropped
 	FileRefused  struct{ Name, Reason string } // the file could not even be read
 	OpenAsked    struct{}

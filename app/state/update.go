@@ -60,7 +60,7 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 	case StartedEmpty:
 		return m.started(study.Empty(), "A new, empty study is open. Undo brings back the one before.")
 	case DemoOpened:
-		return m.started(study.Demo(), "The demonstration study is open. Undo brings back the one before.")
+		return m.started(study.DemoOf(msg.Which), "The demonstration study is open. Undo brings back the one before.")
 	case FileChosen:
 		return m.fileChosen(msg)
 	case FileRefused:

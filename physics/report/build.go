@@ -18,7 +18,7 @@ var parts = []struct {
 
 // Cautions are the usual ones of a screening-level answer; every report ends with them.
 var Cautions = []string{
-	"These answers are screening-level: one homogeneous layer, linear flow, incompressible fluids, no capillary pressure. They prepare a decision about further work; they do not replace it.",
+	"These answers are screening-level: one homogeneous layer, linear flow, incompressible fluids; floods without capillary pressure, soaking without gravity. They prepare a decision about further work; they do not replace it.",
 	"Injection must stay below the fracture pressure of the reservoir and of its cap rock; what that pressure is, and with what margin, is for licensed engineers under the local code.",
 	"Well integrity, and the handling, treatment and disposal of injected and produced water, are for licensed engineers and the local code.",
 	"A figure is only as good as the inputs it rests on. Inputs without a source note are unsupported.",

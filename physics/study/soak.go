@@ -170,7 +170,7 @@ func (k *soak) past() bool { return k.time > k.arrival*(1+backward) }
 func (k *soak) answer(s *sheet) {
 	s.answer("The rock takes up water as 2 A √t with A = {soak.a}")
 	if !k.past() {
-		s.answer(": after {soak.time} that is {soak.uptake} on every unit of open face", ", {soak.recovery} of the pore volume of the block", ", and the water is {soak.reach} deep")
+		s.answer(": after {soak.time} that is {soak.uptake} of water on every unit of open face", ", {soak.recovery} of the pore volume of the block", ", and the water is {soak.reach} deep")
 	}
 	if k.FiniteFront() {
 		s.answer("; its front meets the far boundary after {soak.arrival}", ".")

@@ -179,3 +179,21 @@ func TestSoakSliderGoesWithTheRoot(t *testing.T) {
 		t.Errorf("the front stands at %v m when it meets the far boundary; slider %+v", front, c.Slider)
 	}
 }
+
+// TestFracturedDemonstration: every sheet answers, and every number says that it is invented.
+func TestFracturedDemonstration(t *testing.T) {
+	st := DemoOf(FracturedDemo)
+	for sheet, part := range Run(st).Parts {
+		if part.Status != Ready {
+			t.Errorf("%s is %s", sheet, part.Status)
+		}
+	}
+	for _, spec := range Specs() {
+		if in := spec.Get(&st); in != nil && in.Source != Invented {
+			t.Errorf("%s comes from %q", spec.Path, in.Source)
+		}
+	}
+	if first := DemoOf(""); first.Title != Demo().Title || st.Title == first.Title {
+		t.Errorf("the demonstrations are %q and %q", first.Title, st.Title)
+	}
+}

@@ -88,11 +88,15 @@ func (k *soak) diffusionChart() Chart {
 func (k *soak) convergenceChart() Chart {
 	c := Chart{ID: "soak.convergence", Title: "How the solution converged", X: axis("Step of the solver", "n", units.Number), Y: axis("Missed of the equations", "δ", units.Number), Marks: []Mark{},
 		Summary: "What the unknowns miss of their equations after each step, as a share of the whole, on a logarithmic axis: quadratic falls, and a new rise wherever panels were halved."}
+	const least = 1e-17 // below rounding
 	c.Y.Log, c.Y.CanLog = true, true
+	most := 1.0
 	l := Line{ID: "defect", Label: "missed", Role: "total", Kind: "line"}
 	for n, step := range k.History {
-		l.X, l.Y = append(l.X, float64(n+1)), append(l.Y, math.Max(step.Defect, 1e-17))
+		l.X, l.Y = append(l.X, float64(n+1)), append(l.Y, math.Max(step.Defect, least))
+		most = math.Max(most, step.Defect)
 	}
+	c.Y = c.Y.from(least, most)
 	c.Lines = []Line{l}
 	return c
 }

@@ -22,20 +22,20 @@ const (
 
 // SoakFlows are the ways for oil to leave rock that soaks.
 var SoakFlows = []Choice{
-	{counterCurrent, "where the water enters (counter-current)"},
-	{coCurrent, "all ahead of the water (co-current)"},
-	{mixedCurrent, "both ways"},
+	{counterCurrent, "counter-current: at the open face"},
+	{coCurrent, "co-current: ahead of the water"},
+	{mixedCurrent, "both ways, by a ratio"},
 }
 
 var soakSpecs = []Spec{
 	{Path: "soak.ratio", Sheet: SheetSoak, Group: "Flow", Label: "Total flux over that of water at the face", Symbol: "R", Quantity: units.Number, Min: 0, Max: 1, Help: "0: counter-current; 1: co-current.",
-		at: func(s *Study) **Input { return &s.Soak.Ratio }, when: func(s *Study) bool { return s.Soak.Flow == mixedCurrent }},
+		at: func(s *Study) **Input { return &s.Soak.Ratio }, when: func(s *Study) bool { return withCapillary(s) && s.Soak.Flow == mixedCurrent }},
 	{Path: "soak.initial", Sheet: SheetSoak, Group: "States", Label: "Water saturation at the start", Symbol: "Swi,s", Quantity: units.Fraction, Min: 0, Max: 1, Optional: true, Default: "that of the flood",
-		at: func(s *Study) **Input { return &s.Soak.Initial }},
+		at: func(s *Study) **Input { return &s.Soak.Initial }, when: withCapillary},
 	{Path: "soak.inlet", Sheet: SheetSoak, Group: "States", Label: "Water saturation at the open face", Symbol: "Sw0", Quantity: units.Fraction, Min: 0, Max: 1, Optional: true, Default: "where capillary pressure is zero",
-		at: func(s *Study) **Input { return &s.Soak.Inlet }},
+		at: func(s *Study) **Input { return &s.Soak.Inlet }, when: withCapillary},
 	{Path: "soak.length", Sheet: SheetSoak, Group: "Block", Label: "Depth, open face to far boundary", Symbol: "Ls", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1e4, Help: "Half the thickness of a block that is open on two sides.",
-		at: func(s *Study) **Input { return &s.Soak.Length }},
+		at: func(s *Study) **Input { return &s.Soak.Length }, when: withCapillary},
 	{Path: "soak.time", Sheet: SheetSoak, Group: "Block", Label: "Time asked about", Symbol: "ts", Quantity: units.Duration, Min: 0, OpenMin: true, Max: 1e12, Optional: true, Default: "when the water meets the far boundary",
-		at: func(s *Study) **Input { return &s.Soak.Time }},
+		at: func(s *Study) **Input { return &s.Soak.Time }, when: withCapillary},
 }

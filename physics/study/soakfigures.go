@@ -31,8 +31,18 @@ func (k *soak) figures(s *sheet) {
 	s.figure(Figure{ID: "soak.a", Label: "Uptake coefficient", Symbol: "A", Value: k.A, Quantity: units.Sorptivity, Strip: true},
 		s.by("", soakMethod, ref.McWhorterSunada1990, ref.SchmidGeiger2012, ref.Wright1997).rests(k.inputs...).on("soak.ratio", "soak.initial", "soak.inlet"))
 	k.timeFigures(s)
-	s.figure(Figure{ID: "soak.residual", Label: "Residual of the solution", Symbol: "ε", Value: k.Residual, Quantity: units.Number, Strip: true},
+	s.figure(Figure{ID: "soak.residual", Label: "Residual of the solution", Symbol: "ε", Value: twoDigits(k.Residual), Quantity: units.Number, Strip: true},
 		s.by("", "What F misses of its equation between the points of collocation, integrated over saturation, as a share of F's whole rise. A is closer by far: the errors change sign from point to point. "+units.Format(float64(len(k.History)), 3)+" steps of the solver.").on("soak.a"))
+}
+
+// twoDigits rounds to two significant digits: of a residual, rounding decides the rest, and
+// that differs between machines.
+func twoDigits(v float64) float64 {
+	if v == 0 {
+		return 0
+	}
+	unit := math.Pow(10, math.Floor(math.Log10(v))-1)
+	return math.Round(v/unit) * unit
 }
 
 // timeFigures are the state at the time asked about, and when the solution ends.

@@ -68,6 +68,7 @@ func variants() map[string]Study {
 			}
 		}
 	}
+	add("fractured", func(st *Study) { *st = Fractured() })
 	for _, flow := range SoakFlows {
 		for _, kind := range pcTyped {
 			add("soaking "+flow.Value+" "+kind, func(st *Study) {

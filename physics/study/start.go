@@ -27,11 +27,7 @@ func Demo() Study {
 		Source: Invented,
 	}
 	st.Field.Start = "2027-03-01"
-	for _, given := range []struct {
-		path  string
-		value float64
-		unit  string
-	}{
+	st.invent([]example{
 		{"rock.permeability", 436, "md"},
 		{"rock.oilPermeability", 381, "md"},
 
@@ -68,12 +64,24 @@ func Demo() Study {
 		{"field.uptime", 93, "%"},
 		{"field.waterCut", 97, "%"},
 		{"field.oilRate", 40, "bbl/d"},
-	} {
-		spec, ok := Find(given.path)
-		if !ok {
-			panic("study: the demonstration names no input " + given.path)
-		}
-		spec.Set(&st, &Input{Value: given.value, Unit: given.unit, Source: Invented})
-	}
+	})
 	return st
+}
+
+// example is an input of a demonstration.
+type example struct {
+	path  string
+	value float64
+	unit  string
+}
+
+// invent fills in the inputs of a demonstration.
+func (st *Study) invent(list []example) {
+	for _, e := range list {
+		spec, ok := Find(e.path)
+		if !ok {
+			panic("study: a demonstration names no input " + e.path)
+		}
+		spec.Set(st, &Input{Value: e.value, Unit: e.unit, Source: Invented})
+	}
 }

@@ -38,7 +38,20 @@ func TestSoak(t *testing.T) {
 			}
 			p.pick("#in-soak-flow", "co")
 			p.WaitIdle()
-			p.compare(study.Run(chosenFlow(st, "co")).Parts[study.SheetSoak])
+			st = chosenFlow(st, "co")
+			p.compare(study.Run(st).Parts[study.SheetSoak])
+
+			p.pick("#in-block-shape", "cylinder-all")
+			p.WaitIdle()
+			p.Retype("#in-block-diameter", "3.1")
+			p.WaitIdle()
+			st.Block.Shape = "cylinder-all"
+			diameter, _ := study.Find("block.diameter")
+			diameter.Set(&st, &study.Input{Value: 3.1, Unit: "ft"})
+			p.compare(study.Run(st).Parts[study.SheetSoak])
+			if said := p.Screen(); !strings.Contains(said, "A block takes up half of what it can") || !strings.Contains(said, "From the plug to the block") {
+				t.Errorf("of blocks the sheet says:\n%s", said)
+			}
 			p.NoTrouble()
 		})
 	}

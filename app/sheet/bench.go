@@ -121,8 +121,11 @@ func sheetOf(path string) string {
 		return string(study.SheetCompare)
 	}
 	first, _, found := strings.Cut(path, ".")
-	if !found {
+	switch {
+	case !found:
 		return "report"
+	case first == "block":
+		return string(study.SheetSoak)
 	}
 	return first
 }

@@ -394,7 +394,7 @@ func TestEvidenceShowsTheDigitsThatTell(t *testing.T) {
 func TestSheetOfPath(t *testing.T) {
 	for path, want := range map[string]string{
 		"fluids.oilViscosity": "front", "front.initialWater": "front", "rock.table": "rock", "rock.table.3.sw": "rock",
-		"rock.curve": "rock", "field.start": "field", "author": "report",
+		"rock.curve": "rock", "field.start": "field", "block.sizes": "soak", "block.plug.shape": "soak", "soak.flow": "soak", "author": "report",
 	} {
 		if got := sheetOf(path); got != want {
 			t.Errorf("%s is on %q, want %q", path, got, want)

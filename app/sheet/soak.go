@@ -22,13 +22,13 @@ func (s *Soak) Render() app.UI {
 	if !m.Study.Rock.Capillary.Given() {
 		return laid(d, m, study.SheetSoak, suctionFirst())
 	}
-	return laid(d, m, study.SheetSoak,
+	return laid(d, m, study.SheetSoak, append([]app.UI{
 		widget.Group(d, m, study.SheetSoak, "Block", "Block",
 			app.P().Class("quiet").Text("Porosity, permeability and viscosities are those of Field and Front; capillary pressure is that of Rock.")),
 		widget.Group(d, m, study.SheetSoak, "Flow", "Where the oil goes",
 			widget.Choice(d, "soak.flow", "The oil leaves", m.Study.Soak.Flow, study.SoakFlows, "A block with one open face soaks counter-current; one with a far end open to oil, both ways.")),
 		widget.Group(d, m, study.SheetSoak, "States", "Saturations"),
-	)
+	}, blockForms(d, m)...)...)
 }
 
 // suctionFirst leads to the capillary pressure where a study has none.

@@ -8,6 +8,7 @@ func Fractured() Study {
 	st.Note = "Every number of this study is invented. Replace them with your own, or start empty."
 	st.Rock.Curve, st.Rock.Capillary.Curve = "corey", "skjaeveland"
 	st.Field.Start = "2027-06-01"
+	st.Block.Sizes = "ft %\n1.7 20\n4.6 55\n9.1 25"
 	st.invent([]example{
 		{"rock.permeability", 3.7, "md"},
 
@@ -30,6 +31,11 @@ func Fractured() Study {
 		{"fluids.tension", 26, "mN/m"},
 
 		{"soak.length", 2.3, "ft"},
+		{"block.length", 4.6, "ft"},
+		{"block.fracturePorosity", 0.004, "fraction"},
+		{"block.plug.diameter", 1.5, "in"},
+		{"block.plug.length", 2.4, "in"},
+		{"block.plug.oilViscosity", 8.7, "cp"},
 		{"soak.ratio", 0.4, ""},
 
 		{"field.length", 1270, "ft"},

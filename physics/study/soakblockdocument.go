@@ -67,11 +67,11 @@ var PlugShapes = BlockShapes[5:9]
 
 func blockIs(kinds ...string) func(*Study) bool {
 	return func(s *Study) bool {
-		return slices.ContainsFunc(kinds, func(k string) bool { return strings.HasPrefix(s.Block.Shape, k) })
+		return withCapillary(s) && slices.ContainsFunc(kinds, func(k string) bool { return strings.HasPrefix(s.Block.Shape, k) })
 	}
 }
 
-func withBlock(s *Study) bool { return s.Block.Given() }
+func withBlock(s *Study) bool { return withCapillary(s) && s.Block.Given() }
 func withPlug(s *Study) bool  { return withBlock(s) && s.Block.Plug.Diameter != nil }
 
 const (

@@ -2,6 +2,8 @@ package plot
 
 import (
 	"math"
+	"strconv"
+	"strings"
 	"testing"
 
 	"brinefront/physics/study"
@@ -164,6 +166,28 @@ func TestMovingLinesMoveTheSameInEveryUnit(t *testing.T) {
 		}
 		if got := p.Lines[0].Data[0][0] * p.Slider.Value; math.Abs(got-c.place) > 1e-14*c.place {
 			t.Errorf("%s: the point stands at %v, want %v", c.name, got, c.place)
+		}
+	}
+}
+
+// Along metres at the root of days: 3 m for the root of a day are 6 m after four. The root
+// of 86400 s is taken of the day of NIST SP 811.
+func TestRootedLinesMoveTheSameInEveryUnit(t *testing.T) {
+	const day = 86400.0
+	chart := study.Chart{
+		X: study.Axis{Label: "Depth", Quantity: units.Length}, Y: study.Axis{Label: "Sw", Quantity: units.Fraction},
+		Lines:  []study.Line{{Label: "profile", Kind: "line", Moving: true, X: []float64{3 / math.Sqrt(day)}, Y: []float64{0.5}}},
+		Slider: &study.Slider{Label: "Time", Symbol: "t", Quantity: units.Duration, Root: true, Max: 9 * day, Value: 4 * day},
+	}
+	for system, metres := range map[units.System]float64{units.Metric: 1, units.Field: 0.3048, units.Lab: 0.01} {
+		p := From(chart, system)
+		if got := p.Lines[0].Data[0][0] * math.Sqrt(p.Slider.Value) * metres; !p.Slider.Root || math.Abs(got-6) > 1e-13 {
+			t.Errorf("%s: the point stands at %v m after %v %s, want 6", system, got, p.Slider.Value, p.Slider.Unit)
+		}
+		if first := strings.Split(strings.Split(p.CSV(), "\r\n")[1], ",")[0]; first == "" {
+			t.Error("no number in the table")
+		} else if got, err := strconv.ParseFloat(first, 64); err != nil || math.Abs(got*metres-6) > 1e-13 {
+			t.Errorf("%s: the table has %s, want 6 m; %v", system, first, err)
 		}
 	}
 }

@@ -197,3 +197,13 @@ func TestFracturedDemonstration(t *testing.T) {
 		t.Errorf("the demonstrations are %q and %q", first.Title, st.Title)
 	}
 }
+
+// TestReleasedSoakKeepsItsMeaning: a block that soaks both ways, between two saturations.
+func TestReleasedSoakKeepsItsMeaning(t *testing.T) {
+	st := released(t, "v1-soak.json")
+	part := soakOf(t, st)
+	if st.Soak.Flow != mixedCurrent || value(t, part, "soak.ratio") != 0.4 || value(t, part, "soak.time") != 20*86400 ||
+		value(t, part, "soak.initial") != 0.21 || value(t, part, "soak.inlet") != 0.57 {
+		t.Errorf("%+v", st.Soak)
+	}
+}

@@ -49,7 +49,7 @@ func TestSoak(t *testing.T) {
 			diameter, _ := study.Find("block.diameter")
 			diameter.Set(&st, &study.Input{Value: 3.1, Unit: "ft"})
 			p.compare(study.Run(st).Parts[study.SheetSoak])
-			if said := p.Screen(); !strings.Contains(said, "A block takes up half of what it can") || !strings.Contains(said, "From the plug to the block") {
+			if said := p.Screen(); !strings.Contains(said, "A block can take up") || !strings.Contains(said, "From the plug to the block") {
 				t.Errorf("of blocks the sheet says:\n%s", said)
 			}
 			p.NoTrouble()

@@ -146,7 +146,7 @@ func (b *soakingBlock) figures(s *sheet) {
 		s.figure(Figure{ID: "soak.lengthError", Label: "Characteristic length alone is off by up to", Symbol: "δLc", Value: math.Abs(worst.Worst), Quantity: units.Share},
 			all(s.by("", "The curve of a slab as thick as the characteristic length against the block itself, in shares of what can be soaked up.", ref.MaMorrowZhang1997)))
 	}
-	s.answer(" A block takes up half of what it can, {soak.capacity} of its pore volume, in {soak.blockHalf} and nine tenths in {soak.blockMost}.")
+	s.answer(" A block can take up {soak.capacity} of its pore volume: half of that in {soak.blockHalf}, nine tenths in {soak.blockMost}.")
 }
 
 // times are where curves against time are drawn.

@@ -27,12 +27,13 @@ func (r *Rock) Render() app.UI {
 func (r *Rock) points() app.UI {
 	d, m := r.Desk, r.Model
 	return app.Section().Class("group").Body(append([]app.UI{app.H3().Text("Laboratory points")}, table(d, m, "rock.table",
-		"Columns Sw, krw, kro in any order; fractions or percent; decimal points or commas; with or without a header row.")...)...)
+		"Saturation and both relative permeabilities, in any order by their headings; fractions or percent; decimal points or commas; with or without a header row.")...)...)
 }
 
 // table is where a laboratory table is pasted and typed.
 func table(d widget.Desk, m state.Model, path, help string) []app.UI {
 	t, _ := study.FindTable(path)
+	t = t.For(&m.Study)
 	return []app.UI{
 		widget.Pasting(d, m, t, help),
 		&widget.Points{Desk: d, Model: m, Table: t},

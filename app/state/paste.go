@@ -15,7 +15,7 @@ func (m Model) pasted(msg Pasted) Model {
 	m.Paste = nil
 	layout, ok := layouts[msg.Table]
 	if text := clean(msg.Text); ok && strings.TrimSpace(text) != "" {
-		m.Paste = &PasteDraft{Table: msg.Table, Text: text, Reading: paste.Read(text, layout)}
+		m.Paste = &PasteDraft{Table: msg.Table, Text: text, Reading: paste.Read(text, layout.Between(study.Phases(&m.Study)))}
 	}
 	return m
 }

@@ -20,16 +20,16 @@ const (
 	previewLines   = 6
 )
 
-// oilColumn is the role of a column of oil saturation, which serves as Sw = 1 − So.
+// oilColumn is the role of a column of the other saturation, which serves as Sw = 1 − So.
 const oilColumn = "so"
 
-// columnRoles are what a pasted column of a table may be.
-func columnRoles(t study.LabTable) []study.Choice {
+// columnRoles are what a pasted column of a table may be; other is the other saturation.
+func columnRoles(t study.LabTable, other string) []study.Choice {
 	list := []study.Choice{{Value: "", Label: "not used"}}
 	for i, c := range t.Columns {
 		list = append(list, study.Choice{Value: c.Path, Label: c.Label})
 		if i == 0 {
-			list = append(list, study.Choice{Value: oilColumn, Label: "So (oil saturation)"})
+			list = append(list, study.Choice{Value: oilColumn, Label: other})
 		}
 	}
 	return list
@@ -88,7 +88,7 @@ func previewTable(d Desk, t study.LabTable, p *state.PasteDraft) app.UI {
 	width := min(len(r.Columns), previewColumns)
 	head := make([]app.UI, width)
 	for i := range width {
-		head[i] = app.Th().Scope("col").Body(role(d, t, i, r.Columns[i].Title, roleOf(r.Columns[i].As, r.Columns[i].Oil)))
+		head[i] = app.Th().Scope("col").Body(role(d, t, i, r.Columns[i].Title, roleOf(r.Columns[i].As, r.Columns[i].Oil), r.Label(oilColumn)))
 	}
 	var rows []app.UI
 	for _, cells := range r.Cells[:min(len(r.Cells), previewRows)] {
@@ -113,9 +113,9 @@ func roleOf(as string, oil bool) string {
 }
 
 // role is the list that says what a pasted column is.
-func role(d Desk, t study.LabTable, column int, title, as string) app.UI {
+func role(d Desk, t study.LabTable, column int, title, as, other string) app.UI {
 	number := strconv.Itoa(column + 1)
-	roles := columnRoles(t)
+	roles := columnRoles(t, other)
 	options := make([]app.UI, len(roles))
 	for i, c := range roles {
 		options[i] = option(c.Value, c.Label, c.Value == as)

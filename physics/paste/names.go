@@ -11,7 +11,11 @@ var names = map[string]string{
 	"relativepermeabilitywater": Krw, "waterrelperm": Krw, "relpermwater": Krw, "relativepermeabilitybrine": Krw,
 	"brinerelativepermeability": Krw, "krwo": Krw, "relpermw": Krw,
 	"kro": Kro, "kroil": Kro, "oilkr": Kro, "oilrelativepermeability": Kro, "relativepermeabilityoil": Kro,
-	"oilrelperm": Kro, "relpermoil": Kro, "krow": Kro, "relpermo": Kro,
+	"oilrelperm": Kro, "relpermoil": Kro, "krow": Kro, "relpermo": Kro, "krog": Kro,
+	"sg": "sg", "sgas": "sg", "satg": "sg", "gassaturation": "sg", "gassat": "sg", "saturationgas": "sg", "satgas": "sg", "sco2": "sg", "co2saturation": "sg",
+	"sl": "sl", "sliq": "sl", "sliquid": "sl", "liquidsaturation": "sl", "liquidsat": "sl", "satliquid": "sl",
+	"krg": "krg", "krgas": "krg", "gaskr": "krg", "gasrelativepermeability": "krg", "relativepermeabilitygas": "krg", "gasrelperm": "krg",
+	"krgo": "krg", "krgw": "krg", "krco2": "krg", "krwg": Krw,
 	"pc": Pc, "pcow": Pc, "pcwo": Pc, "pcgw": Pc, "pcgo": Pc, "pcres": Pc, "capillarypressure": Pc, "cappressure": Pc, "capillarypress": Pc,
 	"pcap": Pc, "j": Pc, "jsw": Pc, "jfunction": Pc, "leverettj": Pc, "leverettjfunction": Pc, "jvalue": Pc,
 }
@@ -20,8 +24,8 @@ var names = map[string]string{
 // for one of them.
 var others = map[string]bool{
 	"no": true, "nr": true, "#": true, "n": true, "i": true, "point": true, "step": true, "row": true, "sample": true,
-	"plug": true, "depth": true, "time": true, "pv": true, "pvi": true, "fw": true, "fo": true, "krg": true,
-	"sg": true, "pressure": true, "dp": true, "rate": true, "ratio": true, "id": true, "index": true,
+	"plug": true, "depth": true, "time": true, "pv": true, "pvi": true, "fw": true, "fo": true,
+	"pressure": true, "dp": true, "rate": true, "ratio": true, "id": true, "index": true,
 }
 
 // units are words of a heading that tell a unit.
@@ -58,7 +62,7 @@ func words(title string) []string {
 	})
 }
 
-// nameOf returns what a heading names: Sw, So, Krw, Kro, or "" when it names
+// nameOf returns what a heading names, "sw", "krg", ..., or "" when it names
 // nothing of the trade or two things at once, such as the ratio krw/kro.
 func nameOf(title string) string {
 	lower := strings.ToLower(title[:min(len(title), maxTitle)])
@@ -93,15 +97,6 @@ func leading(kept []string) (name string, used int) {
 		}
 	}
 	return "", 0
-}
-
-// namesOil reports whether a heading names an oil saturation.
-func namesOil(title string) bool { return nameOf(title) == So }
-
-// isOther reports whether a heading names a column that is none of the three.
-func isOther(title string) bool {
-	w := words(title)
-	return len(w) > 0 && others[w[0]] && nameOf(title) == ""
 }
 
 // unitOf returns 100 when a heading says percent, 1 when it says fraction, 0 when

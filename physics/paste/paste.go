@@ -12,20 +12,7 @@ const (
 	Krw = "krw"
 	Kro = "kro"
 	Pc  = "pc"
-	So  = "so" // for With only: the column holds oil saturation and serves as Sw, with sw = 1 - so
-)
-
-// Layout is the table that a text is read for.
-type Layout struct {
-	columns []string // in the order in which columns without headings are taken
-	words   string   // the same in a sentence
-	count   string
-}
-
-// The layouts there are.
-var (
-	RelativePermeability = Layout{[]string{Sw, Krw, Kro}, "water saturation, krw and kro", "three"}
-	CapillaryPressure    = Layout{[]string{Sw, Pc}, "water saturation and capillary pressure", "two"}
+	So  = "so" // for With only: the column holds the other saturation, of oil, and serves as Sw, with sw = 1 - so
 )
 
 // What is refused before it is looked at, and how much is said about a bad text.

@@ -29,7 +29,7 @@ func Read(text string, want Layout) Reading {
 			fmt.Sprintf("at most %s rows: copy only the rows of the table", thousands(MaxRows)))
 	}
 	if len(lines) == 0 {
-		return refused("an empty text", "a table of at least 3 rows with "+want.words)
+		return refused("an empty text", "a table of at least 3 rows with "+want.wanted())
 	}
 
 	sep := findSeparator(lines)
@@ -53,7 +53,7 @@ func Read(text string, want Layout) Reading {
 		return refused(fmt.Sprintf("%s rows", thousands(len(data))), fmt.Sprintf("at most %s rows", thousands(MaxRows)))
 	}
 	if len(data) == 0 {
-		r = refused("no row of numbers", "a table of at least 3 rows with "+want.words)
+		r = refused("no row of numbers", "a table of at least 3 rows with "+want.wanted())
 		r.Separator, r.Cells = sep.name, rows
 		return r
 	}
@@ -76,7 +76,7 @@ func (r Reading) With(column int, as string) Reading {
 	for i, c := range r.Columns {
 		roles[i] = role{as: c.As, oil: c.Oil}
 	}
-	wanted := role{as: as, oil: as == So || as == Sw && namesOil(r.Columns[column].Title)}
+	wanted := role{as: as, oil: as == So || as == Sw && r.want.role(r.Columns[column].Title) == So}
 	if as == So {
 		wanted.as = Sw
 	}

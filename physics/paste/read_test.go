@@ -259,13 +259,46 @@ func TestWith(t *testing.T) {
 	}
 }
 
+// Tables of other phases: by hand, each heading takes the role that its phase has in the
+// pair, and the other saturation is turned over.
+func TestPairs(t *testing.T) {
+	for name, c := range map[string]struct {
+		displacing, resident, text, roles, remark, problem string
+		sw, krw                                            []float64
+	}{
+		"gas and oil":           {"g", "o", "Sg\tkrg\tkrog\n0.1\t0\t0.9\n0.3\t0.2\t0.4\n0.5\t0.6\t0\n", "sw krw kro", "", "", []float64{0.1, 0.3, 0.5}, []float64{0, 0.2, 0.6}},
+		"by liquid":             {"g", "o", "SL\tkro\tkrg\n0.5\t0\t0.6\n0.7\t0.4\t0.2\n0.9\t0.9\t0\n", "sw kro krw", "liquid saturation; gas saturation was taken as 1 − SL", "", []float64{0.1, 0.3, 0.5}, []float64{0, 0.2, 0.6}},
+		"brine into gas":        {"w", "g", "Sw\tkrg\tkrw\n0.2\t0.9\t0\n0.5\t0.3\t0.1\n0.7\t0\t0.3\n", "sw kro krw", "", "", []float64{0.2, 0.5, 0.7}, []float64{0, 0.1, 0.3}},
+		"CO2 by brine":          {"g", "w", "Sw\tkrw\tkrg\n1\t1\t0\n0.8\t0.5\t0.1\n0.5\t0\t0.4\n", "sw kro krw", "water saturation; gas saturation was taken as 1 − Sw", "", []float64{0, 0.2, 0.5}, []float64{0, 0.1, 0.4}},
+		"no headings":           {"g", "o", "0.1\t0\t0.9\n0.3\t0.2\t0.4\n0.5\t0.6\t0\n", "sw krw kro", "column 1 as gas saturation, column 2 as krg, column 3 as kro", "", []float64{0.1, 0.3, 0.5}, []float64{0, 0.2, 0.6}},
+		"water's are not gas's": {"g", "o", "Sw\tkrw\tkro\n0.2\t0\t0.9\n0.5\t0.1\t0.3\n0.7\t0.3\t0\n", "- - kro", "", "no column for gas saturation", nil, nil},
+	} {
+		r := Read(c.text, RelativePermeability.Between(c.displacing, c.resident))
+		if rolesOf(r) != c.roles {
+			t.Errorf("%s: roles %q, want %q", name, rolesOf(r), c.roles)
+		}
+		if !strings.Contains(strings.Join(r.Remarks, " "), c.remark) {
+			t.Errorf("%s: remarks %q lack %q", name, r.Remarks, c.remark)
+		}
+		if c.problem != "" {
+			if len(r.Problems) == 0 || r.Problems[0].Read != c.problem {
+				t.Errorf("%s: problems %+v", name, r.Problems)
+			}
+			continue
+		}
+		if columns, _, ok := r.Table(); !ok || !same(columns[0], c.sw) || !same(columns[1], c.krw) {
+			t.Errorf("%s: %v, want %v and %v", name, columns, c.sw, c.krw)
+		}
+	}
+}
+
 func TestNameOf(t *testing.T) {
 	for title, want := range map[string]string{
 		"Sw": Sw, "SW (%)": Sw, "Sw, v/v": Sw, "S_w [frac]": Sw, "Water Saturation, % PV": Sw, "Average Sw": Sw, "Sw -": Sw,
 		"So": So, "Oil saturation (fraction)": So,
 		"krw": Krw, "k_rw": Krw, "Kr,w": Krw, "kr water": Krw, "kr (water)": Krw, "Relative permeability to water": Krw, "krw smoothed": Krw,
 		"Kro": Kro, "krow": Kro, "k ro [-]": Kro, "Oil relative permeability": Kro,
-		"krw/kro": "", "Sw*": "", "Sw norm": "", "Swi": "", "krg": "", "Pc": "pc", "": "", "%": "", "saturation": "", "Sw So": "",
+		"krw/kro": "", "Sw*": "", "Sw norm": "", "Swi": "", "krg": "krg", "krog": Kro, "Sg, %": "sg", "Gas saturation": "sg", "SL": "sl", "kr CO2": "krg", "Pc": "pc", "": "", "%": "", "saturation": "", "Sw So": "",
 	} {
 		if got := nameOf(title); got != want {
 			t.Errorf("%q names %q, want %q", title, got, want)

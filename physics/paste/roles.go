@@ -10,11 +10,8 @@ import (
 // role is the use a column is put to.
 type role struct {
 	as  string // a column of the layout, or ""
-	oil bool   // an oil saturation that serves as Sw
+	oil bool   // the other saturation, which serves as Sw
 }
-
-// labels are what the columns are called in a sentence.
-var labels = map[string]string{Sw: "water saturation", Krw: "krw", Kro: "kro", Pc: "capillary pressure"}
 
 // assign gives columns their roles: by heading where it names one, else by place,
 // in the order of the layout, among columns of numbers that are named nothing else.
@@ -40,7 +37,7 @@ func (r Reading) assign() (roles []role, remarks []string) {
 	if len(placed) > 0 {
 		texts := make([]string, len(placed))
 		for i, column := range placed {
-			texts[i] = fmt.Sprintf("column %d as %s", column+1, labels[roles[column].as])
+			texts[i] = fmt.Sprintf("column %d as %s", column+1, r.want.Label(roles[column].as))
 		}
 		said.remark("No heading names them, so columns were read by position: " + strings.Join(texts, ", ") + ".")
 	}
@@ -53,15 +50,15 @@ func (r Reading) byHeading(roles []role, said *notes) (found map[string]bool) {
 	found = map[string]bool{}
 	oil := -1
 	for i, c := range r.Columns {
-		as := nameOf(c.Title)
+		as := r.want.role(c.Title)
 		switch {
-		case as != So && !slices.Contains(r.want.columns, as):
+		case as == "":
 		case as == So:
 			if oil < 0 {
 				oil = i
 			}
 		case found[as]:
-			said.remark(fmt.Sprintf("Column %d is headed %s as well; the first such column was taken.", i+1, labels[as]))
+			said.remark(fmt.Sprintf("Column %d is headed %s as well; the first such column was taken.", i+1, r.want.Label(as)))
 		default:
 			roles[i].as, found[as] = as, true
 		}
@@ -77,7 +74,7 @@ func (r Reading) byHeading(roles []role, said *notes) (found map[string]bool) {
 func (r Reading) unnamed() []int {
 	var list []int
 	for i, c := range r.Columns {
-		if nameOf(c.Title) == "" && !isOther(c.Title) && r.holdsNumbers(i) {
+		if nameOf(c.Title) == "" && !r.want.isOther(c.Title) && r.holdsNumbers(i) {
 			list = append(list, i)
 		}
 	}
@@ -131,8 +128,8 @@ func (r Reading) turnSwapped(roles []role, said *notes) {
 		return
 	}
 	roles[at[Krw]].as, roles[at[Kro]].as = Kro, Krw
-	said.remark(fmt.Sprintf("Column %d rises and column %d falls with water saturation, so they were read as krw and kro in that order.",
-		at[Kro]+1, at[Krw]+1))
+	said.remark(fmt.Sprintf("Column %d rises and column %d falls with %s, so they were read as %s and %s in that order.",
+		at[Kro]+1, at[Krw]+1, r.want.Label(Sw), r.want.Label(Krw), r.want.Label(Kro)))
 }
 
 // column reads the bare numbers of a column.

@@ -29,7 +29,8 @@ func (r Reading) interpret(roles []role, remarks []string) Reading {
 	r.complete(&said)
 	r.order(&said)
 	if sw, krw, kro := r.values(Sw), r.values(Krw), r.values(Kro); swapped(sw, pad(krw, sw), pad(kro, sw)) {
-		said.remark("By their shapes krw and kro look swapped: krw falls and kro rises with water saturation.")
+		w, o := r.want.Label(Krw), r.want.Label(Kro)
+		said.remark("By their shapes " + w + " and " + o + " look swapped: " + w + " falls and " + o + " rises with " + r.want.Label(Sw) + ".")
 	}
 	r.Problems, r.Remarks = few(said.problems), said.remarks
 	return r
@@ -47,7 +48,7 @@ func pad(values, like []float64) []float64 {
 func (r Reading) complete(said *notes) {
 	for _, as := range r.want.columns {
 		if r.values(as) == nil {
-			said.problem(-1, -1, "no column for "+labels[as], r.want.count+" columns: "+r.want.words)
+			said.problem(-1, -1, "no column for "+r.want.Label(as), r.want.asked())
 		}
 	}
 	if n := len(r.Cells); n < MinRows {
@@ -59,12 +60,12 @@ func (r Reading) complete(said *notes) {
 func (r Reading) order(said *notes) {
 	sw := r.values(Sw)
 	if falls(sw) {
-		said.remark("The rows run from high to low water saturation; they are turned round.")
+		said.remark("The rows run from high to low " + r.want.Label(Sw) + "; they are turned round.")
 		return
 	}
 	for i := 1; i < len(sw); i++ {
 		if sw[i] < sw[i-1] {
-			said.remark(fmt.Sprintf("Water saturation falls from row %d to row %d; the rows are kept in their order.", i, i+1))
+			said.remark(fmt.Sprintf("The %s falls from row %d to row %d; the rows are kept in their order.", r.want.Label(Sw), i, i+1))
 			return
 		}
 	}
@@ -83,7 +84,7 @@ func falls(sw []float64) bool {
 // fill reads one column; guess says that its numbers look like percent where its
 // heading names no unit.
 func (r Reading) fill(i int, c *Column, guess bool, said *notes) {
-	name := fmt.Sprintf("Column %d (%s)", i+1, labels[c.As])
+	name := fmt.Sprintf("Column %d (%s)", i+1, r.want.Label(c.As))
 	unit := unitOf(c.Title)
 	switch {
 	case unit == 100:
@@ -113,7 +114,7 @@ func (r Reading) fill(i int, c *Column, guess bool, said *notes) {
 		said.remark(name + " has cells with a percent sign; these were divided by 100.")
 	}
 	if c.Oil {
-		said.remark(name + " holds oil saturation; water saturation was taken as 1 − So.")
+		said.remark(name + " holds " + r.want.Label(So) + "; " + r.want.Label(Sw) + " was taken as 1 − " + r.want.phases.symbol + ".")
 	}
 }
 

@@ -72,6 +72,18 @@ func FindTable(path string) (LabTable, bool) {
 	return LabTable{}, false
 }
 
+// For returns the description in the words of the study's pair of fluids.
+func (t LabTable) For(st *Study) LabTable {
+	t.Columns = each(t.Columns, func(c Spec) Spec { return c.For(st) })
+	return t
+}
+
+// Phases are the indices of the displacing and of the resident phase: w, o or g.
+func Phases(st *Study) (displacing, resident string) {
+	pair := pairOf(st)
+	return pair.Displacing.Symbol, pair.Resident.Symbol
+}
+
 // Get returns the columns of a study's table, nil when it has none, and the note of
 // where they come from. They are not to be written to.
 func (t LabTable) Get(st *Study) (columns [][]float64, source string) { return t.get(st) }

@@ -36,7 +36,7 @@ func pairNotes(pair fluid.Pair) []Note {
 	}
 	if d, r := pair.Displacing, pair.Resident; pair.Drainage() {
 		list = append(list, Note{ID: "front.pair.roles", Level: "remark", Text: "Curves and points are read by the saturation of the displacing phase, " + d.Saturation + ": first column " + d.Saturation + ", then " + d.Kr() + ", then " + r.Kr() + ".",
-			Cause: "A laboratory table by the saturation of the other phase means something else.", Do: "Turn such a table over: " + d.Saturation + " is 1 less the other saturation, and the two columns of kr change places.", Paths: []string{"fluids.pair", "rock.table"}})
+			Cause: "A laboratory table by the saturation of the other phase means something else.", Do: "Paste it with its headings, by which it is turned over; typed, " + d.Saturation + " is 1 less the other saturation, and the two columns of kr change places.", Paths: []string{"fluids.pair", "rock.table"}})
 	}
 	return list
 }

@@ -3,6 +3,7 @@ package plot
 import (
 	"encoding/csv"
 	"slices"
+	"sort"
 	"strconv"
 	"strings"
 )
@@ -54,7 +55,7 @@ func (p Picture) columns() []column {
 	for _, l := range p.Lines {
 		data, place := l.Data, p.X.Title
 		if l.Moving {
-			data, place = moved(l.Data, pace(p.Slider.Root, p.Slider.Value)), p.X.Title+" at "+p.Slider.Short+" = "+withUnit(p.Slider.Value, p.Slider.Unit)
+			data, place = l.at(pace(p.Slider.Root, p.Slider.Value)), p.X.Title+" at "+p.Slider.Short+" = "+withUnit(p.Slider.Value, p.Slider.Unit)
 		}
 		if len(list) == 0 || l.Moving || !sameX(last, data) {
 			list = append(list, column{place, cells(data, 0)})
@@ -82,11 +83,21 @@ func (p Picture) columns() []column {
 	return append(list, mark, x, y)
 }
 
-// moved is a moving line's points at a pace of the slider.
-func moved(data [][2]float64, value float64) [][2]float64 {
-	list := make([][2]float64, len(data))
-	for i, p := range data {
-		list[i] = [2]float64{p[0] * value, p[1]}
+// at is a moving line's points at a pace of the slider.
+func (l Line) at(value float64) [][2]float64 {
+	stages := max(1, len(l.Stages))
+	list := make([][2]float64, len(l.Data)/stages)
+	if l.Stages == nil {
+		for i, p := range l.Data {
+			list[i] = [2]float64{p[0] * value, p[1]}
+		}
+		return list
+	}
+	k := max(0, min(stages-2, sort.SearchFloat64s(l.Stages, value)-1))
+	u := max(0, min(1, (value-l.Stages[k])/(l.Stages[k+1]-l.Stages[k])))
+	for i := range list {
+		a, b := l.Data[k*len(list)+i], l.Data[(k+1)*len(list)+i]
+		list[i] = [2]float64{a[0] + u*(b[0]-a[0]), a[1] + u*(b[1]-a[1])}
 	}
 	return list
 }

@@ -13,6 +13,7 @@ const (
 	errLengths = "plot: a line's coordinates differ in number"
 	errBand    = "plot: a band without a lower edge, or a lower edge without a band"
 	errSlider  = "plot: a moving line without a slider"
+	errStages  = "plot: courses of a line that differ in number of points"
 	errReading = "plot: a reading that has not one value a point"
 )
 
@@ -34,7 +35,7 @@ func From(c study.Chart, s units.System) Picture {
 	})
 	y := axisUnit(c.Y, s, c.Lines, func(l study.Line) float64 { return largest(l.Y) })
 	p := Picture{
-		ID: c.ID, Title: c.Title, Summary: c.Summary,
+		ID: c.ID, Title: c.Title, Summary: c.Summary, Map: c.Map,
 		X: axisFrom(c.X, x), Y: axisFrom(c.Y, y),
 		Lines: make([]Line, len(c.Lines)),
 		Marks: []Mark{},
@@ -46,14 +47,17 @@ func From(c study.Chart, s units.System) Picture {
 	}
 	for i, l := range c.Lines {
 		along := x
+		if (l.Moving || l.Stages != nil) && c.Slider == nil {
+			panic(errSlider)
+		}
 		if l.Moving {
-			if c.Slider == nil {
-				panic(errSlider)
-			}
 			along.Factor /= pace(c.Slider.Root, variable.Factor) // x for one unit of the slider as shown
 		}
 		p.Lines[i] = lineFrom(l, along, y)
 		p.Lines[i].Readings = readingsFrom(l, s)
+		if l.Stages != nil {
+			p.Lines[i].Moving, p.Lines[i].Stages = true, stagesFrom(l, variable)
+		}
 	}
 	for _, m := range c.Marks {
 		if at := (point{x.FromSI(m.X), y.FromSI(m.Y)}); at.finite() {
@@ -69,6 +73,17 @@ func pace(root bool, value float64) float64 {
 		return math.Sqrt(value)
 	}
 	return value
+}
+
+func stagesFrom(l study.Line, u units.Unit) []float64 {
+	if len(l.X)%len(l.Stages) != 0 {
+		panic(errStages)
+	}
+	list := make([]float64, len(l.Stages))
+	for i, v := range l.Stages {
+		list[i] = u.FromSI(v)
+	}
+	return list
 }
 
 func sliderFrom(c study.Slider, u units.Unit) *Slider {

@@ -192,6 +192,34 @@ func TestRootedLinesMoveTheSameInEveryUnit(t *testing.T) {
 	}
 }
 
+// A line of stages holds one course for each value of the slider: halfway between two
+// of them its points stand halfway, in whatever unit, and beyond the last they stay.
+func TestLinesOfStagesGoStraightBetweenThem(t *testing.T) {
+	const foot = 0.3048
+	line := study.Line{ID: "front", Label: "front", Kind: "line", Stages: []float64{0, 86400 * 365.25, 86400 * 365.25 * 3},
+		X: []float64{0, 1 * foot, 2 * foot, 5 * foot, 4 * foot, 9 * foot}, Y: []float64{0, foot, 0, 3 * foot, 8 * foot, 3 * foot}}
+	chart := study.Chart{
+		X: study.Axis{Label: "x", Quantity: units.Length}, Y: study.Axis{Label: "y", Quantity: units.Length}, Map: true,
+		Lines:  []study.Line{line},
+		Slider: &study.Slider{Label: "Time", Quantity: units.Duration, Max: 86400 * 365.25 * 3},
+	}
+	p := From(chart, units.Field)
+	if !p.Map || !p.Lines[0].Moving {
+		t.Fatalf("%+v", p)
+	}
+	for _, c := range []struct {
+		years float64
+		want  [2][2]float64
+	}{{0, [2][2]float64{{0, 0}, {1, 1}}}, {0.5, [2][2]float64{{1, 0}, {3, 2}}}, {1, [2][2]float64{{2, 0}, {5, 3}}}, {2, [2][2]float64{{3, 4}, {7, 3}}}, {9, [2][2]float64{{4, 8}, {9, 3}}}} {
+		got := p.Lines[0].at(c.years)
+		for i := range got {
+			if math.Abs(got[i][0]-c.want[i][0])+math.Abs(got[i][1]-c.want[i][1]) > 1e-12 {
+				t.Errorf("after %g years: %v, want %v", c.years, got, c.want)
+			}
+		}
+	}
+}
+
 func TestReadingsComeInUnitsThatSuit(t *testing.T) {
 	got := From(invented(), units.Field)
 	if s := got.Slider; s.Unit != "PV" || s.Short != "Q" || len(s.Stops) != 1 || s.Stops[0] != (Stop{"breakthrough", 0.5}) {

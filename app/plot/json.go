@@ -33,6 +33,9 @@ func (p Picture) JSON() string {
 		b = append(b, '}')
 	}
 	b = append(b, ']')
+	if p.Map {
+		b = append(b, `,"map":true`...)
+	}
 	if p.Slider != nil {
 		b = p.Slider.append(append(b, `,"slider":`...))
 	}
@@ -74,6 +77,9 @@ func (l Line) append(b []byte) []byte {
 	if l.Moving {
 		b = append(b, `,"moving":true`...)
 	}
+	if l.Stages != nil {
+		b = numbers(append(b, `,"stages":`...), l.Stages)
+	}
 	if len(l.Readings) > 0 {
 		b = append(b, `,"readings":[`...)
 		for i, r := range l.Readings {
@@ -88,11 +94,7 @@ func (r Reading) append(b []byte) []byte {
 	b = field(b, '{', "label", r.Label)
 	b = field(b, ',', "short", r.Short)
 	b = field(b, ',', "unit", r.Unit)
-	b = append(b, `,"values":[`...)
-	for i, v := range r.Values {
-		b = number(comma(b, i), v)
-	}
-	b = append(b, ']')
+	b = numbers(append(b, `,"values":`...), r.Values)
 	if len(r.Words) > 0 {
 		b = append(b, `,"words":[`...)
 		for i, word := range r.Words {
@@ -121,6 +123,14 @@ func (s *Slider) append(b []byte) []byte {
 		b = append(b, `,"root":true`...)
 	}
 	return append(b, '}')
+}
+
+func numbers(b []byte, values []float64) []byte {
+	b = append(b, '[')
+	for i, v := range values {
+		b = number(comma(b, i), v)
+	}
+	return append(b, ']')
 }
 
 func appendPairs(b []byte, data [][2]float64) []byte {

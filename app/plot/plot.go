@@ -13,6 +13,7 @@ type Picture struct {
 	Summary string `json:"summary"` // text alternative
 
 	Slider *Slider `json:"slider,omitempty"`
+	Map    bool    `json:"map,omitempty"` // both axes have one scale
 }
 
 // Slider is the variable that moves the moving lines.
@@ -53,7 +54,8 @@ type Line struct {
 	Data  [][2]float64 `json:"data"`
 	Low   [][2]float64 `json:"low,omitempty"` // band only
 
-	Moving   bool      `json:"moving,omitempty"`   // x is given for one unit of the slider; see study.Line
+	Moving   bool      `json:"moving,omitempty"`   // x is given for one unit of the slider, unless there are stages; see study.Line
+	Stages   []float64 `json:"stages,omitempty"`   // of the slider: one course after the other in Data; see study.Line
 	Readings []Reading `json:"readings,omitempty"` // further numbers of each point
 }
 

@@ -159,6 +159,8 @@ func TestMovingLinesStandWhereTheSliderSays(t *testing.T) {
 		{`stillLine(` + line + `, 1.25, 1).own`, `2`},
 		{`stillLine(` + line + `, 0, 1).data`, `[[0,0.8],[0,0.6],[0,0.5],[0,0.2],[1,0.2]]`},
 		{`stillLine({ ...` + line + `, kind: "points" }, 1.25, 1).data`, `[[0,0.8],[0.625,0.6]]`},
+		{`[0, 0.5, 1, 2, 9].map((v) => stillLine({ moving: true, stages: [0, 1, 3], data: [[0, 0], [1, 1], [2, 0], [5, 3], [4, 8], [9, 3]] }, v, 1).data)`,
+			`[[[0,0],[1,1]],[[1,0],[3,2]],[[2,0],[5,3]],[[3,4],[7,3]],[[4,8],[9,3]]]`}, // as plot.Line.at, TestLinesOfStagesGoStraightBetweenThem
 		{`stillLine({ data: [[0, 1]], kind: "line" }, 3, 1)`, `{"data":[[0,1]],"kind":"line","own":1}`},
 		{`still(` + picture + `, null).x.max`, `4`}, // nothing limits the axis: as far as the slider brings a line
 		{`still(` + picture + `, 3).lines.map((l) => l.data.at(-1))`, `[[4,0.2],[2,1]]`},

@@ -114,11 +114,13 @@ type Chart struct {
 	Marks   []Mark `json:"marks"`
 	Summary string `json:"summary"` // the text alternative: what a reader should see in the picture
 
-	Slider *Slider `json:"slider,omitempty"` // present when some line is Moving
+	Slider *Slider `json:"slider,omitempty"` // present when some line is Moving or has Stages
+	Map    bool    `json:"map,omitempty"`    // X and Y are drawn to one scale: both are lengths, of one unit
 }
 
-// Slider is a variable that the reader moves to move the chart's Moving lines. Such a
-// picture is self-similar: every state sits at a place in proportion to the variable.
+// Slider is a variable that the reader moves to move the chart's Moving lines, and those
+// of Stages. A picture of Moving lines is self-similar: every state sits at a place in
+// proportion to the variable.
 type Slider struct {
 	Label    string         `json:"label"`
 	Symbol   string         `json:"symbol"`
@@ -158,6 +160,10 @@ type Line struct {
 	// with the line cut where it crosses; beyond its last point the line is carried on
 	// to Max at its last Y.
 	Moving bool `json:"moving,omitempty"`
+	// Stages says that the line changes its shape: for each value of the chart's Slider,
+	// which has no Root, that stands here (SI, rising), X and Y hold one course of it, as many points each, one
+	// course after the other. Between two stages every point goes straight.
+	Stages []float64 `json:"stages,omitempty"`
 	// Readings are further quantities at each point of the line, read out beside X and
 	// Y: each column has as many Values as the line has points; NaN never stands there.
 	// A point at which a reading does not exist has an entry in Words instead (then all

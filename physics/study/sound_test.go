@@ -315,9 +315,9 @@ func chartFaults(c Chart) []string {
 			list = append(list, fmt.Sprintf("%s %s: %d x, %d y, %d low", c.ID, l.ID, len(l.X), len(l.Y), len(l.Low)))
 		case len(l.X) < 2 && l.Kind != "points":
 			list = append(list, c.ID+" "+l.ID+" is no line")
-		case len(l.X) > 700 && l.Kind != "points":
+		case len(l.X) > 700*max(1, len(l.Stages)) && l.Kind != "points":
 			list = append(list, fmt.Sprintf("%s %s has %d points", c.ID, l.ID, len(l.X)))
-		case l.Kind == "line" && !slices.IsSorted(l.X):
+		case l.Kind == "line" && !c.Map && !slices.IsSorted(l.X):
 			list = append(list, c.ID+" "+l.ID+" runs back")
 		case ids[l.ID] && l.ID != "tangent":
 			list = append(list, c.ID+" "+l.ID+" is there twice")
@@ -328,7 +328,7 @@ func chartFaults(c Chart) []string {
 				list = append(list, c.ID+" "+l.ID+", reading "+reading.Label)
 			}
 		}
-		if l.Moving && (c.Slider == nil || c.X.Max == nil) {
+		if (l.Moving || l.Stages != nil) && (c.Slider == nil || c.X.Max == nil || l.Stages != nil && (len(l.Stages) < 2 || len(l.X)%len(l.Stages) != 0 || !slices.IsSorted(l.Stages))) {
 			list = append(list, c.ID+" "+l.ID+" moves by nothing")
 		}
 	}

@@ -34,10 +34,11 @@ export function layout(picture, state, width, height, family) {
   const margin = ends.reduce((w, l) => Math.max(w, measure(l.label) + lead + 6), 0);
   const last = 14; // room for half of the last tick's text
   const rect = { left, top, right: width - Math.max(margin, last), bottom: height - bottom };
+  if (picture.map) toScale(rect, view);
   const xTicks = fitting(view.x, scaleX, rect.right - rect.left, measure);
 
   const x = axis(view.x, scaleX, rect.left, rect.right, xTicks);
-  const y = upright;
+  const y = axis(view.y, scaleY, rect.bottom, top, yTicks);
   const courses = picture.lines.map((l) => course(l, !state.hidden.has(l.id), x, y));
   return {
     width, height, rect, x, y, whole, view, courses, yTitle, lead, measure, size, family,
@@ -49,6 +50,13 @@ export function layout(picture, state, width, height, family) {
 export function course(line, shown, x, y) {
   const dots = (points) => points.map((p) => p && [x.dot(p[0]), y.dot(p[1])]);
   return { line, shown, dots: dots(line.data), low: line.low && dots(line.low) };
+}
+
+// toScale narrows a frame until both axes have the same scale.
+function toScale(rect, { x, y }) {
+  const dots = Math.min((rect.right - rect.left) / (x[1] - x[0]), (rect.bottom - rect.top) / (y[1] - y[0]));
+  rect.right = rect.left + dots * (x[1] - x[0]);
+  rect.bottom = rect.top + dots * (y[1] - y[0]);
 }
 
 function wholeView(picture, scaleX, scaleY) {

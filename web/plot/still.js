@@ -1,6 +1,7 @@
 // Moving lines: a picture at one value of its slider. Every point of a moving line
 // stands at its x times that value (package plot), so that a step of the slider is a
-// multiplication and never a question to the engine.
+// multiplication and never a question to the engine. A line of stages holds one course
+// for each of some values, and goes straight from one to the next.
 
 // sliderAt is the value that is shown: the reader's, within the slider's range, else
 // where the slider stands at first.
@@ -26,7 +27,7 @@ export function still(picture, at) {
 
 // furthest is as far as any line comes at the slider's end.
 function furthest({ slider, lines }) {
-  const reach = (l) => l.data.filter(Boolean).map((p) => (l.moving ? p[0] * pace(slider, slider.max) : p[0]));
+  const reach = (l) => l.data.filter(Boolean).map((p) => (l.moving && !l.stages ? p[0] * pace(slider, slider.max) : p[0]));
   return lines.flatMap(reach).reduce((a, b) => Math.max(a, b), -Infinity);
 }
 
@@ -34,6 +35,10 @@ function furthest({ slider, lines }) {
 // last height where it ends before.
 export function stillLine(line, value, max) {
   if (!line.moving) return { ...line, own: line.data.length };
+  if (line.stages) {
+    const data = staged(line, value);
+    return { ...line, origin: line, data, own: data.length };
+  }
   const cut = (points) => {
     const beyond = points.findIndex((p) => p && p[0] * value > max);
     const own = beyond < 0 ? points.length : beyond;
@@ -46,4 +51,13 @@ export function stillLine(line, value, max) {
   };
   const { list, own } = cut(line.data);
   return { ...line, origin: line, data: list, own, low: line.low && cut(line.low).list };
+}
+
+// staged is a line of stages between the two that a value lies between.
+function staged({ stages, data }, value) {
+  const n = data.length / stages.length, next = stages.findIndex((s) => s > value);
+  const k = Math.max(0, (next < 0 ? stages.length : next) - 1), l = Math.min(k + 1, stages.length - 1);
+  const u = l > k ? Math.max(0, (value - stages[k]) / (stages[l] - stages[k])) : 0;
+  const from = data.slice(k * n, k * n + n), to = data.slice(l * n, l * n + n);
+  return from.map((p, i) => p && to[i] && p.map((v, j) => v + u * (to[i][j] - v)));
 }

@@ -21,7 +21,8 @@ func (f *Field) Render() app.UI {
 	d, m := f.Desk, f.Model
 	in := m.Study.Field
 	return laid(d, m, study.SheetField,
-		widget.Group(d, m, study.SheetField, "Block", "Block between the wells"),
+		widget.Group(d, m, study.SheetField, "Block", "Block or pattern of wells",
+			widget.Choice(d, "field.pattern.kind", "Arrangement of the wells", in.Pattern.Kind, study.Patterns, "A pattern is one of many alike; the rate is that of one pattern.")),
 		widget.Group(d, m, study.SheetField, "Layers", "Layers, or a permeability log",
 			widget.Block(d, m, "field.layers.table", "Thickness, permeability and porosity", in.Layers.Table, "A first line with the units, such as “ft md fraction”, then a row for each layer or each sample of a log, from the top down. Empty: one even layer."),
 			widget.Choice(d, "field.layers.crossflow", "Flow between the layers", in.Layers.Crossflow, study.Crossflows, "What the forecast is for; the other is drawn beside it.")),

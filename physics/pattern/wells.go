@@ -46,6 +46,9 @@ func (g *Geometry) ends(t Tube, b Bores) (hub, rim float64) {
 // Offset is B of Drop for the well at the end of a tube.
 func (g *Geometry) Offset(t Tube) float64 { return t.core + (1+t.out)*math.Log(g.near) }
 
+// Rim is Q of Drop, the rate of the well at the end of a tube over that of the hub.
+func (g *Geometry) Rim(t Tube) float64 { return t.out }
+
 // Ends returns what tube t takes between wells b.
 func (g *Geometry) Ends(t Tube, b Bores) Ends {
 	in, out := g.ends(t, b)

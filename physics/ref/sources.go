@@ -16,20 +16,25 @@ const (
 	Chaudhry2004         ID = "chaudhry-2004"
 	Corey1954            ID = "corey-1954"
 	Craig1971            ID = "craig-1971"
+	CraigGeffenMorse1955 ID = "craig-geffen-morse-1955"
 	CrandallMajda1980    ID = "crandall-majda-1980"
 	Cuiec1984            ID = "cuiec-1984"
 	Dake1978             ID = "dake-1978"
 	DawsonLantz1972      ID = "dawson-lantz-1972"
 	DeSwaan1978          ID = "de-swaan-1978"
+	Deppe1961            ID = "deppe-1961"
 	Dietz1953            ID = "dietz-1953"
 	Donaldson1969        ID = "donaldson-1969"
+	DyesCaudle1954       ID = "dyes-caudle-erickson-1954"
 	DykstraParsons1950   ID = "dykstra-parsons-1950"
 	Fanchi2016           ID = "fanchi-christiansen-2016"
+	Fassihi1986          ID = "fassihi-1986"
 	Fayers1962           ID = "fayers-1962"
 	FritschCarlson1980   ID = "fritsch-carlson-1980"
 	Godunov1959          ID = "godunov-1959"
 	GolubVanLoan2013     ID = "golub-van-loan-2013"
 	Hearn1971            ID = "hearn-1971"
+	HigginsLeighton1962  ID = "higgins-leighton-1962"
 	Hovdan1986           ID = "hovdan-1986"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
@@ -52,6 +57,7 @@ const (
 	McPhee2015           ID = "mcphee-2015"
 	McWhorterSunada1990  ID = "mcwhorter-sunada-1990"
 	More1978             ID = "more-1978"
+	MorelSeytoux1966     ID = "morel-seytoux-1966"
 	Muskat1937           ID = "muskat-1937"
 	Neumaier1974         ID = "neumaier-1974"
 	NISTStRD             ID = "nist-strd"
@@ -60,12 +66,14 @@ const (
 	OgataBanks1961       ID = "ogata-banks-1961"
 	Oleinik1957          ID = "oleinik-1957"
 	Osher1984            ID = "osher-1984"
+	Peaceman1978         ID = "peaceman-1978"
 	PerthameShu1996      ID = "perthame-shu-1996"
 	Perry2019            ID = "perry-2019"
 	Philip1960           ID = "philip-1960"
 	Phillips1981         ID = "phillips-1981"
 	Pope1980             ID = "pope-1980"
 	RapoportLeas1953     ID = "rapoport-leas-1953"
+	Prats1956            ID = "prats-1956"
 	Roe1986              ID = "roe-1986"
 	SaffmanTaylor1958    ID = "saffman-taylor-1958"
 	SchmidGeiger2012     ID = "schmid-geiger-2012"
@@ -81,6 +89,7 @@ const (
 	VanLeer1979          ID = "van-leer-1979"
 	WarrenRoot1963       ID = "warren-root-1963"
 	Welge1952            ID = "welge-1952"
+	Willhite1986         ID = "willhite-1986"
 	Wright1997           ID = "wright-1997"
 )
 
@@ -165,4 +174,13 @@ var sources = map[ID]Source{
 	VanGenuchten1980:     {Authors: "van Genuchten", Year: 1980, Title: "A closed-form equation for predicting the hydraulic conductivity of unsaturated soils", Where: "Soil Sci. Soc. Am. J. 44(5), 892-898"},
 	VanLeer1974:          {Authors: "van Leer", Year: 1974, Title: "Towards the ultimate conservative difference scheme. II. Monotonicity and conservation combined in a second-order scheme", Where: "J. Comput. Phys. 14(4), 361-370"},
 	VanLeer1979:          {Authors: "van Leer", Year: 1979, Title: "Towards the ultimate conservative difference scheme. V. A second-order sequel to Godunov's method", Where: "J. Comput. Phys. 32(1), 101-136"},
+	CraigGeffenMorse1955: {Authors: "Craig, Geffen & Morse", Year: 1955, Title: "Oil production performance of pattern gas or water injection operations from model tests", Where: "Trans. AIME 204, 7-15"},
+	Deppe1961:            {Authors: "Deppe", Year: 1961, Title: "Injection rates: the effect of mobility ratio, area swept, and pattern", Where: "SPE J. 1(2), 81-91"},
+	DyesCaudle1954:       {Authors: "Dyes, Caudle & Erickson", Year: 1954, Title: "Oil production after breakthrough as influenced by mobility ratio", Where: "Trans. AIME 201, 81-86"},
+	Fassihi1986:          {Authors: "Fassihi", Year: 1986, Title: "New correlations for calculation of vertical coverage and areal sweep efficiency", Where: "SPE Reserv. Eng. 1(6), 604-606"},
+	HigginsLeighton1962:  {Authors: "Higgins & Leighton", Year: 1962, Title: "A computer method to calculate two-phase flow in any irregularly bounded porous medium", Where: "J. Pet. Technol. 14(6), 679-683"},
+	MorelSeytoux1966:     {Authors: "Morel-Seytoux", Year: 1966, Title: "Unit mobility ratio displacement calculations for pattern floods in homogeneous medium", Where: "SPE J. 6(3), 217-227"},
+	Peaceman1978:         {Authors: "Peaceman", Year: 1978, Title: "Interpretation of well-block pressures in numerical reservoir simulation", Where: "SPE J. 18(3), 183-194"},
+	Prats1956:            {Authors: "Prats", Year: 1956, Title: "The breakthrough sweep efficiency of a staggered line drive", Where: "Trans. AIME 207, 361-362"},
+	Willhite1986:         {Authors: "Willhite", Year: 1986, Title: "Waterflooding", Where: "SPE Textbook Series 3"},
 }

@@ -101,6 +101,7 @@ var choiceFields = []choiceField{
 	{"block.shape", BlockShapes, func(s *Study) *string { return &s.Block.Shape }},
 	{"block.plug.shape", PlugShapes, func(s *Study) *string { return &s.Block.Plug.Shape }},
 	{"field.drive", Drives, func(s *Study) *string { return &s.Field.Drive }},
+	{"field.pattern.kind", Patterns, func(s *Study) *string { return &s.Field.Pattern.Kind }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 	{"field.layers.crossflow", Crossflows, func(s *Study) *string { return &s.Field.Layers.Crossflow }},
 }

@@ -142,7 +142,8 @@ type Field struct {
 	OilRate      *Input `json:"oilRate,omitempty"`      // economic limit, at surface
 	Horizon      *Input `json:"horizon,omitempty"`      // how long the forecast runs; nil: to the limit
 
-	Layers Layers `json:"layers,omitzero"`
-	Wells  Wells  `json:"wells,omitzero"`
-	Money  Money  `json:"money,omitzero"`
+	Pattern Pattern `json:"pattern,omitzero"`
+	Layers  Layers  `json:"layers,omitzero"`
+	Wells   Wells   `json:"wells,omitzero"`
+	Money   Money   `json:"money,omitzero"`
 }

@@ -34,7 +34,7 @@ func jobs() []job {
 		{sheet: SheetSoak, needs: []Sheet{SheetRock, SheetFront}, run: func(e *Evaluation, _ growing) Part { return runSoak(e.st, e.parts[SheetRock], e.rock, e.front) },
 			asked: withCapillary},
 		{sheet: SheetField, needs: []Sheet{SheetFront}, run: func(e *Evaluation, _ growing) Part {
-			return runField(e.st, e.parts[SheetFront], e.front)
+			return runField(e.st, e.memory, e.parts[SheetFront], e.front)
 		}},
 		{sheet: SheetCompare, needs: compared, run: func(e *Evaluation, _ growing) Part { return runCompare(e) },
 			asked: func(st *Study) bool { return len(st.Cases) > 0 }},

@@ -18,9 +18,9 @@ type field struct {
 }
 
 // runField answers the Field sheet; what is more than an even block is for runMany.
-func runField(st *Study, frontPart Part, front *front) Part {
+func runField(st *Study, memory *Memory, frontPart Part, front *front) Part {
 	if manyfold(st) {
-		return runMany(st, frontPart, front)
+		return runMany(st, memory, frontPart, front)
 	}
 	s := newSheet(st, frontPart)
 	s.await(frontPart)

@@ -46,7 +46,7 @@ var Crossflows = []Choice{
 // manyfold reports whether the field is more than an even block under one drive.
 func manyfold(st *Study) bool {
 	l, w, m := st.Field.Layers, st.Field.Wells, st.Field.Money
-	if l.Table != "" || w.Schedule != "" || st.Field.Limit == "cash" {
+	if patterned(st) || l.Table != "" || w.Schedule != "" || st.Field.Limit == "cash" {
 		return true
 	}
 	for _, in := range []*Input{w.PressureLimit, w.Radius, w.InjectorSkin, w.ProducerSkin, w.ProducerPressure, w.Gas, m.Oil} {
@@ -66,7 +66,7 @@ func limitedByCash(s *Study) bool { return s.Field.Limit == "cash" }
 var manyfoldSpecs = []Spec{
 	{Path: "field.layers.groups", Sheet: SheetField, Group: "Layers", Label: "Lump into at most", Symbol: "N", Quantity: units.Number, Min: 1, Max: MaxLayers, Optional: true, Default: "every row is a layer", Help: "Layers of equal flow capacity, from a log or a long table.", at: func(s *Study) **Input { return &s.Field.Layers.Groups }, when: layered},
 	{Path: "field.wells.pressureLimit", Sheet: SheetField, Group: "Wells", Label: "Pressure difference not exceeded", Symbol: "Δp,max", Quantity: units.Pressure, Min: 0, OpenMin: true, Max: 1e9, Optional: true, Default: "the rate takes what it needs", Help: "Between the wells; where the rate would take more, the pressure is held instead.", at: func(s *Study) **Input { return &s.Field.Wells.PressureLimit }, when: heldRate},
-	{Path: "field.wells.radius", Sheet: SheetField, Group: "Wells", Label: "Well radius", Symbol: "rw", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "flow converges on no well", Help: "Of both wells, each in the middle of its end of the block.", at: func(s *Study) **Input { return &s.Field.Wells.Radius }},
+	{Path: "field.wells.radius", Sheet: SheetField, Group: "Wells", Label: "Well radius", Symbol: "rw", Quantity: units.Length, Min: 0, OpenMin: true, Max: 1, Optional: true, Default: "in a block flow converges on no well; in a pattern 0.1 m", Help: "Of both wells; in a block each is in the middle of its end.", at: func(s *Study) **Input { return &s.Field.Wells.Radius }},
 	{Path: "field.wells.injectorSkin", Sheet: SheetField, Group: "Wells", Label: "Skin of the injector", Symbol: "si", Quantity: units.Number, Min: -7, Max: 500, Optional: true, Default: "0", at: func(s *Study) **Input { return &s.Field.Wells.InjectorSkin }},
 	{Path: "field.wells.producerSkin", Sheet: SheetField, Group: "Wells", Label: "Skin of the producer", Symbol: "sp", Quantity: units.Number, Min: -7, Max: 500, Optional: true, Default: "0", at: func(s *Study) **Input { return &s.Field.Wells.ProducerSkin }},
 	{Path: "field.wells.gas", Sheet: SheetField, Group: "Wells", Label: "Gas saturation at the start", Symbol: "Sg", Quantity: units.Fraction, Min: 0, Max: 0.5, Optional: true, Default: "0, the rock is full of liquid", Help: "Space that injection fills before the producer responds.", at: func(s *Study) **Input { return &s.Field.Wells.Gas }},

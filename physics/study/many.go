@@ -14,8 +14,12 @@ import (
 // money: everything that one even block under one drive is not.
 type many struct {
 	*sheet
+	memory        *Memory
 	front         *front
-	length, width float64
+	length, width float64   // m; in a pattern length is the distance of the wells
+	area          float64   // m2, in plan
+	pattern       *repeated // nil: a block
+	shape         reservoir.Shape
 	uptime, gas   float64
 	samples       []reservoir.Sample // as typed
 	layers        []reservoir.Sample // as flooded
@@ -37,8 +41,8 @@ type many struct {
 const tabulated = 1e-10
 
 // runMany answers the Field sheet for what manyfold describes.
-func runMany(st *Study, frontPart Part, front *front) Part {
-	m := &many{sheet: newSheet(st, frontPart), front: front}
+func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
+	m := &many{sheet: newSheet(st, frontPart), memory: memory, front: front}
 	m.await(frontPart)
 	m.read()
 	standing := m.standing()
@@ -52,8 +56,8 @@ func runMany(st *Study, frontPart Part, front *front) Part {
 		return m.close(standing)
 	}
 	if front.flow.Gravity != 0 {
-		m.note(Note{ID: "field.dipping", Level: "caution", Text: "There is no forecast: layers, wells with a skin or a schedule, and cash are answered for a level bed only.",
-			Cause: "With a dip the share of gravity in the flow changes with the rate in each layer, and fronts are no longer self-similar.", Do: "Leave the dip empty, or leave the table of layers, the wells and the money empty.", Paths: []string{"front.dip"}})
+		m.note(Note{ID: "field.dipping", Level: "caution", Text: "There is no forecast: patterns, layers, wells with a skin or a schedule, and cash are answered for a level bed only.",
+			Cause: "With a dip the share of gravity in the flow changes with the rate in each layer, and fronts are no longer self-similar.", Do: "Leave the dip empty, or choose the block and leave the table of layers, the wells and the money empty.", Paths: []string{"front.dip"}})
 		return m.close(Stopped)
 	}
 	if bt := front.displacement.Breakthrough(); m.gas >= bt {
@@ -75,7 +79,13 @@ func runMany(st *Study, frontPart Part, front *front) Part {
 // read takes the inputs in.
 func (m *many) read() {
 	st := m.st
-	m.length, m.width, m.uptime = m.need("field.length"), m.need("field.width"), m.or("field.uptime", 1)
+	m.uptime = m.or("field.uptime", 1)
+	if patterned(st) {
+		m.pattern = m.readPattern()
+	} else {
+		m.length, m.width = m.need("field.length"), m.need("field.width")
+		m.area = m.length * m.width
+	}
 	if unlayered(st) {
 		m.samples = []reservoir.Sample{{Thickness: m.need("field.thickness"), Permeability: m.need("field.permeability"), Porosity: m.need("field.porosity")}}
 	} else if columns, problem := layerTable.rows(st.Field.Layers.Table, ""); problem != nil {
@@ -151,33 +161,27 @@ func (m *many) readSteps() {
 // lay builds the bodies and their runs; false when they leave no flow.
 func (m *many) lay() bool {
 	f := m.front
-	radius := m.or("field.wells.radius", 0)
-	shape := reservoir.Even
-	ends := func(skin string) float64 {
-		if radius == 0 && m.or(skin, 0) == 0 {
-			return 0
-		}
-		return reservoir.EndResistance(m.length, m.width, radius, m.or(skin, 0))
+	m.shape = reservoir.Even
+	if m.pattern == nil && !m.ends() {
+		return false
 	}
-	shape.In, shape.Out = ends("field.wells.injectorSkin"), ends("field.wells.producerSkin")
-	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: shape, Flood: reservoir.NewFlood(f.flow, f.displacement)}
-	for _, at := range []float64{0, f.displacement.Breakthrough(), 2, 1e4} {
-		if r := path.Resistance(at); !(r > 0) {
-			m.note(Note{ID: "field.skin", Level: "caution", Text: "There is no forecast: the skins take away more resistance than the block has.", Cause: "A negative skin stands for rock that does not resist; here it is more than all of the block.",
-				Do: "Look at the skins, the well radius and the length of the block.", Paths: []string{"field.wells.injectorSkin", "field.wells.producerSkin", "field.length"}})
+	flood := reservoir.NewFlood(f.flow, f.displacement)
+	var strata []reservoir.Stratum
+	var pistons reservoir.Bundle
+	body := m.body(flood)
+	if m.pattern != nil {
+		m.pattern.tubes = body.(reservoir.Streamtubes)
+		if bt := m.pattern.tubes.At(m.pattern.tubes.Breakthrough()).Injected; m.gas >= bt {
+			m.note(Note{ID: "field.gasFirst", Level: "caution", Text: "There is no forecast: water would arrive before the gas-filled space of the pattern is full.", Cause: "The fastest streamtube is swept by then.",
+				Do: "Look at the gas saturation and the pattern.", Paths: []string{"field.wells.gas", "field.pattern.kind"}})
 			return false
 		}
 	}
-	var strata []reservoir.Stratum
-	var pistons reservoir.Bundle
-	body := m.filling(path) // one layer alone is answered exactly
-	if len(m.layers) > 1 {
-		body = m.filling(path.Tabulate(tabulated))
-	}
+	body = m.filling(body)
 	ahead, behind := f.flow.Curves.At(f.swi), f.flow.Curves.At(f.swj)
 	piston := reservoir.Piston{Water: behind.Krw / f.flow.MuW, Oil: ahead.Kro / f.flow.MuO, Change: f.swj - f.swi}
 	for _, l := range m.layers {
-		pv := l.Porosity * l.Thickness * m.width * m.length
+		pv := l.Porosity * l.Thickness * m.area
 		pace := l.Permeability / (l.Porosity * m.length * m.length)
 		m.pores += pv
 		m.bundle = append(m.bundle, reservoir.Member{Body: body, PoreVolume: pv, Pace: pace})
@@ -186,8 +190,8 @@ func (m *many) lay() bool {
 	}
 	m.apart = m.plan(m.bundle)
 	if len(m.layers) > 1 {
-		m.crossflow(strata, shape)
-		if shape.In == 0 && shape.Out == 0 && m.gas == 0 && piston.Change > 0 && f.oneOnEachSide() {
+		m.crossflow(strata)
+		if m.pattern == nil && m.shape.In == 0 && m.shape.Out == 0 && m.gas == 0 && piston.Change > 0 && f.oneOnEachSide() {
 			m.pistons = m.plan(pistons)
 		}
 	}
@@ -196,6 +200,41 @@ func (m *many) lay() bool {
 		m.run = m.full
 	}
 	return true
+}
+
+// ends reads what the wells add at the two ends of the block; false when they leave no
+// resistance.
+func (m *many) ends() bool {
+	radius := m.or("field.wells.radius", 0)
+	end := func(skin string) float64 {
+		if radius == 0 && m.or(skin, 0) == 0 {
+			return 0
+		}
+		return reservoir.EndResistance(m.length, m.width, radius, m.or(skin, 0))
+	}
+	m.shape.In, m.shape.Out = end("field.wells.injectorSkin"), end("field.wells.producerSkin")
+	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: m.shape, Flood: reservoir.NewFlood(m.front.flow, m.front.displacement)}
+	for _, at := range []float64{0, m.front.displacement.Breakthrough(), 2, 1e4} {
+		if r := path.Resistance(at); !(r > 0) {
+			m.note(Note{ID: "field.skin", Level: "caution", Text: "There is no forecast: the skins take away more resistance than the block has.", Cause: "A negative skin stands for rock that does not resist; here it is more than all of the block.",
+				Do: "Look at the skins, the well radius and the length of the block.", Paths: []string{"field.wells.injectorSkin", "field.wells.producerSkin", "field.length"}})
+			return false
+		}
+	}
+	return true
+}
+
+// body is a layer of the block or of the pattern under a flood, for unit permeability,
+// porosity and length.
+func (m *many) body(flood *reservoir.Flood) reservoir.Body {
+	if m.pattern != nil {
+		return m.pattern.flooded(flood)
+	}
+	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: m.shape, Flood: flood}
+	if len(m.layers) == 1 { // answered exactly
+		return path
+	}
+	return path.Tabulate(tabulated)
 }
 
 // filling puts the gas at the start before a body, where there is any.
@@ -207,7 +246,7 @@ func (m *many) filling(b reservoir.Body) reservoir.Body {
 }
 
 // crossflow floods the layers as one, in vertical equilibrium.
-func (m *many) crossflow(strata []reservoir.Stratum, shape reservoir.Shape) {
+func (m *many) crossflow(strata []reservoir.Stratum) {
 	f := m.front
 	if m.st.Field.Layers.Crossflow == "gravity" && len(m.layers) == len(m.samples) {
 		slices.Reverse(strata) // typed from the top down
@@ -219,12 +258,12 @@ func (m *many) crossflow(strata []reservoir.Stratum, shape reservoir.Shape) {
 		m.fullReason = "The initial state holds more water than the injected one."
 		return
 	}
-	path, err := thick(f, curves, shape)
+	flood, err := thick(f, curves)
 	switch {
 	case err != nil:
 		m.fullReason = "The averaged curves could not be flooded: " + err.Error() + "."
 		return
-	case m.gas > 0 && m.gas >= path.Flood.Displacement.Breakthrough():
+	case m.gas > 0 && m.gas >= flood.Displacement.Breakthrough():
 		m.fullReason = "Water would arrive before the gas-filled space is full."
 		return
 	}
@@ -232,20 +271,20 @@ func (m *many) crossflow(strata []reservoir.Stratum, shape reservoir.Shape) {
 	for _, l := range m.layers {
 		capacity += l.Permeability * l.Thickness
 	}
-	pace := capacity * m.width / m.length / m.pores
-	m.full = m.plan(reservoir.Bundle{{Body: m.filling(path.Tabulate(tabulated)), PoreVolume: m.pores, Pace: pace}})
+	pace := capacity * m.area / (m.length * m.length) / m.pores
+	m.full = m.plan(reservoir.Bundle{{Body: m.filling(m.body(flood)), PoreVolume: m.pores, Pace: pace}})
 }
 
 // thick is the flood along a bed of averaged curves.
-func thick(f *front, curves relperm.Curves, shape reservoir.Shape) (reservoir.Path, error) {
+func thick(f *front, curves relperm.Curves) (*reservoir.Flood, error) {
 	flow := f.flow
 	flow.Curves = curves
 	lo, hi := curves.Ends()
 	d, err := displace.New(flow, hi, lo)
 	if err != nil {
-		return reservoir.Path{}, err
+		return nil, err
 	}
-	return reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: shape, Flood: reservoir.NewFlood(flow, d)}, nil
+	return reservoir.NewFlood(flow, d), nil
 }
 
 // plan lays the steps out for a body, to well past whatever is told of it.

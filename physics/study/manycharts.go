@@ -114,6 +114,7 @@ func (m *many) charts() {
 		m.part.Charts = append(m.part.Charts, Chart{ID: "field.cash", Title: "Net cash", X: timeAxis, Y: axis("Net cash, cumulative", "C", units.Number), Marks: []Mark{}, Lines: []Line{at(cash), worth},
 			Summary: "Net cash since the start, plain and discounted, against time: where it turns down the flood no longer pays."})
 	}
+	m.patternCharts()
 	if len(m.layers) > 1 {
 		m.layerCharts()
 	}
@@ -141,7 +142,7 @@ func (m *many) layerCharts() {
 	for _, l := range m.layers {
 		total += l.Thickness
 	}
-	chart := Chart{ID: "field.fronts", Title: "Fronts in the layers", X: axis("Depth into the layers, in the order of the table", "h", units.Length).from(0, total), Y: axis("Front, of the way to the producer", "x/L", units.Share).from(0, 1),
+	chart := Chart{ID: "field.fronts", Title: "Fronts in the layers", X: axis("Depth into the layers, in the order of the table", "h", units.Length).from(0, total), Y: axis(m.wayName(), "x/L", units.Share).from(0, 1),
 		Marks: []Mark{}, Summary: "How far the front of each layer has come, at four times of the forecast: layers at 100 % give water."}
 	for n, share := range []float64{0.1, 0.3, 0.6, 1} {
 		t := share * m.end
@@ -226,9 +227,12 @@ func (m *many) forecast() Grid {
 }
 
 func (m *many) notes() {
-	if len(m.layers) == 1 {
+	m.patternNotes()
+	switch {
+	case m.pattern != nil:
+	case len(m.layers) == 1:
 		m.note(Note{ID: "field.linear", Level: "remark", Text: "The block is flooded evenly from one end to the other: one layer, full sweep, no aquifer.", Cause: "Patterns and layers sweep less of the rock and bring water sooner.", Do: "Take the recovery as that of the rock that water reaches."})
-	} else {
+	default:
 		m.note(Note{ID: "field.layersApart", Level: "remark", Text: "Layers run from well to well, in a straight block, and all have the curves, the initial and the residual saturations of the study.", Cause: "Layers that end between the wells, or of other rock, flood otherwise.", Do: "Read the forecast together with its neighbour for full crossflow: the truth lies between.", Paths: []string{layerTable.path}})
 	}
 	m.note(Note{ID: "field.incompressible", Level: "remark", Text: "Rock and liquids are incompressible; gas-filled space, where it is given, is filled layer by layer before anything comes out, and offers no resistance.", Cause: "A reservoir that has been depleted answers later and less sharply.", Do: "Compare the response with what neighbouring patterns showed.", Paths: []string{"field.wells.gas"}})

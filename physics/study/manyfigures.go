@@ -12,6 +12,7 @@ import (
 const commonClock = "Layers without crossflow share one pressure difference; each goes at its own pace along ∫Δp dt, its resistance integrated exactly over its profile, so that a rate of all together is one root at each time. No step is taken in time or place."
 
 func (m *many) figures() {
+	m.patternFigures()
 	m.rockFigures()
 	m.contrastFigures()
 	start := m.at(m.run, m.starting())
@@ -73,7 +74,7 @@ func (m *many) method(words string, sources ...ref.ID) *working {
 	if m.run != m.apart {
 		w = m.by("", words+" The layers are flooded as one with thickness-averaged curves: flow across them is free, and each is behind the front or ahead of it.", append(sources, ref.Hearn1971, ref.Dake1978)...)
 	}
-	w.rests("field.length", "field.width").on("front.breakthrough")
+	w.rests(m.ground()...).on("front.breakthrough")
 	if layered(m.st) {
 		w.rests(layerTable.path)
 	} else {
@@ -101,7 +102,7 @@ func (m *many) rockFigures() {
 	m.figure(Figure{ID: "field.meanPermeability", Label: "Mean permeability along the layers", Symbol: "k", Value: capacity / thickness, Quantity: units.Permeability}, m.by("", "Σ k h/Σ h over the layers.").rests(from...))
 	inPlace := !holdsConnate(pairOf(m.st))
 	m.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: m.pores, Quantity: units.Volume, Strip: !inPlace},
-		m.by("{PV} = {L} {W} {h} {φ}", "").input("field.length").input("field.width").term("field.thicknessOfAll").term("field.meanPorosity"))
+		m.inPlan("{PV} = ", " {h} {φ}").term("field.thicknessOfAll").term("field.meanPorosity"))
 	if inPlace {
 		m.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: m.pores * (1 - m.front.swi - m.gas) / m.front.bo, Quantity: units.Volume, Strip: true},
 			m.by("{N} = {PV} (1 - {Swi} - {Sg}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term("front.initialWater").value("Sg", "gas saturation at the start", m.gas, units.Fraction).input("fluids.oilFormationFactor"))
@@ -144,11 +145,15 @@ func (m *many) limitFigures() {
 	m.figure(Figure{ID: "field.oilAtLimit", Label: "Oil produced at the limit, at surface", Symbol: "Nplim", Value: i.oil, Quantity: units.Volume}, ask)
 	m.figure(Figure{ID: "field.waterAtLimit", Label: "Water produced at the limit, at surface", Symbol: "Wplim", Value: i.water, Quantity: units.Volume}, ask)
 	if m.run == m.apart {
-		m.figure(Figure{ID: "field.verticalSweep", Label: "Vertical sweep at the limit", Symbol: "Ev", Value: m.swept(i.Clock), Quantity: units.Share}, m.method("Part of the pore volume that fronts have passed."))
+		sweep := "Vertical sweep at the limit"
+		if m.pattern != nil {
+			sweep = "Vertical and areal sweep together, at the limit"
+		}
+		m.figure(Figure{ID: "field.verticalSweep", Label: sweep, Symbol: "Ev", Value: m.swept(i.Clock), Quantity: units.Share}, m.method("Part of the pore volume that fronts have passed."))
 		if !holdsConnate(pairOf(m.st)) {
 			m.figure(Figure{ID: "field.displacement", Label: "Displacement efficiency where swept, at the limit", Symbol: "Ed", Value: (i.recovery + i.Held) / (m.swept(i.Clock) * (1 - m.front.swi)), Quantity: units.Share},
-				m.by("{Ed} = ({Rlim} + {Sgf}) / ({Ev} {Ea} (1 - {Swi}))", "Of the oil in the rock that water reaches; the straight block is reached over all its width, Ea = 1.").term("field.recoveryAtLimit").
-					value("Sgf", "gas-filled space filled, of the pore volume", i.Held, units.Share).term("field.verticalSweep").value("Ea", "areal sweep", 1, units.Share).term("front.initialWater"))
+				m.by("{Ed} = ({Rlim} + {Sgf}) / ({Ev} (1 - {Swi}))", "Of the oil in the rock that water reaches.").term("field.recoveryAtLimit").
+					value("Sgf", "gas-filled space filled, of the pore volume", i.Held, units.Share).term("field.verticalSweep").term("front.initialWater"))
 		}
 	}
 	if m.full != nil {
@@ -188,7 +193,7 @@ func (m *many) pressureFigures() {
 			highest = i
 		}
 	}
-	m.figure(Figure{ID: "field.highestDrop", Label: "Highest pressure difference, while on", Symbol: "Δp,hi", Value: highest.Pressure, Quantity: units.Pressure}, m.method("Between the wells, with converging flow and skin where they are given: W (ln(W/(2π rw)) + s)/(π L) of the resistance of the block at each end.", ref.Muskat1937))
+	m.figure(Figure{ID: "field.highestDrop", Label: "Highest pressure difference, while on", Symbol: "Δp,hi", Value: highest.Pressure, Quantity: units.Pressure}, m.method(m.converging(), ref.Muskat1937))
 	if m.st.Field.Wells.ProducerPressure == nil {
 		return
 	}

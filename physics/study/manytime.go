@@ -144,9 +144,12 @@ func (m *many) swept(x float64) float64 {
 	return sum
 }
 
-// passed is how far along layer i its front has come.
+// passed is how far along layer i its front has come; in a pattern its areal sweep.
 func (m *many) passed(i int, x float64) float64 {
 	b := m.bundle[i]
+	if m.pattern != nil {
+		return m.pattern.tubes.Swept(x * b.Pace)
+	}
 	return math.Min(1, b.Body.At(x*b.Pace).Injected/m.front.displacement.Breakthrough())
 }
 

@@ -7,14 +7,17 @@ import (
 	"brinefront/physics/fit"
 )
 
-// Memory runs studies like Run does and keeps the last fit of each family, for a
+// Memory runs studies like Run does and keeps the last fit of each family and the last patterns of wells, for a
 // caller that runs a study again and again with little changed: a fit depends on the
-// laboratory points and its options alone, and takes about a third of a run. Results
+// laboratory points and its options alone, streamtubes on the pattern alone. Results
 // are the same to the last bit.
 //
 // The zero value is ready; a nil Memory remembers nothing. It is not for several
 // goroutines at once.
-type Memory struct{ last map[string]remembered }
+type Memory struct {
+	last     map[string]remembered
+	patterns map[cut]repeated
+}
 
 type remembered struct {
 	points, options any

@@ -56,6 +56,8 @@ func Demo() Study {
 
 		{"field.length", 1910, "ft"},
 		{"field.width", 830, "ft"},
+		{"field.pattern.spacing", 890, "ft"},
+		{"field.pattern.row", 890, "ft"},
 		{"field.thickness", 41, "ft"},
 		{"field.porosity", 0.213, "fraction"},
 		{"field.permeability", 391, "md"},

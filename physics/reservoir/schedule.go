@@ -107,14 +107,35 @@ type Moment struct {
 func (r *Run) At(t float64) Moment {
 	i := sort.Search(len(r.pieces), func(i int) bool { return r.pieces[i].time > t }) - 1
 	i = max(i, 0)
-	p := r.pieces[i]
 	clock := r.on(i, t).clock
-	m := Moment{Time: t, Clock: clock, Pressure: p.pressure, Outflow: r.Body.At(clock)}
+	return r.moment(i, t, clock, r.Body.At(clock))
+}
+
+// moment is the run in piece i.
+func (r *Run) moment(i int, t, clock float64, o Outflow) Moment {
+	p := r.pieces[i]
+	m := Moment{Time: t, Clock: clock, Pressure: p.pressure, Outflow: o}
 	if p.rate > 0 {
 		m.Pressure = p.rate / (m.Rate * r.PoreVolume)
 	}
 	m.Pace = m.Pressure * r.Uptime
 	return m
+}
+
+// Reached is the run as its clock comes to stand at a value, which is quicker than At since
+// nothing is sought; false when the run ends before that, shut in.
+func (r *Run) Reached(clock float64) (Moment, bool) {
+	clock = math.Max(0, clock)
+	i := max(0, sort.Search(len(r.pieces), func(i int) bool { return r.pieces[i].clock >= clock })-1)
+	o := r.Body.At(clock)
+	p := r.pieces[i]
+	switch {
+	case p.pressure > 0:
+		return r.moment(i, p.time+(clock-p.clock)/(p.pressure*r.Uptime), clock, o), true
+	case p.rate > 0:
+		return r.moment(i, p.time+(o.Injected*r.PoreVolume-p.injected)/(p.rate*r.Uptime), clock, o), true
+	}
+	return Moment{}, clock == p.clock
 }
 
 // TimeAt is the calendar time at which the clock comes to stand at a value; +Inf when the
@@ -123,12 +144,8 @@ func (r *Run) TimeAt(clock float64) float64 {
 	if !(clock > 0) {
 		return 0
 	}
-	i := max(0, sort.Search(len(r.pieces), func(i int) bool { return r.pieces[i].clock >= clock })-1)
-	switch p := r.pieces[i]; {
-	case p.pressure > 0:
-		return p.time + (clock-p.clock)/(p.pressure*r.Uptime)
-	case p.rate > 0:
-		return p.time + (r.Body.At(clock).Injected*r.PoreVolume-p.injected)/(p.rate*r.Uptime)
+	if m, ok := r.Reached(clock); ok {
+		return m.Time
 	}
 	return math.Inf(1)
 }

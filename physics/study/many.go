@@ -35,10 +35,17 @@ type many struct {
 	limit       reservoir.Limit // Final is not told
 	end         float64         // s
 	moments     []instant
+	beside      []neighbour // drawn beside the forecast
+}
+
+// neighbour is another answer to the same question.
+type neighbour struct {
+	id, label, role string
+	moments         []instant
 }
 
 // tabulated is how near the answers of a layer come to its exact solution, pore volumes.
-const tabulated = 1e-10
+const tabulated = 1e-9
 
 // runMany answers the Field sheet for what manyfold describes.
 func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
@@ -68,6 +75,7 @@ func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
 		return m.close(Stopped)
 	}
 	m.find()
+	m.neighbours()
 	m.figures()
 	m.charts()
 	m.tables()
@@ -235,6 +243,18 @@ func (m *many) body(flood *reservoir.Flood) reservoir.Body {
 		return path
 	}
 	return path.Tabulate(tabulated)
+}
+
+// neighbours are the other answers: the other side of the bracket, and the piston limit.
+func (m *many) neighbours() {
+	add := func(r *reservoir.Run, id, label, role string) {
+		if r != nil && r != m.run {
+			m.beside = append(m.beside, neighbour{id, label, role, m.until(r, m.end, 160)})
+		}
+	}
+	add(m.full, "full", "full crossflow", "total")
+	add(m.apart, "apart", "no crossflow", "total")
+	add(m.pistons, "pistons", "no crossflow, piston-like", "aid")
 }
 
 // filling puts the gas at the start before a body, where there is any.

@@ -17,27 +17,15 @@ func (m *many) line(id, label, role, kind string, pick func(instant) float64) Li
 	return l
 }
 
-// beside is the same quantity of another run, at the same times.
-func (m *many) beside(r *reservoir.Run, id, label, role string, pick func(instant) float64) Line {
-	l := Line{ID: id, Label: label, Role: role, Kind: "dashed"}
-	for _, i := range m.moments {
-		l.X, l.Y = append(l.X, i.Time), append(l.Y, pick(m.at(r, i.Time)))
-	}
-	return l
-}
-
 // bracket is a quantity of the forecast, and of those that it lies between.
 func (m *many) bracket(id, label, role string, pick func(instant) float64) []Line {
 	lines := []Line{m.line(id, label, role, "line", pick)}
-	switch {
-	case m.full == nil:
-	case m.run == m.apart:
-		lines = append(lines, m.beside(m.full, "full", "full crossflow", "total", pick))
-	default:
-		lines = append(lines, m.beside(m.apart, "apart", "no crossflow", "total", pick))
-	}
-	if m.pistons != nil {
-		lines = append(lines, m.beside(m.pistons, "pistons", "no crossflow, piston-like", "aid", pick))
+	for _, b := range m.beside {
+		l := Line{ID: b.id, Label: b.label, Role: b.role, Kind: "dashed"}
+		for _, i := range b.moments {
+			l.X, l.Y = append(l.X, i.Time), append(l.Y, pick(i))
+		}
+		lines = append(lines, l)
 	}
 	return lines
 }

@@ -1,6 +1,7 @@
 package study
 
 import (
+	"cmp"
 	"math"
 	"slices"
 
@@ -17,8 +18,9 @@ type instant struct {
 	cash                          float64 // a second
 }
 
-func (m *many) at(r *reservoir.Run, t float64) instant {
-	o := r.At(t)
+func (m *many) at(r *reservoir.Run, t float64) instant { return m.instant(r.At(t)) }
+
+func (m *many) instant(o reservoir.Moment) instant {
 	rate := o.Pace * m.pores
 	_, inlet := m.front.displacement.InletFace()
 	i := instant{Moment: o, injection: o.Rate * rate, injected: o.Injected * m.pores, recovery: o.Oil - o.Injected*(1-inlet),
@@ -33,8 +35,7 @@ func (m *many) at(r *reservoir.Run, t float64) instant {
 
 // find looks for the limit and lays the forecast's times.
 func (m *many) find() {
-	times := m.times(furthest, 400)
-	m.limit = m.limitOf(m.run, times)
+	m.limit = m.limitOf(m.run, m.instants(m.run, furthest, 400))
 	horizon, bounded := m.input("field.horizon")
 	const past, unlimited = 1.15, 3.0
 	switch {
@@ -48,49 +49,65 @@ func (m *many) find() {
 	if math.IsInf(m.end, 1) { // shut in before that
 		m.end = past * m.steps[len(m.steps)-1].From
 	}
-	list := m.times(m.run.At(m.end).Injected, 150)
-	for i := range 101 {
-		list = append(list, m.end*float64(i)/100)
-	}
+	extra := []float64{}
 	if m.limit.Outcome == reservoir.Reached {
-		list = append(list, m.limit.Time*(1-aside), m.limit.Time*(1+aside))
+		extra = []float64{m.limit.Time * (1 - aside), m.limit.Time * (1 + aside)}
 	}
-	slices.Sort(list)
-	former := -1.0
-	for _, t := range list {
-		if t <= m.end && t > former {
-			m.moments = append(m.moments, m.at(m.run, t))
-			former = t
-		}
-	}
+	m.moments = m.until(m.run, m.end, 240, extra...)
 }
 
-// times are times up to a volume injected: closing in on the start, at the steps of the
-// schedule, and on both sides of what arrives.
-func (m *many) times(q float64, count int) []float64 {
-	list := []float64{0}
-	for _, s := range m.steps[1:] {
-		list = append(list, s.From*(1-aside), s.From)
+// until tells a run up to a time, and at some times besides, each once.
+func (m *many) until(r *reservoir.Run, end float64, count int, extra ...float64) []instant {
+	last := m.at(r, end)
+	list := append(m.instants(r, last.Injected, count), last)
+	for _, t := range extra {
+		list = append(list, m.at(r, t))
 	}
-	last := reservoir.Clock(m.run.Body, q, 0)
-	clocks := m.arrivals()
+	sorted(list)
+	former := -1.0
+	return slices.DeleteFunc(list, func(i instant) bool {
+		if i.Time > end || i.Time <= former {
+			return true
+		}
+		former = i.Time
+		return false
+	})
+}
+
+func sorted(list []instant) {
+	slices.SortFunc(list, func(a, b instant) int { return cmp.Compare(a.Time, b.Time) })
+}
+
+// instants tell a run up to a volume injected: closing in on the start, at the steps of
+// the schedule, and on both sides of what arrives.
+func (m *many) instants(r *reservoir.Run, q float64, count int) []instant {
+	list := []instant{m.at(r, 0)}
+	for _, s := range m.steps[1:] {
+		list = append(list, m.at(r, s.From*(1-aside)), m.at(r, s.From))
+	}
+	last := reservoir.Clock(r.Body, q, 0)
+	clocks := coming(r)
 	for i := range count {
-		clocks = append(clocks, last*math.Pow(float64(i+1)/float64(count), 2.5))
+		share := float64(i+1) / float64(count)
+		clocks = append(clocks, last*math.Pow(share, 1+2*(1-share)))
 	}
 	for _, clock := range clocks {
-		if t := m.run.TimeAt(clock); clock <= last && !math.IsInf(t, 1) {
-			list = append(list, t)
+		if clock > last {
+			continue
+		}
+		if o, ok := r.Reached(clock); ok {
+			list = append(list, m.instant(o))
 		}
 	}
-	slices.Sort(list)
-	return slices.Compact(list)
+	sorted(list)
+	return list
 }
 
-// arrivals are the clocks at which fronts arrive in the run, on both sides, of as many
+// coming are the clocks at which fronts arrive in a run, on both sides, of as many
 // layers as can be told apart in a picture.
-func (m *many) arrivals() []float64 {
+func coming(r *reservoir.Run) []float64 {
 	const most = 40
-	bundle := m.run.Body.(reservoir.Bundle)
+	bundle := r.Body.(reservoir.Bundle)
 	var list []float64
 	for i, b := range bundle {
 		if len(bundle) <= most || i*most/len(bundle) != (i+1)*most/len(bundle) {
@@ -99,12 +116,12 @@ func (m *many) arrivals() []float64 {
 			}
 		}
 	}
-	return append(list, m.run.Body.Breakthrough()*(1-aside), m.run.Body.Breakthrough()*(1+aside))
+	return append(list, r.Body.Breakthrough()*(1-aside), r.Body.Breakthrough()*(1+aside))
 }
 
 // limitOf is the first time at which the water cut is at its limit, or the last at which
 // the oil rate or the cash are.
-func (m *many) limitOf(r *reservoir.Run, times []float64) reservoir.Limit {
+func (m *many) limitOf(r *reservoir.Run, list []instant) reservoir.Limit {
 	excess := func(i instant) float64 { return i.cut - m.need("field.waterCut") }
 	lasting := m.st.Field.Limit != "waterCut"
 	switch m.st.Field.Limit {
@@ -113,9 +130,9 @@ func (m *many) limitOf(r *reservoir.Run, times []float64) reservoir.Limit {
 	case "cash":
 		excess = func(i instant) float64 { return -i.cash }
 	}
-	beyond := make([]bool, len(times))
-	for i, t := range times {
-		beyond[i] = excess(m.at(r, t)) >= 0
+	beyond := make([]bool, len(list))
+	for k, i := range list {
+		beyond[k] = excess(i) >= 0
 	}
 	k := slices.Index(beyond, true)
 	if lasting {
@@ -125,13 +142,13 @@ func (m *many) limitOf(r *reservoir.Run, times []float64) reservoir.Limit {
 		}
 	}
 	switch {
-	case k < 0 || k == len(times):
+	case k < 0 || k == len(list):
 		return reservoir.Limit{Outcome: reservoir.Never, Time: math.Inf(1), PVI: math.Inf(1)}
 	case k == 0:
 		return reservoir.Limit{Outcome: reservoir.FromTheStart}
 	}
 	at := func(t float64) float64 { return excess(m.at(r, t)) }
-	t := numeric.Zero(at, times[k-1], times[k], at(times[k-1]), at(times[k]))
+	t := numeric.Zero(at, list[k-1].Time, list[k].Time, at(list[k-1].Time), at(list[k].Time))
 	return reservoir.Limit{Outcome: reservoir.Reached, Time: t, PVI: r.At(t).Injected}
 }
 

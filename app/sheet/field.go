@@ -32,6 +32,8 @@ func (f *Field) Render() app.UI {
 		app.Section().Class("group").Body(
 			widget.Block(d, m, "field.wells.schedule", "Schedule, instead of the one drive", in.Wells.Schedule, "A first line with the units, such as “d bbl/d psi”, then a row from each time or date on: time, injection rate, pressure difference. A rate with a pressure is held as long as it takes no more than that; neither is shut in. Empty: the drive above."),
 		),
+		widget.Group(d, m, study.SheetField, "History", "What the field has made so far",
+			widget.Block(d, m, "field.history.table", "Measured oil and water rates, at surface", in.History.Table, "A first line with the units, such as “date bbl/d bbl/d”, then a row for each date: oil, water. Drawn over the forecast. Optional.")),
 		widget.Group(d, m, study.SheetField, "Limit", "When it stops paying",
 			widget.Radios(d, "field.limit", "Economic limit", in.Limit, study.Limits),
 			widget.Words(d, m, "field.start", "First day of injection", in.Start, "YYYY-MM-DD", "Turns times into dates. Optional.")),

@@ -222,6 +222,8 @@ func textAt(st *study.Study, path string) *string {
 		return &st.Field.Start
 	case "field.layers.table":
 		return &st.Field.Layers.Table
+	case "field.history.table":
+		return &st.Field.History.Table
 	case "field.wells.schedule":
 		return &st.Field.Wells.Schedule
 	case "block.sizes":

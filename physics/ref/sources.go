@@ -49,6 +49,7 @@ const (
 	Leverett1941         ID = "leverett-1941"
 	Levenberg1944        ID = "levenberg-1944"
 	LimAziz1995          ID = "lim-aziz-1995"
+	Lo1990               ID = "lo-warner-johnson-1990"
 	Lomeland2005         ID = "lomeland-2005"
 	MaMorrowZhang1997    ID = "ma-morrow-zhang-1997"
 	Marquardt1963        ID = "marquardt-1963"
@@ -119,6 +120,7 @@ var sources = map[ID]Source{
 	Land1968:             {Authors: "Land", Year: 1968, Title: "Calculation of imbibition relative permeability for two- and three-phase flow from rock properties", Where: "SPE J. 8(2), 149-156"},
 	LeVeque2002:          {Authors: "LeVeque", Year: 2002, Title: "Finite Volume Methods for Hyperbolic Problems", Where: "Cambridge University Press"},
 	LimAziz1995:          {Authors: "Lim & Aziz", Year: 1995, Title: "Matrix-fracture transfer shape factors for dual-porosity simulators", Where: "J. Pet. Sci. Eng. 13(3-4), 169-178"},
+	Lo1990:               {Authors: "Lo, Warner & Johnson", Year: 1990, Title: "A study of the post-breakthrough characteristics of waterfloods", Where: "SPE 20064"},
 	MaMorrowZhang1997:    {Authors: "Ma, Morrow & Zhang", Year: 1997, Title: "Generalized scaling of spontaneous imbibition data for strongly water-wet systems", Where: "J. Pet. Sci. Eng. 18(3-4), 165-178"},
 	MattaxKyte1962:       {Authors: "Mattax & Kyte", Year: 1962, Title: "Imbibition oil recovery from fractured, water-drive reservoir", Where: "SPE J. 2(2), 177-184"},
 	Muskat1937:           {Authors: "Muskat", Year: 1937, Title: "The Flow of Homogeneous Fluids through Porous Media", Where: "McGraw-Hill"},

@@ -35,7 +35,7 @@ var choiceLabels = map[string]string{
 	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
 	"soak.flow": "How the oil leaves", "block.shape": "Block that soaks", "block.plug.shape": "Plug", "block.sizes": "Sizes of blocks", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
-	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule",
+	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule", "field.history.table": "Measured rates",
 	"title": "Title", "author": "Author", "note": "Note",
 }
 
@@ -116,7 +116,7 @@ func choices(st study.Study) *Table {
 	if st.Field.Layers.Table != "" {
 		add("field.layers.crossflow", st.Field.Layers.Crossflow, study.Crossflows)
 	}
-	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.start", st.Field.Start}, {"block.sizes", st.Block.Sizes}} {
+	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.history.table", st.Field.History.Table}, {"field.start", st.Field.Start}, {"block.sizes", st.Block.Sizes}} {
 		if text.text != "" {
 			table.Rows = append(table.Rows, []string{Label(&st, text.path), strings.Join(strings.Split(text.text, "\n"), "; ")})
 		}

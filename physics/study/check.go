@@ -77,7 +77,7 @@ func TextLimit(path string) int {
 	if path == "note" {
 		return MaxNote
 	}
-	if path == layerTable.path || path == scheduleTable.path || path == sizeTable.path {
+	if path == layerTable.path || path == scheduleTable.path || path == historyTable.path || path == sizeTable.path {
 		return maxTableText
 	}
 	if _, inner, ok := AtCase(path); ok && inner == "name" {

@@ -146,4 +146,5 @@ type Field struct {
 	Layers  Layers  `json:"layers,omitzero"`
 	Wells   Wells   `json:"wells,omitzero"`
 	Money   Money   `json:"money,omitzero"`
+	History History `json:"history,omitzero"`
 }

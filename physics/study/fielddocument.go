@@ -36,6 +36,12 @@ type Money struct {
 	Discount  *Input `json:"discount,omitempty"`  // a year; nil: 0
 }
 
+// History is what the field has made so far.
+type History struct {
+	Table string `json:"table,omitempty"` // measured rates, as pasted: see CheckText
+	From  *Input `json:"from,omitempty"`  // water-oil ratio from which the late straight line is drawn; nil: 1
+}
+
 // Crossflows are the answers of the forecast about flow between layers.
 var Crossflows = []Choice{
 	{"none", "none: layers apart, at a common pressure difference"},
@@ -46,7 +52,7 @@ var Crossflows = []Choice{
 // manyfold reports whether the field is more than an even block under one drive.
 func manyfold(st *Study) bool {
 	l, w, m := st.Field.Layers, st.Field.Wells, st.Field.Money
-	if patterned(st) || l.Table != "" || w.Schedule != "" || st.Field.Limit == "cash" {
+	if patterned(st) || l.Table != "" || w.Schedule != "" || historied(st) || st.Field.Limit == "cash" {
 		return true
 	}
 	for _, in := range []*Input{w.PressureLimit, w.Radius, w.InjectorSkin, w.ProducerSkin, w.ProducerPressure, w.Gas, m.Oil} {
@@ -59,6 +65,7 @@ func manyfold(st *Study) bool {
 
 func layered(s *Study) bool       { return s.Field.Layers.Table != "" }
 func unlayered(s *Study) bool     { return !layered(s) }
+func historied(s *Study) bool     { return s.Field.History.Table != "" }
 func scheduled(s *Study) bool     { return s.Field.Wells.Schedule != "" }
 func priced(s *Study) bool        { return s.Field.Money.Oil != nil || s.Field.Limit == "cash" }
 func limitedByCash(s *Study) bool { return s.Field.Limit == "cash" }
@@ -73,6 +80,7 @@ var manyfoldSpecs = []Spec{
 	{Path: "field.wells.producerPressure", Sheet: SheetField, Group: "Wells", Label: "Producer pressure, at the bottom", Symbol: "pp", Quantity: units.Pressure, Min: 0, Max: 3e8, Optional: true, Default: "the injector's pressure is not told", at: func(s *Study) **Input { return &s.Field.Wells.ProducerPressure }},
 	{Path: "field.wells.depth", Sheet: SheetField, Group: "Wells", Label: "Depth of the perforations", Symbol: "D", Quantity: units.Length, Min: 0, OpenMin: true, Max: 2e4, Optional: true, Default: "the fracture pressure is not told", at: func(s *Study) **Input { return &s.Field.Wells.Depth }, when: func(s *Study) bool { return s.Field.Wells.ProducerPressure != nil }},
 	{Path: "field.wells.fractureGradient", Sheet: SheetField, Group: "Wells", Label: "Fracture gradient", Symbol: "Gf", Quantity: units.PressureGradient, Min: 0, OpenMin: true, Max: 1e5, Optional: true, Default: "the fracture pressure is not told", Help: "Of your own tests: the pressure at which the rock parts, over its depth.", at: func(s *Study) **Input { return &s.Field.Wells.FractureGradient }, when: func(s *Study) bool { return s.Field.Wells.ProducerPressure != nil }},
+	{Path: "field.history.from", Sheet: SheetField, Group: "History", Label: "Straight line from a water-oil ratio of", Symbol: "WOR1", Quantity: units.WaterOilRatio, Min: 0, OpenMin: true, Max: 1e4, Optional: true, Default: "1, half the stream water", Help: "Where the late trend is taken to begin.", at: func(s *Study) **Input { return &s.Field.History.From }, when: historied},
 	{Path: "field.money.oil", Sheet: SheetField, Group: "Money", Label: "Received for oil", Symbol: "co", Quantity: units.Price, Min: 0, Max: 1e7, Optional: true, Default: "no cash is told", Help: "In any currency, one for all.", spared: func(s *Study) bool { return !limitedByCash(s) }, at: func(s *Study) **Input { return &s.Field.Money.Oil }},
 	{Path: "field.money.water", Sheet: SheetField, Group: "Money", Label: "Spent on produced water", Symbol: "cw", Quantity: units.Price, Min: 0, Max: 1e7, Optional: true, Default: "0", at: func(s *Study) **Input { return &s.Field.Money.Water }, when: priced},
 	{Path: "field.money.injection", Sheet: SheetField, Group: "Money", Label: "Spent on injected water", Symbol: "ci", Quantity: units.Price, Min: 0, Max: 1e7, Optional: true, Default: "0", at: func(s *Study) **Input { return &s.Field.Money.Injection }, when: priced},

@@ -15,7 +15,7 @@ const (
 	maxTableText = 400000
 )
 
-// Two tables of the field are kept as they were pasted: the first line names the unit of
+// Some tables are kept as they were pasted: the first line names the unit of
 // each column, every further line is a row. Cells are parted by tabs, semicolons or spaces;
 // a dash or nothing is an empty cell. A cell may carry a unit of its own.
 
@@ -31,19 +31,26 @@ type textColumn struct {
 type textTable struct {
 	path, example string
 	columns       []textColumn
+	fromStart     bool // the first row stands at time 0
 }
 
 var layerTable = textTable{"field.layers.table", "ft md fraction", []textColumn{
 	{"thickness", units.Length, 0, 5e3, false},
 	{"permeability", units.Permeability, 0, 1e-9, false},
 	{"porosity", units.Fraction, 0, 1, false},
-}}
+}, false}
 
 var scheduleTable = textTable{"field.wells.schedule", "d bbl/d psi", []textColumn{
 	{"time or date", units.Duration, 0, 1e11, true},
 	{"injection rate", units.Rate, 0, 100, true},
 	{"pressure difference", units.Pressure, 0, 1e9, true},
-}}
+}, true}
+
+var historyTable = textTable{"field.history.table", "date bbl/d bbl/d", []textColumn{
+	{"time or date", units.Duration, 0, 1e11, true},
+	{"oil rate", units.Rate, 0, 100, true},
+	{"water rate", units.Rate, 0, 100, true},
+}, false}
 
 func (t textTable) refuse(line int, read, allowed string) *Problem {
 	return &Problem{Path: t.path, Read: "in line " + strconv.Itoa(line) + ", " + read, Allowed: allowed}
@@ -148,7 +155,7 @@ func unitIn(q units.Quantity, heading string) (units.Unit, bool) {
 }
 
 // CheckText says whether a text of the study that means something may stand at a path:
-// the first day of injection, the layers, the schedule, the sizes of blocks.
+// the first day of injection, the layers, the schedule, the history, the sizes of blocks.
 func CheckText(st *Study, path, text string) *Problem {
 	switch path {
 	case "field.start":
@@ -162,13 +169,16 @@ func CheckText(st *Study, path, text string) *Problem {
 	case sizeTable.path:
 		_, problem := sizeTable.rows(text, "")
 		return problem
+	case historyTable.path:
+		_, problem := historyTable.rows(text, st.Field.Start)
+		return problem
 	}
 	return nil
 }
 
 // HasMeaning reports whether the text at a path is read, not only kept.
 func HasMeaning(path string) bool {
-	return slices.Contains([]string{"field.start", layerTable.path, scheduleTable.path, sizeTable.path}, path)
+	return slices.Contains([]string{"field.start", layerTable.path, scheduleTable.path, historyTable.path, sizeTable.path}, path)
 }
 
 // rows reads a table that has rows, in rising order where its first column is time.
@@ -185,8 +195,8 @@ func (t textTable) rows(text, start string) ([][]float64, *Problem) {
 	}
 	if t.columns[0].quantity == units.Duration {
 		for i, time := range columns[0] {
-			if i == 0 && time != 0 || i > 0 && time <= columns[0][i-1] {
-				return nil, &Problem{Path: t.path, Read: "row " + strconv.Itoa(i+1) + " out of order", Allowed: "times that rise, the first of them 0 or the first day"}
+			if i == 0 && time != 0 && t.fromStart || i > 0 && time <= columns[0][i-1] {
+				return nil, &Problem{Path: t.path, Read: "row " + strconv.Itoa(i+1) + " out of order", Allowed: "times that rise; those of a schedule from 0 or the first day on"}
 			}
 		}
 	}

@@ -28,6 +28,7 @@ type many struct {
 	fullReason    string             // why there is no answer for full crossflow
 	steps         []reservoir.Step
 	purse         purse
+	past          *past // nil where nothing is measured
 
 	run         *reservoir.Run // what the answer is about
 	apart, full *reservoir.Run // without and with crossflow; full is nil where there is no answer
@@ -77,7 +78,9 @@ func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
 	m.find()
 	m.neighbours()
 	m.figures()
+	m.trend()
 	m.charts()
+	m.overlay()
 	m.tables()
 	m.notes()
 	m.say()
@@ -117,6 +120,7 @@ func (m *many) read() {
 	}
 	m.readSteps()
 	m.readMoney()
+	m.readPast()
 	m.input("field.horizon")
 	for _, path := range []string{"field.wells.producerPressure", "field.wells.depth", "field.wells.fractureGradient"} {
 		m.input(path)

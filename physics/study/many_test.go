@@ -187,3 +187,44 @@ func TestMoney(t *testing.T) {
 		t.Errorf("the cash limit: %v %v", ok, limit.Value)
 	}
 }
+
+// A history that the forecast itself made lies on it, and its late line is found again.
+func TestHistory(t *testing.T) {
+	st := Demo()
+	table := "d bbl/d bbl/d"
+	for year := 1; year <= 12; year++ {
+		// Invented: 900 bbl/d of liquid, whose water-oil ratio is e^(year/3).
+		oil := 900.0 / (1 + math.Exp(float64(year)/3))
+		table += fmt.Sprintf("\n%d %.6f %.6f", 365*year, oil, 900-oil)
+	}
+	st.Field.History.Table = table
+	put(&st, "field.history.from", 2, "bbl/bbl")
+	part := Run(st).Parts[SheetField]
+	measured := must(t, part, "field.rates", "measured.oil")
+	near(t, "rate", measured.Y[3], 900/(1+math.Exp(4.0/3))*0.158987294928/86400, 1e-12)
+	rows, _ := part.Figure("field.trendRows")
+	near(t, "rows", rows.Value, 10, 0) // from the third year on the ratio e^(year/3) is above 2
+	low, _ := part.Figure("field.trendLow")
+	x, ok := part.Figure("field.trendOil")
+	high, _ := part.Figure("field.trendHigh")
+	if !ok || !(low.Value < x.Value && x.Value < high.Value) {
+		t.Errorf("oil at the limit is %g, from %g to %g", x.Value, low.Value, high.Value)
+	}
+	// The forecast as its own history.
+	plain := Demo()
+	put(&plain, "field.horizon", 9, "yr")
+	plain.Field.Wells.Schedule = "d bbl/d\n0 960"
+	forecast := Run(plain).Parts[SheetField].Tables[0]
+	table = "s m3/s m3/s"
+	for i, time := range forecast.Columns[1].Values {
+		table += fmt.Sprintf("\n%v %v %v", time, forecast.Columns[4].Values[i], forecast.Columns[5].Values[i])
+	}
+	plain.Field.History.Table = table
+	part = Run(plain).Parts[SheetField]
+	oil, points := must(t, part, "field.rates", "oil"), must(t, part, "field.rates", "measured.oil")
+	for i := range points.X {
+		if points.Y[i] > 0 {
+			near(t, "the forecast as history", interpolate(oil.X, oil.Y, points.X[i]), points.Y[i], 3e-3*points.Y[0])
+		}
+	}
+}

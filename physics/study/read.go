@@ -221,7 +221,7 @@ func lawful(st *Study) error {
 			return err
 		}
 	}
-	for path, text := range map[string]string{"field.start": st.Field.Start, layerTable.path: st.Field.Layers.Table, scheduleTable.path: st.Field.Wells.Schedule, sizeTable.path: st.Block.Sizes} {
+	for path, text := range map[string]string{"field.start": st.Field.Start, layerTable.path: st.Field.Layers.Table, scheduleTable.path: st.Field.Wells.Schedule, historyTable.path: st.Field.History.Table, sizeTable.path: st.Block.Sizes} {
 		if p := CheckText(st, path, text); p != nil {
 			return asFileError(p)
 		}

@@ -120,7 +120,7 @@ var blockSpecs = func() []Spec {
 var sizeTable = textTable{"block.sizes", "m %", []textColumn{
 	{"size", units.Length, 0, 1e4, false},
 	{"share", units.Share, 0, 1e6, false},
-}}
+}, false}
 
 // firstSize is the size that a shape is told by.
 func firstSize(kind string) string {

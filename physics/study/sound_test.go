@@ -170,6 +170,9 @@ func variants() map[string]Study {
 	add("schedule", func(st *Study) {
 		st.Field.Wells.Schedule = "date bbl/d psi\n2027-03-01 500 -\n2028-03-01 - -\n2028-09-01 1200 1500\n2035-01-01 - 1100"
 	})
+	add("history", func(st *Study) {
+		st.Field.History.Table = "date bbl/d bbl/d\n2028-01-01 500 20\n2029-01-01 300 400\n2030-01-01 210 500\n2031-01-01 150 560\n2032-01-01 - 600\n2033-01-01 90 640"
+	})
 	add("schedule, shut in", func(st *Study) { st.Field.Wells.Schedule = "d bbl/d\n0 500\n90 0" })
 	add("not a number", func(st *Study) { st.Rock.Table.Krw[5] = math.NaN() })
 	add("plug", func(st *Study) {

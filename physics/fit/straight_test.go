@@ -19,6 +19,15 @@ func TestStraightByHand(t *testing.T) {
 			t.Errorf("%s is %.10g, want %.10g", name, pair[0], pair[1])
 		}
 	}
+	// Fieller's ends by their meaning: there the band of the line just reaches y.
+	steep, _ := NewStraight([]float64{1, 2, 3, 4, 5}, []float64{1, 5, 5, 9, 9.5}, 0.95)
+	_, low, high, ok := steep.Where(14)
+	for _, x := range []float64{low, high} {
+		band := 3.182446305 * steep.spread * math.Sqrt(1.0/5+(x-3)*(x-3)/10)
+		if off := math.Abs(steep.Intercept + steep.Slope*x - 14); !ok || math.Abs(off-band) > 1e-7 {
+			t.Errorf("at %g the line is %.9g off, its band is %.9g wide", x, off, band)
+		}
+	}
 	if _, _, _, ok := s.Where(6); ok {
 		t.Error("a slope that may be either has an interval")
 	}

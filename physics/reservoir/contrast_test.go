@@ -102,6 +102,11 @@ func TestVariation(t *testing.T) {
 	} {
 		near(t, name+" of even rock", v, 0, 1e-7)
 	}
+	// Three samples by hand: at 1/6, 1/2, 5/6 the quantiles are -0.967421566, 0 and its opposite
+	// (Abramowitz & Stegun 1964, table 26.5, from memory), at 1/4, 1/2, 3/4 -0.674489750.
+	for position, z := range map[Position]float64{Hazen: 0.967421566, Weibull: 0.674489750} {
+		near(t, string(position), Variation(evenly(8, 2, 1), position), 1-math.Exp(-math.Log(8)/(2*z)), 1e-8)
+	}
 	// Two equal halves of a sample are the sample.
 	near(t, "halves", Variation([]Sample{{2, 9, 0.2}, {2, 1, 0.2}}, Hazen), Variation([]Sample{{4, 9, 0.2}, {4, 1, 0.2}}, Hazen), 1e-15)
 }

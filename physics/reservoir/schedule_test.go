@@ -99,6 +99,20 @@ func TestSchedules(t *testing.T) {
 	}
 }
 
+// A rate that the limit forbids from the first moment is held to the limit from then on,
+// and by nothing once the flood takes it.
+func TestRateBeyondItsLimit(t *testing.T) {
+	path := invented(t, 5.93e-3) // resists less and less
+	const limit = 1e-3
+	rate := 1.2 * limit / path.Resistance(0)
+	r := NewRun(path, 1, 1, []Step{{Rate: rate, Pressure: limit}}, 1e5)
+	if len(r.pieces) != 2 || r.pieces[0].pressure != limit || r.pieces[1].rate != rate {
+		t.Fatalf("pieces %+v", r.pieces)
+	}
+	near(t, "resistance as it lets go", path.At(r.pieces[1].clock).Rate, rate/limit, 1e-12*rate/limit)
+	near(t, "time", r.pieces[1].time, r.pieces[1].clock/limit, 1e-12*r.pieces[1].time)
+}
+
 // Gas-filled space: nothing comes out before it is filled, and afterwards oil lags by it.
 func TestFillUp(t *testing.T) {
 	path := invented(t, 5.93e-3)

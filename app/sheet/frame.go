@@ -63,6 +63,8 @@ func current(d widget.Desk, m state.Model) app.UI {
 		return &Field{Desk: d, Model: m}
 	case "compare":
 		return &Compare{Desk: d, Model: m}
+	case "match":
+		return &Match{Desk: d, Model: m}
 	case "report":
 		return &Report{Desk: d, Model: m}
 	case "evidence":
@@ -115,6 +117,7 @@ var sheets = []struct{ name, title, question string }{
 	{"soak", "Soak", "How much water does the rock take up by itself, and how fast?"},
 	{"field", "Field", "What does the flood make in time, and when does it stop paying?"},
 	{"compare", "Compare", "What comes of it when an input is another?"},
+	{"match", "Match", "Which inputs make the forecast follow what was measured?"},
 	{"report", "Report", "Everything on paper: inputs, answers, workings, cautions."},
 	{"evidence", "Evidence", "Which published values does this very program reproduce, here, now?"},
 }
@@ -150,6 +153,9 @@ func standing(m state.Model, sheet string) string {
 		return "○ no cases yet"
 	case sheet == string(study.SheetSoak) && !m.Study.Rock.Capillary.Given():
 		return "○ no capillary pressure yet"
+	}
+	if sheet == string(study.SheetMatch) && !m.Study.Match.Asked() {
+		return "○ not asked for"
 	}
 	if refusesText(m, sheet) {
 		return "✕ input refused"

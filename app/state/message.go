@@ -25,6 +25,9 @@ type (
 	// Written: a text field changed: "title", "author", "note", "field.start".
 	Written struct{ Path, Text string }
 
+	// MatchTaken puts what the match found in the place of the inputs it moved.
+	MatchTaken struct{}
+
 	// RowAdded adds an empty row to a table after row After (-1: first).
 	RowAdded struct {
 		Table string // path
@@ -120,6 +123,7 @@ func (Sourced) message()          {}
 func (Ranged) message()           {}
 func (Chosen) message()           {}
 func (Written) message()          {}
+func (MatchTaken) message()       {}
 func (RowAdded) message()         {}
 func (RowRemoved) message()       {}
 func (CaseAdded) message()        {}

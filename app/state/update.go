@@ -28,6 +28,8 @@ func Update(m Model, msg Msg) (Model, []Effect) {
 		return m.chosen(msg)
 	case Written:
 		return m.written(msg)
+	case MatchTaken:
+		return m.matchTaken()
 	case RowAdded:
 		return m.rowAdded(msg)
 	case RowRemoved:

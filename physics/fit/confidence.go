@@ -272,7 +272,7 @@ func (c confidence) parameters(t *task, correlation [][]float64) []Parameter {
 // size is what a parameter's standard error is judged against: its value, or, for
 // the end saturations, the movable range.
 func (c confidence) size(j int) float64 {
-	if j < iKrw0 {
+	if c.family.specs[j].saturation {
 		return 1 - c.values[iSwc] - c.values[iSor]
 	}
 	return math.Abs(c.values[j])

@@ -30,6 +30,7 @@ type spec struct {
 	low, high     float64
 	log           bool // the minimiser moves its logarithm
 	phase         phase
+	saturation    bool // judged by the movable range rather than by its own size
 }
 
 // inner and outer convert between a parameter and what the minimiser moves.
@@ -62,8 +63,8 @@ type family struct {
 
 func family4(shapes []spec, f family) family {
 	f.specs = append([]spec{
-		{symbol: "Swc", label: "Connate water", low: 0, high: 1},
-		{symbol: "Sor", label: "Residual oil", low: 0, high: 1},
+		{symbol: "Swc", label: "Connate water", low: 0, high: 1, saturation: true},
+		{symbol: "Sor", label: "Residual oil", low: 0, high: 1, saturation: true},
 		{symbol: "krw0", label: "krw at Sor", low: 1e-6, high: relperm.MaxKr, phase: water},
 		{symbol: "kro0", label: "kro at Swc", low: 1e-6, high: relperm.MaxKr, phase: oil},
 	}, shapes...)

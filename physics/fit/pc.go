@@ -57,7 +57,7 @@ type pcFamily struct {
 	closed bool        // Pc and its slope are finite at the upper end
 }
 
-var pcEnds = []spec{{symbol: "Swr", label: "Water at infinite Pc", low: 0, high: 1}, {symbol: "Sor,c", label: "Oil that stays trapped", low: 0, high: 1}}
+var pcEnds = []spec{{symbol: "Swr", label: "Water at infinite Pc", low: 0, high: 1, saturation: true}, {symbol: "Sor,c", label: "Oil that stays trapped", low: 0, high: 1, saturation: true}}
 
 func pcSpecs(more ...spec) []spec { return append(append([]spec{}, pcEnds...), more...) }
 

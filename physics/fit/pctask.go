@@ -260,38 +260,9 @@ func (t *pcTask) verdict(f PcFit, off []row) []string {
 	if f.Status == IterationLimit {
 		said = append(said, "The fit stopped at its iteration limit; the curve is the best found so far.")
 	}
-	doubts := 0
-	for j, p := range f.Parameters {
-		switch {
-		case p.Held:
-			continue
-		case p.AtBound:
-			said = append(said, p.Label+" "+p.Symbol+" lies at its bound; the points ask for a value beyond it.")
-		case !p.Determined:
-			said = append(said, p.Label+" "+p.Symbol+" is not determined by these points: "+t.doubt(f, j)+".")
-		default:
-			continue
-		}
-		doubts++
-	}
-	if doubts == 0 {
-		said = append(said, "The points determine every fitted parameter.")
-	}
+	said = append(said, f.state.judged(f.Parameters, f.Correlation, voice{"the points ask", "these points", "the curve stays the same at the points", "The points determine every fitted parameter."})...)
 	if len(off) > 0 {
 		said = append(said, listOff(off, [2]string{"Pc"}))
 	}
 	return said
-}
-
-// doubt is the reason why a parameter is not determined.
-func (t *pcTask) doubt(f PcFit, j int) string {
-	for i, active := range f.state.active {
-		if active == j && f.state.blind[i] {
-			return "the curve stays the same at the points when it changes"
-		}
-	}
-	if other, r := strongest(f.Correlation, j); math.Abs(r) > entangled {
-		return fmt.Sprintf("it cannot be told apart from %s (correlation %.3f)", f.Parameters[other].Symbol, r)
-	}
-	return fmt.Sprintf("its standard error is %.2g %% of it", 100*f.Parameters[j].StdErr/math.Abs(f.state.size(j)))
 }

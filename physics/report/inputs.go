@@ -36,6 +36,7 @@ var choiceLabels = map[string]string{
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
 	"soak.flow": "How the oil leaves", "block.shape": "Block that soaks", "block.plug.shape": "Plug", "block.sizes": "Sizes of blocks", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule", "field.history.table": "Measured rates",
+	"match.first": "Moved first by the match", "match.second": "Moved second", "match.third": "Moved third", "match.fourth": "Moved fourth",
 	"title": "Title", "author": "Author", "note": "Note",
 }
 
@@ -115,6 +116,11 @@ func choices(st study.Study) *Table {
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Layers.Table != "" {
 		add("field.layers.crossflow", st.Field.Layers.Crossflow, study.Crossflows)
+	}
+	if st.Match.Asked() {
+		for _, path := range []string{"match.first", "match.second", "match.third", "match.fourth"} {
+			add(path, study.Chosen(&st, path), study.Matchable)
+		}
 	}
 	for _, text := range []struct{ path, text string }{{"field.layers.table", st.Field.Layers.Table}, {"field.wells.schedule", st.Field.Wells.Schedule}, {"field.history.table", st.Field.History.Table}, {"field.start", st.Field.Start}, {"block.sizes", st.Block.Sizes}} {
 		if text.text != "" {

@@ -64,7 +64,7 @@ func (c Case) Changes() []string {
 func CaseChoices() []string {
 	var paths []string
 	for _, f := range choiceFields {
-		if f.path != "system" {
+		if f.path != "system" && !strings.HasPrefix(f.path, "match.") {
 			paths = append(paths, f.path)
 		}
 	}

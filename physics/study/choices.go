@@ -104,6 +104,11 @@ var choiceFields = []choiceField{
 	{"field.pattern.kind", Patterns, func(s *Study) *string { return &s.Field.Pattern.Kind }},
 	{"field.limit", Limits, func(s *Study) *string { return &s.Field.Limit }},
 	{"field.layers.crossflow", Crossflows, func(s *Study) *string { return &s.Field.Layers.Crossflow }},
+	{"match.run", MatchRuns, func(s *Study) *string { return &s.Match.Run }},
+	{"match.first", Matchable, func(s *Study) *string { return &s.Match.First }},
+	{"match.second", Matchable, func(s *Study) *string { return &s.Match.Second }},
+	{"match.third", Matchable, func(s *Study) *string { return &s.Match.Third }},
+	{"match.fourth", Matchable, func(s *Study) *string { return &s.Match.Fourth }},
 }
 
 // usual is a study in which every choice stands at the first of its list.

@@ -65,12 +65,19 @@ func caseNames(cases []Case) *words {
 
 // with evaluates a case of the study that was evaluated.
 func (e *Evaluation) with(c Case) *Evaluation {
-	of := (*Memory)(nil).Begin(c.On(*e.st))
-	if !slices.ContainsFunc(c.Changes(), func(path string) bool { return strings.HasPrefix(path, "rock.") }) {
-		of.parts[SheetRock], of.rock = e.parts[SheetRock], e.rock
-	}
+	of := e.changed(c, nil)
 	for _, sheet := range compared {
 		of.through(sheet)
+	}
+	return of
+}
+
+// changed begins the evaluation of a case of the study that was evaluated; a rock that no
+// change touches is not computed again.
+func (e *Evaluation) changed(c Case, m *Memory) *Evaluation {
+	of := m.Begin(c.On(*e.st))
+	if !slices.ContainsFunc(c.Changes(), func(path string) bool { return strings.HasPrefix(path, "rock.") }) {
+		of.parts[SheetRock], of.rock = e.parts[SheetRock], e.rock
 	}
 	return of
 }

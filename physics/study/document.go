@@ -29,6 +29,7 @@ type Study struct {
 	Field  Field  `json:"field"`
 	Soak   Soak   `json:"soak,omitzero"`
 	Block  Block  `json:"block,omitzero"`
+	Match  Match  `json:"match,omitzero"`
 
 	Cases []Case `json:"cases,omitempty"` // named changes on the study; at most MaxCases
 }

@@ -38,12 +38,15 @@ func jobs() []job {
 		}},
 		{sheet: SheetCompare, needs: compared, run: func(e *Evaluation, _ growing) Part { return runCompare(e) },
 			asked: func(st *Study) bool { return len(st.Cases) > 0 }},
+		{sheet: SheetMatch, needs: []Sheet{SheetField}, run: runMatch, asked: matching},
 	}
 }
 
 // Sheets are the sheets that a study is taken through, in the order of the job: the
 // names of jobs once more, for the interface, which would link every solver with them.
-func Sheets() []Sheet { return []Sheet{SheetRock, SheetFront, SheetSoak, SheetField, SheetCompare} }
+func Sheets() []Sheet {
+	return []Sheet{SheetRock, SheetFront, SheetSoak, SheetField, SheetCompare, SheetMatch}
+}
 
 // Evaluation is a study on its way through the sheets: each is computed when it is
 // first wanted, after those it needs.

@@ -50,6 +50,25 @@ const tabulated = 1e-9
 
 // runMany answers the Field sheet for what manyfold describes.
 func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
+	m, status := laid(st, memory, frontPart, front)
+	if m.run == nil {
+		return m.close(status)
+	}
+	m.find()
+	m.neighbours()
+	m.figures()
+	m.trend()
+	m.charts()
+	m.overlay()
+	m.tables()
+	m.notes()
+	m.say()
+	return m.close(status)
+}
+
+// laid reads what manyfold describes and lays its flood out; where that has no answer there
+// is no run, and the status says why.
+func laid(st *Study, memory *Memory, frontPart Part, front *front) (*many, Status) {
 	m := &many{sheet: newSheet(st, frontPart), memory: memory, front: front}
 	m.await(frontPart)
 	m.read()
@@ -61,30 +80,21 @@ func runMany(st *Study, memory *Memory, frontPart Part, front *front) Part {
 		if standing == Ready {
 			standing = frontPart.Status
 		}
-		return m.close(standing)
+		return m, standing
 	}
 	if front.flow.Gravity != 0 {
 		m.note(Note{ID: "field.dipping", Level: "caution", Text: "There is no forecast: patterns, layers, wells with a skin or a schedule, and cash are answered for a level bed only.",
 			Cause: "With a dip the share of gravity in the flow changes with the rate in each layer, and fronts are no longer self-similar.", Do: "Leave the dip empty, or choose the block and leave the table of layers, the wells and the money empty.", Paths: []string{"front.dip"}})
-		return m.close(Stopped)
+		return m, Stopped
 	}
 	if bt := front.displacement.Breakthrough(); m.gas >= bt {
 		m.problem("field.wells.gas", m.typed("field.wells.gas"), "less than what is injected when the front arrives in an even layer")
-		return m.close(Refused)
+		return m, Refused
 	}
 	if !m.lay() {
-		return m.close(Stopped)
+		return m, Stopped
 	}
-	m.find()
-	m.neighbours()
-	m.figures()
-	m.trend()
-	m.charts()
-	m.overlay()
-	m.tables()
-	m.notes()
-	m.say()
-	return m.close(frontPart.Status)
+	return m, frontPart.Status
 }
 
 // read takes the inputs in.

@@ -115,7 +115,7 @@ func randomCases(r *rand.Rand, st *Study) {
 				c.Set[spec.Path] = Input{Value: value, Unit: unit.Symbol}
 			}
 			f := choiceFields[r.IntN(len(choiceFields))]
-			if f.path != "system" {
+			if slices.Contains(CaseChoices(), f.path) {
 				c.Choose[f.path] = f.list[r.IntN(len(f.list))].Value
 			}
 		}

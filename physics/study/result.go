@@ -17,6 +17,10 @@ const (
 	// study has a capillary pressure.
 	SheetSoak Sheet = "soak"
 
+	// SheetMatch moves inputs until the forecast follows the measured history; a result
+	// has it only when the study asks for it.
+	SheetMatch Sheet = "match"
+
 	// SheetCompare sets the cases of a study beside it; a result has it only when
 	// the study has cases.
 	SheetCompare Sheet = "compare"

@@ -216,8 +216,8 @@ func faults(r Result) []string {
 	}
 	for _, sheet := range Sheets() {
 		part, ok := r.Parts[sheet]
-		if !ok && (sheet == SheetCompare || sheet == SheetSoak) {
-			continue // the study has no cases, no capillary pressure
+		if !ok && (sheet == SheetCompare || sheet == SheetSoak || sheet == SheetMatch) {
+			continue // the study has no cases, no capillary pressure, asks for no match
 		}
 		if !ok {
 			blame("no part %s", sheet)

@@ -39,8 +39,8 @@ var ErrUnanswered = errors.New("there is no answer at the values to begin with")
 
 // Match moves what is free, within its bounds, to where the sum of squares of rows
 // deviations is least near the start, by the bounded Levenberg-Marquardt search of this
-// package with slopes by differences. It does not go where the model has no answer; a
-// model that stops answering for good ends the search within a few calls. Intervals are 95 % by
+// package with slopes by differences. It does not go where the model has no answer, and may
+// stand still before it; a model that stops answering for good ends the search within a few calls. Intervals are 95 % by
 // Student's t on the linearised model, as if deviations were independent and of one size
 // throughout; the search is local, so that another start may end elsewhere.
 //

@@ -65,7 +65,14 @@ func TestMatchNeverRaisesTheMisfit(t *testing.T) {
 		}
 		at := decay(tenths(25), truth, 0.2*r.Float64(), uint64(round))
 		hole := 3 * r.Float64() // no answer beyond it
-		m, err := Match(frees(value, low, high), 25, func(v, r []float64) bool { return v[1] <= math.Max(hole, value[1]) && at(v, r) }, 20)
+		m, err := Match(frees(value, low, high), 25, func(v, r []float64) bool {
+			for j := range v {
+				if v[j] < low[j] || v[j] > high[j] {
+					t.Fatalf("round %d: asked at %v, beyond %v to %v", round, v, low, high)
+				}
+			}
+			return v[1] <= math.Max(hole, value[1]) && at(v, r)
+		}, 20)
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -94,6 +101,35 @@ func TestMatchSaysWhatItCannotTell(t *testing.T) {
 	m, err := Match(idle, 30, at, 50)
 	if err != nil || !m.Parameters[0].AtBound || m.Parameters[3].Determined || m.Parameters[3].Value != 1 || len(m.Verdict) < 2 {
 		t.Errorf("%v: %+v %q", err, m.Parameters, m.Verdict)
+	}
+}
+
+// The edge of where the model answers may be where the match begins, at a bound or not, and
+// where it would end: it comes nearer all the same, though not along the edge.
+func TestMatchAlongTheEdgeOfWhatIsAnswered(t *testing.T) {
+	truth, low, high := [3]float64{2, 0.7, 0.1}, [3]float64{0, 0.1, -1}, [3]float64{9, 5, 1}
+	upTo := func(edge float64, at Deviations) Deviations {
+		return func(v, r []float64) bool {
+			if v[1] < low[1] {
+				t.Fatal("asked beyond a bound:", v)
+			}
+			return v[1] <= edge && at(v, r)
+		}
+	}
+	m, err := Match(frees([3]float64{1, 1, 0}, low, high), 40, upTo(1, decay(tenths(40), truth, 0, 1)), 100)
+	if err != nil || !near(m.Parameters[1].Value, 0.7, 1e-6) {
+		t.Errorf("from the edge: %v %+v", err, m.Parameters)
+	}
+	if m, err := Match(frees([3]float64{1, low[1], 0}, low, high), 40, upTo(low[1], decay(tenths(40), truth, 0, 1)), 100); err != nil || m.Parameters[1].Value != low[1] || !(m.RMS < m.Before) {
+		t.Errorf("held at the edge: %v %+v", err, m.Parameters)
+	}
+	for seed := range uint64(20) {
+		at := decay(tenths(40), truth, 0.1, seed)
+		free, _ := Match(frees([3]float64{1, 0.3, 0}, low, high), 40, at, 200)
+		m, err := Match(frees([3]float64{1, 0.3, 0}, low, high), 40, upTo(free.Parameters[1].Value, at), 200)
+		if err != nil || !(m.RMS < m.Before) || m.RMS < free.RMS*(1-1e-9) {
+			t.Errorf("seed %d: up to the edge the misfit is %g from %g, free %g", seed, m.RMS, m.Before, free.RMS)
+		}
 	}
 }
 

@@ -49,12 +49,7 @@ func runMatch(e *Evaluation, grow growing) Part {
 		}
 		return s.close(standing)
 	}
-	wanted := true
-	var err error
-	k.Matching, err = fit.Match(k.free, 2*len(k.past.time), func(values, r []float64) bool {
-		wanted = wanted && grow(k.sofar())
-		return wanted && k.deviations(values, r)
-	}, matchSteps)
+	wanted, err := k.search(grow)
 	var refused *fit.RefusedError
 	switch {
 	case !wanted:
@@ -74,6 +69,16 @@ func runMatch(e *Evaluation, grow growing) Part {
 		return s.close(Stopped)
 	}
 	return s.close(field.Status)
+}
+
+// search looks for the match, and ends at once when nobody waits for it.
+func (k *match) search(grow growing) (wanted bool, err error) {
+	wanted = true
+	k.Matching, err = fit.Match(k.free, 2*len(k.past.time), func(values, r []float64) bool {
+		wanted = wanted && grow(k.sofar())
+		return wanted && k.deviations(values, r)
+	}, matchSteps)
+	return wanted, err
 }
 
 // read takes in what is to be moved, between which bounds, and towards what.

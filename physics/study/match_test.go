@@ -197,6 +197,13 @@ func TestMatchGrowsAndIsLeft(t *testing.T) {
 	if _, done := e.parts[SheetMatch]; done || pieces != 3 {
 		t.Errorf("a match that is left after %d pieces came to its end", pieces)
 	}
+	e = (*Memory)(nil).Begin(missed())
+	e.through(SheetField)
+	k := &match{e: e}
+	k.read(newSheet(e.st))
+	if wanted, _ := k.search(func(Part) bool { return k.calls < 3 }); wanted || k.calls != 3 {
+		t.Errorf("a match that nobody waits for after 3 forecasts made %d", k.calls)
+	}
 	off := missed()
 	off.Match.Run = "off"
 	if _, asked := Run(off).Parts[SheetMatch]; asked {

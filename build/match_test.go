@@ -34,6 +34,7 @@ func TestMatchInTheBrowser(t *testing.T) {
 	p := OpenFile(t, At("#/field"))
 	p.WaitIdle()
 	p.choose([]byte(study.Write(st)))
+	p.WaitFor(`document.querySelector("#notices").textContent.includes("is open")`)
 	p.WaitIdle()
 	p.write("#in-field-history-table", table)
 	p.WaitIdle()

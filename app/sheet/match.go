@@ -36,7 +36,7 @@ func (c *Match) Render() app.UI {
 	return laid(d, m, study.SheetMatch,
 		app.Section().Class("group").Body(
 			app.H3().Text("Match"),
-			app.P().Class("help").Text("The history is pasted on the Field sheet. A match is computed when it is asked for, and again after an edit until it is stopped."),
+			app.P().Class("help").Text("The history is pasted on the Field sheet. A match is computed when it is asked for, and again after an edit of what it rests on, until it is stopped."),
 			app.Div().Class("actions").Body(
 				widget.Action(d, "match", "Match", state.Chosen{Path: "match.run", Value: "on"}, !asked),
 				widget.Action(d, "match-stop", "Stop", state.Chosen{Path: "match.run", Value: "off"}, asked),

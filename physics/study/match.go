@@ -71,13 +71,22 @@ func runMatch(e *Evaluation, grow growing) Part {
 	return s.close(field.Status)
 }
 
-// search looks for the match, and ends at once when nobody waits for it.
+// search looks for the match, and ends at once when nobody waits for it. A match of the same
+// inputs is remembered: what it does not rest on may be edited beside it.
 func (k *match) search(grow growing) (wanted bool, err error) {
+	st := k.e.st
+	on := Study{Rock: st.Rock, Fluids: st.Fluids, Front: st.Front, Field: st.Field, Match: st.Match}
+	on.Field.Money, on.Field.Limit, on.Field.WaterCut, on.Field.OilRate, on.Field.History.From = Money{}, "", nil, nil, nil
 	wanted = true
-	k.Matching, err = fit.Match(k.free, 2*len(k.past.time), func(values, r []float64) bool {
-		wanted = wanted && grow(k.sofar())
-		return wanted && k.deviations(values, r)
-	}, matchSteps)
+	k.Matching, err = recall(k.e.memory, "match", on, nil, func() (fit.Matching, error) {
+		return fit.Match(k.free, 2*len(k.past.time), func(values, r []float64) bool {
+			wanted = wanted && grow(k.sofar())
+			return wanted && k.deviations(values, r)
+		}, matchSteps)
+	})
+	if !wanted && k.e.memory != nil {
+		delete(k.e.memory.last, "match") // it came to no end
+	}
 	return wanted, err
 }
 

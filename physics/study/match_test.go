@@ -211,7 +211,38 @@ func TestMatchGrowsAndIsLeft(t *testing.T) {
 	}
 }
 
-// Layers, a pattern and a skin are matched by the same way.
+// A match is remembered until something it rests on changes; one that was left is not.
+func TestMatchIsRemembered(t *testing.T) {
+	memory := &Memory{}
+	search := func(st Study, until int) *match {
+		e := memory.Begin(st)
+		e.through(SheetField)
+		k := &match{e: e}
+		k.read(newSheet(e.st))
+		if _, err := k.search(func(Part) bool { return k.calls < until }); err != nil {
+			t.Fatal(err)
+		}
+		return k
+	}
+	st := missed()
+	search(st, 5)
+	first := search(st, 1000)
+	if first.calls < 10 {
+		t.Errorf("a match that was left is taken for a whole one: %d forecasts", first.calls)
+	}
+	beside := st
+	beside.Title, beside.Field.Limit = "other words", "oilRate"
+	put(&beside, "field.oilRate", 1, "m3/d")
+	if k := search(beside, 1000); k.calls > 0 || k.RMS != first.RMS {
+		t.Errorf("the match was made again, in %d forecasts", k.calls)
+	}
+	put(&beside, "field.length", 410, "m")
+	if k := search(beside, 1000); k.calls == 0 || k.RMS == first.RMS {
+		t.Error("the match of another field is that of the first")
+	}
+}
+
+// Layers, patterns and wells that are off at times are matched by the same way.
 func TestMatchOfLayersAndPatterns(t *testing.T) {
 	layers := flooded()
 	layers.Field.Layers.Table = "m md fraction\n4 120 0.2\n3 400 0.2\n3 900 0.22"
@@ -223,7 +254,7 @@ func TestMatchOfLayersAndPatterns(t *testing.T) {
 		path  string
 		value float64
 		span  [2]float64
-	}{"layers": {layers, "field.width", 210, [2]float64{100, 250}}, "pattern": {spot, "field.pattern.spacing", 210, [2]float64{100, 250}}, "skin": {spot, "field.uptime", 0.6, [2]float64{0.3, 1}}} {
+	}{"layers": {layers, "field.width", 210, [2]float64{100, 250}}, "pattern": {spot, "field.pattern.spacing", 210, [2]float64{100, 250}}, "uptime": {spot, "field.uptime", 0.6, [2]float64{0.3, 1}}} {
 		spec, _ := Find(c.path)
 		truth, unit := 1.0, "fraction"
 		if in := spec.Get(&c.st); in != nil {

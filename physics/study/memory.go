@@ -7,7 +7,7 @@ import (
 	"brinefront/physics/fit"
 )
 
-// Memory runs studies like Run does and keeps the last fit of each family and the last patterns of wells, for a
+// Memory runs studies like Run does and keeps the last fit of each family, the last match and the last patterns of wells, for a
 // caller that runs a study again and again with little changed: a fit depends on the
 // laboratory points and its options alone, streamtubes on the pattern alone. Results
 // are the same to the last bit.

@@ -39,12 +39,12 @@ var arrows = map[string][]string{
 
 	"physics/evidence": {
 		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
-		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
+		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/gridding", "physics/reservoir",
 		"physics/ride", "physics/regime", "physics/spread", "physics/pattern",
 	},
 	"physics/study": {
 		"physics/ref", "physics/units", "physics/numeric", "physics/relperm", "physics/capillary", "physics/fluid",
-		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/reservoir",
+		"physics/fit", "physics/fracflow", "physics/displace", "physics/imbibe", "physics/fv", "physics/gridding", "physics/reservoir",
 		"physics/ride", "physics/regime", "physics/spread", "physics/pattern",
 	},
 	"physics/report": {"physics/ref", "physics/units", "physics/study"},

@@ -50,17 +50,6 @@ function program() {
 // Blob, because a worker may not be made from a file of a folder.
 const workerAddress = URL.createObjectURL(new Blob([workerScript], { type: "text/javascript" }));
 
-function spawn(module) {
-  const worker = new Worker(workerAddress);
-  // Until somebody takes the worker over, all it can say is that it has ended.
-  worker.onmessage = ({ data }) => (worker.dead = data.dead);
-  worker.onerror = (event) => (worker.dead = `The engine stopped: ${event.message}`);
-  worker.postMessage(module);
-  return worker;
-}
-
-let spare = null; // a worker that was started before anybody asked for one
-
 function start(onReply, onDead) {
   const waiting = []; // posted before there is a worker
   let worker = null;
@@ -75,11 +64,10 @@ function start(onReply, onDead) {
 
   compiled.then((module) => {
     if (over) return;
-    worker = spare ?? spawn(module);
-    spare = null;
-    if (worker.dead) return die(worker.dead);
+    worker = new Worker(workerAddress);
     worker.onmessage = ({ data }) => (typeof data === "string" ? onReply(data) : die(data.dead));
     worker.onerror = (event) => die(`The engine stopped: ${event.message}`);
+    worker.postMessage(module);
     waiting.splice(0).forEach((text) => worker.postMessage(text));
   }).catch((fault) => die(`The engine could not be started: ${fault.message}.`));
 
@@ -95,11 +83,8 @@ function start(onReply, onDead) {
   };
 }
 
-// prepare starts the worker that the first start will get, so that the engine sets
-// itself up beside the interface; it resolves when that has begun.
-const prepare = () => compiled.then((module) => void (spare ??= spawn(module)));
-
-self.brinefrontEngine = { start, prepare };
+// ready resolves when a worker can be started without waiting.
+self.brinefrontEngine = { start, ready: compiled };
 
 let shared = null; // the worker of brinefront.run
 const asked = new Map();

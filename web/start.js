@@ -30,7 +30,7 @@ async function start() {
   const module = await compiled;
   boot.reached("Starting the engine");
   await loaded;
-  await self.brinefrontEngine.prepare();
+  await self.brinefrontEngine.ready;
   if (boot.stopped()) return;
   boot.reached("Opening the bench");
   const go = new Go();

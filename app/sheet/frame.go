@@ -61,6 +61,8 @@ func current(d widget.Desk, m state.Model) app.UI {
 		return &Soak{Desk: d, Model: m}
 	case "field":
 		return &Field{Desk: d, Model: m}
+	case "grid":
+		return &Grid{Desk: d, Model: m}
 	case "compare":
 		return &Compare{Desk: d, Model: m}
 	case "match":
@@ -116,6 +118,7 @@ var sheets = []struct{ name, title, question string }{
 	{"front", "Front", "When does water arrive, and how much oil is out by then?"},
 	{"soak", "Soak", "How much water does the rock take up by itself, and how fast?"},
 	{"field", "Field", "What does the flood make in time, and when does it stop paying?"},
+	{"grid", "Grid", "How coarse may a simulation grid be before its smearing hides the physics?"},
 	{"compare", "Compare", "What comes of it when an input is another?"},
 	{"match", "Match", "Which inputs make the forecast follow what was measured?"},
 	{"report", "Report", "Everything on paper: inputs, answers, workings, cautions."},

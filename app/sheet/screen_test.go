@@ -240,7 +240,7 @@ func TestHeadingsAreInOrder(t *testing.T) {
 }
 
 func TestDemonstrationShowsItsAnswers(t *testing.T) {
-	for _, sheet := range []string{"rock", "front", "field"} {
+	for _, sheet := range []string{"rock", "front", "field", "grid"} {
 		m := on(sheet, after())
 		p := rendered(t, m)
 		part := m.Result.Parts[study.Sheet(sheet)]
@@ -417,7 +417,7 @@ func TestFormsHoldWhatTheStudyAsksFor(t *testing.T) {
 	} {
 		m := after(choices...)
 		pages := map[study.Sheet]page{}
-		for _, sheet := range []study.Sheet{study.SheetRock, study.SheetFront, study.SheetSoak, study.SheetField} {
+		for _, sheet := range study.Sheets() {
 			pages[sheet] = rendered(t, on(string(sheet), m))
 		}
 		for _, spec := range study.Specs() {

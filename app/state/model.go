@@ -59,7 +59,7 @@ type Draft struct{ Text, Unit string }
 
 // Route is where the person is.
 type Route struct {
-	Sheet string // "rock", "front", "field", "compare", "match", "report", "evidence"
+	Sheet string // "rock", "front", "field", "grid", "compare", "match", "report", "evidence"
 	Embed bool   // one sheet without the frame
 }
 

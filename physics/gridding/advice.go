@@ -21,6 +21,8 @@ const (
 	// Extrapolated: no grid that could be afforded is within; the number follows from how the
 	// error fell from the last grid but one to the last.
 	Extrapolated How = "extrapolated"
+	// TooDear: not even the coarsest grid can be afforded; nothing was run.
+	TooDear How = "too dear"
 	// Beyond: the error did not fall on the grids that could be afforded.
 	Beyond How = "beyond"
 )
@@ -68,7 +70,10 @@ func (t Tolerance) excess(m Measured) (float64, string) {
 // where it is not nil, gets every run as it is made and ends the search by returning false.
 // Errors are those of Run.
 func (f *Flood) Advise(s Scheme, t Tolerance, affordable float64, each func(Measured) bool) (Advice, error) {
-	var a Advice
+	a := Advice{How: TooDear}
+	if f.Cost(s, coarsest, t.At) > affordable {
+		return a, nil
+	}
 	run := func(n int) (Measured, bool, error) {
 		m, err := f.Run(s, n, t.At)
 		if err != nil {
@@ -90,7 +95,7 @@ func (f *Flood) Advise(s Scheme, t Tolerance, affordable float64, each func(Meas
 			a.Worse = m
 		}
 		// One more grid when the first that is within comes at once: it may be by chance.
-		if x <= 1 && len(a.Ladder) > 1 || !more || 4*m.CellSteps > affordable {
+		if x <= 1 && len(a.Ladder) > 1 || !more || 4*f.Cost(s, n, t.At) > affordable {
 			break
 		}
 	}

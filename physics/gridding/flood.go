@@ -58,19 +58,15 @@ type Measured struct {
 // samples of a run that are kept, nearly even in Q where the steps are short enough.
 const samples = 120
 
-// New solves the displacement and makes it ready for grids. level is the water cut at the
-// outlet (reservoir conditions) at which water counts as having arrived: the first passing of
-// it, from below. Errors are those of displace.New and fv.NewLaw, or that the level is never reached.
-func New(fn fracflow.Function, injected, initial, level float64) (*Flood, error) {
-	exact, err := displace.New(fn, injected, initial)
+// New makes a displacement of fn ready for grids. level is the water cut at the outlet (reservoir
+// conditions) at which water counts as having arrived: the first passing of it, from below.
+// Errors are those of fv.NewLaw, or that the level is never reached.
+func New(exact *displace.Displacement, fn fracflow.Function, level float64) (*Flood, error) {
+	law, err := fv.NewLaw(fn, exact.Injected(), exact.Initial())
 	if err != nil {
 		return nil, err
 	}
-	law, err := fv.NewLaw(fn, injected, initial)
-	if err != nil {
-		return nil, err
-	}
-	if law, err = law.Tabulated(1024); err != nil {
+	if law, err = law.Tabulated(512); err != nil {
 		return nil, err
 	}
 	f := &Flood{Exact: exact, law: law, fn: fn, level: level}
@@ -81,6 +77,30 @@ func New(fn fracflow.Function, injected, initial, level float64) (*Flood, error)
 	f.arrival = q
 	return f, nil
 }
+
+// Cost is how many evaluations of a cell a run takes, nearly: up to q or to the arrival.
+func (f *Flood) Cost(s Scheme, n int, q float64) float64 {
+	perStep := float64(n)
+	switch {
+	case s.Implicit:
+		perStep *= 6 // rounds of Newton's method, on long steps
+	case s.Limiter != fv.None:
+		perStep *= 2 // stages
+	}
+	return perStep * math.Ceil(math.Max(q, f.arrival)/f.Step(s, n))
+}
+
+// Step is the step in Q that the scheme takes on n cells.
+func (f *Flood) Step(s Scheme, n int) float64 {
+	if s.CFL == 0 {
+		s.CFL = 0.5
+	}
+	return s.CFL / (float64(n) * f.Fastest())
+}
+
+// Fastest is the largest slope of f between the injected and the initial state: the speed that
+// CFL counts with.
+func (f *Flood) Fastest() float64 { return f.law.Fastest(f.Exact.Injected(), f.Exact.Initial()) }
 
 // Arrival is the exact Q at which the level is reached.
 func (f *Flood) Arrival() float64 { return f.arrival }
@@ -123,7 +143,7 @@ func (f *Flood) implicit(s Scheme, n int, q float64) (Measured, error) {
 	inlet, open := f.Exact.InletFace()
 	run, err := fv.NewImplicit(fv.Medium{Law: f.law}, fv.ImplicitSettings{
 		Cells: n, Initial: f.Exact.Initial(), Through: 1, Inlet: fv.End{Kind: fv.Fed, State: inlet, Share: open}, Outlet: fv.End{Kind: fv.Open},
-		Step: s.CFL / (float64(n) * f.law.Fastest(f.Exact.Injected(), f.Exact.Initial())),
+		Step: f.Step(s, n),
 	})
 	if err != nil {
 		return Measured{}, err

@@ -5,6 +5,7 @@ import (
 	"math/rand/v2"
 	"testing"
 
+	"brinefront/physics/displace"
 	"brinefront/physics/fracflow"
 	"brinefront/physics/fv"
 	"brinefront/physics/relperm"
@@ -30,11 +31,19 @@ func straightFlow() fracflow.Flow {
 func newFlood(t testing.TB, flow fracflow.Flow, level float64) *Flood {
 	t.Helper()
 	lo, hi := flow.Ends()
-	f, err := New(flow, hi, lo, level)
+	f, err := newOn(flow, hi, lo, level)
 	if err != nil {
 		t.Fatal(err)
 	}
 	return f
+}
+
+func newOn(flow fracflow.Flow, injected, initial, level float64) (*Flood, error) {
+	d, err := displace.New(flow, injected, initial)
+	if err != nil {
+		return nil, err
+	}
+	return New(d, flow, level)
 }
 
 func runOn(t testing.TB, f *Flood, s Scheme, n int, q float64) Measured {
@@ -126,6 +135,9 @@ func TestAdvice(t *testing.T) {
 			t.Fatal(err)
 		}
 		m := a.Measured
+		if cost := f.Cost(m.Scheme, m.Cells, tolerance.At); math.Abs(cost/m.CellSteps-1) > 0.05 && !m.Scheme.Implicit {
+			t.Errorf("trial %d: a run of %g cell steps, expected %g", trial, m.CellSteps, cost)
+		}
 		within := func(m Measured) bool {
 			return math.Abs(m.ArrivalError) <= tolerance.Arrival && math.Abs(m.RecoveryError) <= tolerance.Recovery
 		}
@@ -152,6 +164,15 @@ func TestExtrapolatedAdvice(t *testing.T) {
 	t.Logf("%d cells from %d at order %.2f: %g", a.Cells, a.Measured.Cells, a.Order, m.ArrivalError)
 	near(t, "error", math.Abs(m.ArrivalError), 0.006, 0.0006)
 	near(t, "cost", a.CellSteps, m.CellSteps, 0.02*m.CellSteps)
+}
+
+// Where not even five cells can be afforded nothing is run, and that is said.
+func TestTooDear(t *testing.T) {
+	f := newFlood(t, waterflood(), 0.01)
+	a, err := f.Advise(Scheme{}, Tolerance{Arrival: 0.05, At: 1}, 100, nil)
+	if err != nil || a.How != TooDear || a.Cells != 0 || len(a.Ladder) != 0 {
+		t.Errorf("%+v, %v", a, err)
+	}
 }
 
 // The search ends when it is told to.
@@ -199,8 +220,8 @@ func TestPseudos(t *testing.T) {
 
 func TestRefusals(t *testing.T) {
 	flow := waterflood()
-	for _, c := range [][3]float64{{0.213, 0.7, 0.5}, {0.763, 0.213, 1.5}, {0.763, 0.213, -1}, {0.5, 0.5, 0.01}, {2, 0.213, 0.01}} {
-		if _, err := New(flow, c[0], c[1], c[2]); err == nil {
+	for _, c := range [][3]float64{{0.213, 0.7, 0.5}, {0.763, 0.213, 1.5}, {0.763, 0.213, -1}, {0.5, 0.5, 0.01}} {
+		if _, err := newOn(flow, c[0], c[1], c[2]); err == nil {
 			t.Errorf("injected %g, initial %g, level %g", c[0], c[1], c[2])
 		}
 	}

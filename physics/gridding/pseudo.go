@@ -53,12 +53,13 @@ func (f *Flood) Pseudos(s Scheme, blocks, perBlock int, q float64) (Pseudos, err
 		for b := range p.Blocks {
 			part := cells[b*perBlock : (b+1)*perBlock]
 			s, c := mean(part), &p.Blocks[b]
+			k := len(c.S)
+			if k > 0 && !(s > c.S[k-1]+step) {
+				continue
+			}
 			// The flux of the outlet face in a step is f of the cell before it.
 			out, _ := f.fn.At(part[perBlock-1])
-			if k := len(c.S); k > 0 {
-				if !(s > c.S[k-1]+step) {
-					continue
-				}
+			if k > 0 {
 				out = math.Max(out, c.F[k-1])
 			}
 			c.S, c.F = append(c.S, s), append(c.F, out)
@@ -77,8 +78,9 @@ func (f *Flood) Pseudos(s Scheme, blocks, perBlock int, q float64) (Pseudos, err
 	p.Fine = f.measure(run, Scheme{CFL: 0.5}, n, q, func(to float64, each func(float64)) {
 		run.Advance(to, func(r *fv.Run) bool { note(r); each(r.Q()); return true })
 	})
+	p.Fine.CellSteps = float64(p.Fine.Steps) * float64(n)
 	// On, until the last block has seen what it will: then the curve goes on to its end.
-	run.Advance(math.Max(q, 3), func(r *fv.Run) bool { note(r); return true })
+	run.Advance(math.Max(q, 2), func(r *fv.Run) bool { note(r); return true })
 	laws := make([]*fv.Law, blocks)
 	for b := range p.Blocks {
 		c := &p.Blocks[b]

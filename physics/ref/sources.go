@@ -38,10 +38,12 @@ const (
 	Hovdan1986           ID = "hovdan-1986"
 	IAPWSIF97            ID = "iapws-if97"
 	IAPWSR12             ID = "iapws-r12-08"
+	Jenny2009            ID = "jenny-2009"
 	JohansenWinther1988  ID = "johansen-winther-1988"
 	Kazemi1976           ID = "kazemi-1976"
 	Kazemi1992           ID = "kazemi-gilman-elsharkawy-1992"
 	KreftZuber1978       ID = "kreft-zuber-1978"
+	KyteBerry1975        ID = "kyte-berry-1975"
 	Kuznetsov1976        ID = "kuznetsov-1976"
 	Lake1989             ID = "lake-1989"
 	Land1968             ID = "land-1968"
@@ -83,6 +85,7 @@ const (
 	ShuOsher1988         ID = "shu-osher-1988"
 	Skjaeveland2000      ID = "skjaeveland-2000"
 	Stiles1949           ID = "stiles-1949"
+	Stone1991            ID = "stone-1991"
 	Sweby1984            ID = "sweby-1984"
 	TakahasiMori1974     ID = "takahasi-mori-1974"
 	VanGenuchten1980     ID = "van-genuchten-1980"
@@ -112,6 +115,7 @@ var sources = map[ID]Source{
 	Hearn1971:            {Authors: "Hearn", Year: 1971, Title: "Simulation of stratified waterflooding by pseudo relative permeability curves", Where: "J. Pet. Technol. 23(7), 805-813"},
 	IAPWSIF97:            {Authors: "IAPWS", Year: 2012, Title: "Revised Release on the IAPWS Industrial Formulation 1997 for the Thermodynamic Properties of Water and Steam", Where: "IAPWS R7-97"},
 	IAPWSR12:             {Authors: "IAPWS", Year: 2008, Title: "Release on the IAPWS Formulation 2008 for the Viscosity of Ordinary Water Substance", Where: "IAPWS R12-08"},
+	Jenny2009:            {Authors: "Jenny, Tchelepi & Lee", Year: 2009, Title: "Unconditionally convergent nonlinear solver for hyperbolic conservation laws with S-shaped flux functions", Where: "J. Comput. Phys. 228(20), 7497-7512"},
 	JohansenWinther1988:  {Authors: "Johansen & Winther", Year: 1988, Title: "The solution of the Riemann problem for a hyperbolic system of conservation laws modeling polymer flooding", Where: "SIAM J. Math. Anal. 19(3), 541-566"},
 	Kazemi1976:           {Authors: "Kazemi, Merrill, Porterfield & Zeman", Year: 1976, Title: "Numerical simulation of water-oil flow in naturally fractured reservoirs", Where: "SPE J. 16(6), 317-326"},
 	Kazemi1992:           {Authors: "Kazemi, Gilman & Elsharkawy", Year: 1992, Title: "Analytical and numerical solution of oil recovery from fractured reservoirs with empirical transfer functions", Where: "SPE Reserv. Eng. 7(2), 219-227"},
@@ -164,6 +168,8 @@ var sources = map[ID]Source{
 	Godunov1959:          {Authors: "Godunov", Year: 1959, Title: "A difference method for numerical calculation of discontinuous solutions of the equations of hydrodynamics", Where: "Mat. Sbornik 47(89)(3), 271-306"},
 	GolubVanLoan2013:     {Authors: "Golub & Van Loan", Year: 2013, Title: "Matrix Computations", Where: "4th ed., Johns Hopkins University Press, secs. 4.2, 8.5"},
 	Hovdan1986:           {Authors: "Hovdan", Year: 1986, Title: "Water injection: incompressible analytical solution with temperature effects", Where: "Technical Report MH-1/86, Statoil"},
+	KyteBerry1975:        {Authors: "Kyte & Berry", Year: 1975, Title: "New pseudo functions to control numerical dispersion", Where: "SPE J. 15(4), 269-276"},
+	Stone1991:            {Authors: "Stone", Year: 1991, Title: "Rigorous black oil pseudo functions", Where: "SPE 21207"},
 	Kuznetsov1976:        {Authors: "Kuznetsov", Year: 1976, Title: "Accuracy of some approximate methods for computing the weak solutions of a first-order quasi-linear equation", Where: "USSR Comput. Math. Math. Phys. 16(6), 105-119"},
 	Neumaier1974:         {Authors: "Neumaier", Year: 1974, Title: "Rundungsfehleranalyse einiger Verfahren zur Summation endlicher Summen", Where: "Z. Angew. Math. Mech. 54(1), 39-51"},
 	Osher1984:            {Authors: "Osher", Year: 1984, Title: "Riemann solvers, the entropy condition, and difference approximations", Where: "SIAM J. Numer. Anal. 21(2), 217-235"},

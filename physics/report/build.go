@@ -13,7 +13,7 @@ var parts = []struct {
 	sheet study.Sheet
 	title string
 }{
-	{study.SheetRock, "Rock"}, {study.SheetFront, "Front"}, {study.SheetSoak, "Soak"}, {study.SheetField, "Field"}, {study.SheetCompare, "Compare"}, {study.SheetMatch, "Match"},
+	{study.SheetRock, "Rock"}, {study.SheetFront, "Front"}, {study.SheetSoak, "Soak"}, {study.SheetField, "Field"}, {study.SheetGrid, "Grid"}, {study.SheetCompare, "Compare"}, {study.SheetMatch, "Match"},
 }
 
 // Cautions are the usual ones of a screening-level answer; every report ends with them.

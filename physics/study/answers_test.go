@@ -61,7 +61,7 @@ func TestQuadraticCurvesGiveTheClosedForm(t *testing.T) {
 	for _, m := range []float64{0.5, 1, 2, 5, 10, 73} {
 		root := math.Sqrt(1 + m)
 		sw, speed := 1/root, (1+root)/2
-		r := Run(typed([6]float64{0, 0, 1, 1, 2, 2}, 1e-3, m*1e-3))
+		r := withoutGrid(typed([6]float64{0, 0, 1, 1, 2, 2}, 1e-3, m*1e-3))
 		expect(t, r, 1e-12, map[string]float64{
 			"front.shockSaturation": sw, "front.speed": speed, "front.breakthrough": 1 / speed,
 			"front.recoveryAtBreakthrough": 1 / speed, "front.recoveryAtBreakthroughInPlace": 1 / speed, "front.averageAtBreakthrough": 1 / speed,
@@ -94,7 +94,7 @@ func TestIndependentDisplacements(t *testing.T) {
 		block(&st)
 		put(&st, "field.rate", 100, "m3/d")
 		put(&st, "field.waterCut", 95, "%")
-		r := Run(st)
+		r := withoutGrid(st)
 		expect(t, r, 1e-9, c.front)
 		expect(t, r, 1e-7, map[string]float64{"field.limitInjected": c.limit, "field.recoveryAtLimit": c.end})
 	}
@@ -119,7 +119,7 @@ func TestIndependentPressureDrive(t *testing.T) {
 	put(&st, "field.waterCut", 95, "%")
 	for _, uptime := range []float64{1, 0.8} {
 		put(&st, "field.uptime", uptime, "fraction")
-		r := Run(st)
+		r := withoutGrid(st)
 		expect(t, r, 1e-10, map[string]float64{"field.breakthrough": 50633742.53799751 / uptime, "field.injectedAtBreakthrough": 0.3579910356864853})
 		history, ok := line(r.Parts[SheetField], "field.cumulative", "injection")
 		if !ok {
@@ -182,7 +182,7 @@ func TestFieldByHand(t *testing.T) {
 	d := sw*sw + (1-sw)*(1-sw)/2
 	limit := d * d / (sw * (1 - sw))
 	recovery := sw + (1-f)*limit
-	expect(t, Run(st), 1e-10, map[string]float64{
+	expect(t, withoutGrid(st), 1e-10, map[string]float64{
 		"field.poreVolume": pv, "field.oilInPlace": pv / 1.31, "field.timePerPoreVolume": pv / (rate * 0.91),
 		"field.breakthrough": q * pv / (rate * 0.91), "field.oilAtBreakthrough": q * pv / 1.31,
 		"field.startOilRate": rate * 0.91 / 1.31, "field.startRate": rate * 0.91, "field.peakOilRate": rate * 0.91 / 1.31,
@@ -202,7 +202,7 @@ func TestOilRateLimitIsAWaterCutAtConstantRate(t *testing.T) {
 	put(&st, "field.uptime", 100, "%")
 	put(&st, "field.oilRate", 50, "bbl/d")
 	put(&st, "fluids.oilFormationFactor", 1.25, "rb/stb")
-	expect(t, Run(st), 1e-10, map[string]float64{"field.limitCut": 1 - 50*1.25/1000})
+	expect(t, withoutGrid(st), 1e-10, map[string]float64{"field.limitCut": 1 - 50*1.25/1000})
 }
 
 // kr relative to ko(Swi) multiplies both curves by ko/k: fractional flow, and all of
@@ -210,9 +210,9 @@ func TestOilRateLimitIsAWaterCutAtConstantRate(t *testing.T) {
 func TestReferencePermeability(t *testing.T) {
 	st := Demo()
 	st.Field.Drive = "pressure"
-	oil := Run(st)
+	oil := withoutGrid(st)
 	st.Rock.Reference = "absolute"
-	absolute := Run(st)
+	absolute := withoutGrid(st)
 	value := func(r Result, sheet Sheet, id string) float64 {
 		f, ok := r.Parts[sheet].Figure(id)
 		if !ok {
@@ -238,7 +238,7 @@ func TestReferencePermeability(t *testing.T) {
 func TestFitThroughExactPointsAnswersAsTheCurveTyped(t *testing.T) {
 	corey := [6]float64{0.18, 0.22, 0.41, 0.83, 2.6, 3.1}
 	st := typed(corey, 0.6e-3, 3.7e-3)
-	want := Run(st)
+	want := withoutGrid(st)
 	table := &Table{}
 	for i := range 15 {
 		s := float64(i) / 14
@@ -249,7 +249,7 @@ func TestFitThroughExactPointsAnswersAsTheCurveTyped(t *testing.T) {
 	st.Rock.Table, st.Rock.Curve = table, "corey-fit"
 	for _, id := range []string{"front.breakthrough", "front.shockSaturation", "front.recoveryAtOne", "front.frontMobility"} {
 		f, _ := want.Parts[SheetFront].Figure(id)
-		expect(t, Run(st), 1e-7, map[string]float64{id: f.Value})
+		expect(t, withoutGrid(st), 1e-7, map[string]float64{id: f.Value})
 	}
 }
 
@@ -257,7 +257,7 @@ func TestFitThroughExactPointsAnswersAsTheCurveTyped(t *testing.T) {
 // an authority: a change of them is to be meant.
 func TestDemoFigures(t *testing.T) {
 	var b strings.Builder
-	r := Run(Demo())
+	r := withoutGrid(Demo())
 	for _, sheet := range []Sheet{SheetRock, SheetFront, SheetField} {
 		for _, f := range r.Parts[sheet].Figures {
 			fmt.Fprintf(&b, "%s %.6g\n", f.ID, f.Value)

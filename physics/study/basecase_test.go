@@ -50,7 +50,7 @@ func TestEndPointMobilityIsThatOfTheCurve(t *testing.T) {
 		st := viscousOil()
 		put(&st, "front.initialWater", states[0], "fraction")
 		put(&st, "front.injectedWater", states[1], "fraction")
-		expect(t, Run(st), 1e-14, map[string]float64{"front.endPointMobility": 10.0 / 3})
+		expect(t, withoutGrid(st), 1e-14, map[string]float64{"front.endPointMobility": 10.0 / 3})
 	}
 }
 
@@ -58,12 +58,12 @@ func TestEndPointMobilityIsThatOfTheCurve(t *testing.T) {
 // Where both flow on one side of the interface the formula does not hold, and neither
 // it nor the critical rate is told.
 func TestFlowApartNeedsOnePhaseOnEachSide(t *testing.T) {
-	expect(t, Run(viscousOil()), 1e-13, map[string]float64{"front.apartBreakthrough": 0.55 * 0.3})
+	expect(t, withoutGrid(viscousOil()), 1e-13, map[string]float64{"front.apartBreakthrough": 0.55 * 0.3})
 	for path, sw := range map[string]float64{"front.initialWater": 0.55, "front.injectedWater": 0.6} {
 		st := viscousOil()
 		dips(&st, 5)
 		put(&st, path, sw, "fraction")
-		p := Run(st).Parts[SheetFront]
+		p := withoutGrid(st).Parts[SheetFront]
 		for _, id := range []string{"front.apartBreakthrough", "front.criticalVelocity", "front.gravityNumber", "front.interface"} {
 			if f, told := p.Figure(id); told {
 				t.Errorf("%s %g: %s is told as %g", path, sw, id, f.Value)
@@ -82,7 +82,7 @@ func TestOilLeavingAtTheInjector(t *testing.T) {
 	st := viscousOil()
 	dips(&st, -30)
 	put(&st, "field.rate", 1, "m3/d")
-	p := Run(st).Parts[SheetFront]
+	p := withoutGrid(st).Parts[SheetFront]
 	e := evaluated(st)
 	face, inlet := e.front.displacement.InletFace()
 	if inlet <= 1 {
@@ -96,19 +96,19 @@ func TestOilLeavingAtTheInjector(t *testing.T) {
 	last := len(pore.Y) - 1
 	near(t, "share of the movable oil", movable.Y[last]*endless, pore.Y[last], 1e-3)
 	for _, sheet := range []Sheet{SheetFront, SheetField} {
-		if text := sentenceOf(Run(st).Parts[sheet]); strings.Contains(text, "produced") {
+		if text := sentenceOf(withoutGrid(st).Parts[sheet]); strings.Contains(text, "produced") {
 			t.Errorf("%s: %q", sheet, text)
 		}
 	}
-	oil, ok := Run(st).Parts[SheetField].Figure("field.oilAtBreakthrough")
+	oil, ok := withoutGrid(st).Parts[SheetField].Figure("field.oilAtBreakthrough")
 	if !ok || !strings.Contains(oil.Working.Method, "less the oil that left at the injector") {
 		t.Errorf("oil produced (%v): %q", ok, oil.Working.Method)
 	}
 	st.Cases = []Case{{Name: "thick", Set: map[string]Input{"fluids.oilViscosity": {Value: 6, Unit: "cp"}}}}
-	if text := sentenceOf(Run(st).Parts[SheetCompare]); !strings.Contains(text, "displaced") || strings.Contains(text, "produced") {
+	if text := sentenceOf(withoutGrid(st).Parts[SheetCompare]); !strings.Contains(text, "displaced") || strings.Contains(text, "produced") {
 		t.Errorf("compared: %q", text)
 	}
-	expect(t, Run(viscousOil()), 1e-14, map[string]float64{"front.injectedWater": 0.75, "front.movable": 0.55})
+	expect(t, withoutGrid(viscousOil()), 1e-14, map[string]float64{"front.injectedWater": 0.75, "front.movable": 0.55})
 }
 
 // Up a steep dip at next to no rate the mobile water falls back: the answer speaks of no
@@ -118,7 +118,7 @@ func TestWaterThatFallsBackDoesNotArrive(t *testing.T) {
 	dips(&st, 90)
 	put(&st, "field.rate", 0.5, "m3/d")
 	put(&st, "front.initialWater", 0.5, "fraction")
-	r := Run(st)
+	r := withoutGrid(st)
 	text := sentenceOf(r.Parts[SheetFront])
 	if cut := value(t, r.Parts[SheetFront], "front.cutAtBreakthrough"); cut > 0 && !strings.Contains(text, "jumps") || cut <= 0 && strings.Contains(text, "jumps") {
 		t.Errorf("with a cut of %g behind the front: %q", cut, text)
@@ -137,7 +137,7 @@ func TestMobileWaterDoesNotArrive(t *testing.T) {
 		st := viscousOil()
 		put(&st, "front.initialWater", swi, "fraction")
 		st.Cases = []Case{{Name: "thick", Set: map[string]Input{"fluids.oilViscosity": {Value: 6, Unit: "cp"}}}}
-		for sheet, p := range Run(st).Parts {
+		for sheet, p := range withoutGrid(st).Parts {
 			if sheet == SheetRock {
 				continue
 			}
@@ -156,7 +156,7 @@ func TestNoStepNoFront(t *testing.T) {
 	st := viscousOil()
 	put(&st, "rock.corey.nw", 1, "")
 	put(&st, "rock.corey.no", 1, "")
-	p := Run(st).Parts[SheetFront]
+	p := withoutGrid(st).Parts[SheetFront]
 	for _, f := range p.Figures {
 		if strings.Contains(f.Label, "behind the front") {
 			t.Errorf("%s is labelled %q", f.ID, f.Label)
@@ -177,9 +177,9 @@ func TestLimitBeforeBreakthrough(t *testing.T) {
 	put(&st, "fluids.oilViscosity", 0.5, "cp")
 	put(&st, "field.pressure", 50, "bar")
 	put(&st, "field.oilRate", 1, "m3/d")
-	start := value(t, Run(st).Parts[SheetField], "field.startOilRate")
+	start := value(t, withoutGrid(st).Parts[SheetField], "field.startOilRate")
 	put(&st, "field.oilRate", start/2, "m3/s")
-	p := Run(st).Parts[SheetField]
+	p := withoutGrid(st).Parts[SheetField]
 	q, bt := value(t, p, "field.limitInjected"), value(t, p, "field.injectedAtBreakthrough")
 	if q >= bt {
 		t.Fatalf("the limit comes after %g PV, breakthrough after %g", q, bt)
@@ -206,7 +206,7 @@ func TestIntegralOfTheResistanceIsATerm(t *testing.T) {
 	st := viscousOil()
 	st.Field.Drive = "pressure"
 	put(&st, "field.pressure", 50, "bar")
-	p := Run(st).Parts[SheetField]
+	p := withoutGrid(st).Parts[SheetField]
 	l := evaluated(st).front.linear
 	for id, volume := range map[string]string{"field.breakthrough": "field.injectedAtBreakthrough", "field.limitTime": "field.limitInjected"} {
 		f, _ := p.Figure(id)
@@ -243,7 +243,7 @@ func TestSymbolsMeanOneThing(t *testing.T) {
 		claim(spec.Symbol, path)
 	}
 	for _, sheet := range []Sheet{SheetFront, SheetField} {
-		for _, f := range Run(st).Parts[sheet].Figures {
+		for _, f := range withoutGrid(st).Parts[sheet].Figures {
 			if f.ID == "field.uptime" || f.ID == "front.velocity" {
 				claim(f.Symbol, f.ID)
 			}
@@ -256,7 +256,7 @@ func TestSymbolsMeanOneThing(t *testing.T) {
 func TestLimitInsideTheJump(t *testing.T) {
 	st := viscousOil()
 	put(&st, "field.waterCut", 0.95, "%")
-	p := Run(st).Parts[SheetField]
+	p := withoutGrid(st).Parts[SheetField]
 	if n, ok := noteOf(p, "field.limitInJump"); !ok || !strings.Contains(n.Text, "Was 95 % meant?") {
 		t.Errorf("%+v", n)
 	}
@@ -264,7 +264,7 @@ func TestLimitInsideTheJump(t *testing.T) {
 		t.Errorf("%q", text)
 	}
 	put(&st, "field.waterCut", 95, "%")
-	p = Run(st).Parts[SheetField]
+	p = withoutGrid(st).Parts[SheetField]
 	if n, raised := noteOf(p, "field.limitInJump"); raised {
 		t.Errorf("%+v", n)
 	}
@@ -281,7 +281,7 @@ func TestGravityHoldsTheFront(t *testing.T) {
 	held := false
 	for _, rate := range []float64{0.2, 1, 5, 20, 100} {
 		put(&st, "field.rate", rate, "m3/d")
-		p := Run(st).Parts[SheetFront]
+		p := withoutGrid(st).Parts[SheetFront]
 		stability, _ := noteOf(p, "front.dipStability")
 		_, unstable := noteOf(p, "front.unstable")
 		_, holds := noteOf(p, "front.gravityHolds")
@@ -300,7 +300,7 @@ func TestGravityHoldsTheFront(t *testing.T) {
 func TestUnusualValuesAreAskedBackAbout(t *testing.T) {
 	unusual := func(st Study) []string {
 		var list []string
-		for _, p := range Run(st).Parts {
+		for _, p := range withoutGrid(st).Parts {
 			for _, n := range p.Notes {
 				if strings.HasPrefix(n.ID, "unusual.") {
 					list = append(list, n.Text)
@@ -348,7 +348,7 @@ func TestUnusualValuesAreAskedBackAbout(t *testing.T) {
 func TestGasHasItsOwnPractice(t *testing.T) {
 	st := viscousOil()
 	st.Fluids.Pair = "gas-oil"
-	r := Run(st)
+	r := withoutGrid(st)
 	for sheet, p := range r.Parts {
 		for _, text := range append(textsOf(p), sentenceOf(p)) {
 			if strings.Contains(text, "of the liquid in place") || strings.Contains(text, "of the oil in place") && !strings.HasPrefix(text, "Nothing is told") {
@@ -381,7 +381,7 @@ func TestBrineTellsWhatPressureDoes(t *testing.T) {
 		st := viscousOil()
 		st.Fluids.WaterViscosity = nil
 		put(&st, "fluids.temperature", celsius, "degC")
-		n, _ := noteOf(Run(st).Parts[SheetFront], "front.brinePressure")
+		n, _ := noteOf(withoutGrid(st).Parts[SheetFront], "front.brinePressure")
 		return n.Cause
 	}
 	if warm, hot := cause(80), cause(250); !strings.Contains(warm, "density by 0.43 %") || !strings.Contains(hot, "density by 1.2 %") {
@@ -394,11 +394,11 @@ func TestBrineTellsWhatPressureDoes(t *testing.T) {
 func TestVelocityOfTheCapillaryNumberIsCompared(t *testing.T) {
 	st := viscousOil()
 	put(&st, "front.velocity", 1, "m/d")
-	if n, told := noteOf(Run(st).Parts[SheetFront], "front.velocityDiffers"); told {
+	if n, told := noteOf(withoutGrid(st).Parts[SheetFront], "front.velocityDiffers"); told {
 		t.Errorf("a velocity that counts for nothing: %+v", n)
 	}
 	put(&st, "fluids.tension", 20, "mN/m")
-	if _, told := noteOf(Run(st).Parts[SheetFront], "front.velocityDiffers"); !told {
+	if _, told := noteOf(withoutGrid(st).Parts[SheetFront], "front.velocityDiffers"); !told {
 		t.Error("nothing is said")
 	}
 }
@@ -406,15 +406,15 @@ func TestVelocityOfTheCapillaryNumberIsCompared(t *testing.T) {
 // Rates at constant pressure are not steady before breakthrough.
 func TestRecoveryIsSteadyAtConstantRateOnly(t *testing.T) {
 	st := viscousOil()
-	summary := func() string { return chartOf(t, Run(st).Parts[SheetField], "field.recovery").Summary }
+	summary := func() string { return chartOf(t, withoutGrid(st).Parts[SheetField], "field.recovery").Summary }
 	if !strings.Contains(summary(), "steady") {
 		t.Errorf("%q", summary())
 	}
 	st.Field.Drive = "pressure"
 	put(&st, "field.pressure", 50, "bar")
-	line := must(t, Run(st).Parts[SheetField], "field.recovery", "pore")
+	line := must(t, withoutGrid(st).Parts[SheetField], "field.recovery", "pore")
 	early, late := line.Y[2]/line.X[2], math.NaN()
-	bt := value(t, Run(st).Parts[SheetField], "field.breakthrough")
+	bt := value(t, withoutGrid(st).Parts[SheetField], "field.breakthrough")
 	for i, x := range line.X {
 		if x <= bt {
 			late = line.Y[i] / x
@@ -432,7 +432,7 @@ func TestRecoveryIsSteadyAtConstantRateOnly(t *testing.T) {
 // mobility.
 func TestRoundedEndsAreImmobile(t *testing.T) {
 	for _, sor := range []float64{0.284, 0.237, 0.171, 0.3, 0.1} {
-		p := Run(typed([6]float64{0.213, sor, 0.3, 0.9, 3, 1}, 0.5e-3, 5e-3)).Parts[SheetFront]
+		p := withoutGrid(typed([6]float64{0.213, sor, 0.3, 0.9, 3, 1}, 0.5e-3, 5e-3)).Parts[SheetFront]
 		if _, told := p.Figure("front.apartBreakthrough"); !told {
 			t.Errorf("Sor = %g: no oil flows behind, yet flow apart is left out", sor)
 		}
@@ -448,7 +448,7 @@ func TestFormulasOfGravityReadAsMeant(t *testing.T) {
 	st := viscousOil()
 	dips(&st, 40)
 	put(&st, "field.rate", 1, "m3/d")
-	p := Run(st).Parts[SheetFront]
+	p := withoutGrid(st).Parts[SheetFront]
 	cut, _ := p.Figure("front.cutAtBreakthrough")
 	if !strings.HasPrefix(cut.Working.Formula, "{fwf} = (1 - ") {
 		t.Errorf("%q", cut.Working.Formula)
@@ -461,11 +461,11 @@ func TestFormulasOfGravityReadAsMeant(t *testing.T) {
 // A rate through rock that hardly lets it is asked back about.
 func TestPressureBeyondAnyWell(t *testing.T) {
 	st := viscousOil()
-	if n, told := noteOf(Run(st).Parts[SheetField], "field.pressureHuge"); told {
+	if n, told := noteOf(withoutGrid(st).Parts[SheetField], "field.pressureHuge"); told {
 		t.Errorf("%+v", n)
 	}
 	put(&st, "field.permeability", 1e-3, "md")
-	if _, told := noteOf(Run(st).Parts[SheetField], "field.pressureHuge"); !told {
+	if _, told := noteOf(withoutGrid(st).Parts[SheetField], "field.pressureHuge"); !told {
 		t.Error("nothing is said")
 	}
 }

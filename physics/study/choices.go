@@ -109,6 +109,7 @@ var choiceFields = []choiceField{
 	{"match.second", Matchable, func(s *Study) *string { return &s.Match.Second }},
 	{"match.third", Matchable, func(s *Study) *string { return &s.Match.Third }},
 	{"match.fourth", Matchable, func(s *Study) *string { return &s.Match.Fourth }},
+	{"grid.scheme", Schemes, func(s *Study) *string { return &s.Grid.Scheme }},
 }
 
 // usual is a study in which every choice stands at the first of its list.

@@ -43,7 +43,7 @@ func TestCasesOfQuadraticCurvesGiveTheClosedForm(t *testing.T) {
 		{Name: "thin water", Set: map[string]Input{"fluids.waterViscosity": {Value: 0.25, Unit: "cp"}}},
 		{Name: "both", Set: map[string]Input{"fluids.oilViscosity": {Value: 1, Unit: "cp"}, "fluids.waterViscosity": {Value: 0.002, Unit: "Pa.s"}}},
 	}
-	p := Run(st).Parts[SheetCompare]
+	p := withoutGrid(st).Parts[SheetCompare]
 	if p.Status != Ready {
 		t.Fatalf("%s: %v %v", p.Status, p.Missing, p.Notes)
 	}
@@ -95,7 +95,7 @@ func TestEveryCaseIsAStudyOfItsOwn(t *testing.T) {
 func sameAsStudy(t *testing.T, st Study) {
 	t.Helper()
 	c := st.Cases[0]
-	got, want := Run(st).Parts[SheetCompare], Run(c.On(st))
+	got, want := withoutGrid(st).Parts[SheetCompare], withoutGrid(c.On(st))
 	if want.Parts[SheetFront].Status != Ready {
 		if len(got.Notes) == 0 {
 			t.Errorf("%s has no answer and does not say why", c.Name)
@@ -139,7 +139,7 @@ func TestCasesThatCannotAnswerSayWhy(t *testing.T) {
 		{Name: "other limit", Choose: map[string]string{"field.limit": "oilRate"}},
 		{Name: "the same"},
 	}
-	r := Run(st)
+	r := withoutGrid(st)
 	p := r.Parts[SheetCompare]
 	if len(r.Problems) > 0 || r.Parts[SheetField].Status != Ready {
 		t.Errorf("a case keeps the base from answering: %v", r.Problems)
@@ -171,10 +171,10 @@ func TestCompareWaitsForTheBase(t *testing.T) {
 	st := Demo()
 	st.Fluids.OilViscosity = nil
 	st.Cases = []Case{{Name: "x", Set: map[string]Input{"fluids.oilViscosity": {Value: 3, Unit: "cp"}}}}
-	if p := Run(st).Parts[SheetCompare]; p.Status != Waiting || !slices.Equal(p.Missing, []string{"fluids.oilViscosity"}) {
+	if p := withoutGrid(st).Parts[SheetCompare]; p.Status != Waiting || !slices.Equal(p.Missing, []string{"fluids.oilViscosity"}) {
 		t.Errorf("%s, missing %v", p.Status, p.Missing)
 	}
-	if _, ok := Run(Demo()).Parts[SheetCompare]; ok {
+	if _, ok := withoutGrid(Demo()).Parts[SheetCompare]; ok {
 		t.Error("a study without cases is compared")
 	}
 }
@@ -183,7 +183,7 @@ func TestCompareWaitsForTheBase(t *testing.T) {
 func TestCompareAnswer(t *testing.T) {
 	st := withCases()
 	var b strings.Builder
-	p := Run(st).Parts[SheetCompare]
+	p := withoutGrid(st).Parts[SheetCompare]
 	for _, phrase := range p.Answer {
 		b.WriteString(phrase.Text)
 		if f, ok := p.Figure(phrase.Figure); ok {
@@ -204,7 +204,7 @@ func TestCompareAnswer(t *testing.T) {
 func TestCaseOfAnotherRate(t *testing.T) {
 	st := Demo()
 	st.Cases = []Case{{Name: "twice as fast", Set: map[string]Input{"field.rate": {Value: 1920, Unit: "bbl/d"}}}}
-	p := Run(st).Parts[SheetCompare]
+	p := withoutGrid(st).Parts[SheetCompare]
 	row, base := comparedRow(t, p, "compare.limit", "twice as fast"), comparedRow(t, p, "compare.limit", BaseCase)
 	near(t, "limit at twice the rate", row["tlim"], base["tlim"]/2, 1e-9*base["tlim"])
 	near(t, "breakthrough at twice the rate", row["tbt"], base["tbt"]/2, 1e-9*base["tbt"])
@@ -217,9 +217,9 @@ func TestCaseOfAnotherRate(t *testing.T) {
 func TestCaseOfPolymer(t *testing.T) {
 	st := Demo()
 	st.Cases = []Case{{Name: "polymer", Choose: map[string]string{"front.rider.kind": "polymer"}, Set: map[string]Input{"front.rider.viscosity": {Value: 9, Unit: "cp"}}}}
-	r := Run(st)
+	r := withoutGrid(st)
 	p, alone := r.Parts[SheetCompare], r.Parts[SheetFront]
-	with := Run(st.Cases[0].On(st)).Parts[SheetFront]
+	with := withoutGrid(st.Cases[0].On(st)).Parts[SheetFront]
 	polymer, ok := with.Figure("front.ride.recoveryAtOne")
 	water, _ := alone.Figure("front.recoveryAtOne")
 	if !ok || polymer.Value <= water.Value {
@@ -252,7 +252,7 @@ func TestNamesOfCasesAreKept(t *testing.T) {
 		st := Demo()
 		st.Fluids.Pair = pair.Value
 		st.Cases = []Case{{Name: name, Set: map[string]Input{"fluids.oilViscosity": {Value: 24, Unit: "cp"}}}}
-		p := Run(st).Parts[SheetCompare]
+		p := withoutGrid(st).Parts[SheetCompare]
 		if p.Status != Ready {
 			t.Errorf("%s: %s", pair.Value, p.Status)
 			continue
@@ -278,6 +278,6 @@ func BenchmarkRunFiveCases(b *testing.B) {
 		st.Cases = append(st.Cases, Case{Name: string(rune('a' + i)), Set: map[string]Input{"fluids.oilViscosity": {Value: float64(2 + i), Unit: "cp"}}})
 	}
 	for b.Loop() {
-		Run(st)
+		withoutGrid(st)
 	}
 }

@@ -47,7 +47,7 @@ func TestQuadraticCurvesWithGravityGiveTheClosedForm(t *testing.T) {
 		if math.Abs(quartic) > 1e-14 {
 			t.Fatalf("M = %g, n = %g, S = %g does not solve the quartic: %g", c.m, c.n, c.sw, quartic)
 		}
-		r := Run(tilted([6]float64{0, 0, 1, 1, 2, 2}, 1e-3, c.m*1e-3, c.n))
+		r := withoutGrid(tilted([6]float64{0, 0, 1, 1, 2, 2}, 1e-3, c.m*1e-3, c.n))
 		expect(t, r, 1e-11, map[string]float64{
 			"front.gravityTerm": c.n * c.m * 1e-3, "front.shockSaturation": c.sw, "front.cutAtBreakthrough": c.cut, "front.speed": c.cut / c.sw, "front.breakthrough": c.sw / c.cut,
 		})
@@ -68,7 +68,7 @@ func TestIndependentDisplacementUpDip(t *testing.T) {
 	block(&st)
 	put(&st, "field.rate", 7.3e-7*87*9.3, "m3/s") // the velocity follows from rate and cross-section
 	put(&st, "field.waterCut", 95, "%")
-	r := Run(st)
+	r := withoutGrid(st)
 	expect(t, r, 1e-9, map[string]float64{
 		"front.velocity": 7.3e-7, "front.shockSaturation": 0.574937758685915, "front.speed": 2.1201605078483547, "front.breakthrough": 0.4716624030577997,
 		"front.averageAtBreakthrough": 0.6496624030577998, "front.recoveryAtOne": 0.519109944342353,
@@ -86,7 +86,7 @@ func TestIndependentDisplacementUpDip(t *testing.T) {
 // water arrives after 0.16 PV. The layer is that of exercise 10.2.
 func TestDakeSegregatedFlow(t *testing.T) {
 	st := typed([6]float64{0.2, 0.2, 0.3, 0.8, 2, 2}, 0.5e-3, 5e-3)
-	expect(t, Run(st), 0.005/0.16, map[string]float64{"front.apartBreakthrough": 0.16})
+	expect(t, withoutGrid(st), 0.005/0.16, map[string]float64{"front.apartBreakthrough": 0.16})
 	put(&st, "front.dip", 25, "deg")
 	put(&st, "fluids.waterDensity", 1.04, "g/cm3")
 	put(&st, "fluids.oilDensity", 0.81, "g/cm3")
@@ -95,17 +95,17 @@ func TestDakeSegregatedFlow(t *testing.T) {
 	put(&st, "field.thickness", 40, "ft")
 	put(&st, "field.rate", 400, "bbl/d")
 	const barrelADay = 0.158987294928 / 86400
-	r := Run(st)
+	r := withoutGrid(st)
 	expect(t, r, 0.005, map[string]float64{"front.criticalRate": 519 * barrelADay}) // printed with 4.9e-4 for 4.88e-4, two figures
 	critical, _ := r.Parts[SheetFront].Figure("front.criticalRate")
 	put(&st, "field.rate", 0.9*critical.Value, "m3/s")
-	r = Run(st)
+	r = withoutGrid(st)
 	expect(t, r, 0.05/2.7, map[string]float64{"front.interface": 2.7 * math.Pi / 180})
 	if note, _ := noteOf(r.Parts[SheetFront], "front.dipStability"); note.Level != "remark" || !strings.Contains(note.Text, "moves as one") {
 		t.Errorf("below the critical rate: %+v", note)
 	}
 	put(&st, "field.rate", 1000, "bbl/d") // the rate of exercise 10.2 is above it
-	r = Run(st)
+	r = withoutGrid(st)
 	if note, _ := noteOf(r.Parts[SheetFront], "front.dipStability"); note.Level != "caution" || !strings.Contains(note.Text, "overruns") {
 		t.Errorf("above the critical rate: %+v", note)
 	}
@@ -122,7 +122,7 @@ func TestLightDownDipIsHeavyUpDip(t *testing.T) {
 	light := tilted(corey, 0.6e-3, 2.7e-3, -1.7)
 	light.Fluids.Pair = "gas-oil"
 	light.Fluids.WaterDensity, light.Fluids.OilDensity = light.Fluids.OilDensity, light.Fluids.WaterDensity
-	up, down := Run(heavy).Parts[SheetFront], Run(light).Parts[SheetFront]
+	up, down := withoutGrid(heavy).Parts[SheetFront], withoutGrid(light).Parts[SheetFront]
 	for _, f := range up.Figures {
 		other, ok := down.Figure(f.ID)
 		if strings.Contains(f.ID, "ensity") || strings.HasSuffix(f.ID, "InPlace") { // nothing of which is known where connate water counts as liquid
@@ -144,7 +144,7 @@ func TestLightDownDipIsHeavyUpDip(t *testing.T) {
 // oil flows back where -N λw > 1, that is M S² > -1/n.
 func TestBackwardFlowIsDrawnApart(t *testing.T) {
 	quadratic := [6]float64{0, 0, 1, 1, 2, 2}
-	up := Run(tilted(quadratic, 1e-3, 2e-3, 4)).Parts[SheetFront]
+	up := withoutGrid(tilted(quadratic, 1e-3, 2e-3, 4)).Parts[SheetFront]
 	back := must(t, up, "front.fractionalFlow", "back")
 	near(t, "end of the backward flow", back.X[len(back.X)-1], 0.5, 1e-12)
 	near(t, "f at its end", back.Y[len(back.Y)-1], 0, 1e-12)
@@ -156,7 +156,7 @@ func TestBackwardFlowIsDrawnApart(t *testing.T) {
 	if *chart.Y.Min > slices.Min(back.Y) || *chart.Y.Max != 1 {
 		t.Errorf("the axis runs from %g to %g", *chart.Y.Min, *chart.Y.Max)
 	}
-	down := Run(tilted(quadratic, 1e-3, 2e-3, -4)).Parts[SheetFront]
+	down := withoutGrid(tilted(quadratic, 1e-3, 2e-3, -4)).Parts[SheetFront]
 	back = must(t, down, "front.fractionalFlow", "back")
 	near(t, "start of the backward flow", back.X[0], math.Sqrt(1.0/8), 1e-12)
 	near(t, "f at its start", back.Y[0], 1, 1e-12)
@@ -166,7 +166,7 @@ func TestBackwardFlowIsDrawnApart(t *testing.T) {
 	if _, told := noteOf(down, "front.oilBack"); !told {
 		t.Error("nothing is said of the oil that flows back at the injector")
 	}
-	level := Run(typed(quadratic, 1e-3, 2e-3)).Parts[SheetFront]
+	level := withoutGrid(typed(quadratic, 1e-3, 2e-3)).Parts[SheetFront]
 	if _, drawn := line(level, "front.fractionalFlow", "back"); drawn {
 		t.Error("in a level layer a phase flows back")
 	}
@@ -185,17 +185,17 @@ func chartOf(t *testing.T, p Part, id string) Chart {
 func TestDipAsksForWhatItTakes(t *testing.T) {
 	st := typed([6]float64{0.2, 0.2, 0.3, 0.8, 2, 2}, 0.5e-3, 5e-3)
 	put(&st, "front.dip", 0, "deg")
-	if part := Run(st).Parts[SheetFront]; part.Status != Ready {
+	if part := withoutGrid(st).Parts[SheetFront]; part.Status != Ready {
 		t.Errorf("a level layer: %s, misses %v", part.Status, part.Missing)
 	}
 	put(&st, "front.dip", 5, "deg")
 	want := []string{"field.permeability", "fluids.waterDensity", "fluids.oilDensity", "front.velocity"}
-	if part := Run(st).Parts[SheetFront]; part.Status != Waiting || !slices.Equal(part.Missing, want) {
+	if part := withoutGrid(st).Parts[SheetFront]; part.Status != Waiting || !slices.Equal(part.Missing, want) {
 		t.Errorf("a dipping layer: %s, misses %v", part.Status, part.Missing)
 	}
 	// The density of brine is computed where a temperature is given.
 	put(&st, "fluids.temperature", 80, "degC")
-	if part := Run(st).Parts[SheetFront]; slices.Contains(part.Missing, "fluids.waterDensity") || !slices.Contains(part.Missing, "fluids.oilDensity") {
+	if part := withoutGrid(st).Parts[SheetFront]; slices.Contains(part.Missing, "fluids.waterDensity") || !slices.Contains(part.Missing, "fluids.oilDensity") {
 		t.Errorf("with a temperature: misses %v", part.Missing)
 	}
 }

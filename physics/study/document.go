@@ -31,6 +31,8 @@ type Study struct {
 	Block  Block  `json:"block,omitzero"`
 	Match  Match  `json:"match,omitzero"`
 
+	Grid Gridding `json:"grid,omitzero"`
+
 	Cases []Case `json:"cases,omitempty"` // named changes on the study; at most MaxCases
 }
 

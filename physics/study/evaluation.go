@@ -36,6 +36,9 @@ func jobs() []job {
 		{sheet: SheetField, needs: []Sheet{SheetFront}, run: func(e *Evaluation, _ growing) Part {
 			return runField(e.st, e.memory, e.parts[SheetFront], e.front)
 		}},
+		{sheet: SheetGrid, needs: []Sheet{SheetFront, SheetField}, run: func(e *Evaluation, grow growing) Part {
+			return runGrid(e.st, e.parts[SheetField], e.parts[SheetFront], e.front, grow)
+		}},
 		{sheet: SheetCompare, needs: compared, run: func(e *Evaluation, _ growing) Part { return runCompare(e) },
 			asked: func(st *Study) bool { return len(st.Cases) > 0 }},
 		{sheet: SheetMatch, needs: []Sheet{SheetField}, run: runMatch, asked: matching},
@@ -45,7 +48,7 @@ func jobs() []job {
 // Sheets are the sheets that a study is taken through, in the order of the job: the
 // names of jobs once more, for the interface, which would link every solver with them.
 func Sheets() []Sheet {
-	return []Sheet{SheetRock, SheetFront, SheetSoak, SheetField, SheetCompare, SheetMatch}
+	return []Sheet{SheetRock, SheetFront, SheetSoak, SheetField, SheetGrid, SheetCompare, SheetMatch}
 }
 
 // Evaluation is a study on its way through the sheets: each is computed when it is

@@ -169,4 +169,4 @@ var specs = slices.Concat([]Spec{
 	{Path: "field.waterCut", Sheet: SheetField, Group: "Limit", Label: "Water cut at the limit", Symbol: "fw,lim", Quantity: units.Share, Min: 0, OpenMin: true, Max: 1, OpenMax: true, Help: "At surface.", practice: "Common practice, no source: 90 to 98 %.", Usual: [2]float64{0.5, 0.995}, usualFor: waterflood, at: func(s *Study) **Input { return &s.Field.WaterCut }, when: limitedByCut},
 	{Path: "field.oilRate", Sheet: SheetField, Group: "Limit", Label: "Oil rate at the limit", Symbol: "qo,lim", Quantity: units.Rate, Min: 0, OpenMin: true, Max: 100, Help: "Calendar-day average at surface.", at: func(s *Study) **Input { return &s.Field.OilRate }, when: limitedByOil},
 	{Path: "field.horizon", Sheet: SheetField, Group: "Limit", Label: "Forecast to", Symbol: "tmax", Quantity: units.Duration, Min: 0, OpenMin: true, Max: 1e11, Optional: true, Default: "a little past the limit", at: func(s *Study) **Input { return &s.Field.Horizon }},
-}, patternSpecs, manyfoldSpecs)
+}, patternSpecs, manyfoldSpecs, gridSpecs)

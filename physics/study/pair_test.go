@@ -57,7 +57,7 @@ func TestEveryTextFollowsThePair(t *testing.T) {
 		dips(&st, 12)
 		put(&st, "fluids.tension", 30, "mN/m")
 		put(&st, "rock.land", 2, "")
-		r := Run(st)
+		r := withoutGrid(st)
 		for sheet, part := range r.Parts {
 			if part.Status != Ready {
 				t.Errorf("%s: %s is %s", id, sheet, part.Status)
@@ -84,10 +84,10 @@ func TestEveryTextFollowsThePair(t *testing.T) {
 // Names change, numbers do not.
 func TestPairChangesNoNumber(t *testing.T) {
 	st := Demo()
-	want := Run(st)
+	want := withoutGrid(st)
 	for _, pair := range Pairs {
 		st.Fluids.Pair = pair.Value
-		got := Run(st)
+		got := withoutGrid(st)
 		for sheet, part := range want.Parts {
 			for _, f := range part.Figures {
 				other, ok := got.Parts[sheet].Figure(f.ID)
@@ -131,18 +131,18 @@ func TestTrappedGas(t *testing.T) {
 	st := typed([6]float64{0.2, 0.8 / 3, 0.3, 0.8, 2, 2}, 0.5e-3, 0.02e-3)
 	st.Fluids.Pair = "brine-gas"
 	put(&st, "rock.land", 2, "")
-	r := Run(st)
+	r := withoutGrid(st)
 	expect(t, r, 1e-14, map[string]float64{"front.trapped": 0.8 / 3})
 	f, _ := r.Parts[SheetFront].Figure("front.trapped")
 	if note, _ := noteOf(r.Parts[SheetFront], "front.land"); note.Level != "remark" || f.Label != "Trapped gas by Land's law" || f.Symbol != "Sgr,L" {
 		t.Errorf("%s, %s: %+v", f.Label, f.Symbol, note)
 	}
 	put(&st, "rock.corey.sor", 0.1, "fraction")
-	if note, _ := noteOf(Run(st).Parts[SheetFront], "front.land"); note.Level != "caution" {
+	if note, _ := noteOf(withoutGrid(st).Parts[SheetFront], "front.land"); note.Level != "caution" {
 		t.Errorf("a curve that leaves less than is trapped: %+v", note)
 	}
 	st.Fluids.Pair = "brine-oil"
-	if _, told := Run(st).Parts[SheetFront].Figure("front.trapped"); told {
+	if _, told := withoutGrid(st).Parts[SheetFront].Figure("front.trapped"); told {
 		t.Error("oil is trapped by a law for gas")
 	}
 }
@@ -159,12 +159,12 @@ func TestWaterByTemperature(t *testing.T) {
 	put(&st, "fluids.pressure", 1, "bar")
 	put(&st, "field.permeability", 100, "md")
 	put(&st, "front.velocity", 1, "ft/d")
-	r := Run(st)
+	r := withoutGrid(st)
 	expect(t, r, 1e-3, map[string]float64{"front.waterViscosity": 326.1e-6})
 	expect(t, r, 1e-4, map[string]float64{"front.waterDensity": 53698 * 18.015268e-3})
 	// Typed values win.
 	put(&st, "fluids.waterViscosity", 0.5, "cp")
-	typedToo := Run(st)
+	typedToo := withoutGrid(st)
 	if _, computed := typedToo.Parts[SheetFront].Figure("front.waterViscosity"); computed {
 		t.Error("a viscosity is computed though one is typed")
 	}
@@ -174,7 +174,7 @@ func TestWaterByTemperature(t *testing.T) {
 	st.Fluids.Pair = "co2-brine"
 	st.Fluids.OilViscosity = nil
 	put(&st, "fluids.waterDensity", 600, "kg/m3")
-	expect(t, Run(st), 1e-3, map[string]float64{"front.oilViscosity": 326.1e-6})
+	expect(t, withoutGrid(st), 1e-3, map[string]float64{"front.oilViscosity": 326.1e-6})
 }
 
 // By definition, u µ/σ.
@@ -182,15 +182,15 @@ func TestCapillaryNumber(t *testing.T) {
 	st := typed([6]float64{0.2, 0.2, 0.3, 0.8, 2, 2}, 0.5e-3, 5e-3)
 	put(&st, "front.velocity", 3.6, "cm/h") // 1e-5 m/s
 	put(&st, "fluids.tension", 25, "dyn/cm")
-	expect(t, Run(st), 1e-14, map[string]float64{"front.capillaryNumber": 1e-5 * 0.5e-3 / 0.025})
+	expect(t, withoutGrid(st), 1e-14, map[string]float64{"front.capillaryNumber": 1e-5 * 0.5e-3 / 0.025})
 	for tension, want := range map[float64]string{25: "remark", 1e-3: "caution"} {
 		put(&st, "fluids.tension", tension, "mN/m")
-		if note, _ := noteOf(Run(st).Parts[SheetFront], "front.capillarity"); note.Level != want {
+		if note, _ := noteOf(withoutGrid(st).Parts[SheetFront], "front.capillarity"); note.Level != want {
 			t.Errorf("at %g mN/m: %+v", tension, note)
 		}
 	}
 	st.Front.Velocity = nil
-	if f, told := Run(st).Parts[SheetFront].Figure("front.capillaryNumber"); told {
+	if f, told := withoutGrid(st).Parts[SheetFront].Figure("front.capillaryNumber"); told {
 		t.Errorf("a capillary number of %g without a velocity", f.Value)
 	}
 }
@@ -202,14 +202,14 @@ func TestCurveEndsByLandsLaw(t *testing.T) {
 	st := typed([6]float64{0.2, 0.1, 0.3, 0.9, 2.4, 1.9}, 0.4e-3, 0.02e-3)
 	st.Fluids.Pair, st.Front.Ending = string(fluid.BrineGas), byLand
 	put(&st, "front.initialWater", 0.28, "fraction")
-	if missing := Run(st).Parts[SheetFront].Missing; len(missing) != 1 || missing[0] != "rock.land" {
+	if missing := withoutGrid(st).Parts[SheetFront].Missing; len(missing) != 1 || missing[0] != "rock.land" {
 		t.Fatalf("without Land's coefficient the front waits for %v", missing)
 	}
 	put(&st, "rock.land", 2, "")
-	is := Run(st)
+	is := withoutGrid(st)
 	st.Front.Ending = "curve"
 	put(&st, "rock.corey.sor", trapped, "fraction")
-	like := Run(st)
+	like := withoutGrid(st)
 	want := map[string]float64{}
 	for _, id := range []string{"front.breakthrough", "front.recoveryAtOne", "front.shockSaturation", "front.injectedWater"} {
 		f, ok := like.Parts[SheetFront].Figure(id)
@@ -226,7 +226,7 @@ func TestCurveEndsByLandsLaw(t *testing.T) {
 	st.Front.Ending = byLand
 	put(&st, "rock.land", 0, "")
 	put(&st, "front.initialWater", 0.2, "fraction")
-	if problems := Run(st).Problems; len(problems) != 1 || problems[0].Path != "rock.land" {
+	if problems := withoutGrid(st).Problems; len(problems) != 1 || problems[0].Path != "rock.land" {
 		t.Errorf("all gas trapped: %+v", problems)
 	}
 }
@@ -243,7 +243,7 @@ func TestGasIsToldInGasUnits(t *testing.T) {
 		put(&st, "fluids.waterFormationFactor", 1, "m3/m3")
 		put(&st, "fluids.oilFormationFactor", 1, "rb/Mscf")
 		put(&st, "field.waterCut", 0.99, "fraction")
-		part := Run(st).Parts[SheetField]
+		part := withoutGrid(st).Parts[SheetField]
 		for figure, quantity := range want {
 			if f, ok := part.Figure(figure); !ok || f.Quantity != quantity {
 				t.Errorf("%s: %s is a %s, want %s", id, figure, f.Quantity, quantity)

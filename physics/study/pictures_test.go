@@ -34,7 +34,7 @@ func near(t *testing.T, what string, got, want, tolerance float64) {
 // water cut after some volumes, saturation along the flood. The pictures are polygons:
 // between their points they leave the curve by less than 1e-3 of the axis.
 func TestFrontPicturesAgainstIndependentValues(t *testing.T) {
-	r := Run(typed([6]float64{0.213, 0.237, 0.327, 0.861, 2.7, 2.15}, 0.00047, 0.00193))
+	r := withoutGrid(typed([6]float64{0.213, 0.237, 0.327, 0.861, 2.7, 2.15}, 0.00047, 0.00193))
 	part := r.Parts[SheetFront]
 	pore, cut := must(t, part, "front.recovery", "pore"), must(t, part, "front.waterCut", "reservoir")
 	for _, c := range []struct{ q, recovery, cut float64 }{{0.25, 0.25, 0}, {0.5, 0.4410268005754344, 0.8874876734723659}, {1, 0.4750341279128706, 0.9574309675635815}} {
@@ -60,7 +60,7 @@ func TestProfilesHoldTheWater(t *testing.T) {
 	for _, curve := range []string{"corey-fit", "table", "table-linear", "let"} {
 		st := Demo()
 		st.Rock.Curve = curve
-		part := Run(st).Parts[SheetFront]
+		part := withoutGrid(st).Parts[SheetFront]
 		pore := must(t, part, "front.recovery", "pore")
 		bt, _ := part.Figure("front.breakthrough")
 		swi, _ := part.Figure("front.initialWater")
@@ -92,7 +92,7 @@ func TestFieldPicturesBalance(t *testing.T) {
 	for _, drive := range []string{"rate", "pressure"} {
 		st := Demo()
 		st.Field.Drive = drive
-		part := Run(st).Parts[SheetField]
+		part := withoutGrid(st).Parts[SheetField]
 		const bw, bo = 1.02, 1.27 // of the demonstration
 		oil, water, in := must(t, part, "field.rates", "oil"), must(t, part, "field.rates", "water"), must(t, part, "field.rates", "injection")
 		cut := must(t, part, "field.waterCut", "surface")
@@ -128,7 +128,7 @@ func TestFieldPicturesBalance(t *testing.T) {
 func TestRockPictureIsInOneReference(t *testing.T) {
 	const factor = 381.0 / 436.0 // ko(Swi)/k of the demonstration
 	st := Demo()
-	part := Run(st).Parts[SheetRock]
+	part := withoutGrid(st).Parts[SheetRock]
 	for id, reported := range map[string][]float64{"krw": st.Rock.Table.Krw, "kro": st.Rock.Table.Kro} {
 		points, curve, band := must(t, part, "rock.kr", id+"-points"), must(t, part, "rock.kr", id), must(t, part, "rock.kr", id+"-band")
 		other := must(t, part, "rock.kr", id+"-let-fit")
@@ -149,7 +149,7 @@ func TestRockPictureIsInOneReference(t *testing.T) {
 
 // The same independent computation, for the table of round volumes injected.
 func TestVolumeTableAgainstIndependentValues(t *testing.T) {
-	part := Run(typed([6]float64{0.213, 0.237, 0.327, 0.861, 2.7, 2.15}, 0.00047, 0.00193)).Parts[SheetFront]
+	part := withoutGrid(typed([6]float64{0.213, 0.237, 0.327, 0.861, 2.7, 2.15}, 0.00047, 0.00193)).Parts[SheetFront]
 	columns := map[string][]float64{}
 	for _, g := range part.Tables {
 		for _, c := range g.Columns {
@@ -184,7 +184,7 @@ func TestVolumeTableAgainstIndependentValues(t *testing.T) {
 
 // Marks stand where the figures say, on the line they belong to.
 func TestMarksStandOnTheirFigures(t *testing.T) {
-	r := Run(Demo())
+	r := withoutGrid(Demo())
 	value := func(sheet Sheet, id string) float64 {
 		f, ok := r.Parts[sheet].Figure(id)
 		if !ok {

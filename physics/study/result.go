@@ -12,6 +12,7 @@ const (
 	SheetRock  Sheet = "rock"
 	SheetFront Sheet = "front"
 	SheetField Sheet = "field"
+	SheetGrid  Sheet = "grid"
 
 	// SheetSoak is rock that takes water up by itself; a result has it only when the
 	// study has a capillary pressure.

@@ -103,7 +103,7 @@ func TestIndependentRiders(t *testing.T) {
 			put(&st, "front.rider.nw", b.Kr.Nw, "")
 			put(&st, "front.rider.no", b.Kr.No, "")
 		}
-		r, o := Run(st), c.Outputs
+		r, o := withoutGrid(st), c.Outputs
 		expect(t, r, 1e-9, map[string]float64{
 			"front.ride.speed": o.Speed, "front.ride.arrival": o.FrontPVI, "front.ride.saturation": o.Front,
 			"front.ride.bankSaturation": o.Bank, "front.ride.bankCut": o.Cut, "front.ride.bankArrival": o.BankPVI,
@@ -137,7 +137,7 @@ func TestQuadraticPolymer(t *testing.T) {
 		st.Front.Rider.Kind = polymer
 		put(&st, "front.rider.viscosity", 10, "cp")
 		put(&st, "front.rider.retention", c.d, "PV")
-		expect(t, Run(st), 4e-5, map[string]float64{
+		expect(t, withoutGrid(st), 4e-5, map[string]float64{
 			"front.ride.saturation": c.s3, "front.ride.speed": c.v, "front.ride.arrival": 1 / c.v, "front.ride.bankSaturation": c.s1, "front.ride.bankCut": c.f1, "front.ride.bankArrival": 1 / c.water,
 			"front.ride.leastSlug": c.d, // what the rock keeps of a stream of water alone
 		})
@@ -152,7 +152,7 @@ func TestSlugOfPolymer(t *testing.T) {
 		note bool
 	}{{0.05, true}, {0.16, true}, {0.18, false}, {0.6, false}} {
 		put(&st, "front.rider.slug", c.size, "PV")
-		r := Run(st)
+		r := withoutGrid(st)
 		expect(t, r, 1e-12, map[string]float64{"front.ride.spentAt": c.size / 0.17, "front.ride.leastSlug": 0.17})
 		part := r.Parts[SheetFront]
 		if _, small := noteOf(part, "front.ride.slugSmall"); small != c.note {
@@ -182,7 +182,7 @@ func TestTracerResponse(t *testing.T) {
 		put(&st, "front.initialWater", 1-1e-7, "fraction")
 		st.Front.Rider.Kind = tracer
 		put(&st, "front.rider.peclet", pe, "")
-		r := Run(st)
+		r := withoutGrid(st)
 		expect(t, r, 1e-6, map[string]float64{"front.ride.arrival": 1})
 		expect(t, r, 1e-4, map[string]float64{"front.ride.mixing": 3.625 / math.Sqrt(pe)}) // Lake (1989), from memory: four digits
 		response := must(t, r.Parts[SheetFront], "front.ride.response", "response")
@@ -190,7 +190,7 @@ func TestTracerResponse(t *testing.T) {
 			near(t, "concentration", interpolate(response.X, response.Y, q), want[i], 1e-3)
 		}
 		put(&st, "front.rider.slug", 0.2, "PV")
-		r = Run(st)
+		r = withoutGrid(st)
 		pulse := must(t, r.Parts[SheetFront], "front.ride.response", "response")
 		near(t, "pulse", interpolate(pulse.X, pulse.Y, 1), want[1]-want[0], 1e-3)
 		near(t, "pulse", interpolate(pulse.X, pulse.Y, 1.2), want[2]-want[1], 1e-3)
@@ -200,7 +200,7 @@ func TestTracerResponse(t *testing.T) {
 	put(&st, "front.initialWater", 1-1e-7, "fraction")
 	st.Front.Rider.Kind = tracer
 	put(&st, "front.rider.retention", 1.5, "PV")
-	expect(t, Run(st), 1e-6, map[string]float64{"front.ride.arrival": 2.5})
+	expect(t, withoutGrid(st), 1e-6, map[string]float64{"front.ride.arrival": 2.5})
 }
 
 // Where water alone flows a front of heat moves at 1/(1 + D) of the water, whatever the oil
@@ -219,7 +219,7 @@ func TestFrontOfHeat(t *testing.T) {
 		put(&st, "front.rider.rockHeat", 2650*880, "J/(m3.K)")
 		for _, oil := range []float64{0, 1.7} {
 			put(&st, "front.rider.oilHeat", oil, "MJ/(m3.K)")
-			r := Run(st)
+			r := withoutGrid(st)
 			f, _ := r.Parts[SheetFront].Figure("front.ride.speed")
 			near(t, "speed of heat", f.Value, want, 3e-4) // four digits; water's own 4.177 MJ/(m³ K) for their 4.174 is worth 2.2e-4
 		}
@@ -231,7 +231,7 @@ func TestFrontOfHeat(t *testing.T) {
 	put(&st, "fluids.pressure", 1, "bar")
 	put(&st, "front.rider.temperature", 360, "K")
 	put(&st, "fluids.waterViscosity", 2.0032, "cp")
-	expect(t, Run(st), 1e-3, map[string]float64{"front.ride.waterViscosity": 2 * 326.1e-6}) // four digits printed, both sources within 0.1 %
+	expect(t, withoutGrid(st), 1e-3, map[string]float64{"front.ride.waterViscosity": 2 * 326.1e-6}) // four digits printed, both sources within 0.1 %
 }
 
 // The rear of a slug of heat feels what the front does: all heat is given back, so that no
@@ -243,11 +243,11 @@ func TestSlugOfHeat(t *testing.T) {
 		line := must(t, part, "front.ride.recovery", "added")
 		return line.X[len(line.X)-1], line.Y[len(line.Y)-1]
 	}
-	end, most := added(Run(st).Parts[SheetFront])
+	end, most := added(withoutGrid(st).Parts[SheetFront])
 	last := 0.0
 	for _, size := range []float64{0.1, 0.4, 0.9, 5} {
 		put(&st, "front.rider.slug", size, "PV")
-		part := Run(st).Parts[SheetFront]
+		part := withoutGrid(st).Parts[SheetFront]
 		if note, unfollowed := noteOf(part, "front.ride.slugUnfollowed"); unfollowed {
 			t.Fatal(note.Text)
 		}
@@ -271,7 +271,7 @@ func TestSlugOfHeat(t *testing.T) {
 func TestIdlePassengers(t *testing.T) {
 	st := ridden(polymer)
 	put(&st, "front.rider.viscosity", st.Fluids.WaterViscosity.Value, "cp")
-	f, ok := Run(st).Parts[SheetFront].Figure("front.ride.gainAtOne")
+	f, ok := withoutGrid(st).Parts[SheetFront].Figure("front.ride.gainAtOne")
 	if !ok || math.Abs(f.Value) > 1e-9 {
 		t.Errorf("polymer without viscosity adds %v", f.Value)
 	}
@@ -280,9 +280,9 @@ func TestIdlePassengers(t *testing.T) {
 // The answer of the water flood, its figures and those of the field are the same with
 // whatever rides along; only the strip makes room.
 func TestWaterFloodStandsBesideRiders(t *testing.T) {
-	base := Run(Demo())
+	base := withoutGrid(Demo())
 	for kind := range riders {
-		got := Run(ridden(kind))
+		got := withoutGrid(ridden(kind))
 		for sheet, part := range base.Parts {
 			for _, f := range part.Figures {
 				if other, ok := got.Parts[sheet].Figure(f.ID); !ok || other.Value != f.Value {
@@ -347,7 +347,7 @@ func riderVariants() map[string]Study {
 func TestEveryRiderIsSound(t *testing.T) {
 	answered := 0
 	for name, st := range riderVariants() {
-		r := Run(st)
+		r := withoutGrid(st)
 		if _, ok := r.Parts[SheetFront].Figure("front.ride.arrival"); ok {
 			answered++
 		}
@@ -385,7 +385,7 @@ func TestRandomRidersAreSound(t *testing.T) {
 				}
 			}
 		}
-		result := Run(st)
+		result := withoutGrid(st)
 		part := result.Parts[SheetFront]
 		if _, ok := part.Figure("front.ride.arrival"); ok {
 			answered++
@@ -424,7 +424,7 @@ func TestRidersThatCannotBe(t *testing.T) {
 	} {
 		st := ridden(c.kind)
 		c.change(&st)
-		r := Run(st)
+		r := withoutGrid(st)
 		if len(r.Problems) != 1 || r.Problems[0].Path != c.path || !strings.Contains(r.Problems[0].Allowed, c.allowed) {
 			t.Errorf("%s: %+v", c.name, r.Problems)
 		}
@@ -457,7 +457,7 @@ func TestRiderNotesAreRaised(t *testing.T) {
 			return st
 		}(),
 	} {
-		if _, raised := noteOf(Run(st).Parts[SheetFront], id); !raised {
+		if _, raised := noteOf(withoutGrid(st).Parts[SheetFront], id); !raised {
 			t.Errorf("%s is not raised", id)
 		}
 	}
@@ -468,7 +468,7 @@ func TestRidersFollowThePair(t *testing.T) {
 	for kind := range riders {
 		st := ridden(kind)
 		st.Fluids.Pair = "brine-gas"
-		for _, text := range textsOf(Run(st).Parts[SheetFront]) {
+		for _, text := range textsOf(withoutGrid(st).Parts[SheetFront]) {
 			if strings.Contains(text, "oil") || strings.Contains(text, "µo") || strings.Contains(text, "kro") {
 				t.Errorf("%s: %q", kind, text)
 			}

@@ -58,7 +58,7 @@ func TestRockDoubts(t *testing.T) {
 		"above 1 only until it is converted": {toOil(corey(0.2, 1.1, 1), 436, 381), ""},
 	} {
 		t.Run(name, func(t *testing.T) {
-			part := Run(c.st).Parts[SheetRock]
+			part := withoutGrid(c.st).Parts[SheetRock]
 			if part.Status != Ready {
 				t.Fatalf("status %s, missing %v", part.Status, part.Missing)
 			}
@@ -81,11 +81,11 @@ func TestTableShortOfItsEnds(t *testing.T) {
 	last := len(rows.Sw) - 1
 	short.Rock.Table = &Table{Sw: rows.Sw[3:last], Krw: rows.Krw[3:last], Kro: rows.Kro[3:last]}
 
-	r := Run(whole)
+	r := withoutGrid(whole)
 	if text := answerOf(r.Parts[SheetRock]); !strings.Contains(text, "begins to flow at Swc") || !strings.Contains(text, "oil stops at Sor") {
 		t.Errorf("whole table: %q", text)
 	}
-	r = Run(short)
+	r = withoutGrid(short)
 	if text := answerOf(r.Parts[SheetRock]); !strings.Contains(text, "flows in the first row") || !strings.Contains(text, "flows in the last row") || strings.Contains(text, "Swc") || strings.Contains(text, "Sor ") {
 		t.Errorf("short table: %q", text)
 	}
@@ -96,7 +96,7 @@ func TestTableShortOfItsEnds(t *testing.T) {
 		}
 	}
 	put(&whole, "front.initialWater", 0.41, "fraction")
-	if note, _ := noteOf(Run(whole).Parts[SheetFront], "front.mobileWater"); !strings.Contains(note.Cause, "above the connate water") {
+	if note, _ := noteOf(withoutGrid(whole).Parts[SheetFront], "front.mobileWater"); !strings.Contains(note.Cause, "above the connate water") {
 		t.Errorf("whole table from mobile water: %q", note.Cause)
 	}
 }
@@ -107,7 +107,7 @@ func TestMethodsCiteWhatTheyRestOn(t *testing.T) {
 	st := Demo()
 	st.Rock.Curve, st.Field.Drive = "table", "pressure"
 	put(&st, "field.pressure", 3, "MPa")
-	r := Run(st)
+	r := withoutGrid(st)
 	if f, _ := r.Parts[SheetRock].Figure("rock.krw0"); !strings.Contains(f.Working.Method, "three-point slopes, limited") {
 		t.Errorf("krw0: %q", f.Working.Method)
 	}
@@ -135,7 +135,7 @@ func TestEndsBeyondThePoints(t *testing.T) {
 		st.Rock.Table.Sw, st.Rock.Table.Krw, st.Rock.Table.Kro = append(st.Rock.Table.Sw, sw), append(st.Rock.Table.Krw, p.Krw), append(st.Rock.Table.Kro, p.Kro)
 	}
 	st.Rock.Curve = "table"
-	rows := Run(st).Parts[SheetRock]
+	rows := withoutGrid(st).Parts[SheetRock]
 	if f, _ := rows.Figure("rock.swc"); f.Label != "Water saturation of the first row" {
 		t.Errorf("the first row is called %q", f.Label)
 	}
@@ -143,11 +143,11 @@ func TestEndsBeyondThePoints(t *testing.T) {
 		t.Errorf("the last row is called %q", f.Label)
 	}
 	st.Rock.Curve, st.Rock.Ends = "corey-fit", freeEnds
-	fitted := Run(st)
+	fitted := withoutGrid(st)
 	expect(t, fitted, 1e-5, map[string]float64{"rock.swc": swc, "rock.sor": sor})
 	if f, _ := fitted.Parts[SheetRock].Figure("rock.swc"); f.Label != "Connate water" {
 		t.Errorf("the fitted end is called %q", f.Label)
 	}
 	st.Rock.Ends = "table"
-	expect(t, Run(st), 1e-12, map[string]float64{"rock.swc": swc + 0.03, "rock.sor": sor + 0.04})
+	expect(t, withoutGrid(st), 1e-12, map[string]float64{"rock.swc": swc + 0.03, "rock.sor": sor + 0.04})
 }

@@ -63,7 +63,7 @@ func twoSteps() Study {
 // The history that it is held against knows volumes, not speeds.
 func TestReadingsAreArrivals(t *testing.T) {
 	for name, st := range journeys() {
-		part := Run(st).Parts[SheetFront]
+		part := withoutGrid(st).Parts[SheetFront]
 		flow := must(t, part, "front.fractionalFlow", "reservoir")
 		arrives, travels, slope := reading(t, flow, "Arrives, injected"), reading(t, flow, "How it travels"), reading(t, flow, "Slope of the curve")
 		e := evaluated(st)
@@ -108,7 +108,7 @@ func TestWaveTable(t *testing.T) {
 		block(&st)
 		st.Field.Uptime = nil
 		put(&st, "field.rate", 7e-4, "m3/s")
-		r := Run(st)
+		r := withoutGrid(st)
 		part := r.Parts[SheetFront]
 		columns := map[string]Column{}
 		for _, g := range part.Tables {
@@ -148,7 +148,7 @@ func TestWaveTable(t *testing.T) {
 // The sentence and the figures tell of two steps: the first arrival is the foremost,
 // and the water cut at the producer jumps once more at the second.
 func TestTwoStepsAreTold(t *testing.T) {
-	part := Run(twoSteps()).Parts[SheetFront]
+	part := withoutGrid(twoSteps()).Parts[SheetFront]
 	first, _ := part.Figure("front.breakthrough")
 	next, ok := part.Figure("front.nextStep")
 	if !ok || next.Value <= first.Value {
@@ -164,7 +164,7 @@ func TestTwoStepsAreTold(t *testing.T) {
 			t.Errorf("at %g PV the water cut changes by %g", q, jump)
 		}
 	}
-	if one := Run(Demo()).Parts[SheetFront]; len(one.Answer) == 0 || !strings.HasPrefix(one.Answer[0].Text, "Water arrives after") {
+	if one := withoutGrid(Demo()).Parts[SheetFront]; len(one.Answer) == 0 || !strings.HasPrefix(one.Answer[0].Text, "Water arrives after") {
 		t.Errorf("with one step: %+v", one.Answer)
 	} else if f, told := one.Figure("front.nextStep"); told {
 		t.Errorf("with one step another is told, after %g", f.Value)
@@ -175,7 +175,7 @@ func TestTwoStepsAreTold(t *testing.T) {
 func TestMobileWaterIsTold(t *testing.T) {
 	st := Demo()
 	put(&st, "front.initialWater", 0.41, "fraction")
-	part := Run(st).Parts[SheetFront]
+	part := withoutGrid(st).Parts[SheetFront]
 	ahead, ok := part.Figure("front.surfaceCutAhead")
 	if !ok || ahead.Value <= 0 {
 		t.Fatalf("the water cut ahead of the front is %g (%v)", ahead.Value, ok)
@@ -197,7 +197,7 @@ func TestDisplacedIsNotAlwaysProduced(t *testing.T) {
 	all := journeys()
 	for name, want := range map[string]string{"water-wet": "produced", "up-dip": "produced", "oil injected": "displaced", "down-dip": "displaced"} {
 		text := ""
-		for _, p := range Run(all[name]).Parts[SheetFront].Answer {
+		for _, p := range withoutGrid(all[name]).Parts[SheetFront].Answer {
 			text += p.Text
 		}
 		if !strings.Contains(text, "of the pore volume "+want+" (") {
@@ -210,7 +210,7 @@ func TestDisplacedIsNotAlwaysProduced(t *testing.T) {
 // state: at its end the profile has that saturation.
 func TestWaveDiagram(t *testing.T) {
 	for name, st := range journeys() {
-		part := Run(st).Parts[SheetFront]
+		part := withoutGrid(st).Parts[SheetFront]
 		profile := must(t, part, "front.profile", "profile")
 		breakthrough, _ := part.Figure("front.breakthrough")
 		chart := chartOf(t, part, "front.waveDiagram")
@@ -242,7 +242,7 @@ func TestWaveTimes(t *testing.T) {
 	for _, drive := range []string{"rate", "pressure"} {
 		st := Demo()
 		st.Field.Drive = drive
-		r := Run(st)
+		r := withoutGrid(st)
 		volumes, times := chartOf(t, r.Parts[SheetFront], "front.waveDiagram"), chartOf(t, r.Parts[SheetFront], "front.waveTimes")
 		arrival, _ := r.Parts[SheetField].Figure("field.breakthrough")
 		near(t, drive+", breakthrough", times.Marks[0].X, 1, 0)
@@ -260,7 +260,7 @@ func TestWaveTimes(t *testing.T) {
 	}
 	st := Demo()
 	st.Field.Length = nil
-	for _, c := range Run(st).Parts[SheetFront].Charts {
+	for _, c := range withoutGrid(st).Parts[SheetFront].Charts {
 		if c.ID == "front.waveTimes" {
 			t.Error("times are drawn without a field")
 		}

@@ -44,6 +44,9 @@ func bench() error {
 		}
 		fmt.Printf("%-44s %9.3f ms %9.3f ms %8.2f%s\n", row.name, row.values["ns/op"]/1e6, other.values["ns/op"]/1e6, ratio, over)
 	}
+	if err := cellSteps(path); err != nil {
+		return err
+	}
 
 	seen, err := benchmark(nil, "./build")
 	if err != nil {

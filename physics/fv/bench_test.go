@@ -15,7 +15,11 @@ func BenchmarkRun(b *testing.B) {
 	}{{"exact", law}, {"table", tabulated(b, law)}} {
 		for _, limiter := range []Limiter{None, VanLeer} {
 			for _, n := range []int{100, 1000, 10000} {
-				b.Run(fmt.Sprintf("%s-%s-%d", kind.name, limiter, n), func(b *testing.B) {
+				scheme := "upstream"
+				if limiter != None {
+					scheme = "limited"
+				}
+				b.Run(fmt.Sprintf("%s/%s/%d", kind.name, scheme, n), func(b *testing.B) {
 					settings := Settings{Cells: n, Limiter: limiter, Injected: c.Inputs.Injected, Initial: c.Inputs.Initial}
 					run, taken := newRun(b, kind.law, settings), 0
 					for b.Loop() {

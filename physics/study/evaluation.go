@@ -37,7 +37,7 @@ func jobs() []job {
 			return runField(e.st, e.memory, e.parts[SheetFront], e.front)
 		}},
 		{sheet: SheetGrid, needs: []Sheet{SheetFront, SheetField}, run: func(e *Evaluation, grow growing) Part {
-			return runGrid(e.st, e.parts[SheetField], e.parts[SheetFront], e.front, grow)
+			return runGrid(e.st, e.parts[SheetField], e.parts[SheetFront], e.rock, e.front, grow)
 		}},
 		{sheet: SheetCompare, needs: compared, run: func(e *Evaluation, _ growing) Part { return runCompare(e) },
 			asked: func(st *Study) bool { return len(st.Cases) > 0 }},

@@ -10,6 +10,7 @@ import (
 
 // grid is the flood on grids, as far as it has been run.
 type grid struct {
+	rock      *rock
 	front     *front
 	flood     *gridding.Flood
 	scheme    gridding.Scheme
@@ -36,10 +37,10 @@ const (
 )
 
 // runGrid answers the Grid sheet.
-func runGrid(st *Study, fieldPart, frontPart Part, front *front, grow growing) Part {
+func runGrid(st *Study, fieldPart, frontPart Part, rock *rock, front *front, grow growing) Part {
 	s := newSheet(st, fieldPart, frontPart)
 	s.await(frontPart)
-	g := &grid{front: front}
+	g := &grid{rock: rock, front: front}
 	g.read(s)
 	standing := s.standing()
 	if frontPart.Status == Refused {

@@ -180,3 +180,22 @@ func TestGridPseudoFunctions(t *testing.T) {
 		t.Error("counter-current flow has pseudo-functions, or no word why not")
 	}
 }
+
+// Where the rock has a capillary pressure, the grid that smears as it does has cells in inverse
+// proportion to the permeability, as the diffusion is in proportion to it; without, nothing is told.
+func TestGridSmearsAsCapillarity(t *testing.T) {
+	st := soaking()
+	put(&st, "front.velocity", 0.4, "ft/d")
+	cells := func(permeability float64) float64 {
+		put(&st, "field.permeability", permeability, "md")
+		part, _ := gridPart(t, st)
+		return value(t, part, "grid.sameSmearing")
+	}
+	if one, two := cells(100), cells(200); !(math.Abs(one/two-2) < 1e-9) {
+		t.Errorf("%g cells at one permeability, %g at twice it", one, two)
+	}
+	part, _ := gridPart(t, Demo())
+	if _, told := part.Figure("grid.sameSmearing"); told {
+		t.Error("told without a capillary pressure")
+	}
+}

@@ -52,6 +52,7 @@ func (g *grid) figures(s *sheet) {
 	if g.advice.Cells > 0 {
 		g.adviceFigures(s)
 	}
+	g.smearing(s)
 	if g.pseudo != nil {
 		g.pseudoFigures(s)
 	}

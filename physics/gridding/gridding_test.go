@@ -135,7 +135,12 @@ func TestAdvice(t *testing.T) {
 			t.Fatal(err)
 		}
 		m := a.Measured
-		if cost := f.Cost(m.Scheme, m.Cells, tolerance.At); math.Abs(cost/m.CellSteps-1) > 0.05 && !m.Scheme.Implicit {
+		// Past At a run goes on in tenths of the arrival until water is there, each of them rounding its steps up.
+		pieces := 0.0
+		if late := f.Arrival() - tolerance.At; late > 0 {
+			pieces = math.Ceil(10*late/f.Arrival()) * f.Cost(m.Scheme, m.Cells, 0) / math.Ceil(f.Arrival()/f.Step(m.Scheme, m.Cells))
+		}
+		if cost := f.Cost(m.Scheme, m.Cells, tolerance.At); math.Abs(cost-m.CellSteps) > 0.05*m.CellSteps+pieces && !m.Scheme.Implicit {
 			t.Errorf("trial %d: a run of %g cell steps, expected %g", trial, m.CellSteps, cost)
 		}
 		within := func(m Measured) bool {

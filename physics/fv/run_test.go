@@ -459,3 +459,29 @@ func TestRefusals(t *testing.T) {
 		t.Error("a table of no pieces")
 	}
 }
+
+// counted is 1 - 1e-5 s by way of powers that lose its last digits, and how often it was asked.
+type counted struct{ asked *int }
+
+func (c counted) At(s float64) (f, dfds float64) {
+	*c.asked++
+	return 1 - 1e-5*math.Pow(s, 1.3) + 4e-16*math.Sin(1e9*s), -1.3e-5 * math.Pow(s, 0.3)
+}
+
+func (counted) Knots() []float64 { return nil }
+
+// An f that hardly changes is made of rounding at 1e-13 of its reach: cutting pieces finer finds
+// no end there, and the table asks f itself.
+func TestTabulatedEnds(t *testing.T) {
+	asked := 0
+	law := newLaw(t, counted{&asked}, 0.3, 0.6)
+	table := tabulated(t, law)
+	if asked > 3_000_000 {
+		t.Errorf("f was asked %d times", asked)
+	}
+	for _, s := range []float64{0.3, 0.301, 0.45, 0.6} {
+		want, _ := law.at(s)
+		got, _ := table.at(s)
+		near(t, "nearly level", got, want, 1e-15)
+	}
+}

@@ -9,12 +9,14 @@ const (
 	tableError = 1e-13 // how far a tabulated law may be off, in parts of the reach of f
 	finer      = 8     // pieces that a piece is cut into where that is not met
 	deepest    = 8     // how often over
+	mostCuts   = 8     // pieces that may be cut for each of the first ones
 )
 
 // Tabulated returns the law with f read from n equal pieces, a Hermite cubic in each,
 // which is many times faster than powers and logarithms. A piece in which the cubic misses
 // f by more than 1e-13 of its reach at any of seven places (a power law at its end, or a
-// knot) is cut into 8, up to eight times over; what is still amiss then asks f itself.
+// knot) is cut into 8, up to eight times over; what is still amiss then asks f itself, and so
+// does what there are too many of: an f that hardly changes is nothing but its own rounding.
 // n must be from 1 to 1e6; 1024 suits smooth curves.
 func (l *Law) Tabulated(n int) (*Law, error) {
 	if n < 1 || n > 1e6 {
@@ -26,7 +28,9 @@ func (l *Law) Tabulated(n int) (*Law, error) {
 		low, high = math.Min(low, f), math.Max(high, f)
 	}
 	copied := *l
-	t := newTable(l.fn, l.lo, l.hi, tableError*(high-low), n, 0)
+	allowed := math.Max(tableError*(high-low), 0x1p-51*math.Max(math.Abs(low), math.Abs(high)))
+	cuts := mostCuts * n
+	t := newTable(l.fn, l.lo, l.hi, allowed, n, 0, &cuts)
 	copied.fill, copied.at = t.fill, t.value
 	return &copied, nil
 }
@@ -44,7 +48,7 @@ type piece struct {
 	cut            *table
 }
 
-func newTable(fn Function, lo, hi, allowed float64, n, depth int) *table {
+func newTable(fn Function, lo, hi, allowed float64, n, depth int, cuts *int) *table {
 	t := &table{fn, lo, float64(n) / (hi - lo), make([]piece, n)}
 	place := func(k int, u float64) float64 { return math.Min(hi, lo+(hi-lo)*((float64(k)+u)/float64(n))) }
 	for k := range t.pieces {
@@ -61,8 +65,9 @@ func newTable(fn Function, lo, hi, allowed float64, n, depth int) *table {
 		for i := 1; i < 8; i++ {
 			u := float64(i) / 8
 			if f, _ := fn.At(place(k, u)); !(math.Abs(p.at(u)-f) <= allowed) {
-				if p.c0 = math.NaN(); depth < deepest {
-					p.cut = newTable(fn, a, b, allowed, finer, depth+1)
+				if p.c0 = math.NaN(); depth < deepest && *cuts > 0 {
+					*cuts--
+					p.cut = newTable(fn, a, b, allowed, finer, depth+1, cuts)
 				}
 				break
 			}

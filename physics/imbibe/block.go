@@ -129,6 +129,9 @@ func (m *Matrix) axis(spread int, acc accuracy) (*axisBlock, error) {
 		}
 		b.finished = share >= lastShare
 	}
+	if math.IsInf(middle, 1) { // the time ran out of range before half was in
+		return nil, errStalled
+	}
 	soaked := fine.mean()
 	b.balance = (soaked - fine.inflow) / soaked
 	return b, nil

@@ -3,6 +3,7 @@ package imbibe
 import (
 	"fmt"
 	"math"
+	"slices"
 )
 
 // Names of inputs in an InputError that a caller may know as fields of its own.
@@ -84,8 +85,9 @@ func (r Rock) Inlet() float64 {
 }
 
 // Span is a rock between the water that it holds at the start, Initial, and that at its
-// open face, Inlet. It evaluates by the distance from either end, without the digits that
-// S - Initial loses there, and knows how Dc behaves at both:
+// open face, Inlet; where Dc vanishes in a whole stretch below the latter, Inlet is the foot of
+// that stretch, see spreads. It evaluates by the distance from either end, without the digits
+// that S - Initial loses there, and knows how Dc behaves at both:
 //
 //	Dc -> c (S - Initial)^LowPower,  Dc -> c (Inlet - S)^HighPower
 //
@@ -139,7 +141,8 @@ func NewSpan(rock Rock, initial, inlet float64) (*Span, error) {
 	if !(inlet-initial > leastWidth && inlet <= high) {
 		return nil, &InputError{BadInlet, inlet, fmt.Sprintf("above the initial %.6g, at most %.6g", initial, high)}
 	}
-	s := &Span{Rock: rock, Initial: initial, Inlet: inlet}
+	s := &Span{Rock: rock, Initial: initial, Inlet: rock.spreads(initial, inlet)}
+	inlet = s.Inlet
 	s.start, s.startSlope = rock.FractionalFlow(initial)
 	near := max(edgeShare*(inlet-initial), 0x1p-48) // some floating point numbers away at least
 	s.low, s.LowPower = power(near, func(u float64) (float64, float64) { sw := initial + u; return rock.Diffusion(sw), sw - initial })
@@ -148,6 +151,28 @@ func NewSpan(rock Rock, initial, inlet float64) (*Span, error) {
 		s.LowPower = 0
 	}
 	return s, nil
+}
+
+// spreads is the top of the states below inlet in which the water spreads: next to the face Dc may
+// vanish in a whole stretch, of a table whose Pc is level or whose oil no longer flows. The saturation
+// then jumps at the face itself, and inwards all is as if the face were held at the foot of that
+// stretch. It is inlet where Dc vanishes all the way.
+func (r Rock) spreads(initial, inlet float64) float64 {
+	edges := []float64{initial}
+	for _, k := range slices.Concat(r.Kr.Knots(), r.Pc.Knots()) {
+		if k > initial && k < inlet {
+			edges = append(edges, k)
+		}
+	}
+	slices.Sort(edges)
+	top := inlet
+	for i := len(edges) - 1; i >= 0; i-- {
+		if r.Diffusion(edges[i]+(top-edges[i])/2) > 0 {
+			return top
+		}
+		top = edges[i]
+	}
+	return inlet
 }
 
 // power measures the leading power of a function at distance 0 from its values at near, 16

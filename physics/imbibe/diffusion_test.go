@@ -104,3 +104,39 @@ func TestSpanRefuses(t *testing.T) {
 		}
 	}
 }
+
+// TestFaceAboveALevelStretch: where Pc is level below the face, or oil no longer flows there, nothing
+// drives water through that stretch. The rock soaks as if the face were held at its foot, and a block
+// takes up no more. An identity, by hand.
+func TestFaceAboveALevelStretch(t *testing.T) {
+	level := wet()
+	pc, err := capillary.NewTable([]float64{0.193, 0.3, 0.45, 0.6, 0.753}, []float64{3e4, 2e4, 9e3, 9e3, 0}, capillary.StraightLine)
+	must(t, err)
+	level.Pc = pc
+	stands := wet()
+	kr, err := relperm.NewTable([]float64{0.193, 0.3, 0.45, 0.62, 0.753}, []float64{0, 0.01, 0.05, 0.15, 0.3}, []float64{0.8, 0.4, 0.1, 0, 0}, relperm.StraightLine)
+	must(t, err)
+	stands.Kr = kr
+	for _, c := range []struct {
+		rock       Rock
+		held, foot float64
+	}{{level, 0.55, 0.45}, {stands, math.NaN(), 0.62}} {
+		above, err := NewSpan(c.rock, 0.2, c.held)
+		must(t, err)
+		within(t, "the saturation that gets inside", above.Inlet, c.foot, 0)
+		at, err := NewSpan(c.rock, 0.2, c.foot)
+		must(t, err)
+		got, err := Solve(above, 0.5)
+		must(t, err)
+		want, err := Solve(at, 0.5)
+		must(t, err)
+		within(t, "A", got.A, want.A, 0)
+		m, err := NewMatrix(above)
+		must(t, err)
+		b, err := m.Soak(Box([3]float64{0.1, 0.2, 0.3}, [3]int{2, 2, 2}))
+		must(t, err)
+		if share, _ := b.At(b.TimeAt(0.95)); !b.Finished || math.Abs(share-0.95) > 1e-9 {
+			t.Errorf("the block is at %g, finished: %v", share, b.Finished)
+		}
+	}
+}

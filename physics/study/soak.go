@@ -18,6 +18,7 @@ type soak struct {
 	arrival  float64 // when that meets the far boundary
 	inputs   []string
 	pcEnds   [2]float64
+	held     float64 // at the face; Inlet is what gets inside
 	initials string // where the initial saturation comes from
 }
 
@@ -76,6 +77,9 @@ func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
 		return s.notSoaking(err, r)
 	}
 	k.pcEnds[0], k.pcEnds[1] = r.Pc.Ends()
+	if k.held = inlet; math.IsNaN(inlet) {
+		k.held = r.Inlet()
+	}
 	k.reach()
 	k.figures(s)
 	k.charts(s)

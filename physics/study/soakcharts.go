@@ -24,9 +24,11 @@ func (k *soak) profileChart() Chart {
 		Summary: "Water saturation against depth after a time that the reader moves: highest at the open face, Sw = " + units.Format(k.Inlet, 3) + ", and every state moves inward as the root of time."}
 	profile := Line{ID: "profile", Label: "saturation", Role: "water", Kind: "line", Moving: true}
 	samples := k.Samples(1.0 / 150)
+	former := 0.0 // the last digits of a steep front may run back
 	for i := len(samples) - 1; i >= 0; i-- {
 		if x := 2 * k.A / k.Porosity * samples[i].Prime; !math.IsInf(x, 1) {
-			profile.X, profile.Y = append(profile.X, x), append(profile.Y, samples[i].Sw)
+			former = math.Max(former, x)
+			profile.X, profile.Y = append(profile.X, former), append(profile.Y, samples[i].Sw)
 		}
 	}
 	if k.FiniteFront() { // and level from the front on

@@ -27,6 +27,9 @@ func (k *soak) figures(s *sheet) {
 	if s.st.Soak.Inlet != nil {
 		face = s.by("", "As typed.").rests("soak.inlet")
 	}
+	if k.Inlet < k.held {
+		face.Method += " Between " + units.Format(k.held, 4) + ", which is held there, and this saturation capillary diffusion is zero: saturation jumps at the face, and no more than this gets inside."
+	}
 	s.figure(Figure{ID: "soak.inlet", Label: "Water saturation at the open face", Symbol: "Sw0", Value: k.Inlet, Quantity: units.Fraction, Strip: true}, face)
 	s.figure(Figure{ID: "soak.a", Label: "Uptake coefficient", Symbol: "A", Value: k.A, Quantity: units.Sorptivity, Strip: true},
 		s.by("", soakMethod, ref.McWhorterSunada1990, ref.SchmidGeiger2012, ref.Wright1997).rests(k.inputs...).on("soak.ratio", "soak.initial", "soak.inlet"))

@@ -15,7 +15,7 @@ func (k *soak) notes(s *sheet) {
 	_, high := k.Kr.Ends()
 	if left := high - k.Inlet; s.st.Soak.Inlet == nil && left > 1e-6 {
 		s.note(Note{ID: "soak.mixedWet", Level: "remark", Text: "Soaking stops at Sw = " + units.Format(k.Inlet, 3) + ", " + units.Format(left, 3) + " short of residual oil.",
-			Cause: "There capillary pressure is zero, or its curve ends.", Do: "What lies beyond has to be driven out: see Front.", Paths: []string{"rock.capillary.curve"}})
+			Cause: "There capillary pressure is zero, its curve ends, or nothing above it lets water spread.", Do: "What lies beyond has to be driven out: see Front.", Paths: []string{"rock.capillary.curve"}})
 	}
 	if k.Ratio >= 0.9 {
 		s.note(Note{ID: "soak.nearOne", Level: "remark", Text: "With a ratio this near 1 the rate depends on it strongly.",

@@ -17,6 +17,9 @@ const (
 	suctionRules = 1.0
 )
 
+// mostPushed is how often cells are evaluated, at most, for the profile with both.
+const mostPushed = 2_000_000
+
 // push tells whether the study's flood is ruled by its rate or by suction, over the length
 // between the wells and over that of a block, and shows the latter with both.
 func (b *soakingBlock) push(s *sheet, f *front) {
@@ -70,7 +73,7 @@ func (b *soakingBlock) pushed(f *front, length float64) (Chart, bool) {
 	}
 	const cells = 100
 	run, err := fv.NewImplicit(fv.Medium{Law: law, Potential: potential}, fv.ImplicitSettings{Cells: cells, Initial: b.initial, Through: f.velocity,
-		Inlet: fv.End{Kind: fv.Fed, Share: 1}, Outlet: fv.End{Kind: fv.Threshold, State: b.span.Inlet}, Error: 1e-3, SecondOrder: true})
+		Inlet: fv.End{Kind: fv.Fed, Share: 1}, Outlet: fv.End{Kind: fv.Threshold, State: b.span.Rock.Inlet()}, Error: 1e-3, SecondOrder: true})
 	if err != nil {
 		return Chart{}, false
 	}
@@ -78,7 +81,7 @@ func (b *soakingBlock) pushed(f *front, length float64) (Chart, bool) {
 		Summary: "Water saturation along as much rock as a block is long, once the front alone has gone half of it and once as much as all of it: with push and suction together, by push alone with its sharp front, and by suction alone. At the outlet water waits until capillary pressure is zero."}
 	d := f.displacement
 	for i, q := range []float64{0.5 * d.Breakthrough(), d.Breakthrough() + 0.5} {
-		if !run.Advance(q/f.velocity, nil) {
+		if !run.Advance(q/f.velocity, func(r *fv.Implicit) bool { return r.Work() < mostPushed }) || run.T() < q/f.velocity {
 			return Chart{}, false
 		}
 		both := Line{ID: "both" + units.Exact(float64(i+1)), Label: "both, " + units.Format(q, 2) + " PV", Role: "time" + units.Exact(float64(2*i+1)), Kind: "line"}

@@ -38,14 +38,40 @@ func NewStreamtubes(g *pattern.Geometry, bores pattern.Bores, flood *Flood, tole
 	far := 0.0
 	for _, t := range g.Tubes {
 		ends := g.Ends(t, bores)
-		p := Path{PoreVolume: g.Area * t.Area, Impedance: ends.Impedance, Flood: quick,
-			Shape: Shape{V: t.V, G: t.G, In: ends.In, Out: ends.Out}}
+		shape, left := relieved(Shape{V: t.V, G: t.G, In: ends.In, Out: ends.Out})
+		p := Path{PoreVolume: g.Area * t.Area, Impedance: ends.Impedance * left, Flood: quick, Shape: shape}
 		m := Member{Body: p.Tabulate(tolerance), PoreVolume: p.PoreVolume, Pace: 1 / (p.PoreVolume * p.Impedance)}
 		s.Tubes = append(s.Tubes, m)
 		far = math.Max(far, p.Clock(furthest)/m.Pace)
 	}
 	s.Whole = s.Tubes.Tabulate(tolerance, far)
 	return s
+}
+
+// relieved takes negative resistances of the ends out of the body: a well whose effective radius
+// lies beyond its circle frees the rock inside that radius of resistance, and that rock holds what
+// the front has made of it, not what is injected. left is what then counts as the whole resistance.
+func relieved(s Shape) (r Shape, left float64) {
+	from, to := math.Max(0, -s.In), 1-math.Max(0, -s.Out)
+	left = to - from
+	if left == 1 {
+		return s, 1
+	}
+	r = Shape{In: math.Max(0, s.In) / left, Out: math.Max(0, s.Out) / left}
+	put := func(v, g float64) {
+		if n := len(r.V); n == 0 || v > r.V[n-1] {
+			r.V, r.G = append(r.V, v), append(r.G, math.Max(0, math.Min(1, (g-from)/left)))
+		}
+	}
+	for k, g := range s.G {
+		for _, at := range [2]float64{from, to} {
+			if k > 0 && at > s.G[k-1] && at < g {
+				put(s.V[k-1]+(s.V[k]-s.V[k-1])*(at-s.G[k-1])/(g-s.G[k-1]), at)
+			}
+		}
+		put(s.V[k], g)
+	}
+	return r, left
 }
 
 // At implements Body.

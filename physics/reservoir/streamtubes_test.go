@@ -171,3 +171,24 @@ func BenchmarkStreamtubes(b *testing.B) {
 		NewStreamtubes(g, pattern.Bores{Radius: 5e-4}, NewFlood(flow, d), 1e-3)
 	}
 }
+
+// Wells whose effective radius lies beyond the circles around them free rock of resistance, with the
+// oil in it: at the start the rate is that of the pattern full of oil, by hand, and as water of a
+// twentieth of its mobility comes in the rate falls, never below that of the pattern full of water.
+func TestWideWellsTakeNoResistanceBelowZero(t *testing.T) {
+	const m = 0.05
+	bores := pattern.Bores{Radius: 2.3e-3, Injector: -2.4, Producer: -1.1}
+	for _, shape := range []pattern.Shape{fiveSpot, {Kind: pattern.SevenSpot}, {Kind: pattern.Direct, Ratio: 1}, {Kind: pattern.NineSpot, Ratio: 2}} {
+		s := tubes(t, shape, 12, pistonFlow(m), bores, 1e-6)
+		oil := 2 * math.Pi / (m * 1e-3) / s.Geometry.Drop(bores)
+		near(t, "rate at the start", s.At(0).Rate*s.Geometry.Area, oil, 2e-5*oil) // as at unit mobility above
+		former := math.Inf(1)
+		for q := 0.02; q < 3; q *= 1.3 {
+			rate := s.At(Clock(s, q, 0)).Rate * s.Geometry.Area
+			if rate > former*(1+1e-6) || rate < m*oil*(1-1e-6) {
+				t.Errorf("%s: rate %g after %g PV, %g before, oil %g", shape.Kind, rate, q, former, oil)
+			}
+			former = rate
+		}
+	}
+}

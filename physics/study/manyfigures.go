@@ -118,7 +118,7 @@ func (m *many) contrastFigures() {
 		m.figure(Figure{ID: "field." + id, Label: label, Symbol: symbol, Value: value, Quantity: units.Number, Strip: strip}, m.by("", how, source).rests(layerTable.path))
 	}
 	line := "1 − exp(−m), m the slope of ln k against the normal quantile of the share of thickness with higher permeability, by least squares; plotting position "
-	add("variation", "Dykstra-Parsons coefficient", "VDP", reservoir.Variation(m.samples, reservoir.Hazen), true, line+"in the middle of each row (Hazen).", ref.DykstraParsons1950)
+	add("variation", "Dykstra-Parsons coefficient", "VDP", reservoir.Variation(m.samples, reservoir.Hazen), m.pattern == nil, line+"in the middle of each row (Hazen).", ref.DykstraParsons1950)
 	add("variationWeibull", "The same, plotted at i/(n + 1)", "VDP,W", reservoir.Variation(m.samples, reservoir.Weibull), false, line+"i/(n + 1) (Weibull). It differs from the other where rows are few.", ref.DykstraParsons1950)
 	add("variationOfSpread", "The same, by the standard deviation of ln k", "VDP,s", reservoir.VariationOfSpread(m.samples), false, "1 − exp(−s), weighted with thickness.", ref.Lake1989)
 	add("variationOfMeans", "The same, by arithmetic and harmonic mean", "VDP,m", reservoir.VariationOfMeans(m.samples), false, "1 − exp(−√ln(kA/kH)).", ref.Fanchi2016)

@@ -81,7 +81,7 @@ func (b *soakingBlock) fractures(s *sheet) {
 	s.figure(Figure{ID: "soak.fractureFull", Label: "As much water injected as the rock can take, after", Symbol: "tR", Value: flood.Rock, Quantity: units.Duration},
 		all(s.by("", "Volume of the block between the wells times porosity and what can soak in, over the calendar rate.")))
 	s.figure(Figure{ID: "soak.fractureKept", Label: "Of that the rock has taken by then", Symbol: "K", Value: kept, Quantity: units.Share},
-		all(s.by("", "Water advances along the fractures at the constant rate, and at each place rock takes it up as a block would from the moment water arrives, in proportion to the share of water there; summed by convolution.", sources...)))
+		all(s.by("", "Water advances along the fractures at the constant rate, and at each place rock takes it up as a block would from the moment water arrives, in proportion to the share of water there; summed by convolution. Told for that time and, on top, the one in which the fractures themselves fill.", sources...)))
 	s.figure(Figure{ID: "soak.fractureArrival", Label: "Water through the fractures reaches the producer after", Symbol: "tf", Value: flood.Own, Quantity: units.Duration},
 		all(s.by("", "Volume of the fractures over the rate.")))
 	s.figure(Figure{ID: "soak.pace", Label: "Injection time over soaking time", Symbol: "Da", Value: pace, Quantity: units.Number},

@@ -167,6 +167,31 @@ func variants() map[string]Study {
 		put(st, "field.wells.depth", 2900, "ft")
 		put(st, "field.wells.fractureGradient", 0.7, "psi/ft")
 	})
+	add("layers in a pattern of wide wells", func(st *Study) {
+		st.Field.Pattern.Kind, st.Field.Layers.Table = "seven-spot", "ft md frac\n10 100 0.2\n3 20 0.1"
+		put(st, "field.pattern.spacing", 300, "m")
+		put(st, "field.wells.radius", 0.7, "m")
+		put(st, "field.wells.injectorSkin", -2.4, "")
+		put(st, "fluids.waterViscosity", 5, "cp")
+		put(st, "fluids.oilViscosity", 0.3, "cp")
+	})
+	add("soaking behind a steep front", func(st *Study) {
+		*st = soaking()
+		put(st, "rock.corey.sor", 0, "fraction")
+		put(st, "rock.corey.nw", 11.1147712036217, "")
+		put(st, "rock.corey.no", 6.895797534116068, "")
+		put(st, "rock.capillary.p0", 4792.848905791222, "Pa")
+		put(st, "rock.capillary.n", 1.5931551812160405, "")
+		put(st, "rock.capillary.swr", 0, "fraction")
+	})
+	add("soaking above a level stretch", func(st *Study) {
+		*st = soaking()
+		st.Rock.Capillary.Curve, st.Rock.Capillary.Unit = "table-linear", "psi"
+		st.Rock.Capillary.Table = &PcTable{Sw: []float64{0.227, 0.3, 0.4, 0.716}, Pc: []float64{9, 5, 5, 0}}
+		put(st, "soak.inlet", 0.38, "fraction")
+		put(st, "block.length", 1, "m")
+		st.Block.Shape = "box-6"
+	})
 	add("schedule", func(st *Study) {
 		st.Field.Wells.Schedule = "date bbl/d psi\n2027-03-01 500 -\n2028-03-01 - -\n2028-09-01 1200 1500\n2035-01-01 - 1100"
 	})

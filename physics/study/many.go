@@ -1,6 +1,7 @@
 package study
 
 import (
+	"errors"
 	"math"
 	"slices"
 	"strconv"
@@ -315,6 +316,9 @@ func thick(f *front, curves relperm.Curves) (*reservoir.Flood, error) {
 	flow.Curves = curves
 	lo, hi := curves.Ends()
 	d, err := displace.New(flow, hi, lo)
+	if err == nil && !(d.Breakthrough() > 0) {
+		err = errors.New("the layers differ by more than they can tell")
+	}
 	if err != nil {
 		return nil, err
 	}

@@ -19,7 +19,7 @@ type soak struct {
 	inputs   []string
 	pcEnds   [2]float64
 	held     float64 // at the face; Inlet is what gets inside
-	initials string // where the initial saturation comes from
+	initials string  // where the initial saturation comes from
 }
 
 // risen is the share of the whole change in saturation that marks the reach of water

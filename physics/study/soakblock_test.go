@@ -188,3 +188,23 @@ func TestSoakBlockSaysWhatItWants(t *testing.T) {
 		t.Errorf("problems %+v", r.Problems)
 	}
 }
+
+// TestPushEnds: straight lines of kr over so long a rock that suction smooths none of their corners
+// keep Newton's method going round, which once went on for ever. Then that is said.
+func TestPushEnds(t *testing.T) {
+	st := soakingStudy()
+	st.Rock.Curve, st.Rock.Table, st.Rock.Capillary.Curve = "table-linear", Demo().Rock.Table, "skjaeveland"
+	for path, pa := range map[string]float64{"cw": 5516, "co": -7584} {
+		put(&st, "rock.capillary."+path, pa, "Pa")
+	}
+	put(&st, "rock.capillary.aw", 0.7, "")
+	put(&st, "rock.capillary.ao", 0.6, "")
+	put(&st, "fluids.waterViscosity", 2.6414, "cp")
+	put(&st, "block.length", 3363, "m")
+	part := Run(st).Parts[SheetSoak]
+	drawn := slices.ContainsFunc(part.Charts, func(c Chart) bool { return c.ID == "soak.push" })
+	said := slices.ContainsFunc(part.Notes, func(n Note) bool { return n.ID == "soak.pushStopped" })
+	if part.Status != Ready || drawn == said {
+		t.Errorf("Soak is %s, the profile drawn: %v, said not to be: %v", part.Status, drawn, said)
+	}
+}

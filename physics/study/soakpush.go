@@ -18,7 +18,7 @@ const (
 )
 
 // mostPushed is how often cells are evaluated, at most, for the profile with both.
-const mostPushed = 2_000_000
+const mostPushed = 1_000_000
 
 // push tells whether the study's flood is ruled by its rate or by suction, over the length
 // between the wells and over that of a block, and shows the latter with both.
@@ -51,6 +51,8 @@ func (b *soakingBlock) push(s *sheet, f *front) {
 		Cause: "Suction over push is " + units.Format(n, 2) + " there: above 1 suction rules, below 0.01 the rate (own bounds).", Do: "Where both count, neither the front of Front nor soaking alone holds; see the profile with both."})
 	if c, ok := b.pushed(f, length); ok {
 		s.part.Charts = append(s.part.Charts, c)
+	} else {
+		s.note(Note{ID: "soak.pushStopped", Level: "caution", Text: "The profile with push and suction together is not drawn.", Cause: "It did not come to its end in bounded work: corners or ends of the curves stop it.", Do: "Look at the ends of the curves; a smooth curve helps.", Paths: []string{"rock.curve", "rock.capillary.curve"}})
 	}
 }
 

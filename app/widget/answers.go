@@ -2,6 +2,7 @@ package widget
 
 import (
 	"strconv"
+	"strings"
 
 	"github.com/maxence-charriere/go-app/v9/pkg/app"
 
@@ -58,16 +59,29 @@ func (a *Answers) Render() app.UI {
 // Done is how much there is of a part that grows.
 func Done(p study.Part) string { return strconv.Itoa(int(100*(1-p.Left))) + " %" }
 
+// sentence is the answer in words; no line ends between a figure and its full stop.
 func (a *Answers) sentence() []app.UI {
 	var words []app.UI
+	var last app.UI // the figure that what follows may have to stay with
 	for _, phrase := range a.Part.Answer {
-		if phrase.Text != "" {
-			words = append(words, app.Text(phrase.Text))
+		said := phrase.Text
+		if last != nil {
+			end := len(said) - len(strings.TrimLeft(said, ".,;:)"))
+			if end > 0 {
+				last = app.Span().Class("whole").Body(last, app.Text(said[:end]))
+			}
+			words, said, last = append(words, last), said[end:], nil
+		}
+		if said != "" {
+			words = append(words, app.Text(said))
 		}
 		if f, ok := a.Part.Figure(phrase.Figure); ok {
-			words = append(words, button(report.Spoken(f, a.System)).Class("inline").Title("Show the working").
-				Aria("expanded", strconv.FormatBool(a.open == f.ID)).OnClick(a.toggle(f.ID), f.ID))
+			last = button(report.Spoken(f, a.System)).Class("inline").Title("Show the working").
+				Aria("expanded", strconv.FormatBool(a.open == f.ID)).OnClick(a.toggle(f.ID), f.ID)
 		}
+	}
+	if last != nil {
+		words = append(words, last)
 	}
 	return words
 }
@@ -80,9 +94,18 @@ func (a *Answers) figure(f study.Figure) app.UI {
 		Aria("expanded", strconv.FormatBool(a.open == f.ID)).
 		OnClick(a.toggle(f.ID), f.ID).
 		Body(
-			app.Span().Class("value").Text(report.Value(f, a.System)),
+			app.Span().Class("value").Body(value(f, a.System)...),
 			app.Span().Class("label").Body(app.Text(f.Label+" "), app.Span().Class("symbol").Text(f.Symbol)),
 		))
+}
+
+// value prints a figure so that its line ends before the unit if anywhere.
+func value(f study.Figure, s units.System) []app.UI {
+	number, unit, _ := strings.Cut(report.Value(f, s), "\u00a0")
+	if unit == "" {
+		return []app.UI{app.Text(number)}
+	}
+	return []app.UI{app.Text(number + " "), app.Span().Class("whole").Text(unit)}
 }
 
 func (a *Answers) toggle(id string) app.EventHandler {

@@ -34,7 +34,7 @@ var choiceLabels = map[string]string{
 	"rock.capillary.curve": "Capillary pressure", "rock.capillary.at": "Pc was measured at", "rock.capillary.ends": "Ends of the Pc fit",
 	"rock.capillary.weights": "Weights of the Pc fit", "rock.capillary.unit": "Unit of Pc",
 	"fluids.pair": "Pair of fluids", "front.rider.kind": "What rides along", "rock.ends": "Swc and Sor of the fit", "front.ending": "The displacement ends",
-	"soak.flow": "How the oil leaves", "block.shape": "Block that soaks", "block.plug.shape": "Plug", "block.sizes": "Sizes of blocks", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
+	"soak.flow": "How the oil leaves", "block.shape": "Block that soaks", "block.plug.shape": "Plug", "block.sizes": "Sizes of blocks", "field.pattern.kind": "Arrangement of the wells", "field.drive": "Drive", "field.limit": "Economic limit", "field.start": "First day of injection",
 	"field.layers.table": "Layers", "field.layers.crossflow": "Flow between the layers", "field.wells.schedule": "Schedule", "field.history.table": "Measured rates",
 	"match.first": "Moved first by the match", "match.second": "Moved second", "match.third": "Moved third", "match.fourth": "Moved fourth",
 	"title": "Title", "author": "Author", "note": "Note",
@@ -112,6 +112,7 @@ func choices(st study.Study) *Table {
 			add("block.plug.shape", st.Block.Plug.Shape, study.PlugShapes)
 		}
 	}
+	add("field.pattern.kind", st.Field.Pattern.Kind, study.Patterns)
 	add("field.drive", st.Field.Drive, study.Drives)
 	add("field.limit", st.Field.Limit, study.Limits)
 	if st.Field.Layers.Table != "" {

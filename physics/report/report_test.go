@@ -2,6 +2,7 @@ package report
 
 import (
 	"encoding/csv"
+	"slices"
 	"strings"
 	"testing"
 
@@ -88,5 +89,21 @@ func TestCSV(t *testing.T) {
 				}
 			}
 		}
+	}
+}
+
+// TestPatternIsNamed looks for the pattern among the choices, and for its name where a note leads to it.
+func TestPatternIsNamed(t *testing.T) {
+	st := study.Demo()
+	st.Field.Pattern.Kind = "five-spot"
+	for _, n := range study.Run(st).Parts[study.SheetField].Notes {
+		for _, path := range n.Paths {
+			if Label(&st, path) == path {
+				t.Errorf("%s leads to %q, which has no name", n.ID, path)
+			}
+		}
+	}
+	if rows := choices(st).Rows; !slices.ContainsFunc(rows, func(row []string) bool { return row[1] == "five-spot" }) {
+		t.Errorf("the choices are %v", rows)
 	}
 }

@@ -130,7 +130,7 @@ func (m *many) layerCharts() {
 	for _, l := range m.layers {
 		total += l.Thickness
 	}
-	chart := Chart{ID: "field.fronts", Title: "Fronts in the layers", X: axis("Depth into the layers, in the order of the table", "h", units.Length).from(0, total), Y: axis(m.wayName(), "x/L", units.Share).from(0, 1),
+	chart := Chart{ID: "field.fronts", Title: "Fronts in the layers", X: axis("Depth into the layers, in the order of the table", "h", units.Length).from(0, total), Y: axis(m.wayName(), m.waySymbol(), units.Share).from(0, 1),
 		Marks: []Mark{}, Summary: "How far the front of each layer has come, at four times of the forecast: layers at 100 % give water."}
 	for n, share := range []float64{0.1, 0.3, 0.6, 1} {
 		t := share * m.end
@@ -170,7 +170,7 @@ func (m *many) tables() {
 	whole := m.bundle.At(0)
 	columns := []Column{
 		{Label: "Layer", Quantity: units.Number}, {Label: "Thickness", Symbol: "h", Quantity: units.Length}, {Label: "Permeability", Symbol: "k", Quantity: units.Permeability}, {Label: "Porosity", Symbol: "φ", Quantity: units.Fraction},
-		{Label: "Share of the first injection", Quantity: units.Share}, {Label: "Water arrives", Symbol: "t", Quantity: units.Duration}, {Label: "Injected " + when, Symbol: "Q", Quantity: units.PoreVolumes}, {Label: "Oil produced " + when + ", reservoir", Quantity: units.Volume}, {Label: "Front " + when, Symbol: "x/L", Quantity: units.Share},
+		{Label: "Share of the first injection", Quantity: units.Share}, {Label: "Water arrives", Symbol: "t", Quantity: units.Duration}, {Label: "Injected " + when, Symbol: "Q", Quantity: units.PoreVolumes}, {Label: "Oil produced " + when + ", reservoir", Quantity: units.Volume}, {Label: "Front " + when, Symbol: m.waySymbol(), Quantity: units.Share},
 	}
 	for i, l := range m.layers {
 		b := m.bundle[i]

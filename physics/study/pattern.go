@@ -214,10 +214,9 @@ func (m *many) mapChart(end float64) Chart {
 	tubes := Line{ID: "tubes", Label: "streamlines", Role: "aid", Kind: "line"}
 	every := int(math.Ceil(float64(len(r.Tubes)) / drawn))
 	for i := every / 2; i < len(r.Tubes); i += every {
-		line := r.Tubes[i].Line
-		last := len(line) - 1
 		for k := range 2*bends + 1 {
-			x, y := r.mapped(line[min(k, 2*bends-k)*last/bends], m.length)
+			swept := (1 - math.Cos(math.Pi*float64(k)/bends)) / 2 // even steps of length: near a well the share swept goes with their square
+			x, y := r.mapped(r.Front(r.Tubes[i], swept), m.length)
 			tubes.X, tubes.Y = append(tubes.X, x), append(tubes.Y, y)
 		}
 	}

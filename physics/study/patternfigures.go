@@ -32,6 +32,13 @@ func (m *many) wayName() string {
 	return "Front, of the way to the producer"
 }
 
+func (m *many) waySymbol() string {
+	if m.pattern != nil {
+		return "Ea"
+	}
+	return "x/L"
+}
+
 // tubesTold is the method, and its limit.
 const tubesTold = "Streamtubes of unit mobility, from potential theory; each carries the exact linear displacement at the common pressure difference, so that its share of the injection changes with its resistance. The tubes stay where they are as the mobilities change."
 

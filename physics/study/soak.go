@@ -173,12 +173,17 @@ func (k *soak) past() bool { return k.time > k.arrival*(1+backward) }
 
 func (k *soak) answer(s *sheet) {
 	s.answer("The rock takes up water as 2 A √t with A = {soak.a}")
+	arrival := "its front meets the far boundary"
+	if !k.FiniteFront() {
+		arrival = "a rise of 1 % of the whole meets the far boundary"
+	}
+	const taken = " that is {soak.uptake} of water per area of open face"
+	if !k.asked {
+		s.answer(": after {soak.time}, when "+arrival+","+taken, ", {soak.recovery} of the pore volume of the block", ".")
+		return
+	}
 	if !k.past() {
-		s.answer(": after {soak.time} that is {soak.uptake} of water on every unit of open face", ", {soak.recovery} of the pore volume of the block", ", and the water is {soak.reach} deep")
+		s.answer(": after {soak.time}"+taken, ", {soak.recovery} of the pore volume of the block", ", and the water is {soak.reach} deep")
 	}
-	if k.FiniteFront() {
-		s.answer("; its front meets the far boundary after {soak.arrival}", ".")
-	} else {
-		s.answer("; a rise of 1 % of the whole meets the far boundary after {soak.arrival}", ".")
-	}
+	s.answer("; "+arrival+" after {soak.arrival}", ".")
 }

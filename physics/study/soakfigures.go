@@ -34,7 +34,7 @@ func (k *soak) figures(s *sheet) {
 	s.figure(Figure{ID: "soak.a", Label: "Uptake coefficient", Symbol: "A", Value: k.A, Quantity: units.Sorptivity, Strip: true},
 		s.by("", soakMethod, ref.McWhorterSunada1990, ref.SchmidGeiger2012, ref.Wright1997).rests(k.inputs...).on("soak.ratio", "soak.initial", "soak.inlet"))
 	k.timeFigures(s)
-	s.figure(Figure{ID: "soak.residual", Label: "Residual of the solution", Symbol: "ε", Value: twoDigits(k.Residual), Quantity: units.Number, Strip: true},
+	s.figure(Figure{ID: "soak.residual", Label: "Residual of the solution", Symbol: "ε", Value: twoDigits(k.Residual), Quantity: units.Number},
 		s.by("", "What F misses of its equation between the points of collocation, integrated over saturation, as a share of F's whole rise. A is closer by far: the errors change sign from point to point. "+units.Format(float64(len(k.History)), 3)+" steps of the solver.").on("soak.a"))
 }
 
@@ -65,7 +65,7 @@ func (k *soak) timeFigures(s *sheet) {
 	if k.asked {
 		asked = s.by("", "As typed.").rests("soak.time")
 	}
-	s.figure(Figure{ID: "soak.time", Label: "Time asked about", Symbol: "ts", Value: k.time, Quantity: units.Duration}, asked)
+	s.figure(Figure{ID: "soak.time", Label: "Time asked about", Symbol: "ts", Value: k.time, Quantity: units.Duration, Strip: k.past()}, asked)
 	if k.past() {
 		return
 	}

@@ -91,7 +91,7 @@ func (b *soakingBlock) fractures(s *sheet) {
 	if i := slices.IndexFunc(stream.Cut, func(cut float64) bool { return cut >= 0.5 }); i > 0 {
 		s.figure(Figure{ID: "soak.fractureCutHalf", Label: "Water cut of a half after", Symbol: "t(fw=½)", Value: stream.Times[i], Quantity: units.Duration}, all(s.by("", "At reservoir conditions.", sources...)))
 	}
-	s.answer(" Along fractures, after as much water as the rock can take, in {soak.fractureFull}, the rock holds {soak.fractureKept} of it.")
+	s.answer(" Along fractures, once as much water has been injected as the rock can take, after {soak.fractureFull}, the rock has taken up {soak.fractureKept} of it.")
 	if pace < 1 {
 		s.note(Note{ID: "soak.outrun", Level: "caution", Text: "The rate outruns soaking: injection passes the rock in " + units.Format(pace, 2) + " of the time that its blocks take.",
 			Cause: "Water leaves through the fractures before the blocks can take it up.", Do: "Lower the rate, or inject in spells: what is left still soaks in, only later.", Paths: []string{"field.rate"}})

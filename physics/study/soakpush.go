@@ -47,7 +47,7 @@ func (b *soakingBlock) push(s *sheet, f *front) {
 	case n <= pushRules:
 		said = "the rate rules"
 	}
-	s.note(Note{ID: "soak.pushRuled", Level: "remark", Text: "At the study's rate, across " + units.Format(length, 3) + " m of rock, " + said + ".",
+	s.note(Note{ID: "soak.pushRuled", Level: "remark", Text: "At the study's rate, across a block, " + said + ".",
 		Cause: "Suction over push is " + units.Format(n, 2) + " there: above 1 suction rules, below 0.01 the rate (own bounds).", Do: "Where both count, neither the front of Front nor soaking alone holds; see the profile with both."})
 	if c, ok := b.pushed(f, length); ok {
 		s.part.Charts = append(s.part.Charts, c)
@@ -87,7 +87,7 @@ func (b *soakingBlock) pushed(f *front, length float64) (Chart, bool) {
 			return Chart{}, false
 		}
 		both := Line{ID: "both" + units.Exact(float64(i+1)), Label: "both, " + units.Format(q, 2) + " PV", Role: "time" + units.Exact(float64(2*i+1)), Kind: "line"}
-		alone := Line{ID: "push" + units.Exact(float64(i+1)), Label: "push alone", Role: "time" + units.Exact(float64(2*i+1)), Kind: "dashed"}
+		alone := Line{ID: "push" + units.Exact(float64(i+1)), Label: "push, " + units.Format(q, 2) + " PV", Role: "time" + units.Exact(float64(2*i+1)), Kind: "dashed"}
 		for k, sw := range run.Cells() {
 			both.X, both.Y = append(both.X, length*(float64(k)+0.5)/cells), append(both.Y, sw)
 		}

@@ -30,7 +30,7 @@ export function placeLabels(lay, marks) {
     const own = samples.filter((s) => s.of === c.line);
     const stride = Math.ceil(own.length / tries);
     const tried = own.filter((_, i) => i % stride === 0);
-    take(c.line.label, c.line, tried.flatMap((s) => beside(s, gap)), c.line.kind === "points" || drawn.length > many);
+    take(c.line.label, c.line, tried.flatMap((s) => beside(s, gap)), c.line.kind === "points" || drawn.length > many || lay.map);
   }
   return placed;
 

@@ -32,16 +32,25 @@ export function layout(picture, state, width, height, family) {
   const lead = 10; // before a label at the end of a line
   const ends = freeEnds(shown, view.x, scaleX, upright).filter((l) => measure(l.label) < (width < 480 ? 0.16 : 0.28) * width);
   const margin = ends.reduce((w, l) => Math.max(w, measure(l.label) + lead + 6), 0);
-  const last = 14; // room for half of the last tick's text
-  const rect = { left, top, right: width - Math.max(margin, last), bottom: height - bottom };
-  if (picture.map) toScale(rect, view);
-  const xTicks = fitting(view.x, scaleX, rect.right - rect.left, measure);
+  const rect = { left, top, right: width - Math.max(margin, 14), bottom: height - bottom };
+  let xTicks = [];
+  const frame = () => {
+    if (picture.map) toScale(rect, view);
+    xTicks = fitting(view.x, scaleX, rect.right - rect.left, measure);
+  };
+  frame();
+  // The last tick's text needs room when it stands under the end of the axis.
+  const over = xTicks.reduce((most, t) => Math.max(most, axis(view.x, scaleX, rect.left, rect.right, []).dot(t.at) + measure(t.text) / 2 + 2), 0) - width;
+  if (over > 0) {
+    rect.right -= Math.ceil(over);
+    frame();
+  }
 
   const x = axis(view.x, scaleX, rect.left, rect.right, xTicks);
   const y = axis(view.y, scaleY, rect.bottom, top, yTicks);
   const courses = picture.lines.map((l) => course(l, !state.hidden.has(l.id), x, y));
   return {
-    width, height, rect, x, y, whole, view, courses, yTitle, lead, measure, size, family,
+    width, height, rect, x, y, map: picture.map, whole, view, courses, yTitle, lead, measure, size, family,
     endLabels: new Set(margin > 0 ? ends.map((l) => l.id) : []),
   };
 }

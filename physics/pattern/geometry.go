@@ -2,6 +2,7 @@ package pattern
 
 import (
 	"math"
+	"math/cmplx"
 	"slices"
 )
 
@@ -201,5 +202,15 @@ func (g *Geometry) Front(t Tube, v float64) complex128 {
 	h := complex(1/float64(len(t.V)-1), 0)
 	a, b := t.Line[k], t.Line[k+1]
 	p, q := complex(u, 0), complex(1-u, 0)
-	return q*q*(a*(1+2*p)+h*t.tangents[k]*p) + p*p*(b*(1+2*q)-h*t.tangents[k+1]*q)
+	return q*q*(a*(1+2*p)+within(h*t.tangents[k], b-a)*p) + p*p*(b*(1+2*q)-within(h*t.tangents[k+1], b-a)*q)
+}
+
+// within shortens a tangent to so many chords that its cubic does not overshoot: where the
+// flow nearly stands still it would (Fritsch & Carlson 1980, a sufficient bound).
+func within(tangent, chord complex128) complex128 {
+	const most = 3
+	if long := cmplx.Abs(tangent) / cmplx.Abs(chord); long > most {
+		return tangent * complex(most/long, 0)
+	}
+	return tangent
 }

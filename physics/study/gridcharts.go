@@ -85,7 +85,7 @@ func (g *grid) profileChart() Chart {
 		}
 		lines = append(lines, l)
 	}
-	return Chart{ID: "grid.profiles", Title: "Profile when half of what brings breakthrough is injected", X: axis("Place between the wells, x/L", "x", units.Fraction).from(0, 1), Y: saturationAxis, Lines: lines, Marks: []Mark{},
+	return Chart{ID: "grid.profiles", Title: "Profile when half of what brings breakthrough is injected", X: axis("Distance from the injector, part of the length", "x/L", units.Number).from(0, 1), Y: saturationAxis, Lines: lines, Marks: []Mark{},
 		Summary: "Water saturation between the wells: the exact front is a step, which a grid smears over the more of the length the fewer cells it has."}
 }
 

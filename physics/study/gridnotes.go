@@ -14,14 +14,14 @@ func (g *grid) notes(s *sheet) {
 	if g.scheme.Implicit {
 		s.note(Note{ID: "grid.stability", Level: "remark", Text: "The implicit scheme is stable at any step, and the longer the step, the more it smears: as the diffusion (v Δx/2)(1 + CFL).", Cause: "LeVeque (2002), sec. 8.6, with the step backward.", Do: "Shorten the step as well as the cells."})
 	} else {
-		s.note(Note{ID: "grid.stability", Level: "remark", Text: "Stable up to a CFL number of " + map[bool]string{true: "1", false: "0.5"}[g.scheme.Limiter == ""] + "; no cell then leaves the range of its neighbours. At first order the grid smears as the diffusion (v Δx/2)(1 − CFL) would.", Cause: "Crandall & Majda (1980); Perthame & Shu (1996); LeVeque (2002), sec. 8.6.", Do: "Nothing: longer steps are refused."})
+		s.note(Note{ID: "grid.stability", Level: "remark", Text: "Stable up to a CFL number of " + map[bool]string{true: "1", false: "0.5"}[g.scheme.Limiter == ""] + "; no cell then leaves the range of its neighbours. At first order the grid smears as the diffusion (v Δx/2)(1 − CFL) would.", Cause: "Crandall & Majda (1980); Perthame & Shu (1996); LeVeque (2002), sec. 8.6.", Do: "Longer steps are refused."})
 	}
 	worst := 0.0
 	for _, m := range g.all() {
 		worst = math.Max(worst, math.Abs(m.Balance.Error))
 	}
 	if len(g.runs) > 0 {
-		s.note(Note{ID: "grid.balance", Level: "remark", Text: "What went in, came out and stayed agrees to " + units.Format(worst, 2) + " of the largest of them on all " + strconv.Itoa(len(g.all())) + " runs.", Cause: "What leaves a cell enters the next; the rest is rounding.", Do: "Nothing."})
+		s.note(Note{ID: "grid.balance", Level: "remark", Text: "What went in, came out and stayed agrees to " + units.Format(worst, 2) + " of the largest of them on all " + strconv.Itoa(len(g.all())) + " runs.", Cause: "What leaves a cell enters the next; the rest is rounding.", Do: "Take the errors in the tables as those of the grid: no volume is lost."})
 	}
 	switch g.advice.How {
 	case gridding.Extrapolated:
@@ -40,7 +40,7 @@ func (g *grid) notes(s *sheet) {
 	}
 	switch {
 	case g.pseudo != nil:
-		s.note(Note{ID: "grid.pseudoLimits", Level: "caution", Text: "The pseudo-functions hold for this displacement only: these states, this ratio of viscosities, this number of blocks, each curve in its own place.",
+		s.note(Note{ID: "grid.pseudoLimits", Level: "remark", Text: "The pseudo-functions hold for this displacement only: these states, this ratio of viscosities, this number of blocks, each curve in its own place.",
 			Cause: "They carry the arrival of this very front in their shape. One curve for all blocks does less well, as the table shows.", Do: "Make them anew when the rate, the wells, the grid or the fluids change; check them where the flow turns.", Paths: []string{"grid.blocks"}})
 	case g.without != nil:
 		s.note(Note{ID: "grid.noPseudo", Level: "remark", Text: "There are no pseudo-functions for this displacement: the water cut falls with saturation somewhere.",

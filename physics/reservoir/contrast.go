@@ -6,7 +6,11 @@ import (
 )
 
 // Sample is a stretch of a permeability log, or a layer.
-type Sample struct{ Thickness, Permeability, Porosity float64 } // m, m2, fraction; all > 0
+type Sample struct {
+	Thickness, Permeability, Porosity float64 // m, m2, fraction; all > 0
+
+	Swc, Swi, Sor float64 // connate, initial, residual oil; only lumped here
+}
 
 // Ranked sorts samples by permeability over porosity, the speed at which they are flooded,
 // the fastest first.
@@ -142,7 +146,7 @@ func VariationOfMeans(samples []Sample) float64 {
 }
 
 // Grouped lumps samples into n layers of equal flow capacity, fastest first; thickness,
-// k h and phi h are kept. Samples are not split, so that fewer layers may come out where a
+// k h, phi h and the volume at each saturation are kept. Samples are not split, so that fewer layers may come out where a
 // few samples carry most of the flow.
 func Grouped(samples []Sample, n int) []Sample {
 	sorted := Ranked(samples)
@@ -152,16 +156,23 @@ func Grouped(samples []Sample, n int) []Sample {
 	}
 	var layers []Sample
 	var h, kh, ph, passed float64
+	var l Sample // the layer so far; its saturations move by shares, so that equal ones stay as they are
 	for i, s := range sorted {
 		h, kh, ph = h+s.Thickness, kh+s.Thickness*s.Permeability, ph+s.Thickness*s.Porosity
 		passed += s.Thickness * s.Permeability
+		share := s.Thickness * s.Porosity / ph
+		if h == s.Thickness {
+			l = s
+		}
+		l.Swc, l.Swi, l.Sor = l.Swc+share*(s.Swc-l.Swc), l.Swi+share*(s.Swi-l.Swi), l.Sor+share*(s.Sor-l.Sor)
 		// Half of the next sample's flow decides on which side of the cut it falls.
 		next := 0.0
 		if i+1 < len(sorted) {
 			next = sorted[i+1].Thickness * sorted[i+1].Permeability / 2
 		}
 		if last := i+1 == len(sorted); last || passed+next > total*float64(len(layers)+1)/float64(n) {
-			layers = append(layers, Sample{h, kh / h, ph / h})
+			l.Thickness, l.Permeability, l.Porosity = h, kh/h, ph/h
+			layers = append(layers, l)
 			h, kh, ph = 0, 0, 0
 		}
 	}

@@ -15,7 +15,7 @@ import (
 func evenly(k ...float64) []Sample {
 	var list []Sample
 	for _, x := range k {
-		list = append(list, Sample{1, x, 0.2})
+		list = append(list, Sample{Thickness: 1, Permeability: x, Porosity: 0.2})
 	}
 	return list
 }
@@ -88,7 +88,7 @@ func TestVariation(t *testing.T) {
 	const s, n = 0.7, 20000
 	samples := make([]Sample, n)
 	for i := range samples {
-		samples[n-1-i] = Sample{1, math.Exp(s * math.Sqrt2 * math.Erfinv(2*(float64(i)+0.5)/n-1)), 0.2}
+		samples[n-1-i] = Sample{Thickness: 1, Permeability: math.Exp(s * math.Sqrt2 * math.Erfinv(2*(float64(i)+0.5)/n-1)), Porosity: 0.2}
 	}
 	want := 1 - math.Exp(-s)
 	near(t, "Hazen", Variation(samples, Hazen), want, 1e-9) // on the line by construction
@@ -108,7 +108,7 @@ func TestVariation(t *testing.T) {
 		near(t, string(position), Variation(evenly(8, 2, 1), position), 1-math.Exp(-math.Log(8)/(2*z)), 1e-8)
 	}
 	// Two equal halves of a sample are the sample.
-	near(t, "halves", Variation([]Sample{{2, 9, 0.2}, {2, 1, 0.2}}, Hazen), Variation([]Sample{{4, 9, 0.2}, {4, 1, 0.2}}, Hazen), 1e-15)
+	near(t, "halves", Variation([]Sample{{Thickness: 2, Permeability: 9, Porosity: 0.2}, {Thickness: 2, Permeability: 1, Porosity: 0.2}}, Hazen), Variation([]Sample{{Thickness: 4, Permeability: 9, Porosity: 0.2}, {Thickness: 4, Permeability: 1, Porosity: 0.2}}, Hazen), 1e-15)
 }
 
 // Groups keep thickness, k h and phi h, and never look more varied than the log.
@@ -118,7 +118,7 @@ func TestGrouped(t *testing.T) {
 		var log []Sample
 		var h, kh, ph float64
 		for range 1 + rng.IntN(400) {
-			s := Sample{0.1 + rng.Float64(), math.Exp(2 * rng.NormFloat64()), 0.1 + 0.2*rng.Float64()}
+			s := Sample{Thickness: 0.1 + rng.Float64(), Permeability: math.Exp(2 * rng.NormFloat64()), Porosity: 0.1 + 0.2*rng.Float64()}
 			log = append(log, s)
 			h, kh, ph = h+s.Thickness, kh+s.Thickness*s.Permeability, ph+s.Thickness*s.Porosity
 		}

@@ -24,7 +24,7 @@ func (f *Field) Render() app.UI {
 		widget.Group(d, m, study.SheetField, "Block", "Block or pattern of wells",
 			widget.Choice(d, "field.pattern.kind", "Arrangement of the wells", in.Pattern.Kind, study.Patterns, "A pattern is one of many alike; the rate is that of one pattern.")),
 		widget.Group(d, m, study.SheetField, "Layers", "Layers, or a permeability log",
-			widget.Block(d, m, "field.layers.table", "Thickness, permeability and porosity", in.Layers.Table, "A first line with the units, such as “ft md fraction”, then a row for each layer or each sample of a log, from the top down. Empty: one even layer."),
+			widget.Block(d, m, "field.layers.table", "Thickness, permeability and porosity, by choice saturations", in.Layers.Table, "A first line with the units, such as “ft md fraction”, then a row for each layer or each sample of a log, from the top down. Columns Swi, Sor and Swc may follow, as “ft md fraction Swi Sor”: a layer then has the study’s curve with its ends moved; a dash is the study’s value. Empty: one even layer."),
 			widget.Choice(d, "field.layers.crossflow", "Flow between the layers", in.Layers.Crossflow, study.Crossflows, "What the forecast is for; the other is drawn beside it.")),
 		widget.Group(d, m, study.SheetField, "Drive", "What drives the flood",
 			widget.Radios(d, "field.drive", "Held constant", in.Drive, study.Drives)),

@@ -1,6 +1,7 @@
 package study
 
 import (
+	"math"
 	"slices"
 	"strconv"
 	"strings"
@@ -17,7 +18,8 @@ const (
 
 // Some tables are kept as they were pasted: the first line names the unit of
 // each column, every further line is a row. Cells are parted by tabs, semicolons or spaces;
-// a dash or nothing is an empty cell. A cell may carry a unit of its own.
+// a dash or nothing is an empty cell. A cell may carry a unit of its own. Columns with a
+// symbol may be left out: they follow the others, in any order, by their symbols.
 
 // textColumn is a column of such a table.
 type textColumn struct {
@@ -25,6 +27,7 @@ type textColumn struct {
 	quantity units.Quantity
 	min, max float64 // SI; min is exclusive unless the column may be empty
 	optional bool
+	symbol   string // of a column that may be left out; what is empty in it is NaN
 }
 
 // textTable is what a text at a path must hold.
@@ -35,49 +38,70 @@ type textTable struct {
 }
 
 var layerTable = textTable{"field.layers.table", "ft md fraction", []textColumn{
-	{"thickness", units.Length, 0, 5e3, false},
-	{"permeability", units.Permeability, 0, 1e-9, false},
-	{"porosity", units.Fraction, 0, 1, false},
+	{"thickness", units.Length, 0, 5e3, false, ""},
+	{"permeability", units.Permeability, 0, 1e-9, false, ""},
+	{"porosity", units.Fraction, 0, 1, false, ""},
+	{"initial water saturation", units.Fraction, 0, 1, true, "Swi"},
+	{"residual oil saturation", units.Fraction, 0, 1, true, "Sor"},
+	{"connate water saturation", units.Fraction, 0, 1, true, "Swc"},
 }, false}
 
+// layersTable is the table of layers with its columns named for the phases of the study.
+func layersTable(st *Study) textTable {
+	t := layerTable
+	if w := wordsOf(pairOf(st)); w != nil {
+		t.columns = each(t.columns, func(c textColumn) textColumn {
+			c.name, c.symbol = w.tell(c.name), w.tell(c.symbol)
+			return c
+		})
+	}
+	return t
+}
+
 var scheduleTable = textTable{"field.wells.schedule", "d bbl/d psi", []textColumn{
-	{"time or date", units.Duration, 0, 1e11, true},
-	{"injection rate", units.Rate, 0, 100, true},
-	{"pressure difference", units.Pressure, 0, 1e9, true},
+	{"time or date", units.Duration, 0, 1e11, true, ""},
+	{"injection rate", units.Rate, 0, 100, true, ""},
+	{"pressure difference", units.Pressure, 0, 1e9, true, ""},
 }, true}
 
 var historyTable = textTable{"field.history.table", "date bbl/d bbl/d", []textColumn{
-	{"time or date", units.Duration, 0, 1e11, true},
-	{"oil rate", units.Rate, 0, 100, true},
-	{"water rate", units.Rate, 0, 100, true},
+	{"time or date", units.Duration, 0, 1e11, true, ""},
+	{"oil rate", units.Rate, 0, 100, true, ""},
+	{"water rate", units.Rate, 0, 100, true, ""},
 }, false}
 
 func (t textTable) refuse(line int, read, allowed string) *Problem {
 	return &Problem{Path: t.path, Read: "in line " + strconv.Itoa(line) + ", " + read, Allowed: allowed}
 }
 
-// read returns the rows in SI, a column after another; empty optional cells are 0. Dates
-// count from start.
+// read returns the rows in SI, a column after another; empty optional cells are 0, or NaN
+// under a symbol. Dates count from start.
 func (t textTable) read(text, start string) (columns [][]float64, problem *Problem) {
 	columns = make([][]float64, len(t.columns))
 	unit := make([]units.Unit, len(t.columns))
+	from, width := make([]int, len(t.columns)), 0 // the cell of each column, -1 where there is none
 	head := true
 	for i, line := range strings.Split(text, "\n") {
 		cells := cellsOf(line)
 		if len(cells) == 0 {
 			continue
 		}
-		if len(cells) > len(t.columns) {
-			return nil, t.refuse(i+1, strconv.Itoa(len(cells))+" cells", "up to "+strconv.Itoa(len(t.columns)))
+		if head {
+			if from, width, problem = t.places(cells, i+1); problem != nil {
+				return nil, problem
+			}
+		}
+		if len(cells) > width {
+			return nil, t.refuse(i+1, strconv.Itoa(len(cells))+" cells", "up to "+strconv.Itoa(width))
 		}
 		for c, column := range t.columns {
 			cell := ""
-			if c < len(cells) {
-				cell = cells[c]
+			if 0 <= from[c] && from[c] < len(cells) {
+				cell = cells[from[c]]
 			}
 			if head {
 				var ok bool
-				if unit[c], ok = unitIn(column.quantity, cell); !ok && !(c >= len(cells) && column.optional) {
+				if unit[c], ok = unitIn(column.quantity, cell); !ok && !(c >= len(cells) && column.optional || column.symbol != "") {
 					return nil, t.refuse(i+1, quoted(cell)+" over the column of "+column.name, "a first line with the units, such as "+t.example)
 				}
 				continue
@@ -96,10 +120,39 @@ func (t textTable) read(text, start string) (columns [][]float64, problem *Probl
 	return columns, nil
 }
 
+// places finds the cell of each column by the first line, and how many cells there are.
+func (t textTable) places(cells []string, line int) (from []int, width int, problem *Problem) {
+	var symbols []string
+	for c, column := range t.columns {
+		from = append(from, c)
+		if column.symbol == "" {
+			width++
+			continue
+		}
+		from[c], symbols = -1, append(symbols, column.symbol)
+	}
+	for i := width; i < len(cells); i++ {
+		c := slices.IndexFunc(t.columns, func(c textColumn) bool {
+			return c.symbol != "" && slices.ContainsFunc(wordsIn(cells[i]), func(word string) bool { return strings.EqualFold(word, c.symbol) })
+		})
+		switch {
+		case len(symbols) == 0:
+			return nil, 0, t.refuse(line, strconv.Itoa(len(cells))+" cells", "up to "+strconv.Itoa(width))
+		case c < 0 || from[c] >= 0:
+			return nil, 0, t.refuse(line, quoted(cells[i])+" over column "+strconv.Itoa(i+1), "after the units of the others, each once: "+strings.Join(symbols, ", ")+"; with a unit as "+symbols[0]+"(%)")
+		}
+		from[c] = i
+	}
+	return from, max(width, len(cells)), nil
+}
+
 func (t textTable) cell(column textColumn, cell string, unit units.Unit, start string, line int) (float64, *Problem) {
 	allowed := "a " + column.name + " above 0"
 	if cell == "" {
-		if column.optional {
+		switch {
+		case column.symbol != "":
+			return math.NaN(), nil
+		case column.optional:
 			return 0, nil
 		}
 		return 0, t.refuse(line, "no "+column.name, allowed)
@@ -120,7 +173,7 @@ func (t textTable) cell(column textColumn, cell string, unit units.Unit, start s
 	}
 	si := own.ToSI(number)
 	if !(si <= column.max && (si > column.min || column.optional && si == column.min)) {
-		return 0, t.refuse(line, withUnit(units.Exact(number), own)+" for "+column.name, withUnit("above 0 to "+units.Format(own.FromSI(column.max), 6), own))
+		return 0, t.refuse(line, withUnit(units.Exact(number), own)+" for "+column.name, withUnit(map[bool]string{true: "from ", false: "above "}[column.optional]+"0 to "+units.Format(own.FromSI(column.max), 6), own))
 	}
 	return si, nil
 }
@@ -144,9 +197,14 @@ func cellsOf(line string) []string {
 	return cells
 }
 
+// wordsIn parts a heading.
+func wordsIn(heading string) []string {
+	return strings.FieldsFunc(heading, func(r rune) bool { return strings.ContainsRune(" ()[],", r) })
+}
+
 // unitIn finds a unit in the heading of a column: "ft", "h (ft)", "k, md".
 func unitIn(q units.Quantity, heading string) (units.Unit, bool) {
-	for _, word := range strings.FieldsFunc(heading, func(r rune) bool { return strings.ContainsRune(" ()[],", r) }) {
+	for _, word := range wordsIn(heading) {
 		if _, u, err := units.Parse(q, "1 "+word, units.Unit{}); err == nil && u.Quantity == q {
 			return u, true
 		}
@@ -161,7 +219,7 @@ func CheckText(st *Study, path, text string) *Problem {
 	case "field.start":
 		return CheckStart(text)
 	case layerTable.path:
-		_, problem := layerTable.rows(text, "")
+		_, problem := layersTable(st).rows(text, "")
 		return problem
 	case scheduleTable.path:
 		_, problem := scheduleTable.rows(text, st.Field.Start)

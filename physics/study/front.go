@@ -168,7 +168,6 @@ func (f *front) surfaceCut(cut float64) float64 {
 // states reads the initial and the injected saturation, empty ones from the ends
 // of the curve, and refuses those between which nothing can be displaced.
 func (s *sheet) states(rock *rock) (swi, swj float64) {
-	const rounding = 1e-9 // typed and computed ends of a curve agree to this
 	within := "from " + units.Format(rock.swc, 6) + " to " + units.Format(rock.swmax, 6) + ", the ends Swc and 1 − Sor of the curve"
 	clamp := func(path string, otherwise float64) float64 {
 		sw, given := s.input(path)

@@ -26,7 +26,10 @@ type many struct {
 	layers        []reservoir.Sample // as flooded
 	pores         float64            // m3
 	bundle        reservoir.Bundle   // the layers apart
-	fullReason    string             // why there is no answer for full crossflow
+	beds          []*bed
+	strata        []stratum // one a layer
+	own           bool      // some layer has ends of its own
+	fullReason    string    // why there is no answer for full crossflow
 	steps         []reservoir.Step
 	purse         purse
 	past          *past // nil where nothing is measured
@@ -88,7 +91,10 @@ func laid(st *Study, memory *Memory, frontPart Part, front *front) (*many, Statu
 			Cause: "With a dip the share of gravity in the flow changes with the rate in each layer, and fronts are no longer self-similar.", Do: "Leave the dip empty, or choose the block and leave the table of layers, the wells and the money empty.", Paths: []string{"front.dip"}})
 		return m, Stopped
 	}
-	if bt := front.displacement.Breakthrough(); m.gas >= bt {
+	if m.settle(); len(m.problems) > 0 {
+		return m, Refused
+	}
+	if bt := front.displacement.Breakthrough(); m.gas >= bt && !m.own {
 		m.problem("field.wells.gas", m.typed("field.wells.gas"), "less than what is injected when the front arrives in an even layer")
 		return m, Refused
 	}
@@ -109,20 +115,15 @@ func (m *many) read() {
 		m.area = m.length * m.width
 	}
 	if unlayered(st) {
-		m.samples = []reservoir.Sample{{Thickness: m.need("field.thickness"), Permeability: m.need("field.permeability"), Porosity: m.need("field.porosity")}}
-	} else if columns, problem := layerTable.rows(st.Field.Layers.Table, ""); problem != nil {
+		m.samples = []reservoir.Sample{{Thickness: m.need("field.thickness"), Permeability: m.need("field.permeability"), Porosity: m.need("field.porosity"), Swi: math.NaN(), Sor: math.NaN(), Swc: math.NaN()}}
+	} else if columns, problem := layersTable(st).rows(st.Field.Layers.Table, ""); problem != nil {
 		m.problems = append(m.problems, *problem)
 	} else {
 		for i := range columns[0] {
-			m.samples = append(m.samples, reservoir.Sample{Thickness: columns[0][i], Permeability: columns[1][i], Porosity: columns[2][i]})
+			m.samples = append(m.samples, reservoir.Sample{Thickness: columns[0][i], Permeability: columns[1][i], Porosity: columns[2][i], Swi: columns[3][i], Sor: columns[4][i], Swc: columns[5][i]})
 		}
 	}
-	groups := m.or("field.layers.groups", math.Inf(1))
-	m.layers = m.samples
-	switch {
-	case float64(len(m.samples)) > groups:
-		m.layers = reservoir.Grouped(m.samples, int(groups))
-	case len(m.samples) > MaxLayers:
+	if _, lumped := m.input("field.layers.groups"); !lumped && len(m.samples) > MaxLayers {
 		m.problem(layerTable.path, strconv.Itoa(len(m.samples))+" rows", "up to "+strconv.Itoa(MaxLayers)+" layers, or a number of layers to lump them into")
 	}
 	m.gas = m.or("field.wells.gas", 0)
@@ -185,36 +186,44 @@ func (m *many) readSteps() {
 func (m *many) lay() bool {
 	f := m.front
 	m.shape = reservoir.Even
-	if m.pattern == nil && !m.ends() {
+	if m.pattern == nil {
+		m.ends()
+	}
+	study := m.bed(f.swi)
+	if study == nil {
 		return false
 	}
-	flood := reservoir.NewFlood(f.flow, f.displacement)
+	if m.pattern != nil {
+		m.pattern.tubes = study.body.(reservoir.Streamtubes)
+	}
 	var strata []reservoir.Stratum
 	var pistons reservoir.Bundle
-	body := m.body(flood)
-	if m.pattern != nil {
-		m.pattern.tubes = body.(reservoir.Streamtubes)
-		if bt := m.pattern.tubes.At(m.pattern.tubes.Breakthrough()).Injected; m.gas >= bt {
-			m.note(Note{ID: "field.gasFirst", Level: "caution", Text: "There is no forecast: water would arrive before the gas-filled space of the pattern is full.", Cause: "The fastest streamtube is swept by then.",
-				Do: "Look at the gas saturation and the pattern.", Paths: []string{"field.wells.gas", "field.pattern.kind"}})
+	behind, sharp := f.flow.Curves.At(f.swj), f.oneOnEachSide()
+	for _, l := range m.layers {
+		s, ok := m.stratum(l)
+		if !ok {
 			return false
 		}
-	}
-	body = m.filling(body)
-	ahead, behind := f.flow.Curves.At(f.swi), f.flow.Curves.At(f.swj)
-	piston := reservoir.Piston{Water: behind.Krw / f.flow.MuW, Oil: ahead.Kro / f.flow.MuO, Change: f.swj - f.swi}
-	for _, l := range m.layers {
+		body := m.flooded(s)
+		if m.gas > 0 && m.gas >= body.At(body.Breakthrough()).Injected {
+			m.note(Note{ID: "field.gasFirst", Level: "caution", Text: "There is no forecast: water would arrive before the gas-filled space of each layer is full.", Cause: "The fastest way through a layer is swept by then.",
+				Do: "Look at the gas saturation, the pattern and the layers.", Paths: []string{"field.wells.gas", "field.pattern.kind", layerTable.path}})
+			return false
+		}
+		m.strata = append(m.strata, s)
 		pv := l.Porosity * l.Thickness * m.area
 		pace := l.Permeability / (l.Porosity * m.length * m.length)
 		m.pores += pv
 		m.bundle = append(m.bundle, reservoir.Member{Body: body, PoreVolume: pv, Pace: pace})
+		piston := reservoir.Piston{Water: behind.Krw / f.flow.MuW, Oil: s.ahead.Kro / f.flow.MuO, Change: s.swj - s.swi}
+		sharp = sharp && piston.Change > 0 && f.ofMobility(s.start) <= backward
 		pistons = append(pistons, reservoir.Member{Body: piston, PoreVolume: pv, Pace: pace})
-		strata = append(strata, reservoir.Stratum{Thickness: l.Thickness, Permeability: l.Permeability, Porosity: l.Porosity, Before: f.swi, After: f.swj, Ahead: ahead, Behind: behind})
+		strata = append(strata, reservoir.Stratum{Thickness: l.Thickness, Permeability: l.Permeability, Porosity: l.Porosity, Before: s.swi, After: s.swj, Ahead: s.ahead, Behind: behind})
 	}
 	m.apart = m.plan(m.bundle)
 	if len(m.layers) > 1 {
 		m.crossflow(strata)
-		if m.pattern == nil && m.shape.In == 0 && m.shape.Out == 0 && m.gas == 0 && piston.Change > 0 && f.oneOnEachSide() {
+		if m.pattern == nil && m.shape.In == 0 && m.shape.Out == 0 && m.gas == 0 && sharp {
 			m.pistons = m.plan(pistons)
 		}
 	}
@@ -225,9 +234,8 @@ func (m *many) lay() bool {
 	return true
 }
 
-// ends reads what the wells add at the two ends of the block; false when they leave no
-// resistance.
-func (m *many) ends() bool {
+// ends reads what the wells add at the two ends of the block.
+func (m *many) ends() {
 	radius := m.or("field.wells.radius", 0)
 	end := func(skin string) float64 {
 		if radius == 0 && m.or(skin, 0) == 0 {
@@ -236,8 +244,12 @@ func (m *many) ends() bool {
 		return reservoir.EndResistance(m.length, m.width, radius, m.or(skin, 0))
 	}
 	m.shape.In, m.shape.Out = end("field.wells.injectorSkin"), end("field.wells.producerSkin")
-	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: m.shape, Flood: reservoir.NewFlood(m.front.flow, m.front.displacement)}
-	for _, at := range []float64{0, m.front.displacement.Breakthrough(), 2, 1e4} {
+}
+
+// resists reports whether the wells leave a flood of the block resistance.
+func (m *many) resists(flood *reservoir.Flood) bool {
+	path := reservoir.Path{PoreVolume: 1, Impedance: 1, Shape: m.shape, Flood: flood}
+	for _, at := range []float64{0, flood.Displacement.Breakthrough(), 2, 1e4} {
 		if r := path.Resistance(at); !(r > 0) {
 			m.note(Note{ID: "field.skin", Level: "caution", Text: "There is no forecast: the skins take away more resistance than the block has.", Cause: "A negative skin stands for rock that does not resist; here it is more than all of the block.",
 				Do: "Look at the skins, the well radius and the length of the block.", Paths: []string{"field.wells.injectorSkin", "field.wells.producerSkin", "field.length"}})

@@ -184,7 +184,7 @@ func (m *many) tables() {
 		}
 		columns[5].Words = append(columns[5].Words, word)
 	}
-	m.part.Tables = append(m.part.Tables, Grid{ID: "field.layers", Title: "Layers, without crossflow", Columns: columns})
+	m.part.Tables = append(m.part.Tables, Grid{ID: "field.layers", Title: "Layers, without crossflow", Columns: append(columns, m.endColumns()...)})
 }
 
 // forecast is the field at even steps of time.
@@ -216,12 +216,17 @@ func (m *many) forecast() Grid {
 
 func (m *many) notes() {
 	m.patternNotes()
+	m.endNotes()
 	switch {
 	case m.pattern != nil:
 	case len(m.layers) == 1:
 		m.note(Note{ID: "field.linear", Level: "remark", Text: "The block is flooded evenly from one end to the other: one layer, full sweep, no aquifer.", Cause: "Patterns and layers sweep less of the rock and bring water sooner.", Do: "Take the recovery as that of the rock that water reaches."})
 	default:
-		m.note(Note{ID: "field.layersApart", Level: "remark", Text: "Layers run from well to well, in a straight block, and all have the curves, the initial and the residual saturations of the study.", Cause: "Layers that end between the wells, or of other rock, flood otherwise.", Do: "Read the forecast together with its neighbour for full crossflow: the truth lies between.", Paths: []string{layerTable.path}})
+		same := ""
+		if !m.own {
+			same = ", and all have the curves, the initial and the residual saturations of the study"
+		}
+		m.note(Note{ID: "field.layersApart", Level: "remark", Text: "Layers run from well to well, in a straight block" + same + ".", Cause: "Layers that end between the wells, or of other rock, flood otherwise.", Do: "Read the forecast together with its neighbour for full crossflow: the truth lies between.", Paths: []string{layerTable.path}})
 	}
 	m.note(Note{ID: "field.incompressible", Level: "remark", Text: "Rock and liquids are incompressible; gas-filled space, where it is given, is filled layer by layer before anything comes out, and offers no resistance.", Cause: "A reservoir that has been depleted answers later and less sharply.", Do: "Compare the response with what neighbouring patterns showed.", Paths: []string{"field.wells.gas"}})
 	if m.fullReason != "" {

@@ -103,9 +103,9 @@ func (m *many) rockFigures() {
 	inPlace := !holdsConnate(pairOf(m.st))
 	m.figure(Figure{ID: "field.poreVolume", Label: "Pore volume", Symbol: "PV", Value: m.pores, Quantity: units.Volume, Strip: !inPlace},
 		m.inPlan("{PV} = ", " {h} {φ}").term("field.thicknessOfAll").term("field.meanPorosity"))
-	if inPlace {
-		m.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: m.pores * (1 - m.front.swi - m.gas) / m.front.bo, Quantity: units.Volume, Strip: true},
-			m.by("{N} = {PV} (1 - {Swi} - {Sg}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term("front.initialWater").value("Sg", "gas saturation at the start", m.gas, units.Fraction).input("fluids.oilFormationFactor"))
+	if swi, id := m.initial(); inPlace {
+		m.figure(Figure{ID: "field.oilInPlace", Label: "Oil in place, at surface", Symbol: "N", Value: m.pores * (1 - swi - m.gas) / m.front.bo, Quantity: units.Volume, Strip: true},
+			m.by("{N} = {PV} (1 - {Swi} - {Sg}) / {Bo}", "", ref.Dake1978).term("field.poreVolume").term(id).value("Sg", "gas saturation at the start", m.gas, units.Fraction).input("fluids.oilFormationFactor"))
 	}
 }
 
@@ -145,15 +145,16 @@ func (m *many) limitFigures() {
 	m.figure(Figure{ID: "field.oilAtLimit", Label: "Oil produced at the limit, at surface", Symbol: "Nplim", Value: i.oil, Quantity: units.Volume}, ask)
 	m.figure(Figure{ID: "field.waterAtLimit", Label: "Water produced at the limit, at surface", Symbol: "Wplim", Value: i.water, Quantity: units.Volume}, ask)
 	if m.run == m.apart {
+		swept, oil := m.swept(i.Clock)
 		sweep := "Vertical sweep at the limit"
 		if m.pattern != nil {
 			sweep = "Vertical and areal sweep together, at the limit"
 		}
-		m.figure(Figure{ID: "field.verticalSweep", Label: sweep, Symbol: "Ev", Value: m.swept(i.Clock), Quantity: units.Share}, m.method("Part of the pore volume that fronts have passed."))
+		m.figure(Figure{ID: "field.verticalSweep", Label: sweep, Symbol: "Ev", Value: swept, Quantity: units.Share}, m.method("Part of the pore volume that fronts have passed."))
 		if !holdsConnate(pairOf(m.st)) {
-			m.figure(Figure{ID: "field.displacement", Label: "Displacement efficiency where swept, at the limit", Symbol: "Ed", Value: (i.recovery + i.Held) / (m.swept(i.Clock) * (1 - m.front.swi)), Quantity: units.Share},
+			m.figure(Figure{ID: "field.displacement", Label: "Displacement efficiency where swept, at the limit", Symbol: "Ed", Value: (i.recovery + i.Held) / oil, Quantity: units.Share},
 				m.by("{Ed} = ({Rlim} + {Sgf}) / ({Ev} (1 - {Swi}))", "Of the oil in the rock that water reaches.").term("field.recoveryAtLimit").
-					value("Sgf", "gas-filled space filled, of the pore volume", i.Held, units.Share).term("field.verticalSweep").term("front.initialWater"))
+					value("Sgf", "gas-filled space filled, of the pore volume", i.Held, units.Share).term("field.verticalSweep").value("Swi", "initial water where fronts have passed", 1-oil/swept, units.Fraction).on("front.initialWater"))
 		}
 	}
 	if m.full != nil {

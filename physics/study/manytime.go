@@ -152,24 +152,6 @@ func (m *many) limitOf(r *reservoir.Run, list []instant) reservoir.Limit {
 	return reservoir.Limit{Outcome: reservoir.Reached, Time: t, PVI: r.At(t).Injected}
 }
 
-// swept is the part of the pore volume that fronts have passed when the clock stands at x.
-func (m *many) swept(x float64) float64 {
-	sum := 0.0
-	for i := range m.bundle {
-		sum += m.bundle[i].PoreVolume / m.pores * m.passed(i, x)
-	}
-	return sum
-}
-
-// passed is how far along layer i its front has come; in a pattern its areal sweep.
-func (m *many) passed(i int, x float64) float64 {
-	b := m.bundle[i]
-	if m.pattern != nil {
-		return m.pattern.tubes.Swept(x * b.Pace)
-	}
-	return math.Min(1, b.Body.At(x*b.Pace).Injected/m.front.displacement.Breakthrough())
-}
-
 // purse holds prices and costs.
 type purse struct {
 	known                        bool

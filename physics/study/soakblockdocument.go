@@ -118,8 +118,8 @@ var blockSpecs = func() []Spec {
 // sizeTable is what the distribution of block sizes must hold: a size as its first length,
 // or diameter, with the share of the rock's volume; shares are taken as parts of their sum.
 var sizeTable = textTable{"block.sizes", "m %", []textColumn{
-	{"size", units.Length, 0, 1e4, false},
-	{"share", units.Share, 0, 1e6, false},
+	{"size", units.Length, 0, 1e4, false, ""},
+	{"share", units.Share, 0, 1e6, false, ""},
 }, false}
 
 // firstSize is the size that a shape is told by.

@@ -256,6 +256,10 @@ func (m *many) resists(flood *reservoir.Flood) bool {
 			return false
 		}
 	}
+	if m.shape.In < 0 || m.shape.Out < 0 {
+		m.note(Note{ID: "field.skinNegative", Level: "caution", Text: "A skin takes resistance away from an end of the block: it is counted at the mobility of what flows at that end.", Cause: "The rock that a negative skin frees holds oil and water as the front left them, not only what is injected; with viscous water the rates told are too low or too high by up to the share of that resistance.",
+			Do: "Give the well radius too, or a shorter block without the freed rock.", Paths: []string{"field.wells.injectorSkin", "field.wells.producerSkin", "field.wells.radius"}})
+	}
 	return true
 }
 

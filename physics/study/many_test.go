@@ -228,3 +228,15 @@ func TestHistory(t *testing.T) {
 		}
 	}
 }
+
+// A skin below zero in a block is an estimate, and says so; one above is not.
+func TestNegativeSkinIsDoubted(t *testing.T) {
+	for skin, doubted := range map[float64]bool{-0.4: true, 2: false} {
+		st := Demo()
+		put(&st, "field.wells.injectorSkin", skin, "")
+		part := Run(st).Parts[SheetField]
+		if _, is := noteOf(part, "field.skinNegative"); is != doubted || part.Status != Ready {
+			t.Errorf("a skin of %g is doubted: %v; the sheet is %s", skin, is, part.Status)
+		}
+	}
+}

@@ -101,7 +101,7 @@ func (t textTable) read(text, start string) (columns [][]float64, problem *Probl
 			}
 			if head {
 				var ok bool
-				if unit[c], ok = unitIn(column.quantity, cell); !ok && !(c >= len(cells) && column.optional || column.symbol != "") {
+				if unit[c], ok = unitIn(column.quantity, cell); !ok && !(c >= len(cells) && column.optional || column.symbol != "" && len(wordsIn(cell)) < 2) {
 					return nil, t.refuse(i+1, quoted(cell)+" over the column of "+column.name, "a first line with the units, such as "+t.example)
 				}
 				continue

@@ -140,6 +140,7 @@ func TestEndsOfLayersAreRefused(t *testing.T) {
 		"m um2 fraction Sxi\n3 0.4 0.2 0.3":                "in line 1, \"Sxi\" over column 4",
 		"m um2 fraction Swi Swi\n3 0.4 0.2 0.3 0.3":        "in line 1, \"Swi\" over column 5",
 		"m um2 fraction Swi\n3 0.4 0.2 30":                 "in line 2, 30",
+		"m um2 fraction Swi(ft)\n3 0.4 0.2 0.3":            "in line 1, \"Swi(ft)\" over the column of initial water saturation",
 		"m um2 fraction Swi\n3 0.4 0.2 0.3 0.2":            "in line 2, 5 cells",
 		"m um2 fraction Swi\n3 0.4 0.2 0.3\n3 0.4 0.2 0.2": "in row 2, Swi = 0.2",
 		"m um2 fraction Sor Swi\n3 0.4 0.2 0.4 0.62":       "in row 1, Swi = 0.62",

@@ -58,8 +58,10 @@ const deepest = 5e-4
 
 var errStalled = errors.New("imbibe: the steps of a block became too small to go on")
 
-func newAxisRun(m *Matrix, axis Axis, cells int, tolerance float64) *axisRun {
-	const grading = 2.5
+// grading is that of the cells of the fine answers; 0 is for equal cells.
+const grading = 2.5
+
+func newAxisRun(m *Matrix, axis Axis, cells int, tolerance, grading float64) *axisRun {
 	r := &axisRun{m: m, tolerance: tolerance, panel: make([]int, cells)}
 	lists := []*[]float64{&r.volume, &r.faces, &r.u, &r.centres, &r.potential, &r.slope, &r.base, &r.next, &r.residual, &r.upper, &r.change[0], &r.change[1], &r.change[2]}
 	for i, room := 0, make([]float64, cells*len(lists)); i < len(lists); i++ {
@@ -67,7 +69,11 @@ func newAxisRun(m *Matrix, axis Axis, cells int, tolerance float64) *axisRun {
 	}
 	power := float64(axis.Spread)
 	place := func(i int) float64 { // distance from the middle over reach
-		return 1 - math.Sinh(grading*float64(i)/float64(cells))/math.Sinh(grading)
+		u := float64(i) / float64(cells)
+		if grading == 0 {
+			return 1 - u
+		}
+		return 1 - math.Sinh(grading*u)/math.Sinh(grading)
 	}
 	centre := 1.0
 	for i := range r.volume {

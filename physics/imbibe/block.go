@@ -104,8 +104,8 @@ type axisBlock struct {
 }
 
 func (m *Matrix) axis(spread int, acc accuracy) (*axisBlock, error) {
-	coarse := newAxisRun(m, Axis{1, spread}, acc.cells, acc.tolerance)
-	fine := newAxisRun(m, Axis{1, spread}, 2*acc.cells, acc.tolerance)
+	coarse := newAxisRun(m, Axis{1, spread}, acc.cells, acc.tolerance, grading)
+	fine := newAxisRun(m, Axis{1, spread}, 2*acc.cells, acc.tolerance, grading)
 	b := &axisBlock{}
 	middle := math.Inf(1)
 	for share := 0.0; share < lastShare && coarse.time < lateSpan*middle; {

@@ -165,7 +165,7 @@ func TestConstantDiffusivityIsExact(t *testing.T) {
 // that of the steps in time.
 func TestBlocksConverge(t *testing.T) {
 	soak := func(spread, cells int, tolerance, until float64) float64 {
-		r := newAxisRun(matrixOf(t, law(constant)), Axis{1, spread}, cells, tolerance)
+		r := newAxisRun(matrixOf(t, law(constant)), Axis{1, spread}, cells, tolerance, grading)
 		must(t, r.advance(until, false))
 		return r.mean()
 	}

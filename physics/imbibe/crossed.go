@@ -25,8 +25,8 @@ type crossing struct {
 func newCrossing(m *Matrix, shape Shape, cells int) *crossing {
 	c := &crossing{volume: []float64{1}}
 	for _, a := range shape {
-		line := newAxisRun(m, a, cells, 1)
-		c.lines, c.alone = append(c.lines, line), append(c.alone, newAxisRun(m, a, cells, 1))
+		line := newAxisRun(m, a, cells, 1, grading)
+		c.lines, c.alone = append(c.lines, line), append(c.alone, newAxisRun(m, a, cells, 1, grading))
 		wider := make([]float64, 0, cells*len(c.volume))
 		for _, v := range line.volume {
 			for _, w := range c.volume {

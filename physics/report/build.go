@@ -106,11 +106,34 @@ func tables(r study.Result, s units.System) Section {
 	section := Section{ID: "tables", Title: "Tables"}
 	for _, p := range parts {
 		for _, g := range r.Parts[p.sheet].Tables {
-			table := Print(g, s)
+			table := thinned(Print(g, s))
 			section.Blocks = append(section.Blocks, Block{Table: &table})
 		}
 	}
 	return section
+}
+
+// thinned is a long table of curves below one another, as its first column tells them apart, with
+// at most printed rows of each, the first and the last among them: whole it goes to a spreadsheet.
+func thinned(t Table) Table {
+	const long, printed = 150, 15
+	if len(t.Rows) <= long {
+		return t
+	}
+	var rows [][]string
+	for from, to := 0, 0; from < len(t.Rows); from = to {
+		for to = from; to < len(t.Rows) && t.Rows[to][0] == t.Rows[from][0]; to++ {
+		}
+		n := min(to-from, printed)
+		for i := range n {
+			rows = append(rows, t.Rows[from+i*(to-from-1)/max(n-1, 1)])
+		}
+	}
+	if len(rows) < len(t.Rows) {
+		t.Title += " (every few rows; the tables saved as CSV have all)"
+		t.Rows = rows
+	}
+	return t
 }
 
 func workings(st study.Study, r study.Result, s units.System) Section {

@@ -3,6 +3,8 @@ package report
 import (
 	"encoding/csv"
 	"slices"
+
+	"strconv"
 	"strings"
 	"testing"
 
@@ -105,5 +107,31 @@ func TestPatternIsNamed(t *testing.T) {
 	}
 	if rows := choices(st).Rows; !slices.ContainsFunc(rows, func(row []string) bool { return row[1] == "five-spot" }) {
 		t.Errorf("the choices are %v", rows)
+	}
+}
+
+// A long table of curves is printed with few rows of each, its ends among them; a long one without curves whole.
+func TestLongTablesAreThinned(t *testing.T) {
+	var long Table
+	for block := range 4 {
+		for row := range 7 + 60*block {
+			long.Rows = append(long.Rows, []string{strconv.Itoa(block), strconv.Itoa(row)})
+		}
+	}
+	counts := map[string][]string{}
+	for _, row := range thinned(long).Rows {
+		counts[row[0]] = append(counts[row[0]], row[1])
+	}
+	for block, want := range []int{7, 15, 15, 15} {
+		got := counts[strconv.Itoa(block)]
+		if last := strconv.Itoa(6 + 60*block); len(got) != want || got[0] != "0" || got[len(got)-1] != last {
+			t.Errorf("curve %d has rows %v, want %d of them from 0 to %s", block, got, want, last)
+		}
+	}
+	for i := range long.Rows {
+		long.Rows[i][0] = strconv.Itoa(i)
+	}
+	if got := thinned(long); len(got.Rows) != len(long.Rows) || got.Title != long.Title {
+		t.Errorf("%d of %d rows are printed", len(got.Rows), len(long.Rows))
 	}
 }

@@ -31,14 +31,15 @@ func jobs() []job {
 			p, e.front = runFront(e.st, e.parts[SheetRock], e.rock)
 			return p
 		}},
-		{sheet: SheetSoak, needs: []Sheet{SheetRock, SheetFront}, run: func(e *Evaluation, _ growing) Part { return runSoak(e.st, e.parts[SheetRock], e.rock, e.front) },
+		{sheet: SheetSoak, needs: []Sheet{SheetRock, SheetFront}, run: func(e *Evaluation, _ growing) (p Part) {
+			p, e.block = runSoak(e.st, e.parts[SheetRock], e.rock, e.front)
+			return p
+		},
 			asked: withCapillary},
 		{sheet: SheetField, needs: []Sheet{SheetFront}, run: func(e *Evaluation, _ growing) Part {
 			return runField(e.st, e.memory, e.parts[SheetFront], e.front)
 		}},
-		{sheet: SheetGrid, needs: []Sheet{SheetFront, SheetField}, run: func(e *Evaluation, grow growing) Part {
-			return runGrid(e.st, e.parts[SheetField], e.parts[SheetFront], e.rock, e.front, grow)
-		}},
+		{sheet: SheetGrid, needs: []Sheet{SheetFront, SheetField}, run: runGrid},
 		{sheet: SheetCompare, needs: compared, run: func(e *Evaluation, _ growing) Part { return runCompare(e) },
 			asked: func(st *Study) bool { return len(st.Cases) > 0 }},
 		{sheet: SheetMatch, needs: []Sheet{SheetField}, run: runMatch, asked: matching},
@@ -62,6 +63,7 @@ type Evaluation struct {
 
 	rock  *rock
 	front *front
+	block *soakingBlock // nil where none soaks
 }
 
 // Piece is what is known of one sheet: its part, whole unless Part.Left says otherwise.

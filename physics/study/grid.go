@@ -22,7 +22,9 @@ type grid struct {
 	own     *gridding.Measured  // the person's own grid
 	steps   []gridding.Measured // one grid with several steps
 	pseudo  *gridding.Pseudos
-	without error // why there are no pseudo-functions
+	without error        // why there are no pseudo-functions
+	section *section     // nil without layers
+	matrix  *subdivision // nil without a block
 }
 
 // How much is computed: cell steps of the longest run that advice rests on, of the person's own
@@ -37,10 +39,11 @@ const (
 )
 
 // runGrid answers the Grid sheet.
-func runGrid(st *Study, fieldPart, frontPart Part, rock *rock, front *front, grow growing) Part {
-	s := newSheet(st, fieldPart, frontPart)
+func runGrid(e *Evaluation, grow growing) Part {
+	st, frontPart, front := e.st, e.parts[SheetFront], e.front
+	s := newSheet(st, e.parts[SheetField], frontPart)
 	s.await(frontPart)
-	g := &grid{rock: rock, front: front}
+	g := &grid{rock: e.rock, front: front}
 	g.read(s)
 	standing := s.standing()
 	if frontPart.Status == Refused {
@@ -72,8 +75,17 @@ func runGrid(st *Study, fieldPart, frontPart Part, rock *rock, front *front, gro
 		return p
 	}
 	// What is to come is guessed: most of it is the search.
-	if g.compute(s, func(left float64) bool { return grow(told(left)) }) != nil {
+	more := func(left float64) bool { return grow(told(left)) }
+	if g.compute(s, more) != nil {
 		return s.close(Stopped)
+	}
+	if layered(st) && more(0.1) {
+		m, _ := laid(st, e.memory, frontPart, front)
+		g.section = g.sectioned(m)
+	}
+	if withBlock(st) && more(0.05) {
+		e.through(SheetSoak)
+		g.matrix = g.subdivided(e.block)
 	}
 	return told(0)
 }

@@ -93,35 +93,44 @@ func (g *grid) profileChart() Chart {
 func (g *grid) errorChart() Chart {
 	runs := slices.Clone(g.runs)
 	slices.SortFunc(runs, func(a, b gridding.Measured) int { return a.Cells - b.Cells })
-	c := Chart{ID: "grid.errors", Title: "Error against the number of cells", X: Axis{Label: "Cells between the wells", Symbol: "N", Quantity: units.Number, Log: true, CanLog: true},
-		Y: Axis{Label: "Error", Symbol: "e", Quantity: units.Share, Log: true, CanLog: true}, Marks: []Mark{},
-		Summary: "On logarithmic axes the errors of arrival, of recovery and of the profile fall along nearly straight lines with the number of cells; where they pass the tolerance is the number advised."}
+	cells := make([]int, len(runs))
+	arrival, recovery, profile := make([]float64, len(runs)), make([]float64, len(runs)), make([]float64, len(runs))
+	for i, m := range runs {
+		cells[i], arrival[i], recovery[i], profile[i] = m.Cells, m.ArrivalError, m.RecoveryError, m.L1
+	}
+	return errorsOn("grid.errors", "Error against the number of cells", "Cells between the wells", cells,
+		"On logarithmic axes the errors of arrival, of recovery and of the profile fall along nearly straight lines with the number of cells; where they pass the tolerance is the number advised.",
+		measuredError{"arrival", "arrival", "water", arrival, g.tolerance.Arrival}, measuredError{"recovery", "recovery", "oil", recovery, g.tolerance.Recovery}, measuredError{"profile", "profile, mean", "total", profile, 0})
+}
+
+// measuredError is an error on each grid, and what it may be; within 0 it is not asked about.
+type measuredError struct {
+	id, label, role string
+	on              []float64
+	within          float64
+}
+
+// errorsOn is how errors fall with the number of cells.
+func errorsOn(id, title, label string, cells []int, summary string, errors ...measuredError) Chart {
+	c := Chart{ID: id, Title: title, X: Axis{Label: label, Symbol: "N", Quantity: units.Number, Log: true, CanLog: true},
+		Y: Axis{Label: "Error", Symbol: "e", Quantity: units.Share, Log: true, CanLog: true}, Marks: []Mark{}, Lines: []Line{}, Summary: summary}
 	last := 0.0
-	for _, k := range []struct {
-		id, label, role string
-		pick            func(gridding.Measured) float64
-	}{
-		{"arrival", "arrival", "water", func(m gridding.Measured) float64 { return m.ArrivalError }},
-		{"recovery", "recovery", "oil", func(m gridding.Measured) float64 { return m.RecoveryError }},
-		{"profile", "profile, mean", "total", func(m gridding.Measured) float64 { return m.L1 }},
-	} {
+	for _, k := range errors {
 		l := Line{ID: k.id, Label: k.label, Role: k.role, Kind: "line"}
-		for _, m := range runs {
-			if e := math.Abs(k.pick(m)); e > 1e-9 && !math.IsInf(e, 0) && !math.IsNaN(e) {
-				l.X, l.Y = append(l.X, float64(m.Cells)), append(l.Y, e)
-				last = math.Max(last, float64(m.Cells))
+		for i, n := range cells {
+			if e := math.Abs(k.on[i]); e > 1e-9 && !math.IsInf(e, 0) && !math.IsNaN(e) {
+				l.X, l.Y = append(l.X, float64(n)), append(l.Y, e)
+				last = math.Max(last, float64(n))
 			}
 		}
 		if len(l.X) > 0 {
 			c.Lines = append(c.Lines, l)
 		}
 	}
-	if len(runs) > 0 && last > float64(runs[0].Cells) {
-		limit := func(id, label string, e float64) {
-			c.Lines = append(c.Lines, Line{ID: id, Label: label, Role: "aid", Kind: "dashed", X: []float64{float64(runs[0].Cells), last}, Y: []float64{e, e}})
+	for _, k := range errors {
+		if k.within > 0 && len(cells) > 0 && last > float64(cells[0]) {
+			c.Lines = append(c.Lines, Line{ID: k.id + "Within", Label: k.label + " within", Role: "aid", Kind: "dashed", X: []float64{float64(cells[0]), last}, Y: []float64{k.within, k.within}})
 		}
-		limit("arrivalWithin", "arrival within", g.tolerance.Arrival)
-		limit("recoveryWithin", "recovery within", g.tolerance.Recovery)
 	}
 	return c
 }

@@ -15,6 +15,12 @@ func (g *grid) tell(s *sheet) {
 	g.charts(s)
 	g.tables(s)
 	g.notes(s)
+	if g.section != nil {
+		g.section.tell(s, g)
+	}
+	if g.matrix != nil {
+		g.matrix.tell(s, g)
+	}
 	g.sentence(s)
 }
 

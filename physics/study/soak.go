@@ -26,8 +26,9 @@ type soak struct {
 // without a front. A convention of this program.
 const risen = 0.01
 
-// runSoak answers the Soak sheet, of a study that has a capillary pressure.
-func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
+// runSoak answers the Soak sheet, of a study that has a capillary pressure; beside it the block, where
+// one is given and computed.
+func runSoak(st *Study, rockPart Part, rock *rock, front *front) (Part, *soakingBlock) {
 	s := newSheet(st, rockPart)
 	s.await(rockPart)
 	var b *brine
@@ -59,12 +60,12 @@ func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
 		standing = Refused
 	}
 	if standing != Ready || rock == nil {
-		return s.close(standing)
+		return s.close(standing), nil
 	}
 	if pairOf(st).Drainage() {
 		s.note(Note{ID: "soak.drainage", Level: "caution", Text: "This pair does not soak: the phase that comes in does not wet the rock.",
 			Cause: "Capillary pressure keeps it out.", Do: "Choose a pair whose displacing phase wets the rock.", Paths: []string{"fluids.pair"}})
-		return s.close(Stopped)
+		return s.close(Stopped), nil
 	}
 	if math.IsNaN(initial) {
 		initial, _ = r.Ends()
@@ -74,7 +75,7 @@ func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
 		k.Solution, err = imbibe.Solve(span, ratio)
 	}
 	if err != nil {
-		return s.notSoaking(err, r)
+		return s.notSoaking(err, r), nil
 	}
 	k.pcEnds[0], k.pcEnds[1] = r.Pc.Ends()
 	if k.held = inlet; math.IsNaN(inlet) {
@@ -86,11 +87,11 @@ func runSoak(st *Study, rockPart Part, rock *rock, front *front) Part {
 	s.part.Tables = append(s.part.Tables, k.table())
 	k.notes(s)
 	k.answer(s)
-	s.blocks(soakingRock{span, k.inputs, rock.memory}, front)
+	block := s.blocks(soakingRock{span, k.inputs, rock.memory}, front)
 	if k.Status == imbibe.Stopped {
-		return s.close(Stopped)
+		return s.close(Stopped), block
 	}
-	return s.close(rockPart.Status)
+	return s.close(rockPart.Status), block
 }
 
 // soakRatio is R of the flow that is chosen.

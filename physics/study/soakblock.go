@@ -32,19 +32,20 @@ type soakingBlock struct {
 // blocks tells of blocks of finite size: how they fill, what plugs say of them, which
 // exchange function stands for them, and what they do beside fractures. Where no block is
 // given nothing is told.
-func (s *sheet) blocks(x soakingRock, f *front) {
+func (s *sheet) blocks(x soakingRock, f *front) *soakingBlock {
 	known := len(s.part.Missing)
-	s.soakBlock(x, f)
+	b := s.soakBlock(x, f)
 	if wanted := s.part.Missing[known:]; len(wanted) > 0 { // of what is said beside the sheet's own answer
 		s.note(Note{ID: "soak.blockWaits", Level: "caution", Text: "Part of what blocks do is not told yet.", Cause: "Inputs that it rests on are not given.", Do: "Give them.", Paths: slices.Clone(wanted)})
 		s.part.Missing = s.part.Missing[:known]
 	}
+	return b
 }
 
-func (s *sheet) soakBlock(x soakingRock, f *front) {
+func (s *sheet) soakBlock(x soakingRock, f *front) *soakingBlock {
 	shape, inputs := s.shape("block.", s.st.Block.Shape)
 	if shape == nil {
-		return
+		return nil
 	}
 	m, err := matrixOf(x.memory, "block", x.span)
 	b := &soakingBlock{soakingRock: x, matrix: m, inputs: append(inputs, x.inputs...), porous: x.span.Porosity, initial: x.span.Initial}
@@ -56,7 +57,7 @@ func (s *sheet) soakBlock(x soakingRock, f *front) {
 	}
 	if err != nil {
 		s.note(Note{ID: "soak.blockStopped", Level: "caution", Text: "The block could not be computed: " + err.Error() + ".", Cause: "Capillary diffusion is too uneven for it.", Do: "Look at the ends of the curves.", Paths: inputs})
-		return
+		return nil
 	}
 	b.figures(s)
 	b.charts(s)
@@ -65,6 +66,7 @@ func (s *sheet) soakBlock(x soakingRock, f *front) {
 	b.exchange(s)
 	b.fractures(s)
 	b.push(s, f)
+	return b
 }
 
 // matrixOf makes the rock of a block ready, or remembers that it did: with it the blocks that were

@@ -1,0 +1,70 @@
+package reservoir
+
+import (
+	"math"
+	"math/rand/v2"
+	"testing"
+)
+
+// Of any section lumping keeps thickness, flow capacity and pore volume, gives as many layers as
+// are asked for, and on more of them the fastest is never slower; on all of them nothing is changed.
+func TestLumped(t *testing.T) {
+	rng := rand.New(rand.NewPCG(7, 11))
+	for range 200 {
+		var samples []Sample
+		for range 1 + rng.IntN(40) {
+			samples = append(samples, Sample{0.1 + rng.Float64(), math.Exp(2 * rng.NormFloat64()), 0.05 + 0.3*rng.Float64()})
+		}
+		sums := func(list []Sample) (h, kh, ph, fastest float64) {
+			for _, s := range list {
+				h, kh, ph = h+s.Thickness, kh+s.Thickness*s.Permeability, ph+s.Thickness*s.Porosity
+				fastest = math.Max(fastest, s.Permeability/s.Porosity)
+			}
+			return
+		}
+		h, kh, ph, _ := sums(samples)
+		before := 0.0
+		for n := 1; n <= len(samples); n++ {
+			list := Lumped(samples, n)
+			if len(list) != n {
+				t.Fatalf("%d layers, asked for %d", len(list), n)
+			}
+			lh, lkh, lph, fastest := sums(list)
+			near(t, "thickness", lh, h, 1e-12*h)
+			near(t, "flow capacity", lkh, kh, 1e-12*kh)
+			near(t, "pore volume", lph, ph, 1e-12*ph)
+			if fastest < before*(1-1e-12) {
+				t.Fatalf("the fastest of %d layers is slower than of %d", n, n-1)
+			}
+			before = fastest
+			if n == len(samples) {
+				for i := range list {
+					if list[i] != samples[i] {
+						t.Fatalf("layer %d is %v, was %v", i, list[i], samples[i])
+					}
+				}
+			}
+		}
+	}
+	// Two pairs of like neighbours, by hand: (1+1.2)/2 and (9+10)/2 in their order.
+	two := Lumped([]Sample{{1, 9, 0.2}, {1, 10, 0.2}, {1, 1, 0.2}, {1, 1.2, 0.2}}, 2)
+	near(t, "upper", two[0].Permeability, 9.5, 1e-14)
+	near(t, "lower", two[1].Permeability, 1.1, 1e-14)
+}
+
+// Piston-like layers at equal mobilities, by hand: their rates are as their paces, so that the cut jumps
+// by the share of the flow of each layer when it is swept, at one over its pace.
+func TestArrival(t *testing.T) {
+	layer := func(pace float64) Member { return Member{Piston{Water: 1, Oil: 1, Change: 0.5}, 1, pace} }
+	b := Bundle{layer(2), layer(5), layer(3)}
+	for _, c := range []struct{ level, clock float64 }{{0.01, 0.5 / 5}, {0.49, 0.5 / 5}, {0.51, 0.5 / 3}, {0.79, 0.5 / 3}, {0.81, 0.5 / 2}} {
+		clock, ok := b.Arrival(c.level, 10)
+		if !ok {
+			t.Fatalf("a cut of %g is not reached", c.level)
+		}
+		near(t, "arrival", clock, c.clock, 1e-12)
+	}
+	if _, ok := b.Arrival(0.9, 0.2); ok {
+		t.Error("reached before the time")
+	}
+}

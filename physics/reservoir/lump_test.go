@@ -4,6 +4,9 @@ import (
 	"math"
 	"math/rand/v2"
 	"testing"
+
+	"brinefront/physics/displace"
+	"brinefront/physics/fracflow"
 )
 
 // Of any section lumping keeps thickness, flow capacity and pore volume, gives as many layers as
@@ -66,5 +69,35 @@ func TestArrival(t *testing.T) {
 	}
 	if _, ok := b.Arrival(0.9, 0.2); ok {
 		t.Error("reached before the time")
+	}
+	// With fans behind the fronts too: below the level until then, at it or above from then on, over random layers.
+	flow := fracflow.Flow{Curves: viscous, MuW: 0.47e-3, MuO: 2.1e-3}
+	d, err := displace.New(flow, 0.763, 0.213)
+	if err != nil {
+		t.Fatal(err)
+	}
+	rng := rand.New(rand.NewPCG(5, 3))
+	between := 0
+	for range 60 {
+		b := randomBundle(rng, Path{PoreVolume: 1, Impedance: 1, Shape: Even, Flood: NewFlood(flow, d)}.Tabulate(1e-8), 1+rng.IntN(20), rng.Float64())
+		level := 0.01 + 0.94*rng.Float64()
+		clock, ok := b.Arrival(level, Clock(b, 50, 0))
+		if !ok {
+			t.Fatalf("a cut of %g is not reached", level)
+		}
+		if math.Abs(b.At(clock).Cut()-level) < 1e-9 {
+			between++
+		}
+		if cut := b.At(clock * (1 + 1e-6)).Cut(); cut < level {
+			t.Errorf("a cut of %g after that of %g came", cut, level)
+		}
+		for k := range 50 {
+			if cut := b.At(clock * (1 - 1e-6) * float64(k+1) / 50).Cut(); cut > level {
+				t.Errorf("a cut of %g before that of %g came", cut, level)
+			}
+		}
+	}
+	if between < 10 {
+		t.Errorf("only %d arrivals between breakthroughs", between)
 	}
 }

@@ -16,25 +16,28 @@ func TestLumped(t *testing.T) {
 	for range 200 {
 		var samples []Sample
 		for range 1 + rng.IntN(40) {
-			samples = append(samples, Sample{0.1 + rng.Float64(), math.Exp(2 * rng.NormFloat64()), 0.05 + 0.3*rng.Float64()})
+			samples = append(samples, Sample{Thickness: 0.1 + rng.Float64(), Permeability: math.Exp(2 * rng.NormFloat64()), Porosity: 0.05 + 0.3*rng.Float64(), Swi: 0.3 * rng.Float64(), Sor: 0.213})
 		}
-		sums := func(list []Sample) (h, kh, ph, fastest float64) {
+		sums := func(list []Sample) (h, kh, ph, water, fastest float64) {
 			for _, s := range list {
 				h, kh, ph = h+s.Thickness, kh+s.Thickness*s.Permeability, ph+s.Thickness*s.Porosity
+				water += s.Thickness * s.Porosity * s.Swi
 				fastest = math.Max(fastest, s.Permeability/s.Porosity)
 			}
 			return
 		}
-		h, kh, ph, _ := sums(samples)
+		h, kh, ph, water, _ := sums(samples)
 		before := 0.0
 		for n := 1; n <= len(samples); n++ {
 			list := Lumped(samples, n)
 			if len(list) != n {
 				t.Fatalf("%d layers, asked for %d", len(list), n)
 			}
-			lh, lkh, lph, fastest := sums(list)
+			lh, lkh, lph, lwater, fastest := sums(list)
 			near(t, "thickness", lh, h, 1e-12*h)
 			near(t, "flow capacity", lkh, kh, 1e-12*kh)
+			near(t, "initial water", lwater, water, 1e-12*ph)
+			near(t, "residual", list[0].Sor, 0.213, 0)
 			near(t, "pore volume", lph, ph, 1e-12*ph)
 			if fastest < before*(1-1e-12) {
 				t.Fatalf("the fastest of %d layers is slower than of %d", n, n-1)
@@ -50,7 +53,7 @@ func TestLumped(t *testing.T) {
 		}
 	}
 	// Two pairs of like neighbours, by hand: (1+1.2)/2 and (9+10)/2 in their order.
-	two := Lumped([]Sample{{1, 9, 0.2}, {1, 10, 0.2}, {1, 1, 0.2}, {1, 1.2, 0.2}}, 2)
+	two := Lumped(evenly(9, 10, 1, 1.2), 2)
 	near(t, "upper", two[0].Permeability, 9.5, 1e-14)
 	near(t, "lower", two[1].Permeability, 1.1, 1e-14)
 }

@@ -51,6 +51,11 @@ func TestGridOfLayers(t *testing.T) {
 		}
 	}
 	chartOf(t, part, "grid.layerErrors")
+	st.Field.Layers.Table = "m\tmd\tfraction\tSwi\n1\t100\t0.2\t0.33\n1\t300\t0.2\t0.31"
+	part, _ = gridPart(t, st)
+	if _, told := noteOf(part, "grid.layersOwn"); !told {
+		t.Errorf("saturations of layers pass without a word: %s %v", part.Status, part.Problems)
+	}
 	part, _ = gridPart(t, Demo())
 	if _, told := gridTable(part, "grid.layerErrors"); told {
 		t.Error("told without layers")

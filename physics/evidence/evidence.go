@@ -72,7 +72,7 @@ func (c Check) Run() ([]float64, error) {
 // All lists every check in reading order.
 func All() []Check {
 	var all []Check
-	for _, list := range [][]Check{unitChecks, curveChecks, capillaryChecks, closedForms, waterfloods, segregatedFlow, rides, layerChecks, patternChecks, selfSimilarSoaking, soakingBlocks, independentCases, waterChecks} {
+	for _, list := range [][]Check{unitChecks, curveChecks, capillaryChecks, closedForms, waterfloods, segregatedFlow, rides, layerChecks, patternChecks, selfSimilarSoaking, soakingBlocks, gridChecks, independentCases, waterChecks} {
 		all = append(all, list...)
 	}
 	return all

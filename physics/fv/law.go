@@ -25,6 +25,7 @@ type Law struct {
 	fill    func(f, s []float64)              // f at each s
 	at      func(s float64) (f, dfds float64) // as fn, perhaps from a table
 	fn      Function
+	table   *table // of f; nil: f itself is asked
 	extrema []point
 	slopes  []point   // |df/ds| at samples, the peaks between them included
 	bends   []float64 // where |df/ds| peaks: inflections, most of them, and corners

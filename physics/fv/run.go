@@ -34,6 +34,8 @@ type Run struct {
 	old               []float64                  // the cells at the start of a step
 	left, right       []float64                  // states on either side of the faces 0..N
 	fl, fr, flux      []float64                  // f of them, and the flux through the faces
+	marches           bool                       // in one pass, from the inflow on
+	inflow            float64
 	in, out           sum
 	stored            float64 // mean state at the start
 	entering, leaving float64 // flux through the ends in the last step
@@ -84,6 +86,9 @@ func New(law *Law, s Settings) (*Run, error) {
 		r.old = make([]float64, n)
 		r.left, r.right = make([]float64, n+1), make([]float64, n+1)
 		r.fl, r.fr = make([]float64, n+1), make([]float64, n+1)
+	}
+	if t := law.table; limit == nil && law.rising && t != nil && t.grid() != nil {
+		r.marches, r.inflow = true, t.flux(r.u[0])
 	}
 	r.stored = mean(r.Cells())
 	return r, nil
@@ -160,6 +165,9 @@ func (r *Run) step(dq float64) {
 
 // euler takes S_i -= (dQ/dx) (F_right - F_left) and returns the fluxes at the ends.
 func (r *Run) euler(ratio float64) (in, out float64) {
+	if r.marches {
+		return r.inflow, r.law.table.march(r.Cells(), ratio, r.inflow)
+	}
 	flux := r.faces()
 	cells := r.Cells()
 	flux = flux[:len(cells)+1]

@@ -9,10 +9,19 @@ import (
 	"brinefront/physics/units"
 )
 
+// draws are how many random studies a test runs: fewer where it is to be quick, as in
+// WebAssembly, where the same ones are run again.
+func draws(n int) int {
+	if testing.Short() {
+		return n / 4
+	}
+	return n
+}
+
 // TestRandomStudiesAreSound runs studies of lawful but arbitrary content, always
 // the same ones.
 func TestRandomStudiesAreSound(t *testing.T) {
-	const count = 300
+	count := draws(300)
 	answered := 0
 	for seed := range uint64(count) {
 		st := randomStudy(rand.New(rand.NewPCG(seed, 7)))
@@ -34,7 +43,7 @@ func TestRandomStudiesAreSound(t *testing.T) {
 
 // TestRandomDippingStudiesAreSound: the same for layers that dip, at any rate.
 func TestRandomDippingStudiesAreSound(t *testing.T) {
-	const count = 200
+	count := draws(200)
 	answered, back := 0, 0
 	for seed := range uint64(count) {
 		r := rand.New(rand.NewPCG(seed, 11))

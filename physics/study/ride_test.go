@@ -366,7 +366,7 @@ func TestEveryRiderIsSound(t *testing.T) {
 // Random studies with riders whose inputs lie about those of the demonstration.
 func TestRandomRidersAreSound(t *testing.T) {
 	answered, slugs := 0, 0
-	for seed := range uint64(200) {
+	for seed := range uint64(draws(200)) {
 		r := rand.New(rand.NewPCG(seed, 11))
 		kind := []string{polymer, salt, tracer, riderOfHeat}[r.IntN(4)]
 		st := ridden(kind)

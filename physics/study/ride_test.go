@@ -365,8 +365,8 @@ func TestEveryRiderIsSound(t *testing.T) {
 
 // Random studies with riders whose inputs lie about those of the demonstration.
 func TestRandomRidersAreSound(t *testing.T) {
-	answered, slugs := 0, 0
-	for seed := range uint64(draws(200)) {
+	answered, slugs, count := 0, 0, draws(200)
+	for seed := range uint64(count) {
 		r := rand.New(rand.NewPCG(seed, 11))
 		kind := []string{polymer, salt, tracer, riderOfHeat}[r.IntN(4)]
 		st := ridden(kind)
@@ -399,7 +399,7 @@ func TestRandomRidersAreSound(t *testing.T) {
 			t.Errorf("seed %d: %s", seed, fault)
 		}
 	}
-	if answered < 100 || slugs < 20 {
+	if answered < count/2 || slugs < count/10 {
 		t.Errorf("%d are answered, %d with a slug", answered, slugs)
 	}
 }

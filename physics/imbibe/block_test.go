@@ -113,6 +113,35 @@ func TestEarlySoakingIsThatOfAHalfSpace(t *testing.T) {
 	}
 }
 
+// TestBothRoutesAgree: finite volumes in a slab take up what the self-similar solution says,
+// 2 A sqrt(t), while the far face is not felt: for every independent case without a stream
+// through it, of soaking rock and of blocks.
+func TestBothRoutesAgree(t *testing.T) {
+	spans := map[string]*Span{}
+	for _, c := range independentCases(t) {
+		if c.Inputs.R == 0 {
+			spans[c.ID] = c.span(t)
+		}
+	}
+	for _, c := range blockCases(t) {
+		spans[c.ID] = c.span(t)
+	}
+	if len(spans) != 4 {
+		t.Fatalf("%d cases, want 4", len(spans))
+	}
+	for id, span := range spans {
+		solution, err := Solve(span, 0)
+		must(t, err)
+		m, err := NewMatrix(span)
+		must(t, err)
+		b, err := m.Soak(Slab(1, 1))
+		must(t, err)
+		for _, share := range []float64{0.01, 0.05, 0.1, 0.2} {
+			within(t, id+": taken up", share*m.Capacity(), 2*solution.A*math.Sqrt(b.TimeAt(share))/m.porosity, 1e-4)
+		}
+	}
+}
+
 // linear is the exact share that a block of one axis soaks up at a constant diffusivity of
 // 1 m2/s with porosity 1, after a time over the square of its reach. Crank (1975), eqs. 2.67, 5.23
 // and 6.20, from memory.

@@ -128,25 +128,5 @@ func TestFillUp(t *testing.T) {
 	near(t, "cut", after.Cut(), plain.Cut(), 1e-15)
 }
 
-// A radial body by hand: while a unit-mobility front is within it the rate is constant;
-// behind a piston-like front at r the resistance is ln(r/rw)/lw + ln(re/r)/lo over the whole.
-func TestRadial(t *testing.T) {
-	s := Radial(0.1, 150, 60)
-	near(t, "ends", s.V[0]+s.G[0], 0, 0)
-	near(t, "ends", s.V[60]+s.G[60], 2, 1e-15)
-	flow := fracflow.Flow{Curves: straight, MuW: 1e-3, MuO: 0.3e-3}
-	d, err := displace.New(flow, 0.8, 0.2)
-	if err != nil {
-		t.Fatal(err)
-	}
-	p := Path{PoreVolume: 1, Impedance: 1, Shape: s, Flood: NewFlood(flow, d)}
-	for _, r := range []float64{1, 12, 80} {
-		q := 0.6 * (r*r - 0.01) / (150*150 - 0.01)
-		want := (math.Log(r/0.1)*1e-3 + math.Log(150/r)*0.3e-3) / math.Log(1500)
-		near(t, "resistance", p.Resistance(q), want, 2e-3*want) // pieces of even g in v, 60 to ln 1500
-	}
-	near(t, "end", EndResistance(300, 200, 0.1, 2), 200*(math.Log(200/(0.2*math.Pi))+2)/(math.Pi*300), 1e-15)
-}
-
 // straight curves are piston-like up to a mobility ratio of 1.
 var straight = relperm.Corey{Swc: 0.2, Sor: 0.2, Krw0: 1, Kro0: 1, Nw: 1, No: 1}

@@ -19,17 +19,3 @@ func EndResistance(length, width, radius, skin float64) float64 {
 	}
 	return width * sum / (math.Pi * length)
 }
-
-// Radial is the shape of a body between two concentric cylinders, rw and re, flooded from
-// the inner one outwards: with v = (r^2 - rw^2)/(re^2 - rw^2) and G = ln(r/rw)/ln(re/rw),
-// cut into pieces that are equally wide in ln r. Its Impedance is ln(re/rw)/(2 pi k h).
-func Radial(rw, re float64, pieces int) Shape {
-	s := Shape{V: make([]float64, pieces+1), G: make([]float64, pieces+1)}
-	for i := range s.V {
-		s.G[i] = float64(i) / float64(pieces)
-		r := rw * math.Pow(re/rw, s.G[i])
-		s.V[i] = (r*r - rw*rw) / (re*re - rw*rw)
-	}
-	s.V[pieces] = 1
-	return s
-}

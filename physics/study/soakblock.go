@@ -108,7 +108,7 @@ func (s *sheet) shape(at, kind string) (imbibe.Shape, []string) {
 		shape = imbibe.Slab(d, map[string]int{"1": 1, "2": 2}[faces])
 	default:
 		w, h := size("width", d), size("height", d)
-		shape = imbibe.Box([3]float64{d, w, h}, [3]int{2, 2, map[string]int{"4": 0, "5": 1, "6": 2}[faces]})
+		shape = imbibe.Box([3]float64{d, w, h}, boxFaces[faces])
 	}
 	for _, a := range shape {
 		if !(a.Reach > 0) {

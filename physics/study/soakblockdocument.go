@@ -60,6 +60,18 @@ var BlockShapes = []Choice{
 	{"cylinder-ends", "cylinder, water on both ends"},
 	{"cylinder-end", "cylinder, water on one end"},
 	{"sphere", "sphere"},
+	{"box-211", "box, water on four faces: both along its length, one each along width and height"},
+	{"box-210", "box, water on three faces: both along its length, one along its width"},
+	{"box-200", "box, water on the two faces along its length"},
+	{"box-111", "box, water on three faces that meet"},
+	{"box-110", "box, water on two faces that meet, along length and width"},
+	{"box-100", "box, water on one face along its length"},
+}
+
+// boxFaces are how many faces of a box are open along its length, width and height: all
+// the ways there are, whichever edge is called its length.
+var boxFaces = map[string][3]int{
+	"6": {2, 2, 2}, "5": {2, 2, 1}, "4": {2, 2, 0}, "211": {2, 1, 1}, "210": {2, 1, 0}, "200": {2, 0, 0}, "111": {1, 1, 1}, "110": {1, 1, 0}, "100": {1, 0, 0},
 }
 
 // PlugShapes are the blocks that a plug may be.

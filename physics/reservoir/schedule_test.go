@@ -130,3 +130,8 @@ func TestFillUp(t *testing.T) {
 
 // straight curves are piston-like up to a mobility ratio of 1.
 var straight = relperm.Corey{Swc: 0.2, Sor: 0.2, Krw0: 1, Kro0: 1, Nw: 1, No: 1}
+
+// By hand, from the formula of Muskat (1937).
+func TestEndResistance(t *testing.T) {
+	near(t, "end", EndResistance(300, 200, 0.1, 2), 200*(math.Log(200/(0.2*math.Pi))+2)/(math.Pi*300), 1e-15)
+}

@@ -37,6 +37,7 @@ type many struct {
 	run         *reservoir.Run // what the answer is about
 	apart, full *reservoir.Run // without and with crossflow; full is nil where there is no answer
 	pistons     *reservoir.Run
+	limiting    Grid            // of the piston-like limits; none without columns
 	limit       reservoir.Limit // Final is not told
 	end         float64         // s
 	moments     []instant
@@ -225,6 +226,7 @@ func (m *many) lay() bool {
 		m.crossflow(strata)
 		if m.pattern == nil && m.shape.In == 0 && m.shape.Out == 0 && m.gas == 0 && sharp {
 			m.pistons = m.plan(pistons)
+			m.limits(pistons, strata)
 		}
 	}
 	m.run = m.apart

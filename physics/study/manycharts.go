@@ -185,6 +185,9 @@ func (m *many) tables() {
 		columns[5].Words = append(columns[5].Words, word)
 	}
 	m.part.Tables = append(m.part.Tables, Grid{ID: "field.layers", Title: "Layers, without crossflow", Columns: append(columns, m.endColumns()...)})
+	if len(m.limiting.Columns) > 0 {
+		m.part.Tables = append(m.part.Tables, m.limiting)
+	}
 }
 
 // forecast is the field at even steps of time.

@@ -67,20 +67,27 @@ func Clock(b Body, q, near float64) float64 {
 	if !(q > 0) {
 		return 0
 	}
-	x := near
-	o := b.At(x)
-	if !(x > 0) {
-		x = q / o.Rate
-		o = b.At(x)
+	if !(near > 0) {
+		near = q / b.At(0).Rate
 	}
-	low, high := 0.0, math.Inf(1)
+	return rising(q, near, math.Inf(1), func(x float64) (value, slope float64) {
+		o := b.At(x)
+		return o.Injected, o.Rate
+	})
+}
+
+// rising is where a function that rises from 0 at 0 reaches y > 0, between 0 and high, which may be
+// +Inf: by Newton's steps from x, kept inside the bracket, halving it (or doubling x) otherwise.
+func rising(y, x, high float64, at func(x float64) (value, slope float64)) float64 {
+	low := 0.0
 	for range 200 {
-		if o.Injected > q {
+		value, slope := at(x)
+		if value > y {
 			high = x
 		} else {
 			low = x
 		}
-		next := x - (o.Injected-q)/o.Rate
+		next := x - (value-y)/slope
 		if math.Abs(next-x) <= 1e-8*x {
 			return next // Newton's step doubles the digits
 		}
@@ -92,7 +99,7 @@ func Clock(b Body, q, near float64) float64 {
 		if next == low || next == high || math.IsInf(next, 1) {
 			return next
 		}
-		x, o = next, b.At(next)
+		x = next
 	}
 	return x
 }

@@ -189,28 +189,10 @@ func (p Path) Injected(clock float64) float64 {
 	for p.Clock(high) < clock {
 		high *= 2
 	}
-	// Newton's step, safe because T rises: kept inside the bracket, halving it otherwise.
-	low, q := 0.0, high
-	for range 200 {
+	return rising(clock, high, high, func(q float64) (value, slope float64) {
 		s := p.after(q)
-		if s.t > clock {
-			high = q
-		} else {
-			low = q
-		}
-		next := q - (s.t-clock)/s.r
-		if math.Abs(next-q) <= 1e-8*q {
-			return next // Newton's step doubles the digits
-		}
-		if !(next > low && next < high) {
-			next = low + (high-low)/2
-		}
-		if next == low || next == high {
-			return next
-		}
-		q = next
-	}
-	return q
+		return s.t, s.r
+	})
 }
 
 // At implements Body.
